@@ -1,0 +1,32 @@
+/**
+ * What rays run through: one sketch at one setting in one line, flattened. Arrays of length `count` are indexed by surface;
+ * `index` and `indexSpread` have one more entry, `index[k]` being the medium in front of surface k. A thin part or a stop is one
+ * surface, a plate two. Lengths in mm, powers in 1/mm, positive to the right.
+ */
+export interface Train {
+  readonly count: number;
+  /** From surface k to surface k + 1; the last entry runs to the fixed image plane and is 0 when the image follows the focus. */
+  readonly gap: Float64Array;
+  /** Vertex position from the first surface. */
+  readonly z: Float64Array;
+  /** 1/radius, positive when the centre lies to the right. All 0 until parts have curved surfaces. */
+  readonly curvature: Float64Array;
+  readonly conic: Float64Array;
+  /** Power of an ideal thin part standing here; adds to (n′ − n)·curvature. */
+  readonly thinPower: Float64Array;
+  readonly index: Float64Array;
+  /** n short − n long of each medium; 0 where no Abbe number is given. */
+  readonly indexSpread: Float64Array;
+  /** Power short − power long of the thin part here; 0 where no Abbe number is given. */
+  readonly powerSpread: Float64Array;
+  /** Infinity where the part is open. */
+  readonly semiDiameter: Float64Array;
+  /** Index of the part in the sketch that the surface belongs to. */
+  readonly partOf: Int32Array;
+  /** The surface in front of whose refraction the stop lies; −1 when no stop is given. */
+  readonly stopSurface: number;
+  /** z of the object from the first surface (negative when it stands in front), or null at infinity. */
+  readonly objectZ: number | null;
+  /** z of the fixed image plane from the first surface, or null when the image follows the focus. */
+  readonly imageZ: number | null;
+}
