@@ -1,0 +1,56 @@
+import { useSyncExternalStore } from 'react';
+import type { Analysis, Setting, Sketch } from '../../engine/index.ts';
+import { sketchStore } from '../store/sketchStore.ts';
+import type { View } from '../store/viewStore.ts';
+import { settingIn, viewStore } from '../store/viewStore.ts';
+import { analysisOf } from './analysis.ts';
+import { frameLoop } from './frame.ts';
+
+/** What everything on screen is read from. The analysis is worked out when first asked for. */
+export interface Reading {
+  readonly sketch: Sketch;
+  readonly view: View;
+  readonly setting: Setting;
+  readonly analysis: Analysis;
+}
+
+let last: Reading | null = null;
+
+/** The sketch, the view and their analysis as they stand now; the same object until one of them changes. */
+export function currentReading(): Reading {
+  const { sketch } = sketchStore.getState();
+  const view = viewStore.getState();
+  if (last?.sketch === sketch && last.view === view) return last;
+  const setting = settingIn(sketch, view);
+  last = {
+    sketch,
+    view,
+    setting,
+    get analysis() {
+      return analysisOf(sketch, setting);
+    },
+  };
+  return last;
+}
+
+const readers = new Set<() => void>();
+const wake = () =>
+  frameLoop.ask('draw', 'readers', () => {
+    for (const reader of [...readers]) reader();
+  });
+sketchStore.subscribe(wake);
+viewStore.subscribe(wake);
+
+/** Calls `reader` once in every frame in which the sketch or the view has changed; returns the way to stop. */
+export function onReading(reader: () => void): () => void {
+  readers.add(reader);
+  return () => readers.delete(reader);
+}
+
+/**
+ * What `select` reads from the present state. The component renders only when the result changes, so select a formatted
+ * text or an object that is kept by identity, never a fresh one.
+ */
+export function useReading<T>(select: (reading: Reading) => T): T {
+  return useSyncExternalStore(onReading, () => select(currentReading()));
+}

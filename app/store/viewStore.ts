@@ -1,0 +1,103 @@
+import { createStore } from 'zustand/vanilla';
+import type { Datum, PartId, Setting, Sketch } from '../../engine/index.ts';
+
+/** What can be selected: parts by id, and the two ends of the axis. */
+export type Selected = PartId | 'object' | 'image';
+
+export type ThemeChoice = 'system' | 'paper' | 'night';
+export type LengthUnit = 'mm' | 'in';
+export type Drawer = 'ledger' | 'table' | 'trace';
+/** The sheets that lie over the page, one at a time. */
+export type Sheet = 'help' | 'handOver' | 'shelf' | 'starters';
+
+/** What the drawing shows besides parts and rays. */
+export interface Shown {
+  readonly bundles: boolean;
+  readonly images: boolean;
+  readonly pupils: boolean;
+  readonly principalPlanes: boolean;
+  readonly focalPoints: boolean;
+  readonly labels: boolean;
+}
+
+/** Where the drawing looks. `follow` re-fits by itself until the user pans or zooms. */
+export interface Camera {
+  readonly follow: 'parts' | 'everything' | null;
+  readonly originMm: number;
+  readonly pxPerMm: number;
+  /** Heights are drawn at pxPerMm × stretch. */
+  readonly stretch: number;
+  readonly axisYPx: number;
+}
+
+/** How the user looks at the sketch. Nothing in it changes the sketch. */
+export interface View {
+  readonly setting: Setting;
+  readonly selection: readonly Selected[];
+  readonly camera: Camera;
+  readonly theme: ThemeChoice;
+  readonly unit: LengthUnit;
+  readonly drawer: Drawer | null;
+  readonly sheet: Sheet | null;
+  readonly shown: Shown;
+  readonly raysPerBundle: number;
+  readonly realIsPositive: boolean;
+  readonly snap: boolean;
+  /** The phone's stand-in for Shift. */
+  readonly otherRule: boolean;
+  readonly foldedGroups: readonly string[];
+  readonly datum: Datum;
+  readonly digits: number;
+  /** Shortened first-run hints; false once dismissed. */
+  readonly hints: boolean;
+  /** The panel opened as a sheet on a narrow screen. */
+  readonly panel: 'readouts' | 'part' | 'sketch' | 'warnings' | null;
+}
+
+const start: View = {
+  setting: { at: '' as Setting['at'], toNext: 0 },
+  selection: [],
+  camera: { follow: 'parts', originMm: 0, pxPerMm: 5, stretch: 1, axisYPx: 300 },
+  theme: 'system',
+  unit: 'mm',
+  drawer: null,
+  sheet: null,
+  shown: {
+    bundles: true,
+    images: true,
+    pupils: false,
+    principalPlanes: false,
+    focalPoints: false,
+    labels: true,
+  },
+  raysPerBundle: 5,
+  realIsPositive: false,
+  snap: true,
+  otherRule: false,
+  foldedGroups: [],
+  datum: 'first part',
+  digits: 3,
+  hints: true,
+  panel: null,
+};
+
+export const viewStore = createStore<View>(() => start);
+
+/** Changes some of the view. */
+export const setView = (change: Partial<View>): void => viewStore.setState(change);
+
+/** Selects exactly these. */
+export const select = (...selection: readonly Selected[]): void => setView({ selection });
+
+/** The setting of `view`, or the first position when the sketch does not hold that position. */
+export function settingIn(sketch: Sketch, view: View): Setting {
+  const known = sketch.positions.some((position) => position.id === view.setting.at);
+  const first = sketch.positions[0];
+  return known || !first ? view.setting : { at: first.id, toNext: 0 };
+}
+
+/** The selected parts that the sketch still holds, in the sketch's order. */
+export function selectedParts(sketch: Sketch, view: View): readonly PartId[] {
+  const chosen = new Set<string>(view.selection);
+  return sketch.parts.map((part) => part.id).filter((id) => chosen.has(id));
+}
