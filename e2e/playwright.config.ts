@@ -1,0 +1,21 @@
+import { defineConfig } from '@playwright/test';
+import { launchOptions } from './chromium.mjs';
+
+export default defineConfig({
+  testDir: '.',
+  outputDir: '../test-results/browser',
+  fullyParallel: true,
+  forbidOnly: Boolean(process.env.CI),
+  reporter: 'list',
+  use: {
+    baseURL: process.env.GAPWRIGHT_URL ?? '',
+    browserName: 'chromium',
+    viewport: { width: 1440, height: 900 },
+    launchOptions: launchOptions(),
+    trace: 'retain-on-failure',
+  },
+  webServer: {
+    command: 'node ../app/serve.mjs --no-build',
+    wait: { stdout: /open (?<gapwright_url>http:\S+)/ },
+  },
+});

@@ -1,0 +1,23 @@
+import react from '@vitejs/plugin-react';
+import { defineConfig } from 'vitest/config';
+
+const repository = import.meta.dirname;
+
+export default defineConfig({
+  root: `${repository}/app`,
+  base: './',
+  publicDir: `${repository}/public`,
+  plugins: [react()],
+  build: { outDir: `${repository}/dist`, emptyOutDir: true, target: 'es2023' },
+  server: { fs: { allow: [repository] } },
+  test: {
+    root: repository,
+    include: ['test/**/*.test.{ts,tsx}'],
+    setupFiles: ['test/tools/seed.ts'],
+    coverage: {
+      provider: 'v8',
+      include: ['engine/**', 'app/**'],
+      reportsDirectory: `${repository}/coverage`,
+    },
+  },
+});
