@@ -1,0 +1,51 @@
+import type { Aperture, FieldSize, Lines, PositionId, Sketch } from '../types.ts';
+import { join, split, withValue } from '../values.ts';
+import { withField } from './change.ts';
+
+/** Sets kind and value of the aperture. */
+export const setAperture = (sketch: Sketch, aperture: Aperture): Sketch =>
+  withField(sketch, 'aperture', aperture);
+
+/** Sets the stop diameter in mm, at the position or at all when common. An aperture of another kind becomes a stop diameter. */
+export function setStopDiameter(sketch: Sketch, diameterMm: number, positionId: PositionId): Sketch {
+  const { aperture } = sketch;
+  const before = aperture.kind === 'stopDiameter' ? aperture.diameterMm : diameterMm;
+  return setAperture(sketch, { kind: 'stopDiameter', diameterMm: withValue(before, positionId, diameterMm) });
+}
+
+/** Gives each position its own stop diameter, at first the same; an aperture of another kind stays as it is. */
+export const splitStopDiameter = (sketch: Sketch): Sketch =>
+  sketch.aperture.kind === 'stopDiameter'
+    ? setAperture(sketch, {
+        kind: 'stopDiameter',
+        diameterMm: split(sketch.aperture.diameterMm, sketch.positions),
+      })
+    : sketch;
+
+/** Makes the stop diameter of one position that of all. */
+export const joinStopDiameter = (sketch: Sketch, positionId: PositionId): Sketch =>
+  sketch.aperture.kind === 'stopDiameter'
+    ? setAperture(sketch, { kind: 'stopDiameter', diameterMm: join(sketch.aperture.diameterMm, positionId) })
+    : sketch;
+
+/** Sets kind and size of the largest field. */
+export const setField = (sketch: Sketch, size: FieldSize): Sketch =>
+  withField(sketch, 'field', withField(sketch.field, 'size', size));
+
+/** Sets the fields drawn, as shares of the largest, each from −1 to 1. */
+export const setFractions = (sketch: Sketch, fractions: readonly number[]): Sketch =>
+  withField(sketch, 'field', withField(sketch.field, 'fractions', fractions));
+
+/** Sets the share of the pupil's height, 0 to 1, that may be lost at the largest field. */
+export const setVignetting = (sketch: Sketch, vignetting: number): Sketch =>
+  withField(sketch, 'field', withField(sketch.field, 'vignetting', vignetting));
+
+/** Sets the three wavelengths in nm. */
+export const setLines = (sketch: Sketch, lines: Lines): Sketch => withField(sketch, 'lines', lines);
+
+/** Sets the index assumed for thin parts that do not name one. */
+export const setAssumedIndex = (sketch: Sketch, assumedIndex: number): Sketch =>
+  withField(sketch, 'assumedIndex', assumedIndex);
+
+/** Sets the blur diameter in mm for the depths of focus and field; null takes one pixel. */
+export const setBlur = (sketch: Sketch, blurMm: number | null): Sketch => withField(sketch, 'blurMm', blurMm);
