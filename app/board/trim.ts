@@ -17,7 +17,7 @@ export function isNear(points: Flat, from = 0, to = points.length / 2): boolean 
  * Screens paint in single precision: without the cut a line with a far end trembles under deep zoom.
  * Parametric clipping against the four sides, each side narrowing the span of the parameter.
  */
-export function trimmed(
+function trimmed(
   x1: number,
   y1: number,
   x2: number,
