@@ -13,6 +13,7 @@ export default defineConfig({
   test: {
     root: repository,
     include: ['test/**/*.test.{ts,tsx}'],
+    globalSetup: ['test/tools/seed.ts'],
     setupFiles: ['test/tools/seed.ts'],
     coverage: {
       provider: 'v8',
