@@ -1,7 +1,7 @@
 import type { FocusEvent, KeyboardEvent, ReactNode } from 'react';
 import { useId, useLayoutEffect, useRef, useState } from 'react';
 import type { EntryUnit } from './entry.ts';
-import { baseUnitsPer, formatEntry, parseEntry } from './entry.ts';
+import { formatEntry, fromBase, parseEntry, toBase } from './entry.ts';
 import { Field } from './Field.tsx';
 import { formatNumber } from './format.ts';
 import { Icon } from './Icon.tsx';
@@ -61,7 +61,7 @@ export function NumberField(props: NumberFieldProps) {
   }, [editing]);
 
   const stored = value === null ? '' : formatEntry(value, unit);
-  const quietText = value === null ? '' : formatNumber(value / baseUnitsPer(unit), digits);
+  const quietText = value === null ? '' : formatNumber(fromBase(value, unit), digits);
   const text = editing ? (draft ?? stored) : quietText;
 
   /** Commits what stands in the field; false when it could not be. */
@@ -86,7 +86,7 @@ export function NumberField(props: NumberFieldProps) {
 
   const stepBy = (direction: 1 | -1, times: number) => {
     if (value === null || !Number.isFinite(value)) return;
-    const step = (props.step ?? STEPS[unit]) * baseUnitsPer(unit);
+    const step = toBase(props.step ?? STEPS[unit], unit);
     const next = Number((value + direction * step * times).toPrecision(15));
     setDraft(null);
     if (editing && onPreview) {

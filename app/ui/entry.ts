@@ -13,7 +13,7 @@ export interface EntryContext {
 }
 
 interface Family {
-  /** What the engine stores, for the sentences. */
+  /** How many base units each unit is. */
   readonly factors: Readonly<Record<string, number>>;
   readonly example: string;
 }
@@ -51,10 +51,17 @@ const FAMILIES: Readonly<Record<EntryUnit, Family>> = {
 const LONGEST_ENTRY = 120;
 const INFINITE = /^[+]?(∞|inf|infinity|infinite)$/i;
 
-/** How many base units one `unit` is. */
-export function baseUnitsPer(unit: EntryUnit): number {
-  return FAMILIES[unit].factors[unit] ?? 1;
-}
+/** A number of `unit` in the base unit of its family. */
+export const toBase = (amount: number, unit: EntryUnit): number => times(amount, factorOf(unit));
+
+/** A number of base units in `unit`. */
+export const fromBase = (value: number, unit: EntryUnit): number => value / factorOf(unit);
+
+const factorOf = (unit: EntryUnit): number => FAMILIES[unit].factors[unit] ?? 1;
+
+/** A converted number is cut to the 15 digits that a double always keeps, so that 3.45 µm is stored as 0.00345 mm. */
+const times = (amount: number, factor: number): number =>
+  factor === 1 ? amount : Number((amount * factor).toPrecision(15));
 
 /**
  * The number that `text` means, in the base unit of the field's family (mm, nm, degrees, a share, a bare number), or one
@@ -77,7 +84,7 @@ export function parseEntry(text: string, context: EntryContext): Outcome<number,
   const read = evaluate(adds ? trimmed.slice(1) : trimmed, family);
   if (!read.ok) return none(read.why === 'unread' ? unread(trimmed, family) : read.why);
   const { amount, factor } = read.value;
-  const value = amount * (factor ?? baseUnitsPer(context.unit)) + (adds ? (context.current ?? 0) : 0);
+  const value = times(amount, factor ?? factorOf(context.unit)) + (adds ? (context.current ?? 0) : 0);
   return Number.isFinite(value) ? some(value) : none(`“${trimmed}” is too large a number.`);
 }
 
@@ -134,7 +141,7 @@ function evaluate(text: string, family: Family): Read {
     if (!read.ok) return read;
     const word = tokens[at];
     if (word === undefined || !isWord(word)) return read;
-    const factor = family.factors[word];
+    const factor = Object.hasOwn(family.factors, word) ? family.factors[word] : undefined;
     if (factor === undefined) return none(`This field does not know the unit “${word}”.`);
     at++;
     return read.value.factor === null ? some({ amount: read.value.amount, factor }) : none('unread');
@@ -203,12 +210,11 @@ const isWord = (token: string): boolean => /^[a-zµ°%"″]/.test(token);
 
 /**
  * `value` (in the base unit) with all its stored digits in `unit`, as a field shows it while it is edited. Reading it back
- * gives `value` again; where another unit makes that impossible, to the last place.
+ * gives `value` again; where another unit makes that impossible, to 15 digits.
  */
 export function formatEntry(value: number, unit: EntryUnit): string {
   if (value === Infinity) return '∞';
-  const perUnit = baseUnitsPer(unit);
-  const exact = value / perUnit;
+  const exact = fromBase(value, unit);
   const short = Number(exact.toPrecision(15));
-  return String(short * perUnit === value ? short : exact).replace('-', '\u2212');
+  return String(toBase(short, unit) === value ? short : exact).replace('-', '\u2212');
 }
