@@ -1,0 +1,159 @@
+import type { Part, PartId, PositionId, Setting, Sketch } from '../sketch/types.ts';
+import { settingAt, valueAt } from '../sketch/values.ts';
+import { sentenceOf } from './absence.ts';
+import { type Analysis, analyse } from './analyse.ts';
+
+export type WarningKind =
+  | 'negative gap'
+  | 'rooms overlap'
+  | 'object inside'
+  | 'image inside'
+  | 'behind the mount'
+  | 'axial bundle cut'
+  | 'field edge dark'
+  | 'sensor not covered'
+  | 'out of focus'
+  | 'no marginal ray'
+  | 'no chief ray';
+
+/** Something about the layout that a person should know. */
+export interface Warning {
+  readonly kind: WarningKind;
+  readonly severity: 'cannot be built' | 'look at this';
+  /** The part to select; null when it is about an end or the whole. */
+  readonly partId: PartId | null;
+  readonly positionId: PositionId;
+  /** Plain, with the numbers in mm. */
+  readonly sentence: string;
+}
+
+/** What is wrong at `setting`, what cannot be built first. Pass the analysis when it is at hand. */
+export function warningsOf(
+  sketch: Sketch,
+  setting: Setting,
+  analysis: Analysis = analyse(sketch, setting),
+): readonly Warning[] {
+  if (sketch.parts.length === 0) return [];
+  const found = [...mechanics(sketch, setting, analysis), ...optics(sketch, analysis)];
+  return found.map((warning) => ({ ...warning, positionId: setting.at }));
+}
+
+/** Everything that cannot be built, over all positions. */
+export const unbuildable = (sketch: Sketch): readonly Warning[] =>
+  sketch.positions.flatMap(({ id }) =>
+    warningsOf(sketch, settingAt(id)).filter(({ severity }) => severity === 'cannot be built'),
+  );
+
+type Found = Omit<Warning, 'positionId'>;
+
+/** Rounding of gaps that were solved to touch must not count as an overlap (mm). */
+const TOUCHING_MM = 1e-9;
+
+function mechanics(sketch: Sketch, setting: Setting, { conjugates, sensor }: Analysis): readonly Found[] {
+  const found: Found[] = [];
+  const cannot = (kind: WarningKind, partId: PartId | null, sentence: string) =>
+    found.push({ kind, severity: 'cannot be built', partId, sentence });
+  const { parts } = sketch;
+  const first = parts[0];
+  if (first && sensor.workingDistanceMm.ok && sensor.workingDistanceMm.value < -TOUCHING_MM) {
+    cannot(
+      'object inside',
+      first.id,
+      `The object stands ${mm(-sensor.workingDistanceMm.value)} inside the room of ${nameOf(first)}.`,
+    );
+  }
+  for (const [i, part] of parts.entries()) {
+    const next = parts[i + 1];
+    if (!next) break;
+    const gapMm = valueAt(part.space.lengthMm, sketch.positions, setting);
+    const clearMm = gapMm - roomBehind(part) - roomFront(next);
+    if (gapMm < -TOUCHING_MM) {
+      cannot(
+        'negative gap',
+        part.id,
+        `${nameOf(next)} stands ${mm(-gapMm)} in front of ${nameOf(part)}: the gap must be 0 or more.`,
+      );
+    } else if (clearMm < -TOUCHING_MM) {
+      cannot(
+        'rooms overlap',
+        part.id,
+        `${nameOf(part)} and ${nameOf(next)} overlap by ${mm(-clearMm)}: the gap of ${mm(gapMm)} is smaller than their rooms.`,
+      );
+    }
+  }
+  const last = parts.at(-1);
+  if (last && conjugates.imagePlaneMm.ok && conjugates.imagePlaneMm.value - roomBehind(last) < -TOUCHING_MM) {
+    const inside = mm(roomBehind(last) - conjugates.imagePlaneMm.value);
+    const what = sketch.image === 'fixed' ? 'The sensor' : 'The image';
+    found.push({
+      kind: 'image inside',
+      severity: sketch.image === 'fixed' ? 'cannot be built' : 'look at this',
+      partId: last.id,
+      sentence: `${what} stands ${inside} in front of where ${nameOf(last)} ends: no sensor can stand there.`,
+    });
+  }
+  return found;
+}
+
+function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
+  const { rays, light, sensor, conjugates, vignetting, train, depth } = analysis;
+  const found: Found[] = [];
+  const look = (kind: WarningKind, partId: PartId | null, sentence: string) =>
+    found.push({ kind, severity: 'look at this', partId, sentence });
+  if (!rays.marginal.ok) look('no marginal ray', null, `No aperture: ${sentenceOf(rays.marginal.why)}`);
+  if (!rays.chief.ok) look('no chief ray', null, `No field: ${sentenceOf(rays.chief.why)}`);
+  if (rays.marginal.ok) {
+    for (let k = 0; k < train.count; k++) {
+      const part = sketch.parts[train.partOf[k]!];
+      const y = Math.abs(rays.marginal.value.y[k]!);
+      const rim = train.semiDiameter[k]!;
+      if (!part || y <= rim * (1 + CUT) || train.partOf[k - 1] === train.partOf[k]) continue;
+      look(
+        'axial bundle cut',
+        part.id,
+        `The rim of ${nameOf(part)} cuts the axial bundle: it is ${mm(2 * rim)} wide, the aperture asks for ${mm(2 * y)}.`,
+      );
+    }
+  }
+  const edge = vignetting.ok ? vignetting.value.find(({ fraction }) => Math.abs(fraction) === 1) : undefined;
+  if (edge && edge.meridian === null)
+    look('field edge dark', null, 'No light reaches the edge of the field.');
+  if (sensor.halfDiagonalMm.ok && light.imageHeightMm.ok) {
+    const reached = Math.abs(light.imageHeightMm.value);
+    const wanted = sensor.halfDiagonalMm.value;
+    if (reached < wanted * (1 - UNCOVERED)) {
+      look(
+        'sensor not covered',
+        null,
+        `The field reaches ${mm(reached)} from the axis, the sensor's corner stands at ${mm(wanted)}.`,
+      );
+    }
+  }
+  const allowed = depth.focusBlurMm.ok ? depth.focusBlurMm : depth.focusQuarterWaveMm;
+  if (conjugates.defocusMm.ok && allowed.ok && Math.abs(conjugates.defocusMm.value) > allowed.value) {
+    const side = conjugates.defocusMm.value > 0 ? 'behind' : 'in front of';
+    look(
+      'out of focus',
+      null,
+      `The image falls ${mm(Math.abs(conjugates.defocusMm.value))} ${side} the sensor; ${mm(allowed.value)} is allowed.`,
+    );
+  }
+  const last = sketch.parts.at(-1);
+  if (last && sensor.mountClearanceMm.ok && sensor.mountClearanceMm.value < -TOUCHING_MM) {
+    look(
+      'behind the mount',
+      last.id,
+      `${nameOf(last)} reaches ${mm(-sensor.mountClearanceMm.value)} behind the mount plane.`,
+    );
+  }
+  return found;
+}
+
+/** Shares of a diameter and of the sensor that nobody could see or make; they keep rounding from warning. */
+const CUT = 1e-9;
+const UNCOVERED = 1e-6;
+
+const roomFront = (part: Part): number => (part.kind === 'thin' ? part.roomFrontMm : 0);
+const roomBehind = (part: Part): number => (part.kind === 'thin' ? part.roomBehindMm : 0);
+const nameOf = (part: Part): string => part.name || part.id;
+const mm = (value: number): string => `${value.toFixed(3)} mm`;

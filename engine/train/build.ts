@@ -1,0 +1,85 @@
+import type { Train } from './types.ts';
+
+/** One surface and the space behind it. Lengths in mm, powers in 1/mm, positive to the right. */
+export interface SurfaceSpec {
+  /** Place in the sketch of the part that the surface belongs to. */
+  readonly part: number;
+  /** 1/radius, positive when the centre lies to the right; 0 (the default) is a plane. */
+  readonly curvaturePerMm?: number;
+  readonly conic?: number;
+  /** Power of an ideal thin part standing here. */
+  readonly thinPowerPerMm?: number;
+  /** Thin power short − long. */
+  readonly powerSpreadPerMm?: number;
+  /** Half the clear diameter; Infinity (the default) where the part is open. */
+  readonly semiDiameterMm?: number;
+  /** Index of the medium behind; negative behind an odd number of mirrors. */
+  readonly indexAfter: number;
+  /** n short − n long of the medium behind. */
+  readonly spreadAfter?: number;
+  /** To the next surface; negative where light runs to the left. Without meaning on the last surface. */
+  readonly gapMm: number;
+}
+
+export interface TrainSpec {
+  readonly objectIndex: number;
+  readonly objectSpread?: number;
+  readonly surfaces: readonly SurfaceSpec[];
+  /** The surface in front of whose refraction the stop lies; −1 (the default) when no stop is given. */
+  readonly stopSurface?: number;
+  /** z of the object from the first surface; null at infinity. */
+  readonly objectZ: number | null;
+  /** Fixed image plane from the last surface; null when the image follows the focus. */
+  readonly imageDistanceMm: number | null;
+}
+
+/**
+ * The train that `spec` describes: its surfaces laid out in flat arrays. Curved surfaces, mirrors (a negative
+ * index and a negative gap behind them) and ideal thin parts may be mixed.
+ */
+export function buildTrain(spec: TrainSpec): Train {
+  const count = spec.surfaces.length;
+  const gap = new Float64Array(count);
+  const z = new Float64Array(count);
+  const curvature = new Float64Array(count);
+  const conic = new Float64Array(count);
+  const thinPower = new Float64Array(count);
+  const index = new Float64Array(count + 1);
+  const indexSpread = new Float64Array(count + 1);
+  const powerSpread = new Float64Array(count);
+  const semiDiameter = new Float64Array(count);
+  const partOf = new Int32Array(count);
+  index[0] = spec.objectIndex;
+  indexSpread[0] = spec.objectSpread ?? 0;
+  let at = 0;
+  for (const [k, surface] of spec.surfaces.entries()) {
+    const last = k === count - 1;
+    z[k] = at;
+    gap[k] = last ? (spec.imageDistanceMm ?? 0) : surface.gapMm;
+    if (!last) at += surface.gapMm;
+    curvature[k] = surface.curvaturePerMm ?? 0;
+    conic[k] = surface.conic ?? 0;
+    thinPower[k] = surface.thinPowerPerMm ?? 0;
+    powerSpread[k] = surface.powerSpreadPerMm ?? 0;
+    index[k + 1] = surface.indexAfter;
+    indexSpread[k + 1] = surface.spreadAfter ?? 0;
+    semiDiameter[k] = surface.semiDiameterMm ?? Number.POSITIVE_INFINITY;
+    partOf[k] = surface.part;
+  }
+  return {
+    count,
+    gap,
+    z,
+    curvature,
+    conic,
+    thinPower,
+    index,
+    indexSpread,
+    powerSpread,
+    semiDiameter,
+    partOf,
+    stopSurface: spec.stopSurface ?? -1,
+    objectZ: spec.objectZ,
+    imageZ: spec.imageDistanceMm === null ? null : at + spec.imageDistanceMm,
+  };
+}
