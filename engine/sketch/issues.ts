@@ -13,7 +13,7 @@ export function faultOfIssue(issue: v.BaseIssue<unknown>, at: readonly Key[], ro
   const last = items.at(-1);
   if (last?.origin === 'key' && issue.expected === 'never')
     return { path, sentence: `${unknownEntry(keys, root)}; it must be left out, or its name corrected.` };
-  const subject = `The ${fieldText(keys)}${ownerText(keys, root)}`;
+  const subject = subjectOf(keys, root);
   if (last?.origin === 'key')
     return { path, sentence: `${subject} is missing; it must be ${allowedText(keys, null)}.` };
   return {
@@ -59,6 +59,8 @@ const ALLOWED: Readonly<Record<string, string>> = {
   longNm: LIMITS.wavelengthNm.allowed,
 };
 
+const TEXTS: ReadonlySet<string> = new Set(['title', 'notes', 'name', 'note']);
+
 const limitOf = (key: string): Limit | undefined =>
   Object.hasOwn(LIMITS, key) ? LIMITS[key as keyof typeof LIMITS] : undefined;
 
@@ -70,12 +72,18 @@ function fieldKey(keys: readonly Key[]): string {
   return String(keys.findLast((key) => typeof key === 'string') ?? '');
 }
 
-function fieldText(keys: readonly Key[]): string {
+/** Fields that need no "of the …" after their name. */
+const SELF_EXPLAINING = /^(distanceMm|vignetting|fractions|na|fNumber|diameterMm|mainNm|shortNm|longNm)$/;
+
+function subjectOf(keys: readonly Key[], root: unknown): string {
+  if (keys.length === 2 && typeof keys[1] === 'number')
+    return `Entry ${keys[1] + 1} of the list of ${keys[0]}`;
   const key = fieldKey(keys);
-  if (keys.length === 2 && keys[0] === 'parts') return 'entry';
   const words = WORDS[key] ?? limitOf(key)?.words ?? (/^[a-z]+$/.test(key) ? key : quoted(key));
+  const owner = SELF_EXPLAINING.test(key) ? '' : ownerText(keys, root);
   const last = keys.at(-1);
-  return last !== key && typeof last === 'string' ? `${words} at position ${quoted(last)}` : words;
+  const position = last !== key && typeof last === 'string' ? ` at position ${quoted(last)}` : '';
+  return `The ${words}${key === 'lengthMm' ? owner.replace(/^ of/, ' behind') : owner}${position}`;
 }
 
 function ownerText(keys: readonly Key[], root: unknown): string {
@@ -96,7 +104,8 @@ function allowedText(keys: readonly Key[], expected: string | null): string {
   if (expected !== null && key === 'kind') return expectedText(expected);
   if (ALLOWED[key] !== undefined) return withNumber(ALLOWED[key], expected);
   if (limit !== undefined && (alone || key === 'distanceMm')) return withNumber(limit.allowed, expected);
-  return expected === null ? 'given' : expectedText(expected);
+  if (expected === null) return TEXTS.has(key) ? 'text, which may be empty' : 'there';
+  return expectedText(expected);
 }
 
 const withNumber = (allowed: string, expected: string | null): string =>

@@ -14,6 +14,8 @@ export type Parsed =
   | { readonly ok: true; readonly sketch: Sketch }
   | { readonly ok: false; readonly faults: readonly Fault[] };
 
+const AS_WRITTEN = 'a sketch file is JSON text as Gapwright writes it';
+
 /** No sketch file is longer, in characters. */
 export const LONGEST_FILE = 2_000_000;
 
@@ -26,9 +28,9 @@ export function parseSketch(text: string): Parsed {
     return alone(
       `The file has ${numberText(text.length)} characters; a sketch file has at most ${numberText(LONGEST_FILE)}.`,
     );
+  if (text.trim() === '') return alone(`The file is empty; ${AS_WRITTEN}.`);
   const file = jsonOf(text);
-  if (file === undefined)
-    return alone('The text is not JSON; a sketch file is JSON text as Gapwright writes it.');
+  if (file === undefined) return alone(`The text is not JSON; ${AS_WRITTEN}.`);
   if (!isRecord(file) || file.format !== SKETCH_FORMAT) {
     const found = isRecord(file) ? file.format : file;
     const what = isRecord(file)

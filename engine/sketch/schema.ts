@@ -85,3 +85,9 @@ export const sectionSchemas = {
   assumedIndex: number,
   blurMm: orNull(number),
 } satisfies Record<Exclude<keyof Sketch, 'parts'>, v.GenericSchema>;
+
+/** Parts on the clipboard. */
+export const clipSchema = v.strictObject({
+  format: v.literal('gapwright-parts'),
+  parts: v.array(partSchema),
+});

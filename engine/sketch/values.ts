@@ -73,12 +73,12 @@ export function everyPosition<T extends Plain>(
   value: PerPosition<T>,
   change: (value: T) => T,
 ): PerPosition<T> {
-  if (isCommon(value)) return change(value);
+  if (isCommon(value)) return unsigned(change(value));
   let changed = false;
   const next: Record<PositionId, T> = {};
   for (const id of Object.keys(value) as PositionId[]) {
     const before = valueOn(value, id);
-    next[id] = change(before);
+    next[id] = unsigned(change(before));
     changed ||= next[id] !== before;
   }
   return changed ? next : value;
@@ -91,9 +91,9 @@ export function together<A extends Plain, B extends Plain, T extends Plain>(
   positions: readonly Position[],
   combine: (a: A, b: B) => T,
 ): PerPosition<T> {
-  if (isCommon(a) && isCommon(b)) return combine(a, b);
+  if (isCommon(a) && isCommon(b)) return unsigned(combine(a, b));
   const next: Record<PositionId, T> = {};
-  for (const { id } of positions) next[id] = combine(valueOn(a, id), valueOn(b, id));
+  for (const { id } of positions) next[id] = unsigned(combine(valueOn(a, id), valueOn(b, id)));
   return next;
 }
 

@@ -1,4 +1,4 @@
-import type { GroupId, Part, PartId, PerPosition, Sketch, Space } from '../types.ts';
+import type { Group, Part, PartId, PerPosition, Sketch, Space } from '../types.ts';
 
 /** The record with one entry changed; the same object when the entry holds the same data already. −0 is stored as 0. */
 export function withField<T extends object, K extends keyof T>(record: T, key: K, value: T[K]): T {
@@ -43,12 +43,11 @@ export function withGroups(sketch: Sketch, ids: readonly PartId[]): readonly Par
 }
 
 /** Takes parts out of all groups; a group of fewer than two parts falls apart. */
-export function withoutTies(sketch: Sketch, ids: ReadonlySet<PartId>, kept: GroupId | null = null): Sketch {
-  if (!sketch.groups.some((group) => group.partIds.some((id) => ids.has(id)))) return sketch;
+export function withoutTies(sketch: Sketch, ids: ReadonlySet<PartId>): Sketch {
+  const tied = (group: Group): boolean => group.partIds.some((id) => ids.has(id));
+  if (!sketch.groups.some(tied)) return sketch;
   const groups = sketch.groups
-    .map((group) =>
-      group.id === kept ? group : { ...group, partIds: group.partIds.filter((id) => !ids.has(id)) },
-    )
+    .map((group) => (tied(group) ? { ...group, partIds: group.partIds.filter((id) => !ids.has(id)) } : group))
     .filter((group) => group.partIds.length > 1);
   return { ...sketch, groups };
 }

@@ -1,0 +1,74 @@
+import type { Aperture, FieldSize, ObjectDistance, Part, PartId, Sketch } from '../types.ts';
+import { everyPosition } from '../values.ts';
+import { withGap } from './change.ts';
+
+/**
+ * The whole layout made larger by a factor: focal lengths, gaps, object distance, diameters, room and the field's heights.
+ * Sensor, mount and blur are given from outside and stay. A factor that is not a positive number changes nothing.
+ */
+export function scaleSketch(sketch: Sketch, factor: number): Sketch {
+  if (!isFactor(factor)) return sketch;
+  const distanceMm = everyPosition(sketch.object.distanceMm, (distance: ObjectDistance) =>
+    distance === 'infinity' ? distance : distance * factor,
+  );
+  return {
+    ...sketch,
+    object: { ...sketch.object, distanceMm },
+    parts: sketch.parts.map((part) => scaledGap(scaledPart(part, factor), factor)),
+    aperture: scaledAperture(sketch.aperture, factor),
+    field: { ...sketch.field, size: scaledField(sketch.field.size, factor) },
+  };
+}
+
+/** The whole layout scaled so that its focal length goes from `presentMm` to `wantedMm`; unlike signs change nothing. */
+export const scaleToFocalLength = (sketch: Sketch, presentMm: number, wantedMm: number): Sketch =>
+  scaleSketch(sketch, wantedMm / presentMm);
+
+/**
+ * Some parts made larger by a factor: focal lengths, diameters, thickness, room, and the gaps between two chosen neighbours.
+ * The first of them stays; what is behind moves along. A factor that is not a positive number changes nothing.
+ */
+export function scaleParts(sketch: Sketch, ids: readonly PartId[], factor: number): Sketch {
+  if (!isFactor(factor) || !sketch.parts.some((part) => ids.includes(part.id))) return sketch;
+  const parts = sketch.parts.map((part, index) => {
+    if (!ids.includes(part.id)) return part;
+    const next = sketch.parts[index + 1];
+    const scaled = scaledPart(part, factor);
+    return next !== undefined && ids.includes(next.id) ? scaledGap(scaled, factor) : scaled;
+  });
+  return { ...sketch, parts };
+}
+
+const isFactor = (factor: number): boolean => factor > 0 && Number.isFinite(factor) && factor !== 1;
+
+const scaledGap = (part: Part, factor: number): Part =>
+  withGap(
+    part,
+    everyPosition(part.space.lengthMm, (gap) => gap * factor),
+  );
+
+function scaledPart(part: Part, factor: number): Part {
+  const semiDiameterMm = part.semiDiameterMm === null ? null : part.semiDiameterMm * factor;
+  if (part.kind === 'stop') return { ...part, semiDiameterMm };
+  if (part.kind === 'plate') return { ...part, semiDiameterMm, thicknessMm: part.thicknessMm * factor };
+  return {
+    ...part,
+    semiDiameterMm,
+    focalLengthMm: part.focalLengthMm * factor,
+    roomFrontMm: part.roomFrontMm * factor,
+    roomBehindMm: part.roomBehindMm * factor,
+  };
+}
+
+function scaledAperture(aperture: Aperture, factor: number): Aperture {
+  if (aperture.kind === 'stopDiameter') {
+    const diameterMm = everyPosition(aperture.diameterMm, (diameter) => diameter * factor);
+    return { ...aperture, diameterMm };
+  }
+  if (aperture.kind === 'entrancePupilDiameter')
+    return { ...aperture, diameterMm: aperture.diameterMm * factor };
+  return aperture;
+}
+
+const scaledField = (size: FieldSize, factor: number): FieldSize =>
+  size.kind === 'angle' ? size : { ...size, heightMm: size.heightMm * factor };
