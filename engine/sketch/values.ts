@@ -27,7 +27,7 @@ export function valueOn<T extends Plain>(value: PerPosition<T>, position: Positi
  */
 export function valueAt(value: PerPosition, positions: readonly Position[], setting: Setting): number {
   if (isCommon(value)) return value;
-  const from = indexOf(positions, setting.at);
+  const from = indexOfPosition(positions, setting.at);
   if (!isBetween(positions, from, setting)) return valueOn(value, idAt(positions, from));
   return interpolate(
     (index) => valueOn(value, idAt(positions, index)),
@@ -44,7 +44,7 @@ export function objectDistanceAt(
   setting: Setting,
 ): ObjectDistance {
   if (isCommon(value)) return value;
-  const from = indexOf(positions, setting.at);
+  const from = indexOfPosition(positions, setting.at);
   if (!isBetween(positions, from, setting)) return valueOn(value, idAt(positions, from));
   const reciprocal = (index: number): number => {
     const distance = valueOn(value, idAt(positions, index));
@@ -85,7 +85,7 @@ export function everyPosition<T extends Plain>(
 }
 
 /** Two values combined position by position: common when both are. */
-export function together<A extends Plain, B extends Plain, T extends Plain>(
+export function combineValues<A extends Plain, B extends Plain, T extends Plain>(
   a: PerPosition<A>,
   b: PerPosition<B>,
   positions: readonly Position[],
@@ -98,7 +98,7 @@ export function together<A extends Plain, B extends Plain, T extends Plain>(
 }
 
 /** A common value given to each position; one that is split already stays as it is. */
-export function split<T extends Plain>(
+export function splitValue<T extends Plain>(
   value: PerPosition<T>,
   positions: readonly Position[],
 ): PerPosition<T> {
@@ -107,11 +107,11 @@ export function split<T extends Plain>(
 }
 
 /** The value of one position made common to all. */
-export const join = <T extends Plain>(value: PerPosition<T>, position: PositionId): PerPosition<T> =>
+export const joinValue = <T extends Plain>(value: PerPosition<T>, position: PositionId): PerPosition<T> =>
   isCommon(value) ? value : valueOn(value, position);
 
 /** Index of a position in the list; that of the first when it is not there. */
-export function indexOf(positions: readonly Position[], id: PositionId): number {
+export function indexOfPosition(positions: readonly Position[], id: PositionId): number {
   for (let index = 0; index < positions.length; index++) if (positions[index]?.id === id) return index;
   return 0;
 }

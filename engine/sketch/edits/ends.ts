@@ -1,5 +1,5 @@
 import type { ImagePlane, ObjectDistance, PositionId, Sensor, Sketch } from '../types.ts';
-import { join, split, withValue } from '../values.ts';
+import { joinValue, splitValue, withValue } from '../values.ts';
 import { changeSpaceAt, withField } from './change.ts';
 
 /** Sets the object distance in mm (positive, in front of the first part) or `'infinity'`, at the position or at all when common. */
@@ -17,11 +17,11 @@ export const setObjectAtInfinity = (sketch: Sketch, positionId: PositionId): Ske
 
 /** Gives each position its own object distance, at first the same. */
 export const splitObjectDistance = (sketch: Sketch): Sketch =>
-  withDistance(sketch, split(sketch.object.distanceMm, sketch.positions));
+  withDistance(sketch, splitValue(sketch.object.distanceMm, sketch.positions));
 
 /** Makes the object distance of one position that of all. */
 export const joinObjectDistance = (sketch: Sketch, positionId: PositionId): Sketch =>
-  withDistance(sketch, join(sketch.object.distanceMm, positionId));
+  withDistance(sketch, joinValue(sketch.object.distanceMm, positionId));
 
 /** Lets the image plane follow the paraxial focus, or fixes it at the length kept behind the last part. */
 export function setImagePlane(sketch: Sketch, image: ImagePlane): Sketch {

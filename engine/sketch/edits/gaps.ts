@@ -1,5 +1,5 @@
 import type { Medium, Part, PartId, PositionId, Sketch } from '../types.ts';
-import { join, split, valueOn, withValue } from '../values.ts';
+import { joinValue, splitValue, valueOn, withValue } from '../values.ts';
 import { changeSpaceAt, indexOfPart, withField, withGap } from './change.ts';
 import { fixSensor } from './ends.ts';
 
@@ -39,13 +39,13 @@ export function setGap(
 /** Gives each position its own gap behind the part, at first the same. */
 export const splitGap = (sketch: Sketch, partId: PartId): Sketch =>
   changeSpaceAt(sketch, indexOfPart(sketch, partId), (space) =>
-    withField(space, 'lengthMm', split(space.lengthMm, sketch.positions)),
+    withField(space, 'lengthMm', splitValue(space.lengthMm, sketch.positions)),
   );
 
 /** Makes the gap of one position that of all. */
 export const joinGap = (sketch: Sketch, partId: PartId, positionId: PositionId): Sketch =>
   changeSpaceAt(sketch, indexOfPart(sketch, partId), (space) =>
-    withField(space, 'lengthMm', join(space.lengthMm, positionId)),
+    withField(space, 'lengthMm', joinValue(space.lengthMm, positionId)),
   );
 
 /** Sets the medium behind a part, or in object space. */

@@ -1,6 +1,6 @@
 import { freshPartId } from '../create.ts';
 import type { Medium, Part, PerPosition, PositionId, Sketch } from '../types.ts';
-import { everyPosition, isCommon, together, valueOn, withValue } from '../values.ts';
+import { everyPosition, isCommon, combineValues, valueOn, withValue } from '../values.ts';
 import { lengthOf, withGap } from './change.ts';
 
 /**
@@ -41,7 +41,7 @@ function insertFirst(sketch: Sketch, part: Part, atMm: number, positionId: Posit
     return isCommon(distanceMm) || share === null ? distance + atMm : distance * (1 + share);
   });
   const exact = own === 'infinity' ? nearer : withValue(nearer, positionId, own + atMm);
-  const gapMm = together(distanceMm, exact, sketch.positions, (before, after) =>
+  const gapMm = combineValues(distanceMm, exact, sketch.positions, (before, after) =>
     before === 'infinity' || after === 'infinity' ? -atMm - lengthOf(part) : before - after - lengthOf(part),
   );
   const first = withGapAndMedium(part, withValue(gapMm, positionId, -atMm - lengthOf(part)), medium);
@@ -64,7 +64,7 @@ function insertBehind(
   const lead = unused ? within : shareOf(gap, within, positionId);
   const rest = unused
     ? part.space.lengthMm
-    : together(gap, lead, sketch.positions, (whole, taken) => whole - taken - lengthOf(part));
+    : combineValues(gap, lead, sketch.positions, (whole, taken) => whole - taken - lengthOf(part));
   const parts = sketch.parts.with(slot - 1, withGap(front, lead));
   parts.splice(slot, 0, withGapAndMedium(part, rest, front.space.medium));
   return { ...sketch, parts };

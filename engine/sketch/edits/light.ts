@@ -1,5 +1,5 @@
 import type { Aperture, FieldSize, Lines, PositionId, Sketch } from '../types.ts';
-import { join, split, withValue } from '../values.ts';
+import { joinValue, splitValue, withValue } from '../values.ts';
 import { withField } from './change.ts';
 
 /** Sets kind and value of the aperture. */
@@ -18,14 +18,17 @@ export const splitStopDiameter = (sketch: Sketch): Sketch =>
   sketch.aperture.kind === 'stopDiameter'
     ? setAperture(sketch, {
         kind: 'stopDiameter',
-        diameterMm: split(sketch.aperture.diameterMm, sketch.positions),
+        diameterMm: splitValue(sketch.aperture.diameterMm, sketch.positions),
       })
     : sketch;
 
 /** Makes the stop diameter of one position that of all. */
 export const joinStopDiameter = (sketch: Sketch, positionId: PositionId): Sketch =>
   sketch.aperture.kind === 'stopDiameter'
-    ? setAperture(sketch, { kind: 'stopDiameter', diameterMm: join(sketch.aperture.diameterMm, positionId) })
+    ? setAperture(sketch, {
+        kind: 'stopDiameter',
+        diameterMm: joinValue(sketch.aperture.diameterMm, positionId),
+      })
     : sketch;
 
 /** Sets kind and size of the largest field. */

@@ -1,7 +1,7 @@
 import { freshPositionId } from '../create.ts';
 import { LONGEST_MM } from '../limits.ts';
 import type { ObjectDistance, PerPosition, Position, PositionId, Setting, Sketch } from '../types.ts';
-import { indexOf, isCommon, join, objectDistanceAt, settingAt, valueAt } from '../values.ts';
+import { indexOfPosition, isCommon, joinValue, objectDistanceAt, settingAt, valueAt } from '../values.ts';
 import { withField, withGap } from './change.ts';
 
 /**
@@ -13,7 +13,7 @@ export function addPosition(sketch: Sketch, name: string, from: Setting): Sketch
   const id = freshPositionId(sketch);
   const grown: Sketch = {
     ...sketch,
-    positions: positions.toSpliced(indexOf(positions, from.at) + 1, 0, { id, name }),
+    positions: positions.toSpliced(indexOfPosition(positions, from.at) + 1, 0, { id, name }),
   };
   return changeValues(
     grown,
@@ -46,7 +46,7 @@ export function removePosition(sketch: Sketch, positionId: PositionId): Sketch {
   const only = positions.length === 1 ? positions[0] : undefined;
   if (positions.length === 0 || positions.length === sketch.positions.length) return sketch;
   const left = <T extends number | ObjectDistance>(value: PerPosition<T>): PerPosition<T> =>
-    only === undefined ? withoutEntry(value, positionId) : join(value, only.id);
+    only === undefined ? withoutEntry(value, positionId) : joinValue(value, only.id);
   return changeValues({ ...sketch, positions }, left, left);
 }
 

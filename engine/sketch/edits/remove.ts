@@ -1,5 +1,5 @@
 import type { ObjectDistance, Part, PartId, PerPosition, Sketch } from '../types.ts';
-import { isCommon, together } from '../values.ts';
+import { isCommon, combineValues } from '../values.ts';
 import { lengthOf, withField, withGap, withSpace, withoutTies } from './change.ts';
 
 /**
@@ -37,7 +37,7 @@ function merged(sketch: Sketch, front: Part, part: Part, trailing: boolean): Par
   const used = !trailing || sketch.image === 'fixed';
   const sum = (a: number, b: number): number => a + b;
   const gap = used
-    ? together(front.space.lengthMm, passed(sketch, part), sketch.positions, sum)
+    ? combineValues(front.space.lengthMm, passed(sketch, part), sketch.positions, sum)
     : front.space.lengthMm;
   const medium = trailing ? part.space.medium : front.space.medium;
   return medium === front.space.medium ? withGap(front, gap) : withSpace(front, { lengthMm: gap, medium });
@@ -45,7 +45,7 @@ function merged(sketch: Sketch, front: Part, part: Part, trailing: boolean): Par
 
 /** From the front vertex of a part to that of the next. */
 const passed = (sketch: Sketch, part: Part): PerPosition =>
-  together(part.space.lengthMm, lengthOf(part), sketch.positions, (gap, length) => gap + length);
+  combineValues(part.space.lengthMm, lengthOf(part), sketch.positions, (gap, length) => gap + length);
 
 function longer(
   sketch: Sketch,
@@ -53,7 +53,7 @@ function longer(
   byMm: PerPosition,
 ): PerPosition<ObjectDistance> {
   if (isCommon(distanceMm) && distanceMm === 'infinity') return distanceMm;
-  return together<ObjectDistance, number, ObjectDistance>(
+  return combineValues<ObjectDistance, number, ObjectDistance>(
     distanceMm,
     byMm,
     sketch.positions,
