@@ -1,7 +1,8 @@
 import { none, some } from '../outcome.ts';
 import type { Train } from '../train/types.ts';
 import { finite, type Quantity } from './absence.ts';
-import { isNegligible, type ParaxialRay, paraxialRay, rayScale } from './trace.ts';
+import { isNegligible, rayScale } from './scale.ts';
+import { type ParaxialRay, paraxialRay } from './trace.ts';
 
 /** A ray from the axial object point, of no particular size, and the image that it forms. */
 export interface Axial {

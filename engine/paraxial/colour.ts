@@ -3,7 +3,8 @@ import type { Train } from '../train/types.ts';
 import { type Absence, derive, finite, type Quantity } from './absence.ts';
 import type { Axial } from './axial.ts';
 import type { ReferenceRays } from './rays.ts';
-import { isNegligible, type ParaxialRay } from './trace.ts';
+import { isNegligible } from './scale.ts';
+import type { ParaxialRay } from './trace.ts';
 
 export interface Petzval {
   /** Sum of φ/n over thin parts and (n′ − n)c/(n n′) over surfaces, 1/mm. */

@@ -4,7 +4,7 @@ import { derive, finite, type Quantity } from './absence.ts';
 import type { Axial } from './axial.ts';
 import type { Light } from './light.ts';
 import type { ReferenceRays } from './rays.ts';
-import { isNegligible } from './trace.ts';
+import { isNegligible } from './scale.ts';
 
 /** How far things may be out of focus. Lengths in mm. */
 export interface Depth {

@@ -2,7 +2,8 @@ import { none } from '../outcome.ts';
 import type { Train } from '../train/types.ts';
 import { derive, finite, type Quantity } from './absence.ts';
 import { type Axial, axialOf } from './axial.ts';
-import { isNegligible, powerAt } from './trace.ts';
+import { isNegligible } from './scale.ts';
+import { powerAt } from './trace.ts';
 
 export type ConjugateKind = 'real' | 'virtual' | 'at infinity';
 

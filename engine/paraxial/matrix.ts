@@ -1,5 +1,6 @@
 import type { Train } from '../train/types.ts';
-import { isNegligible, rayScale, rayThrough } from './trace.ts';
+import { isNegligible, rayScale } from './scale.ts';
+import { rayThrough } from './trace.ts';
 
 /**
  * A 2×2 matrix on (y, nu) with determinant 1, and what was added up to get each entry (see `rayScale`).

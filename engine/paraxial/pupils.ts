@@ -3,7 +3,8 @@ import type { Train } from '../train/types.ts';
 import { type Absence, derive, derive2, finite, type Quantity } from './absence.ts';
 import type { Axial } from './axial.ts';
 import type { ReferenceRays } from './rays.ts';
-import { isNegligible, type ParaxialRay, powerAt, rayScale, rayThrough } from './trace.ts';
+import { isNegligible, rayScale } from './scale.ts';
+import { type ParaxialRay, powerAt, rayThrough } from './trace.ts';
 
 /** The image of a diaphragm, seen from one side. */
 export interface DiaphragmImage {

@@ -5,8 +5,9 @@ import type { Train } from '../train/types.ts';
 import { type Absence, derive, finite, type Quantity } from './absence.ts';
 import { type Axial, axialOf } from './axial.ts';
 import { firstOrder } from './firstOrder.ts';
+import { isNegligible } from './scale.ts';
 import { type Stop, stopOf } from './stop.ts';
-import { isFiniteRay, isNegligible, type ParaxialRay, scaledRay } from './trace.ts';
+import { isFiniteRay, type ParaxialRay, scaledRay } from './trace.ts';
 
 export type RayOutcome = Outcome<ParaxialRay, Absence>;
 

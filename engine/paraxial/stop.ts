@@ -2,7 +2,8 @@ import { none, type Outcome, some } from '../outcome.ts';
 import type { Train } from '../train/types.ts';
 import type { Absence } from './absence.ts';
 import { type Axial, axialOf } from './axial.ts';
-import { isNegligible, type ParaxialRay, rayScale, rayThrough } from './trace.ts';
+import { isNegligible, rayScale } from './scale.ts';
+import { type ParaxialRay, rayThrough } from './trace.ts';
 
 /** What limits the axial bundle, and the ray through its centre. */
 export interface Stop {

@@ -41,42 +41,6 @@ export function rayThrough(train: Train, surface: number, yMm: number, nu: numbe
   return ray;
 }
 
-/**
- * What was added up to get each number of `rayThrough`: the same recurrence with absolute values. A number that is tiny against
- * its scale is the rounding of 0.
- */
-export function rayScale(train: Train, surface: number, yMm: number, nu: number): ParaxialRay {
-  const { count, gap, index } = train;
-  const scale = { y: new Float64Array(count), nu: new Float64Array(count + 1) };
-  let height = Math.abs(yMm);
-  let slope = Math.abs(nu);
-  scale.nu[surface] = slope;
-  for (let k = surface; k < count; k++) {
-    scale.y[k] = height;
-    slope += Math.abs(powerAt(train, k)) * height;
-    scale.nu[k + 1] = slope;
-    height += Math.abs(gap[k]! / index[k + 1]!) * slope;
-  }
-  height = Math.abs(yMm);
-  slope = Math.abs(nu);
-  for (let k = surface - 1; k >= 0; k--) {
-    height += Math.abs(gap[k]! / index[k + 1]!) * slope;
-    scale.y[k] = height;
-    slope += Math.abs(powerAt(train, k)) * height;
-    scale.nu[k] = slope;
-  }
-  return scale;
-}
-
-/** Share of its scale below which a number counts as 0: rounding stays thousands of times smaller, drawn layouts far larger. */
-const NEGLIGIBLE = 1e-12;
-
-/**
- * THE test for "at infinity", "afocal", "at a focus": true when `value` is no more than the rounding of numbers as large as
- * `scale`. It depends on no unit and no length of the layout.
- */
-export const isNegligible = (value: number, scale: number): boolean => Math.abs(value) <= NEGLIGIBLE * scale;
-
 /** Power of one surface in 1/mm: (n′ − n)·curvature plus that of a thin part standing there. */
 export const powerAt = (train: Train, surface: number): number =>
   (train.index[surface + 1]! - train.index[surface]!) * train.curvature[surface]! + train.thinPower[surface]!;

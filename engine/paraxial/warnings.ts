@@ -102,18 +102,14 @@ function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
     found.push({ kind, severity: 'look at this', partId, sentence });
   if (!rays.marginal.ok) look('no marginal ray', null, `No aperture: ${sentenceOf(rays.marginal.why)}`);
   if (!rays.chief.ok) look('no chief ray', null, `No field: ${sentenceOf(rays.chief.why)}`);
-  if (rays.marginal.ok) {
-    for (let k = 0; k < train.count; k++) {
-      const part = sketch.parts[train.partOf[k]!];
-      const y = Math.abs(rays.marginal.value.y[k]!);
-      const rim = train.semiDiameter[k]!;
-      if (!part || y <= rim * (1 + CUT) || train.partOf[k - 1] === train.partOf[k]) continue;
-      look(
-        'axial bundle cut',
-        part.id,
-        `The rim of ${nameOf(part)} cuts the axial bundle: it is ${mm(2 * rim)} wide, the aperture asks for ${mm(2 * y)}.`,
-      );
-    }
+  for (const [part, y] of axialCuts(analysis)) {
+    const drawn = sketch.parts[part];
+    if (!drawn) continue;
+    look(
+      'axial bundle cut',
+      drawn.id,
+      `The rim of ${nameOf(drawn)} cuts the axial bundle: it is ${mm(2 * (drawn.semiDiameterMm ?? 0))} wide, the aperture asks for ${mm(2 * y)}.`,
+    );
   }
   const edge = vignetting.ok ? vignetting.value.find(({ fraction }) => Math.abs(fraction) === 1) : undefined;
   if (edge && edge.meridian === null)
@@ -147,6 +143,18 @@ function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
     );
   }
   return found;
+}
+
+/** By part, the height of the marginal ray where it passes beyond the rim. */
+function axialCuts({ rays, train }: Analysis): ReadonlyMap<number, number> {
+  const cuts = new Map<number, number>();
+  if (!rays.marginal.ok) return cuts;
+  for (let k = 0; k < train.count; k++) {
+    const y = Math.abs(rays.marginal.value.y[k]!);
+    const part = train.partOf[k]!;
+    if (y > train.semiDiameter[k]! * (1 + CUT)) cuts.set(part, Math.max(y, cuts.get(part) ?? 0));
+  }
+  return cuts;
 }
 
 /** Shares of a diameter and of the sensor that nobody could see or make; they keep rounding from warning. */
