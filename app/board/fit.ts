@@ -24,6 +24,8 @@ export interface FitRange extends LengthRange {
 const LONG_SPACE = 1.5;
 /** Of a folded space, the piece next to the parts that stays to scale, as a share of the rest. */
 const KEPT_SHARE = 0.4;
+/** Heights are never drawn flatter than this by a fit; a taller layout is drawn smaller instead. */
+const LEAST_STRETCH = 0.25;
 /** Width of the break on screen, px. */
 export const FOLD_WIDTH_PX = 18;
 /** Steps of the height stretch within a decade, so that the shown figure is a plain one. */
@@ -31,27 +33,23 @@ const STRETCH_STEPS = [1, 1.25, 1.5, 1.75, 2, 2.5, 3, 3.5, 4, 5, 6, 7, 8];
 
 /**
  * The view whose lengths `fromMm … toMm` fill the width between the margins (px) and whose greatest height fits
- * in the height between them; the stretch is rounded down to a plain figure, the axis stands half-way.
- * A view without room, or an empty range, keeps its scale and is centred on the range.
+ * in the height between them; the stretch is rounded down to a plain figure, the axis stands half-way. A layout too
+ * tall for that is drawn smaller, in the middle. Without room, or over an empty range, the scale stays as it is.
  */
-export function fit(view: Viewport, range: FitRange, margins: Margins): Viewport {
+export function fitted(view: Viewport, range: FitRange, margins: Margins): Viewport {
   const roomPx = view.widthPx - margins.left - margins.right;
   const tallPx = view.heightPx - margins.top - margins.bottom;
-  const axisYPx = tallPx > 0 ? margins.top + tallPx / 2 : view.heightPx / 2;
   const folded = foldedPart(view.fold, range);
   const scaleMm = range.toMm - range.fromMm - folded.lengthMm;
-  const fits = scaleMm > 0 && roomPx > folded.widthPx;
-  const pxPerMm = fits
-    ? within((roomPx - folded.widthPx) / scaleMm, PX_PER_MM_LIMITS.least, PX_PER_MM_LIMITS.most)
-    : view.pxPerMm;
-  const wanted = range.maxHeightMm > 0 && tallPx > 0 ? tallPx / 2 / (range.maxHeightMm * pxPerMm) : 1;
-  const stretch = within(plainStretch(wanted), STRETCH_LIMITS.least, STRETCH_LIMITS.most);
+  const hasRoom = scaleMm > 0 && roomPx > folded.widthPx;
+  const filling = hasRoom ? limited((roomPx - folded.widthPx) / scaleMm) : view.pxPerMm;
+  const wanted = range.maxHeightMm > 0 && tallPx > 0 ? tallPx / 2 / (range.maxHeightMm * filling) : 1;
+  const pxPerMm = limited(filling * Math.min(1, wanted / LEAST_STRETCH));
+  const stretch = plainStretch(Math.min(STRETCH_LIMITS.most, Math.max(LEAST_STRETCH, wanted)));
+  const axisYPx = tallPx > 0 ? margins.top + tallPx / 2 : view.heightPx / 2;
   const drawnPx = Math.max(0, scaleMm) * pxPerMm + folded.widthPx;
-  return withLengthAt(
-    { ...view, pxPerMm, stretch, axisYPx },
-    range.fromMm,
-    margins.left + (roomPx - drawnPx) / 2,
-  );
+  const leftPx = margins.left + (roomPx - drawnPx) / 2;
+  return withLengthAt({ ...view, pxPerMm, stretch, axisYPx }, range.fromMm, leftPx);
 }
 
 /**
@@ -128,6 +126,6 @@ function decimal(digit: number, decade: number): number {
   return Number(`${digit}e${decade}`);
 }
 
-function within(value: number, least: number, most: number): number {
-  return Math.min(most, Math.max(least, value));
+function limited(pxPerMm: number): number {
+  return Math.min(PX_PER_MM_LIMITS.most, Math.max(PX_PER_MM_LIMITS.least, pxPerMm));
 }

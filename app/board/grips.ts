@@ -17,6 +17,8 @@ export interface Grip {
   readonly yPx: number;
   /** The grip can be taken anywhere on this upright line through `xPx`; null for a point. */
   readonly line: { readonly topPx: number; readonly bottomPx: number } | null;
+  /** Half the width over which it can be taken, for a grip that is a text. Default 0. */
+  readonly halfWidthPx?: number;
   /** CSS cursor over the grip. */
   readonly cursor: string;
   /** The grip's name for people, "second group, position". */
@@ -32,18 +34,21 @@ export const TOUCH_RADIUS_PX = 22;
 /** Distances that differ by less than this share of the radius count as equal: a hand does not aim finer. */
 const TIE_SHARE = 0.5;
 
-/** Distance (px) from a point to a grip: to its line, or to its point. */
-export function distanceTo(grip: Pick<Grip, 'xPx' | 'yPx' | 'line'>, xPx: number, yPx: number): number {
+type Reach = Pick<Grip, 'xPx' | 'yPx' | 'line' | 'halfWidthPx'>;
+
+/** Distance (px) from a point to a grip: to its line, its text or its point. */
+export function distanceTo(grip: Reach, xPx: number, yPx: number): number {
   const nearestY =
     grip.line === null ? grip.yPx : Math.min(grip.line.bottomPx, Math.max(grip.line.topPx, yPx));
-  return Math.hypot(xPx - grip.xPx, yPx - nearestY);
+  const aside = Math.max(0, Math.abs(xPx - grip.xPx) - (grip.halfWidthPx ?? 0));
+  return Math.hypot(aside, yPx - nearestY);
 }
 
 /**
  * The grips within `radiusPx` of a point, the one to be taken first in front: the nearest, where those about as near
  * as the nearest are ranked by their order. The rest follow by distance.
  */
-export function gripsAt<G extends Pick<Grip, 'xPx' | 'yPx' | 'line' | 'order'>>(
+export function gripsAt<G extends Reach & Pick<Grip, 'order'>>(
   grips: readonly G[],
   xPx: number,
   yPx: number,

@@ -1,0 +1,96 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { type LabelWish, overlaps, placeLabels } from '../../../app/board/labels.ts';
+import { roughMeasure } from '../../../app/board/measure.ts';
+import { SEED } from './generators.ts';
+
+const bounds = { xPx: 0, yPx: 0, widthPx: 1000, heightPx: 600 };
+const wish = (id: string, xPx: number, change: Partial<LabelWish> = {}): LabelWish => ({
+  id,
+  xPx,
+  yPx: 300,
+  widthPx: 60,
+  heightPx: 16,
+  priority: 1,
+  sides: ['above', 'below', 'above right', 'above left'],
+  ...change,
+});
+
+describe('placing labels', () => {
+  it('puts a lone label on the side it likes best', () => {
+    expect(placeLabels([wish('a', 100)], { bounds })[0]).toMatchObject({
+      xPx: 70,
+      yPx: 280,
+      side: 'above',
+      step: 0,
+    });
+  });
+
+  it.each([
+    ['left', 36, 292],
+    ['right', 104, 292],
+    ['below', 70, 304],
+    ['above right', 100, 280],
+    ['below left', 40, 304],
+  ] as const)('stands %s of its point at the wished distance', (side, xPx, yPx) => {
+    expect(placeLabels([wish('a', 100, { sides: [side] })], { bounds })[0]).toMatchObject({ xPx, yPx });
+  });
+
+  it('lets the more important of two neighbours have its place and moves the other', () => {
+    const [first, second] = placeLabels([wish('a', 100), wish('b', 120, { priority: 5 })], { bounds });
+    expect(second?.side).toBe('above');
+    expect(first?.side).toBe('below');
+  });
+
+  it('staggers outwards when every side is taken', () => {
+    const crowd = ['a', 'b', 'c'].map((id) => wish(id, 100, { sides: ['above'] }));
+    const steps = placeLabels(crowd, { bounds, apartPx: 0 }).map((place) => place.step);
+    expect(steps).toEqual([0, 1, 2]);
+  });
+
+  it('keeps clear of obstacles and of the edge of the sheet', () => {
+    const obstacles = [{ xPx: 60, yPx: 270, widthPx: 80, heightPx: 28 }];
+    expect(placeLabels([wish('a', 100)], { bounds, obstacles })[0]?.side).toBe('below');
+    expect(placeLabels([wish('a', 100, { yPx: 5 })], { bounds })[0]?.side).toBe('below');
+    expect(placeLabels([wish('a', 10)], { bounds })[0]?.side).toBe('above right');
+  });
+
+  it('says so when a label finds no room', () => {
+    const tight = { xPx: 0, yPx: 0, widthPx: 10, heightPx: 10 };
+    expect(placeLabels([wish('a', 5, { yPx: 5 })], { bounds: tight })[0]?.crowded).toBe(true);
+  });
+
+  it('leaves a pointed-at label on its side while its neighbour comes near', () => {
+    const before = placeLabels([wish('a', 100), wish('b', 300, { priority: 5 })], { bounds });
+    const near = [wish('a', 100), wish('b', 110, { priority: 5 })];
+    expect(placeLabels(near, { bounds, former: before })[0]?.side).toBe('below');
+    const kept = placeLabels(near, { bounds, former: before, frozen: new Set(['a']) });
+    expect(kept.map((place) => place.side)).toEqual(['above', 'below']);
+  });
+
+  it('answers in the order of the wishes and never covers a label while there is room', () => {
+    const spots = fc.uniqueArray(fc.integer({ min: 1, max: 12 }), { minLength: 1, maxLength: 12 });
+    fc.assert(
+      fc.property(spots, fc.infiniteStream(fc.integer({ min: 0, max: 3 })), (at, ranks) => {
+        const wishes = at.map((i) => wish(`${i}`, 40 + 25 * i, { priority: ranks.next().value }));
+        const places = placeLabels(wishes, { bounds });
+        expect(places.map((place) => place.id)).toEqual(wishes.map((w) => w.id));
+        for (const [i, one] of places.entries())
+          for (const other of places.slice(i + 1)) expect(overlaps(one, other)).toBe(false);
+      }),
+      SEED,
+    );
+  });
+
+  it('gives the same places for the same wishes', () => {
+    const wishes = [wish('a', 100), wish('b', 105), wish('c', 90, { priority: 3 })];
+    expect(placeLabels(wishes, { bounds })).toEqual(placeLabels(wishes, { bounds }));
+  });
+});
+
+describe('measuring without a canvas', () => {
+  it('grows with the text and the size of the style', () => {
+    expect(roughMeasure('abcd', 'label')).toBe(2 * roughMeasure('ab', 'label'));
+    expect(roughMeasure('ab', 'value')).toBeGreaterThan(roughMeasure('ab', 'label'));
+  });
+});
