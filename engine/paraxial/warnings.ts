@@ -96,7 +96,7 @@ function mechanics(sketch: Sketch, setting: Setting, { conjugates, sensor }: Ana
 }
 
 function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
-  const { rays, light, sensor, conjugates, vignetting, train, depth } = analysis;
+  const { rays, light, sensor, conjugates, vignetting, depth } = analysis;
   const found: Found[] = [];
   const look = (kind: WarningKind, partId: PartId | null, sentence: string) =>
     found.push({ kind, severity: 'look at this', partId, sentence });
