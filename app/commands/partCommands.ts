@@ -1,0 +1,139 @@
+import type { Edit, PartId, PositionId, Sketch } from '../../engine/index.ts';
+import {
+  dropStop,
+  duplicateParts,
+  flipParts,
+  flipSign,
+  freshPartId,
+  insertPart,
+  newPlate,
+  newThin,
+  removeParts,
+  settingAt,
+  tieParts,
+  untie,
+} from '../../engine/index.ts';
+import { analysisOf } from '../live/analysis.ts';
+import { applyEdit } from '../store/sketchStore.ts';
+import { select, viewStore } from '../store/viewStore.ts';
+import { command, selectedNow, settingNow, sketchNow } from './now.ts';
+import { placeBehind } from './placing.ts';
+import type { CommandGroup, Services } from './services.ts';
+
+/** What a new thin part starts with, in mm; its entry is opened at once. */
+const FIRST_FOCAL_LENGTH_MM = 50;
+const FIRST_THICKNESS_MM = 1;
+
+/** Adding, removing and changing parts. */
+export function partCommands({ enterFocalLength }: Services): CommandGroup {
+  const addThin = (focalLengthMm: number) => {
+    const [added] = place((sketch, atMm, positionId) =>
+      insertPart(sketch, newThin(focalLengthMm, freshPartId(sketch)), atMm, positionId),
+    );
+    if (added) enterFocalLength(added);
+  };
+
+  return {
+    title: 'Parts',
+    commands: [
+      command('addPositive', 'Add a positive element behind the selection', ['P'], () =>
+        addThin(FIRST_FOCAL_LENGTH_MM),
+      ),
+      command('addNegative', 'Add a negative element behind the selection', ['N'], () =>
+        addThin(-FIRST_FOCAL_LENGTH_MM),
+      ),
+      command('addStop', 'Add a stop behind the selection', ['S'], () => place(dropStop)),
+      command('addPlate', 'Add a plate behind the selection', ['L'], () =>
+        place((sketch, atMm, positionId) =>
+          insertPart(sketch, newPlate(FIRST_THICKNESS_MM, freshPartId(sketch)), atMm, positionId),
+        ),
+      ),
+      command('delete', 'Delete the selected parts', ['Delete', 'Backspace'], removeSelected, hasSelected),
+      command('duplicate', 'Duplicate the selected parts', ['D'], duplicateSelected, hasSelected),
+      command('flip', 'Flip: reverse the order of the selected parts, or of all', ['V'], flip, hasParts),
+      command(
+        'flipSign',
+        'Flip the sign of the selected powers',
+        [],
+        flipSigns,
+        () => selectedThin().length > 0,
+      ),
+      command('tie', 'Tie the selected parts into a group', [], tie, () => selectedNow().length > 1),
+      command(
+        'untie',
+        'Untie the group of the selected part',
+        [],
+        untieSelected,
+        () => groupsOfSelected().length > 0,
+      ),
+    ],
+  };
+}
+
+/** Makes an edit and selects the parts it added; gives their ids, none when the edit was refused. */
+export function addAndSelect(edit: Edit): readonly PartId[] {
+  const before = new Set(sketchNow().parts.map((part) => part.id));
+  applyEdit(edit);
+  const added = sketchNow()
+    .parts.map((part) => part.id)
+    .filter((id) => !before.has(id));
+  if (added.length > 0) select(...added);
+  return added;
+}
+
+function place(insert: (sketch: Sketch, atMm: number, positionId: PositionId) => Sketch): readonly PartId[] {
+  const sketch = sketchNow();
+  const { at } = settingNow();
+  const atMm = placeBehind(sketch, viewStore.getState().selection, analysisOf(sketch, settingAt(at)));
+  return addAndSelect((before) => insert(before, atMm, at));
+}
+
+const hasParts = () => sketchNow().parts.length > 0;
+const hasSelected = () => selectedNow().length > 0;
+
+/** Deletes, and selects what then stands in the place, so that the keyboard keeps its place too. */
+export function removeSelected(): void {
+  const ids = selectedNow();
+  const first = sketchNow().parts.findIndex((part) => part.id === ids[0]);
+  applyEdit((sketch) => removeParts(sketch, ids));
+  const { parts } = sketchNow();
+  if (parts.some((part) => ids.includes(part.id))) return;
+  const heir = parts[Math.min(first, parts.length - 1)];
+  if (heir) select(heir.id);
+  else select();
+}
+
+function duplicateSelected(): void {
+  const ids = selectedNow();
+  addAndSelect((sketch) => duplicateParts(sketch, ids));
+}
+
+function flip(): void {
+  const ids = selectedNow();
+  applyEdit((sketch) => flipParts(sketch, ids.length > 0 ? ids : sketch.parts.map((part) => part.id)));
+}
+
+const selectedThin = () => {
+  const ids = selectedNow();
+  return sketchNow().parts.filter((part) => part.kind === 'thin' && ids.includes(part.id));
+};
+
+function flipSigns(): void {
+  const ids = selectedThin().map((part) => part.id);
+  applyEdit((sketch) => ids.reduce(flipSign, sketch));
+}
+
+function tie(): void {
+  const ids = selectedNow();
+  applyEdit((sketch) => tieParts(sketch, ids, `group ${sketch.groups.length + 1}`));
+}
+
+const groupsOfSelected = () => {
+  const ids = selectedNow();
+  return sketchNow().groups.filter((group) => group.partIds.some((id) => ids.includes(id)));
+};
+
+function untieSelected(): void {
+  const ids = groupsOfSelected().map((group) => group.id);
+  applyEdit((sketch) => ids.reduce(untie, sketch));
+}

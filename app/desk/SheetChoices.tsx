@@ -1,0 +1,42 @@
+import type { Datum } from '../../engine/index.ts';
+import { useReading } from '../live/reading.ts';
+import { setView } from '../store/viewStore.ts';
+import { Segmented, Select } from '../ui/choices.tsx';
+
+const DATUMS: readonly { readonly value: Datum; readonly label: string }[] = [
+  { value: 'first part', label: 'first part' },
+  { value: 'sensor', label: 'sensor' },
+  { value: 'mount', label: 'mount plane' },
+];
+const DIGITS = ['0', '1', '2', '3', '4', '5', '6'].map((value) => ({
+  value,
+  label: value === '0' ? '1 mm' : `${(10 ** -Number(value)).toFixed(Number(value))} mm`,
+}));
+const UNITS = [
+  { value: 'mm', label: 'mm' },
+  { value: 'in', label: 'in' },
+] as const;
+
+/** What the table counts from, how finely it is rounded, and in which unit. */
+export function SheetChoices({ hasMount }: { readonly hasMount: boolean }) {
+  const datum = useReading((reading) => reading.view.datum);
+  const digits = useReading((reading) => String(reading.view.digits));
+  const unit = useReading((reading) => reading.view.unit);
+  return (
+    <div className="sheet-choices">
+      <Select
+        label="Distances from"
+        value={datum}
+        choices={DATUMS.filter((choice) => hasMount || choice.value !== 'mount' || datum === 'mount')}
+        onChoose={(next) => setView({ datum: next })}
+      />
+      <Select
+        label="Rounded to"
+        value={digits}
+        choices={DIGITS}
+        onChoose={(next) => setView({ digits: Number(next) })}
+      />
+      <Segmented label="Unit" value={unit} choices={UNITS} onChoose={(next) => setView({ unit: next })} />
+    </div>
+  );
+}

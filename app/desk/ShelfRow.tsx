@@ -1,0 +1,79 @@
+import { useState } from 'react';
+import { Icon } from '../ui/Icon.tsx';
+import { NameForm } from './NameForm.tsx';
+import type { Shelf } from './shelf.ts';
+import type { ShelfEntry } from './storage.ts';
+
+interface ShelfRowProps {
+  readonly entry: ShelfEntry;
+  readonly isOpen: boolean;
+  readonly shelf: Shelf;
+  readonly onOpen: () => void;
+}
+
+/** One sketch on the shelf: its name opens it; rename, duplicate and remove stand beside it. */
+export function ShelfRow({ entry, isOpen, shelf, onOpen }: ShelfRowProps) {
+  const [renaming, setRenaming] = useState(false);
+  const { name, savedAt } = entry;
+
+  if (renaming)
+    return (
+      <li className="shelf-row">
+        <NameForm
+          label={`New name for ${name}`}
+          name={name}
+          verb="Rename"
+          onName={(next) => {
+            setRenaming(false);
+            void shelf.rename(name, next);
+          }}
+          onCancel={() => setRenaming(false)}
+        />
+      </li>
+    );
+
+  return (
+    <li className="shelf-row">
+      <button type="button" className="text-button shelf-name" onClick={onOpen}>
+        {name}
+      </button>
+      <span className="shelf-about">
+        {isOpen ? 'open now, ' : ''}
+        <time dateTime={savedAt}>{dayAndTime(savedAt)}</time>
+      </span>
+      <span className="shelf-do">
+        <button
+          type="button"
+          className="icon-button"
+          aria-label={`Rename ${name}`}
+          onClick={() => setRenaming(true)}
+        >
+          <Icon name="rename" />
+        </button>
+        <button
+          type="button"
+          className="icon-button"
+          aria-label={`Duplicate ${name}`}
+          onClick={() => void shelf.duplicate(name)}
+        >
+          <Icon name="copy" />
+        </button>
+        <button
+          type="button"
+          className="icon-button"
+          aria-label={`Remove ${name}`}
+          onClick={() => void shelf.remove(name)}
+        >
+          <Icon name="remove" />
+        </button>
+      </span>
+    </li>
+  );
+}
+
+const style = new Intl.DateTimeFormat(undefined, { dateStyle: 'medium', timeStyle: 'short' });
+
+function dayAndTime(savedAt: string): string {
+  const date = new Date(savedAt);
+  return Number.isNaN(date.getTime()) ? 'unknown date' : style.format(date);
+}

@@ -1,0 +1,65 @@
+import * as v from 'valibot';
+import type { View } from '../store/viewStore.ts';
+
+/** The parts of the view that are there again after a reload. */
+const KEPT = [
+  'theme',
+  'unit',
+  'shown',
+  'raysPerBundle',
+  'realIsPositive',
+  'snap',
+  'hints',
+  'digits',
+  'datum',
+  'drawer',
+  'foldedGroups',
+  'setting',
+  'selection',
+] as const satisfies readonly (keyof View)[];
+
+export type KeptView = Pick<View, (typeof KEPT)[number]>;
+
+/** What of `view` is kept. */
+export function keptViewOf(view: View): KeptView {
+  return Object.fromEntries(KEPT.map((field) => [field, view[field]])) as KeptView;
+}
+
+const flag = v.boolean();
+const count = (from: number, to: number) => v.pipe(v.number(), v.integer(), v.minValue(from), v.maxValue(to));
+const texts = v.array(v.string());
+
+/** Each field by itself, so that one that is broken or from another version does not cost the rest. */
+const fields = {
+  theme: v.picklist(['system', 'paper', 'night']),
+  unit: v.picklist(['mm', 'in']),
+  shown: v.object({
+    bundles: flag,
+    images: flag,
+    pupils: flag,
+    principalPlanes: flag,
+    focalPoints: flag,
+    labels: flag,
+  }),
+  raysPerBundle: count(1, 99),
+  realIsPositive: flag,
+  snap: flag,
+  hints: flag,
+  digits: count(0, 6),
+  datum: v.picklist(['first part', 'sensor', 'mount']),
+  drawer: v.nullable(v.picklist(['ledger', 'table', 'trace'])),
+  foldedGroups: texts,
+  setting: v.object({ at: v.string(), toNext: v.pipe(v.number(), v.minValue(0), v.ltValue(1)) }),
+  selection: texts,
+} satisfies Record<(typeof KEPT)[number], v.GenericSchema>;
+
+/** What of `data` can be a view; fields that are absent or broken are left out. Never throws. */
+export function viewFrom(data: unknown): Partial<KeptView> {
+  if (typeof data !== 'object' || data === null) return {};
+  const good: Record<string, unknown> = {};
+  for (const field of KEPT) {
+    const result = v.safeParse(fields[field], (data as Record<string, unknown>)[field]);
+    if (result.success) good[field] = result.output;
+  }
+  return good as Partial<KeptView>;
+}
