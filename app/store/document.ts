@@ -43,13 +43,13 @@ export function preview(doc: Document, edit: Edit): Document {
 
 /**
  * Ends a gesture: its last accepted edit is made once more from the start, without the warm start, and becomes one
- * step of history, or none when it changed nothing.
+ * step of history, or none when it changed nothing. Why the hand's last move was refused stays on the screen.
  */
 export function commit(doc: Document): Document {
   if (!doc.running) return doc;
   const { before, edit } = doc.running;
   const proposal = propose(before, edit, unsettled);
-  const settled = { ...doc, sketch: proposal.sketch, running: null, note: proposal.note };
+  const settled = { ...doc, sketch: proposal.sketch, running: null, note: proposal.note ?? doc.note };
   return proposal.sketch === before ? settled : { ...settled, past: [...doc.past, before], future: [] };
 }
 

@@ -1,5 +1,5 @@
 import { createStore } from 'zustand/vanilla';
-import type { Datum, PartId, Setting, Sketch } from '../../engine/index.ts';
+import type { Datum, PartId, PartKind, Setting, Sketch } from '../../engine/index.ts';
 
 /** What can be selected: parts by id, and the two ends of the axis. */
 export type Selected = PartId | 'object' | 'image';
@@ -30,6 +30,9 @@ export interface Camera {
   readonly axisYPx: number;
 }
 
+/** What is being taken from the tray: a thin element of either sign, a stop or a plate. */
+export type TrayKind = 'positive' | 'negative' | Exclude<PartKind, 'thin'>;
+
 /** How the user looks at the sketch. Nothing in it changes the sketch. */
 export interface View {
   readonly setting: Setting;
@@ -52,6 +55,10 @@ export interface View {
   readonly hints: boolean;
   /** The panel opened as a sheet on a narrow screen. */
   readonly panel: 'readouts' | 'part' | 'sketch' | 'warnings' | null;
+  /** What waits to be set down on the axis. */
+  readonly placing: TrayKind | null;
+  /** The grip whose number is being typed on the drawing. */
+  readonly typing: string | null;
 }
 
 const start: View = {
@@ -79,6 +86,8 @@ const start: View = {
   digits: 3,
   hints: true,
   panel: null,
+  placing: null,
+  typing: null,
 };
 
 export const viewStore = createStore<View>(() => start);
