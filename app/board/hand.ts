@@ -62,7 +62,8 @@ export type Effect =
   | ({ readonly do: 'preview' } & Drag)
   | { readonly do: 'commit'; readonly grip: string }
   | { readonly do: 'cancel'; readonly grip: string | null }
-  | ({ readonly do: 'click' | 'double click'; readonly grip: string | null } & Spot)
+  | ({ readonly do: 'click'; readonly grip: string | null } & Spot)
+  | ({ readonly do: 'double click'; readonly grip: string | null } & Spot)
   /** Touch pressed again where several grips lie: offer them by name. */
   | ({ readonly do: 'choose'; readonly grips: readonly string[] } & Spot)
   | { readonly do: 'pan'; readonly dxPx: number; readonly dyPx: number }

@@ -1,7 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { type LabelWish, overlaps, placeLabels } from '../../../app/board/labels.ts';
-import { roughMeasure } from '../../../app/board/measure.ts';
 import { SEED } from './generators.ts';
 
 const bounds = { xPx: 0, yPx: 0, widthPx: 1000, heightPx: 600 };
@@ -85,12 +84,5 @@ describe('placing labels', () => {
   it('gives the same places for the same wishes', () => {
     const wishes = [wish('a', 100), wish('b', 105), wish('c', 90, { priority: 3 })];
     expect(placeLabels(wishes, { bounds })).toEqual(placeLabels(wishes, { bounds }));
-  });
-});
-
-describe('measuring without a canvas', () => {
-  it('grows with the text and the size of the style', () => {
-    expect(roughMeasure('abcd', 'label')).toBe(2 * roughMeasure('ab', 'label'));
-    expect(roughMeasure('ab', 'value')).toBeGreaterThan(roughMeasure('ab', 'label'));
   });
 });
