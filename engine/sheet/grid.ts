@@ -1,0 +1,51 @@
+import type { Outcome } from '../outcome.ts';
+import { none, some } from '../outcome.ts';
+import type { Cell, LengthUnit, SheetOptions } from './table.ts';
+import { absentCell, numberCell } from './table.ts';
+
+/** Exact by definition of the inch. */
+const MM_PER_INCH = 25.4;
+/** An inch is shown to about the same length as a millimetre with two digits fewer. */
+const EXTRA_INCH_DIGITS = 2;
+const MOST_DIGITS = 6;
+
+/** Lengths as whole numbers of the last printed digit, so that sums and differences are exact. */
+export interface Grid {
+  readonly unit: LengthUnit;
+  /** Behind the decimal point, in the unit. */
+  readonly digits: number;
+  /** The whole number of steps nearest to a length in mm, halves away from zero; absent when too long to be counted exactly. */
+  readonly stepsOf: (mm: number) => Outcome<number, 'too long to print'>;
+  /** A number of steps in mm. */
+  readonly mmOf: (steps: number) => number;
+  /** The cell that prints a number of steps in the unit, or the reason. */
+  readonly cellOf: (steps: Outcome<number>) => Cell;
+  /** The cell that prints a length in mm in the unit, or the reason. */
+  readonly lengthCellOf: (mm: Outcome<number>) => Cell;
+}
+
+/** The grid of printed lengths. Throws a RangeError when the number of digits is not a whole number from 0 to 6. */
+export function gridOf(options: SheetOptions): Grid {
+  if (!Number.isInteger(options.digits) || options.digits < 0 || options.digits > MOST_DIGITS) {
+    throw new RangeError(
+      `gridOf: digits must be a whole number from 0 to ${MOST_DIGITS}, not ${options.digits}`,
+    );
+  }
+  const unitMm = options.unit === 'in' ? MM_PER_INCH : 1;
+  const digits = options.unit === 'in' ? options.digits + EXTRA_INCH_DIGITS : options.digits;
+  const stepsPerUnit = 10 ** digits;
+  const stepsOf: Grid['stepsOf'] = (mm) => {
+    const steps = Math.sign(mm) * Math.round((Math.abs(mm) / unitMm) * stepsPerUnit);
+    return Number.isSafeInteger(steps) ? some(steps) : none('too long to print');
+  };
+  const cellOf: Grid['cellOf'] = (steps) =>
+    steps.ok ? numberCell(steps.value / stepsPerUnit, digits) : absentCell(steps.why);
+  return {
+    unit: options.unit,
+    digits,
+    stepsOf,
+    mmOf: (steps) => (steps / stepsPerUnit) * unitMm,
+    cellOf,
+    lengthCellOf: (mm) => cellOf(mm.ok ? stepsOf(mm.value) : mm),
+  };
+}

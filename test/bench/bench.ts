@@ -1,0 +1,131 @@
+import { settingAt } from '../../engine/sketch/values.ts';
+import { trainOf } from '../../engine/train/train.ts';
+import { bareRays, traceBareRays } from './bareRays.ts';
+import { benchSketch } from './benchSketch.ts';
+import { analyseAll, type FrameStep, liveUpdate } from './liveUpdate.ts';
+import { measure, sunk, type Timing } from './measure.ts';
+
+/** One line of the result. */
+export interface BenchRow {
+  readonly name: string;
+  readonly min: number;
+  readonly median: number;
+  readonly unit: 'µs';
+  /** Median over that of the row it is compared with, in the same run; 1 for the yardsticks themselves. */
+  readonly ratio: number;
+  /** What the ratio compares with. */
+  readonly against: string;
+}
+
+const ELEMENTS = 12;
+const POSITIONS = 6;
+const SIZES = [4, 8, 16, 32, 64];
+const MOST_PER_DOUBLING = 2.2;
+const DRAWN_FIELDS = 3;
+const DRAWN_RAYS = 7;
+const REFERENCE_RAYS = 2;
+
+/**
+ * Every row. `frame` adds what the app does after the analysis (scene, texts) to the live update. Throws when what was
+ * measured did not give numbers.
+ */
+export function runBench(frame: readonly FrameStep[] = []): readonly BenchRow[] {
+  const rows = [...analysisRows(), ...liveRows(frame), ...growthRows()];
+  if (!Number.isFinite(sunk())) throw new Error(`runBench: the results add up to ${sunk()}`);
+  return rows;
+}
+
+/** All positions analysed, against the marginal and the chief ray of each. */
+function analysisRows(): BenchRow[] {
+  const sketch = benchSketch(ELEMENTS, POSITIONS);
+  const trains = sketch.positions.map(({ id }) => trainOf(sketch, settingAt(id)));
+  const rays = bareRays(trains, REFERENCE_RAYS);
+  const { bare, whole } = measure({ bare: () => traceBareRays(rays), whole: analyseAll(sketch) });
+  const size = `${ELEMENTS} elements, ${POSITIONS} positions`;
+  return [
+    row(`bare arithmetic: ${REFERENCE_RAYS} rays, ${size}`, bare, bare, 'itself'),
+    row(`first-order analysis: ${size}`, whole, bare, 'bare arithmetic'),
+  ];
+}
+
+/** One move of a drag, against the rays that a drawing of one position shows. */
+function liveRows(frame: readonly FrameStep[]): BenchRow[] {
+  const sketch = benchSketch(ELEMENTS, POSITIONS);
+  const shown = sketch.positions.slice(0, 1).map(({ id }) => trainOf(sketch, settingAt(id)));
+  const count = REFERENCE_RAYS + DRAWN_FIELDS * DRAWN_RAYS;
+  const rays = bareRays(shown, count);
+  const { bare, whole } = measure({ bare: () => traceBareRays(rays), whole: liveUpdate(sketch, frame) });
+  return [
+    row(`bare arithmetic: ${count} rays, ${ELEMENTS} elements, 1 position`, bare, bare, 'itself'),
+    row(
+      `live update without painting: ${ELEMENTS} elements, ${POSITIONS} positions`,
+      whole,
+      bare,
+      'bare arithmetic',
+    ),
+  ];
+}
+
+/** The analysis of one position at growing numbers of elements, each against half as many. */
+function growthRows(): BenchRow[] {
+  const timings = measure(
+    Object.fromEntries(SIZES.map((elements) => [elements, analyseAll(benchSketch(elements, 1))])),
+  );
+  return SIZES.flatMap((elements) => {
+    const timing = timings[elements];
+    const half = timings[elements / 2];
+    if (timing === undefined) return [];
+    const name = `analysis, 1 position: ${elements} elements`;
+    return half === undefined
+      ? [row(name, timing, timing, 'itself')]
+      : [row(name, timing, half, `${elements / 2} elements; at most ${MOST_PER_DOUBLING}`)];
+  });
+}
+
+const row = (name: string, timing: Timing, yardstick: Timing, against: string): BenchRow => ({
+  name,
+  min: 1000 * timing.minMs,
+  median: 1000 * timing.medianMs,
+  unit: 'µs',
+  ratio: timing.medianMs / yardstick.medianMs,
+  against,
+});
+
+/** The rows as JSON: a list of `{ name, median, unit, ratio }`. */
+export const rowsJson = (rows: readonly BenchRow[]): string =>
+  `${JSON.stringify(
+    rows.map(({ name, median, unit, ratio }) => ({ name, median, unit, ratio })),
+    null,
+    2,
+  )}\n`;
+
+/** The rows as a table to read. */
+export function rowsTable(rows: readonly BenchRow[]): string {
+  const lines = [
+    ['', 'min', 'median', '', 'ratio', 'to'],
+    ...rows.map(({ name, min, median, unit, ratio, against }) => [
+      name,
+      min.toFixed(2),
+      median.toFixed(2),
+      unit,
+      ratio.toFixed(2),
+      against,
+    ]),
+  ];
+  const widths = [0, 1, 2, 3, 4, 5].map((column) =>
+    Math.max(...lines.map((line) => line[column]?.length ?? 0)),
+  );
+  const isNumber = (column: number): boolean => column === 1 || column === 2 || column === 4;
+  return lines
+    .map((line) =>
+      line
+        .map((text, column) => {
+          const width = widths[column] ?? 0;
+          return isNumber(column) ? text.padStart(width) : text.padEnd(width);
+        })
+        .join('  ')
+        .trimEnd()
+        .concat('\n'),
+    )
+    .join('');
+}

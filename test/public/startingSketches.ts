@@ -1,0 +1,223 @@
+import { CROWN, emptySketch, LINES, newPlate, newStop, newThin } from '../../engine/sketch/create.ts';
+import type {
+  GroupId,
+  PartId,
+  PerPosition,
+  Position,
+  PositionId,
+  Sketch,
+  Space,
+  ThinPart,
+} from '../../engine/sketch/types.ts';
+
+/** A sketch that comes with the tool, and what the list of starting sketches says about it. */
+export interface StartingSketch {
+  readonly file: string;
+  readonly summary: string;
+  readonly sketch: Sketch;
+}
+
+/** Every starting sketch, the demo first. All are invented for one seed-sorting line. */
+export const STARTING_SKETCHES: readonly StartingSketch[] = [
+  {
+    file: 'inspection-zoom.json',
+    summary: 'Four groups, three positions, the image held on the sensor',
+    sketch: inspectionZoom(),
+  },
+  {
+    file: 'sorting-chute-relay.json',
+    summary: 'Two lenses and a stop, telecentric on both sides, 0.6 times',
+    sketch: sortingChuteRelay(),
+  },
+  {
+    file: 'colour-check-camera.json',
+    summary: 'A negative in front of a positive: short focal length, long back focus',
+    sketch: colourCheckCamera(),
+  },
+  {
+    file: 'chute-scanner-expander.json',
+    summary: 'A laser beam made four times wider, without a focal length',
+    sketch: chuteScannerExpander(),
+  },
+  {
+    file: 'germination-macro.json',
+    summary: 'Half size and life size through the window of a dish',
+    sketch: germinationMacro(),
+  },
+  {
+    file: 'sorters-loupe.json',
+    summary: 'Two equal lenses for the eye, the image at infinity',
+    sketch: sortersLoupe(),
+  },
+];
+
+function inspectionZoom(): Sketch {
+  const [wide, middle, narrow] = positions('wide', 'middle', 'narrow');
+  const gap = (atWide: number, atMiddle: number, atNarrow: number): Partial<ThinPart> => ({
+    space: air({ [wide.id]: atWide, [middle.id]: atMiddle, [narrow.id]: atNarrow }),
+  });
+  return {
+    ...emptySketch('Seed line camera'),
+    notes:
+      'Inspection camera of a seed-sorting line. The chute is 500 mm in front of the first group; the fourth group and the sensor stand still.',
+    object: { distanceMm: 500, medium: 'air' },
+    parts: [
+      thin('p1', 'First group', -32, gap(41.2187245423499, 26.2723430337247, 15.9437475806799)),
+      thin('p2', 'Second group', 28, gap(16.5123679494863, 25.3145182543316, 41.9317551092688)),
+      thin('p3', 'Third group', -46, gap(26.2689075081639, 32.4131387119437, 26.1244973100513)),
+      thin('p4', 'Fourth group', 48, { space: air(26) }),
+    ],
+    image: 'fixed',
+    sensor: { size: { widthMm: 8.8, heightMm: 6.6 }, pixelPitchMm: 0.00345 },
+    stop: id('p2'),
+    aperture: { kind: 'workingFNumber', fNumber: 5.6 },
+    field: { size: { kind: 'imageHeight', heightMm: 5.5 }, fractions: [0, 0.7, 1], vignetting: 0 },
+    lines: LINES.e,
+    positions: [wide, middle, narrow],
+  };
+}
+
+function sortingChuteRelay(): Sketch {
+  return {
+    ...emptySketch('Sorting-chute relay'),
+    notes: 'The stop stands in the common focus of both lenses, so seeds nearer or farther keep their size.',
+    object: { distanceMm: 100, medium: 'air' },
+    parts: [
+      thin('p1', 'Chute lens', 100, {
+        space: air(100),
+        semiDiameterMm: 14.5,
+        abbeNumber: 64.2,
+        roomFrontMm: 5,
+        roomBehindMm: 5,
+      }),
+      { ...newStop(id('p2')), name: 'Stop', space: air(60) },
+      thin('p3', 'Camera lens', 60, {
+        space: air(60),
+        semiDiameterMm: 11.5,
+        abbeNumber: 64.2,
+        roomFrontMm: 4,
+        roomBehindMm: 4,
+      }),
+    ],
+    image: 'fixed',
+    sensor: { size: { widthMm: 7.2, heightMm: 5.4 }, pixelPitchMm: 0.0024 },
+    stop: id('p2'),
+    aperture: { kind: 'stopDiameter', diameterMm: 12 },
+    field: { size: { kind: 'objectHeight', heightMm: 7.5 }, fractions: [0, 0.7, 1], vignetting: 0 },
+  };
+}
+
+function colourCheckCamera(): Sketch {
+  const front = -40;
+  const rear = 15.7;
+  const apart = 28;
+  const focalLength = 1 / (1 / front + 1 / rear - apart / (front * rear));
+  return {
+    ...emptySketch('Colour check camera'),
+    notes:
+      'Looks over the whole belt. The register distance of the camera asks for a back focus longer than the focal length.',
+    parts: [
+      thin('p1', 'Front lens', front, { space: air(24), abbeNumber: 58.6, roomBehindMm: 2 }),
+      { ...newStop(id('p2')), name: 'Stop', space: air(4) },
+      thin('p3', 'Rear lens', rear, {
+        space: air(focalLength * (1 - apart / front)),
+        abbeNumber: 70.2,
+        roomFrontMm: 2,
+        roomBehindMm: 1.5,
+      }),
+    ],
+    image: 'fixed',
+    sensor: { size: { widthMm: 8.8, heightMm: 6.6 }, pixelPitchMm: 0.00345 },
+    registerMm: 17.526,
+    stop: id('p2'),
+    aperture: { kind: 'infinityFNumber', fNumber: 2.8 },
+    field: { size: { kind: 'imageHeight', heightMm: 5.5 }, fractions: [0, 0.7, 1], vignetting: 0.2 },
+  };
+}
+
+function chuteScannerExpander(): Sketch {
+  return {
+    ...emptySketch('Chute scanner expander'),
+    notes:
+      'Widens the beam of a laser diode four times before it reaches the scanning mirror. Backwards it concentrates the beam.',
+    parts: [
+      thin('p1', 'Entry lens', -25, { space: air(75), semiDiameterMm: 4 }),
+      thin('p2', 'Exit lens', 100, { space: air(60), semiDiameterMm: 12 }),
+    ],
+    stop: id('p1'),
+    aperture: { kind: 'entrancePupilDiameter', diameterMm: 4 },
+    field: { size: { kind: 'angle', angleDeg: 0.25 }, fractions: [0, 1], vignetting: 0 },
+    lines: { mainNm: 638, shortNm: 633, longNm: 643 },
+  };
+}
+
+function germinationMacro(): Sketch {
+  const [half, life] = positions('half size', 'life size');
+  const lens = 60;
+  const window = newPlate(3, id('p1'));
+  /** The object as the first lens sees it stands at its focus in life size, 36 mm farther in half size. */
+  const windowToLens = (reducedMm: number): number => reducedMm - 2 - window.thicknessMm / CROWN.index;
+  return {
+    ...emptySketch('Germination macro'),
+    notes:
+      'Two equal lenses about a stop, tied together. The seeds lie 2 mm below the window of a germination dish.',
+    object: { distanceMm: 2, medium: 'air' },
+    parts: [
+      {
+        ...window,
+        name: 'Window',
+        space: air({ [half.id]: windowToLens(lens + 36), [life.id]: windowToLens(lens) }),
+      },
+      thin('p2', 'Front lens', lens, { space: air(10), abbeNumber: 60.3, roomFrontMm: 3, roomBehindMm: 3 }),
+      { ...newStop(id('p3')), name: 'Stop', space: air(10) },
+      thin('p4', 'Rear lens', lens, {
+        space: air({ [half.id]: 42, [life.id]: 60 }),
+        abbeNumber: 60.3,
+        roomFrontMm: 3,
+        roomBehindMm: 3,
+      }),
+    ],
+    image: 'fixed',
+    sensor: { size: { widthMm: 12.8, heightMm: 9.6 }, pixelPitchMm: 0.00274 },
+    stop: id('p3'),
+    aperture: { kind: 'stopDiameter', diameterMm: { [half.id]: 9, [life.id]: 12 } },
+    field: { size: { kind: 'imageHeight', heightMm: 8 }, fractions: [0, 0.7, 1], vignetting: 0 },
+    positions: [half, life],
+    groups: [{ id: 'g1' as GroupId, name: 'Lens', partIds: [id('p2'), id('p3'), id('p4')] }],
+  };
+}
+
+function sortersLoupe(): Sketch {
+  return {
+    ...emptySketch('Sorter’s loupe'),
+    notes: 'For looking at a single seed. It stands in the front focus; the pupil of the eye is the stop.',
+    object: { distanceMm: 6.4, medium: 'air' },
+    parts: [
+      thin('p1', 'Field lens', 32, { space: air(24), semiDiameterMm: 7, abbeNumber: 57.4 }),
+      thin('p2', 'Eye lens', 32, { space: air(14), semiDiameterMm: 6, abbeNumber: 57.4 }),
+      { ...newStop(id('p3')), name: 'Eye', space: air(20) },
+    ],
+    stop: id('p3'),
+    aperture: { kind: 'stopDiameter', diameterMm: 3 },
+    field: { size: { kind: 'objectHeight', heightMm: 3 }, fractions: [0, 0.7, 1], vignetting: 0 },
+  };
+}
+
+function id(text: string): PartId {
+  return text as PartId;
+}
+
+function air(lengthMm: PerPosition): Space {
+  return { lengthMm, medium: 'air' };
+}
+
+function thin(part: string, name: string, focalLengthMm: number, more: Partial<ThinPart>): ThinPart {
+  return { ...newThin(focalLengthMm, id(part)), name, ...more };
+}
+
+/** Positions named `names`, each with its name as its id, blanks apart. */
+function positions<Names extends readonly string[]>(...names: Names): { [Place in keyof Names]: Position } {
+  return names.map((name) => ({ id: name.replaceAll(' ', '-') as PositionId, name })) as {
+    [Place in keyof Names]: Position;
+  };
+}
