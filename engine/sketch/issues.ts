@@ -39,7 +39,9 @@ const WORDS: Readonly<Record<string, string>> = {
   mainNm: 'main wavelength',
   shortNm: 'short wavelength',
   longNm: 'long wavelength',
-  fractions: 'field fractions',
+  fractions: 'list of field fractions',
+  notes: 'text of the notes',
+  lines: 'set of wavelengths',
   size: 'size',
   partIds: 'list of parts',
   parts: 'list of parts',
@@ -50,7 +52,6 @@ const WORDS: Readonly<Record<string, string>> = {
 
 const ALLOWED: Readonly<Record<string, string>> = {
   medium: '“air”, or an object with name, index and abbeNumber',
-  kind: 'one of the kinds that stand there',
   fractions: LIMITS.fraction.allowed,
   fNumber: LIMITS.workingFNumber.allowed,
   diameterMm: LIMITS.stopDiameterMm.allowed,
@@ -76,13 +77,13 @@ function fieldKey(keys: readonly Key[]): string {
 const SELF_EXPLAINING = /^(distanceMm|vignetting|fractions|na|fNumber|diameterMm|mainNm|shortNm|longNm)$/;
 
 function subjectOf(keys: readonly Key[], root: unknown): string {
-  if (keys.length === 2 && typeof keys[1] === 'number')
-    return `Entry ${keys[1] + 1} of the list of ${keys[0]}`;
   const key = fieldKey(keys);
   const words = WORDS[key] ?? limitOf(key)?.words ?? (/^[a-z]+$/.test(key) ? key : quoted(key));
-  const owner = SELF_EXPLAINING.test(key) ? '' : ownerText(keys, root);
   const last = keys.at(-1);
-  const position = last !== key && typeof last === 'string' ? ` at position ${quoted(last)}` : '';
+  const owner =
+    SELF_EXPLAINING.test(key) || (keys.length === 2 && typeof last === 'number') ? '' : ownerText(keys, root);
+  if (typeof last === 'number') return `Entry ${last + 1} of the ${words}${owner}`;
+  const position = last !== key && last !== undefined ? ` at position ${quoted(last)}` : '';
   return `The ${words}${key === 'lengthMm' ? owner.replace(/^ of/, ' behind') : owner}${position}`;
 }
 
@@ -99,19 +100,24 @@ function ownerText(keys: readonly Key[], root: unknown): string {
 
 function allowedText(keys: readonly Key[], expected: string | null): string {
   const key = fieldKey(keys);
-  const limit = limitOf(key);
-  const alone = expected === null || expected.includes('number');
-  if (expected !== null && key === 'kind') return expectedText(expected);
-  if (ALLOWED[key] !== undefined) return withNumber(ALLOWED[key], expected);
-  if (limit !== undefined && (alone || key === 'distanceMm')) return withNumber(limit.allowed, expected);
+  const orNull = isNullable(keys) ? ', or null' : '';
+  if (expected !== null && (key === 'kind' || expected === 'Array')) return expectedText(expected);
+  const allowed = ALLOWED[key] ?? (expected === 'Object' ? undefined : limitOf(key)?.allowed);
+  if (allowed !== undefined)
+    return (/^(above|between|from)/.test(allowed) ? 'a number ' : '') + allowed + orNull;
   if (expected === null) return TEXTS.has(key) ? 'text, which may be empty' : 'there';
-  return expectedText(expected);
+  return expectedText(expected) + orNull;
 }
 
-const withNumber = (allowed: string, expected: string | null): string =>
-  (/^(above|between|from)/.test(allowed) ? 'a number ' : '') +
-  allowed +
-  (expected?.includes('null') ? ', or null' : '');
+/** The fields that may be empty; an index only where it is that of a thin part. */
+function isNullable(keys: readonly Key[]): boolean {
+  const key = keys.at(-1);
+  if (key === 'index') return keys.length === 3;
+  return (
+    typeof key === 'string' &&
+    /^(semiDiameterMm|abbeNumber|pixelPitchMm|registerMm|blurMm|stop|sensor)$/.test(key)
+  );
+}
 
 const KINDS: Readonly<Record<string, string>> = {
   number: 'a number',

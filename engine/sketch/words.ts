@@ -40,8 +40,5 @@ export const partLabel = (part: Pick<Part, 'name'> | undefined, index: number): 
 export function capped(faults: readonly Fault[], most = 50): readonly Fault[] {
   if (faults.length <= most) return faults;
   const left = faults.length - most + 1;
-  return [
-    ...faults.slice(0, most - 1),
-    { path: '', sentence: `There are ${numberText(left)} more faults of this kind or others.` },
-  ];
+  return [...faults.slice(0, most - 1), { path: '', sentence: `There are ${numberText(left)} more faults.` }];
 }

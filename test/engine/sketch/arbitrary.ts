@@ -22,11 +22,11 @@ export interface SketchSize {
 }
 
 /** A number between two limits: often round, otherwise any double; never −0. */
-export const anyNumber = (low: number, high: number): fc.Arbitrary<number> =>
-  fc.oneof(
-    fc.double({ min: low, max: high, noNaN: true }).map((value) => value + 0),
-    fc.integer({ min: Math.ceil(low), max: Math.floor(high) }),
-  );
+export function anyNumber(low: number, high: number): fc.Arbitrary<number> {
+  const any = fc.double({ min: low, max: high, noNaN: true }).map((value) => value + 0);
+  const [least, most] = [Math.ceil(low), Math.floor(high)];
+  return least > most ? any : fc.oneof(any, fc.integer({ min: least, max: most }));
+}
 
 /** Focal lengths of either sign, from strong to nearly none. */
 export const anyFocalLength = (): fc.Arbitrary<number> =>
