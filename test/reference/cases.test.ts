@@ -1,0 +1,156 @@
+import { spawnSync } from 'node:child_process';
+import { mkdtempSync, readFileSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { main, runCases } from './cases.ts';
+
+const FILE = fileURLToPath(new URL('./cases.json', import.meta.url));
+const list = JSON.parse(readFileSync(FILE, 'utf8')) as Record<string, unknown>[];
+
+/** Runs case files and gives the exit code and the printed lines. */
+function run(...paths: string[]): { code: number; lines: string[] } {
+  const lines: string[] = [];
+  const code = main(paths, (line) => lines.push(line));
+  return { code, lines };
+}
+
+/** A file that holds `content`, in a folder of its own. */
+function fileWith(content: string): string {
+  const path = join(mkdtempSync(join(tmpdir(), 'cases-')), 'cases.json');
+  writeFileSync(path, content);
+  return path;
+}
+
+describe('the published cases', () => {
+  const reports = runCases(list);
+
+  it('agree with the printed figures and with the independent computation', () => {
+    expect(reports.flatMap(({ id, misses }) => misses.map((miss) => ({ id, ...miss })))).toEqual([]);
+  });
+
+  it('leave only exact rays, dispersion, bendings, solves and third-order sums for later', () => {
+    const covered = reports.flatMap((report) => report.covered);
+    const cases = reports.filter(({ outcome }) => outcome !== 'skipped');
+    const left = reports.filter(({ outcome }) => outcome === 'skipped').map(({ id }) => id);
+    process.stdout.write(
+      `reference cases: ${cases.length} cases, ${covered.length} quantities covered; left: ${left.join(', ')}\n`,
+    );
+    expect(cases).toHaveLength(60);
+    expect(covered).toHaveLength(316);
+    expect(left).toEqual([
+      'thin-bending-infinity-1.5',
+      'thin-bending-infinity-1.7',
+      'thin-bending-unit-magnification',
+      'jenkins-white-shape-factors',
+      'two-lens-solve-telephoto',
+      'two-lens-solve-retrofocus',
+      'two-lens-finite-relay',
+      'coddington-mirror',
+      'iso-7944-lines',
+      'fused-silica-malitson',
+      'caf2-malitson',
+      'n-bk7',
+      'f2',
+      'seidel-sphere-stop-at-centre',
+    ]);
+  });
+
+  it('would each miss if any figure were off by a millionth', () => {
+    const off = (value: unknown) => (typeof value === 'number' ? value + 1e-6 * (1 + Math.abs(value)) : 1);
+    for (const [place, report] of reports.entries()) {
+      for (const quantity of report.covered) {
+        const changed = structuredClone(list[place]) as {
+          expected: Record<string, { value: unknown }>;
+          computed: { values: Record<string, unknown> };
+        };
+        const { values } = changed.computed;
+        const claim = changed.expected[quantity];
+        if (quantity in values && values[quantity] !== null) values[quantity] = off(values[quantity]);
+        else if (claim) claim.value = off(claim.value);
+        const misses = runCases([changed]).flatMap((again) => again.misses.map((miss) => miss.quantity));
+        expect(misses, report.id).toContain(quantity);
+      }
+    }
+  });
+});
+
+describe('the case runner', () => {
+  it('closes with the counts and code 0 when nothing is missed', () => {
+    const { code, lines } = run(FILE);
+    expect(code).toBe(0);
+    expect(lines.at(-1)).toBe('60 passed, 0 failed, 14 skipped');
+    expect(lines).toContain('cannot express: n-bk7');
+  });
+
+  it('prints case, quantity, got, wanted and tolerance of a miss, and code 1', () => {
+    const lens = { thinLenses: [{ focalLength: 50, gapAfter: 0 }] };
+    const expected = { focalLength: { value: 51, tolerance: 0.5 }, backFocus: { value: 50, tolerance: 0 } };
+    const { code, lines } = run(
+      fileWith(JSON.stringify([{ id: 'off', input: { prescription: lens }, expected }])),
+    );
+    expect(code).toBe(1);
+    expect(lines[0]).toMatch(/^miss: off, focalLength: got 50, wanted 51, tolerance 0\.5/);
+    expect(lines.at(-1)).toBe('0 passed, 1 failed, 0 skipped');
+  });
+
+  it('counts a quantity that should not exist but does as a miss', () => {
+    const input = { prescription: { thinLenses: [{ focalLength: 50 }] } };
+    const [report] = runCases([{ id: 'has-power', input, expected: { efl: { value: null, tolerance: 0 } } }]);
+    expect(report?.misses[0]?.wanted).toBe('none');
+  });
+
+  it('says in a sentence why a file cannot be read', () => {
+    expect(run('/nowhere/cases.json')).toEqual({
+      code: 1,
+      lines: [
+        '/nowhere/cases.json cannot be read: no such file, or no permission.',
+        '0 passed, 0 failed, 0 skipped',
+      ],
+    });
+    expect(run(fileWith('{')).lines[0]).toMatch(/is not JSON\.$/);
+    expect(run(fileWith('{}')).lines[0]).toMatch(/holds no list of cases\.$/);
+    expect(run().code).toBe(1);
+  });
+
+  it('skips whatever is no case, naming it, and never throws', () => {
+    const near = fc.record(
+      {
+        id: fc.string(),
+        input: fc.record(
+          {
+            prescription: fc.record({
+              surfaces: fc.jsonValue(),
+              thinLenses: fc.jsonValue(),
+              stop: fc.jsonValue(),
+            }),
+          },
+          { requiredKeys: [] },
+        ),
+        expected: fc.dictionary(fc.constantFrom('efl', 'power', 'lagrange'), fc.jsonValue()),
+        computed: fc.jsonValue(),
+      },
+      { requiredKeys: [] },
+    );
+    fc.assert(
+      fc.property(fc.array(fc.oneof(fc.jsonValue(), near)), (entries) => {
+        expect(runCases(entries)).toHaveLength(entries.length);
+      }),
+      { seed: 20261201 },
+    );
+    expect(runCases([7, {}, { id: 'odd', kind: 'unheard of', input: [] }]).map(({ id }) => id)).toEqual([
+      'entry 1 without an id',
+      'entry 2 without an id',
+      'odd',
+    ]);
+  });
+
+  it('runs as a command', () => {
+    const script = fileURLToPath(new URL('./run-cases.mjs', import.meta.url));
+    const { status, stdout } = spawnSync(process.execPath, [script, FILE], { encoding: 'utf8' });
+    expect(stdout.trimEnd().split('\n').at(-1)).toBe('60 passed, 0 failed, 14 skipped');
+    expect(status).toBe(0);
+  });
+});

@@ -1,0 +1,194 @@
+import { readFileSync } from 'node:fs';
+import { finite } from '../../engine/paraxial/absence.ts';
+import { heightInSpace, paraxialRay } from '../../engine/paraxial/trace.ts';
+import { readClosedForm } from './closedForms.ts';
+import { isRecord, numberIn } from './json.ts';
+import { type Measured, type Reader, readTrain } from './measure.ts';
+import { type Laid, layOut } from './prescription.ts';
+
+/** One quantity that came out wrong. `wanted` is null when it should not exist. */
+export interface Miss {
+  readonly quantity: string;
+  readonly got: string;
+  readonly wanted: string;
+  readonly tolerance: number;
+}
+
+/** What became of one case. */
+export interface CaseReport {
+  readonly id: string;
+  readonly outcome: 'passed' | 'failed' | 'skipped';
+  /** Quantities that were compared, against the printed figure or the independent computation or both. */
+  readonly covered: readonly string[];
+  /** Quantities that the first order cannot express. */
+  readonly left: readonly string[];
+  readonly misses: readonly Miss[];
+}
+
+/** Relative agreement with the independent computation: a trace of thirty surfaces in double precision keeps it. */
+const COMPUTED_RELATIVE = 1e-12;
+/** Printed tolerances end on a digit; this keeps the conversion to binary from counting as a miss. */
+const PRINTED_SLACK = 1e-12;
+
+/** Runs every case of a parsed case file. Entries that are no case, or that cannot be expressed, are skipped with their id. */
+export function runCases(list: unknown): readonly CaseReport[] {
+  const entries: readonly unknown[] = Array.isArray(list) ? list : [];
+  return entries.map((entry, place) => {
+    const id =
+      isRecord(entry) && typeof entry.id === 'string' ? entry.id : `entry ${place + 1} without an id`;
+    return isRecord(entry) ? runCase(id, entry) : skipped(id, []);
+  });
+}
+
+/**
+ * Runs case files and prints a line per miss, the ids that cannot be expressed, and `N passed, N failed, N skipped`. Returns the exit
+ * code: 1 on a miss or a file that cannot be read.
+ */
+export function main(paths: readonly string[], print: (line: string) => void): number {
+  if (paths.length === 0) {
+    print('Name at least one case file: npm run cases -- FILE…');
+    return 1;
+  }
+  const reports: CaseReport[] = [];
+  let unreadable = 0;
+  for (const path of paths) {
+    const list = readList(path);
+    if (typeof list === 'string') {
+      print(list);
+      unreadable++;
+    } else {
+      reports.push(...runCases(list));
+    }
+  }
+  for (const { id, misses } of reports) for (const miss of misses) print(missLine(id, miss));
+  for (const { id, outcome } of reports) if (outcome === 'skipped') print(`cannot express: ${id}`);
+  const count = (outcome: CaseReport['outcome']) =>
+    reports.filter((report) => report.outcome === outcome).length;
+  print(`${count('passed')} passed, ${count('failed')} failed, ${count('skipped')} skipped`);
+  return count('failed') + unreadable > 0 ? 1 : 0;
+}
+
+const missLine = (id: string, { quantity, got, wanted, tolerance }: Miss): string =>
+  `miss: ${id}, ${quantity}: got ${got}, wanted ${wanted}, tolerance ${tolerance}`;
+
+/** The parsed list, or the sentence that says why there is none. */
+function readList(path: string): readonly unknown[] | string {
+  let text: string;
+  try {
+    text = readFileSync(path, 'utf8');
+  } catch {
+    return `${path} cannot be read: no such file, or no permission.`;
+  }
+  try {
+    const list: unknown = JSON.parse(text);
+    return Array.isArray(list) ? list : `${path} holds no list of cases.`;
+  } catch {
+    return `${path} is not JSON.`;
+  }
+}
+
+const skipped = (id: string, left: readonly string[]): CaseReport => ({
+  id,
+  outcome: 'skipped',
+  covered: [],
+  left,
+  misses: [],
+});
+
+function runCase(id: string, entry: Record<string, unknown>): CaseReport {
+  const input = isRecord(entry.input) ? entry.input : {};
+  const expected = isRecord(entry.expected) ? entry.expected : {};
+  const computed = isRecord(entry.computed) && isRecord(entry.computed.values) ? entry.computed.values : {};
+  const reader = readerOf(id, input);
+  const names = [...new Set([...Object.keys(expected), ...Object.keys(computed)])];
+  const covered: string[] = [];
+  const left: string[] = [];
+  const misses: Miss[] = [];
+  for (const quantity of names) {
+    const measured = reader?.(quantity) ?? null;
+    const claim = claimOf(expected[quantity]);
+    const figure =
+      claim ?? (quantity in computed ? { value: numberIn(computed, quantity), tolerance: null } : null);
+    if (measured === null || figure === null) {
+      left.push(quantity);
+      continue;
+    }
+    covered.push(quantity);
+    if (claim) misses.push(...compare(quantity, measured, claim.value, claim.tolerance + slack(claim.value)));
+    const exact = numberIn(computed, quantity);
+    if (exact !== null) {
+      misses.push(
+        ...compare(quantity, measured, exact, COMPUTED_RELATIVE * Math.abs(exact) + measured.floor),
+      );
+    }
+  }
+  if (covered.length === 0) return skipped(id, left);
+  return { id, outcome: misses.length > 0 ? 'failed' : 'passed', covered, left, misses };
+}
+
+const slack = (value: number | null): number => PRINTED_SLACK * Math.abs(value ?? 0);
+
+/** The printed figure of a quantity; its value is null when the quantity does not exist. Null when it is not of that form. */
+function claimOf(entry: unknown): { value: number | null; tolerance: number } | null {
+  if (!isRecord(entry)) return null;
+  const value = entry.value === null ? null : numberIn(entry, 'value');
+  const tolerance = numberIn(entry, 'tolerance') ?? (entry.tolerance === undefined ? 0 : null);
+  if (tolerance === null || (value === null && entry.value !== null)) return null;
+  return { value, tolerance };
+}
+
+function compare(quantity: string, { value }: Measured, wanted: number | null, tolerance: number): Miss[] {
+  const got = value.ok ? value.value : value.why;
+  const agrees = wanted === null ? !value.ok : value.ok && Math.abs(value.value - wanted) <= tolerance;
+  return agrees ? [] : [{ quantity, got: String(got), wanted: String(wanted ?? 'none'), tolerance }];
+}
+
+function readerOf(id: string, input: Record<string, unknown>): Reader | null {
+  if (input.prescription === undefined) return readClosedForm(input);
+  const prescription = isRecord(input.prescription) ? input.prescription : {};
+  if (Array.isArray(input.positions)) return readPositions(prescription, input.positions);
+  const laid = layOut(prescription);
+  if (laid === null) return null;
+  const plain = readTrain(laid, prescription);
+  const own = NOTES[id]?.(laid);
+  return own ? (quantity) => plain(quantity) ?? own(quantity) : plain;
+}
+
+/** The quantities of several positions, prefixed by the position's name and a dot. */
+function readPositions(prescription: Record<string, unknown>, positions: readonly unknown[]): Reader | null {
+  const readers = new Map<string, Reader>();
+  for (const position of positions) {
+    if (!isRecord(position) || typeof position.name !== 'string') return null;
+    const laid = layOut(prescription, isRecord(position.gaps) ? position.gaps : {});
+    if (laid === null) return null;
+    readers.set(position.name, readTrain(laid, prescription));
+  }
+  return (quantity) => {
+    const dot = quantity.lastIndexOf('.');
+    return readers.get(quantity.slice(0, dot))?.(quantity.slice(dot + 1)) ?? null;
+  };
+}
+
+/** Quantities that only the note of one case explains: an object 20 high, an axial ray 10 high, a ray through the first vertex. */
+const NOTES: Readonly<Record<string, (laid: Laid) => Reader>> = {
+  'smith-doublet-finite': ({ train }) => {
+    const objectZ = train.objectZ ?? -1;
+    const [axial, fromVertex] = [paraxialRay(train, 10, -10 / objectZ), paraxialRay(train, 0, 20 / objectZ)];
+    const nuRear = axial.nu[train.count] ?? 1;
+    const plane = (train.z[train.count - 1] ?? 0) - (axial.y[train.count - 1] ?? 0) / nuRear;
+    const table = new Map([
+      ['imageHeight', heightInSpace(train, fromVertex, train.count, plane)],
+      ['axial.y2', axial.y[1] ?? 0],
+      ['axial.y3', axial.y[2] ?? 0],
+      ['axial.nu3', axial.nu[3] ?? 0],
+      ['fromVertex.y3', fromVertex.y[2] ?? 0],
+      ['fromVertex.nu3', fromVertex.nu[3] ?? 0],
+    ]);
+    return (quantity) => {
+      const value = table.get(quantity);
+      return value === undefined
+        ? null
+        : { value: finite(value), floor: COMPUTED_RELATIVE * Math.abs(value) };
+    };
+  },
+};
