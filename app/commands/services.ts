@@ -16,8 +16,6 @@ export interface Services {
   readonly fitView: (what: 'parts' | 'everything') => void;
   /** Opens the entry of a part's focal length, once the part is on the screen. */
   readonly enterFocalLength: (partId: PartId) => void;
-  /** Closes an open entry on the drawing; false when there is none. */
-  readonly closeEntry: () => boolean;
   /** Prints what is on the screen, once it is drawn. */
   readonly print: () => void;
   /** The address of the page, for a link that carries the sketch. */

@@ -11,7 +11,7 @@ const NEXT_THEME: Readonly<Record<ThemeChoice, ThemeChoice>> = {
 };
 
 /** What changes only the view: fits, theme, units, snapping, help, and the step back by Escape. */
-export function viewCommands({ fitView, closeEntry }: Services): CommandGroup {
+export function viewCommands({ fitView }: Services): CommandGroup {
   return {
     title: 'View',
     commands: [
@@ -27,18 +27,17 @@ export function viewCommands({ fitView, closeEntry }: Services): CommandGroup {
         setView({ snap: !viewStore.getState().snap }),
       ),
       command('help', 'Help', ['?'], () => setView({ sheet: 'help' })),
-      command('escape', 'One step back: gesture, entry, sheet, selection', ['Escape'], () =>
-        stepBack(closeEntry),
-      ),
+      command('escape', 'One step back: gesture, entry, sheet, selection', ['Escape'], stepBack),
     ],
   };
 }
 
-/** One rung of the ladder: cancel the gesture, close the entry, close the sheet, deselect. */
-function stepBack(closeEntry: () => boolean): void {
-  const { sheet, panel } = viewStore.getState();
+/** One rung of the ladder: cancel the gesture, put back what was taken, close the entry, close the sheet, deselect. */
+function stepBack(): void {
+  const { placing, typing, sheet, panel } = viewStore.getState();
   if (sketchStore.getState().running) cancelEdit();
-  else if (closeEntry()) return;
+  else if (placing !== null) setView({ placing: null });
+  else if (typing !== null) setView({ typing: null });
   else if (sheet !== null) setView({ sheet: null });
   else if (panel !== null) setView({ panel: null });
   else select();

@@ -133,7 +133,7 @@ function Starters({ desk, onOpen }: StartersProps) {
           <button type="button" className="text-button shelf-name" onClick={() => onOpen(starter)}>
             {starter.title}
           </button>
-          <span className="shelf-about">{starter.about}</span>
+          <span className="shelf-about">{starter.summary}</span>
         </li>
       ))}
     </ul>

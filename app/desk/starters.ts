@@ -6,7 +6,7 @@ import { none, parseSketch, some } from '../../engine/index.ts';
 export interface Starter {
   readonly file: string;
   readonly title: string;
-  readonly about: string;
+  readonly summary: string;
 }
 
 /** Fetches a text that lies beside the app; rejects when it cannot. */
@@ -19,7 +19,7 @@ export const fetchBesideApp: FetchText = async (path) => {
   return response.text();
 };
 
-const listShape = v.array(v.object({ file: v.string(), title: v.string(), about: v.string() }));
+const listShape = v.array(v.object({ file: v.string(), title: v.string(), summary: v.string() }));
 const absent = 'The starting sketches could not be fetched: check the connection and reload the page.';
 
 /** The starting sketches, the demo first; a sentence when the list cannot be fetched or read. */
