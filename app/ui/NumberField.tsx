@@ -39,6 +39,7 @@ const STEPS: Readonly<Record<EntryUnit, number>> = {
   nm: 1,
   '°': 0.5,
   '%': 5,
+  'm⁻¹': 1,
   '': 0.1,
 };
 

@@ -2,7 +2,7 @@ import type { Outcome } from '../../engine/index.ts';
 import { none, some } from '../../engine/index.ts';
 
 /** What a number field holds; the empty unit is a bare number. Values are stored in the base of each unit's family. */
-export type EntryUnit = 'mm' | 'in' | 'µm' | 'nm' | '°' | '%' | '';
+export type EntryUnit = 'mm' | 'in' | 'µm' | 'nm' | '°' | '%' | 'm⁻¹' | '';
 
 export interface EntryContext {
   /** The unit of a number typed without one. */
@@ -36,6 +36,7 @@ const LENGTH: Family = {
 const WAVELENGTH: Family = { factors: { nm: 1, µm: 1000, um: 1000, mm: 1e6 }, example: '546.07 or 0.546 µm' };
 const ANGLE: Family = { factors: { '°': 1, deg: 1, rad: 180 / Math.PI }, example: '12.5 or 0.2 rad' };
 const SHARE: Family = { factors: { '%': 0.01 }, example: '30 or 100/3' };
+const POWER: Family = { factors: { dpt: 1 }, example: '20 or 1/0.05' };
 const BARE: Family = { factors: {}, example: '5.6, 1/3 or +0.1' };
 
 const FAMILIES: Readonly<Record<EntryUnit, Family>> = {
@@ -45,6 +46,7 @@ const FAMILIES: Readonly<Record<EntryUnit, Family>> = {
   nm: WAVELENGTH,
   '°': ANGLE,
   '%': SHARE,
+  'm⁻¹': POWER,
   '': BARE,
 };
 

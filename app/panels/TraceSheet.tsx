@@ -1,0 +1,122 @@
+import { useStore } from 'zustand';
+import { sentenceOf } from '../../engine/index.ts';
+import type { Reading } from '../live/reading.ts';
+import { currentReading, useReading } from '../live/reading.ts';
+import { formatLength } from '../ui/format.ts';
+import { Icon } from '../ui/Icon.tsx';
+import { quantityText, quantityUnit } from './quantity.ts';
+import type { Readout } from './readouts/readout.ts';
+import { readoutById } from './readouts/table.ts';
+import { topicStore } from './topic.ts';
+import { cellText, rowUnit, worksheetOf, worksheetTsv } from './worksheet.ts';
+import './tables.css';
+
+interface TraceSheetProps {
+  /** Takes the sheet as tab-separated text to the clipboard. */
+  readonly onCopy: (text: string) => void;
+}
+
+/** The working of a readout: the y–nu worksheet of the marginal and the chief ray, quantities as rows, surfaces as columns. */
+export function TraceSheet({ onCopy }: TraceSheetProps) {
+  const id = useStore(topicStore, ({ readoutId }) => readoutId);
+  const fractions = useReading(({ sketch }) => sketch.field.fractions);
+  const readout = readoutById(id, fractions);
+  const copy = () => {
+    const { sketch, analysis } = currentReading();
+    onCopy(worksheetTsv(worksheetOf(sketch, analysis)));
+  };
+  return (
+    <section className="sheet-table" aria-label="Trace sheet">
+      <div className="sheet-table-head">
+        <h2 className="panel-title">{readout.label}</h2>
+        <ReadoutLine readout={readout} />
+        <button type="button" className="text-button" onClick={copy}>
+          <Icon name="copy" /> Copy
+        </button>
+      </div>
+      <p className="sheet-table-note">{readout.formula}.</p>
+      <FocalLengths />
+      <Sheet />
+    </section>
+  );
+}
+
+function ReadoutLine({ readout }: { readonly readout: Readout }) {
+  const text = useReading(({ analysis, view }) => {
+    const outcome = readout.read(analysis);
+    if (!outcome.ok) return `${outcome.why}. ${sentenceOf(outcome.why)}`;
+    const number = quantityText(outcome.value, readout.kind, readout.digits, view.unit);
+    return `${number} ${quantityUnit(readout.kind, view.unit)}`;
+  });
+  return <span className="sheet-table-value">{text}</span>;
+}
+
+function FocalLengths() {
+  const text = useReading(({ analysis: { firstOrder }, view }) => {
+    const { frontFocalLengthMm: front, rearFocalLengthMm: rear } = firstOrder;
+    if (!front.ok || !rear.ok) return '';
+    const length = (value: number) => `${formatLength(value, view.unit)} ${view.unit}`;
+    return `Front focal length −n/φ ${length(front.value)}, rear focal length n′/φ ${length(rear.value)}.`;
+  });
+  return text === '' ? null : <p className="sheet-table-note">{text}</p>;
+}
+
+function Sheet() {
+  const heads = useReading((reading) => headsOf(reading).join(SEPARATOR)).split(SEPARATOR);
+  const rows = useReading(({ sketch, analysis }) => worksheetOf(sketch, analysis).rows.length);
+  return (
+    // biome-ignore lint/a11y/noNoninteractiveTabindex: a wide sheet scrolls, also by keys
+    <div className="sheet-table-scroll" tabIndex={0} role="region" aria-label="Worksheet">
+      <table>
+        <caption className="visually-hidden">
+          Marginal ray y and nu, chief ray ȳ and nū, surface by surface
+        </caption>
+        <thead>
+          <tr>
+            <th scope="col">
+              <span className="visually-hidden">quantity</span>
+            </th>
+            {heads.map((head, index) => (
+              // biome-ignore lint/suspicious/noArrayIndexKey: a column is its place along the axis
+              <th key={index} scope="col" title={head}>
+                {head}
+              </th>
+            ))}
+          </tr>
+        </thead>
+        <tbody>
+          {Array.from({ length: rows }, (_, index) => (
+            // biome-ignore lint/suspicious/noArrayIndexKey: the rows are fixed
+            <SheetRow key={index} index={index} />
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
+
+const SEPARATOR = '\u0000';
+
+const headsOf = ({ sketch, analysis }: Reading): readonly string[] => worksheetOf(sketch, analysis).columns;
+
+function SheetRow({ index }: { readonly index: number }) {
+  const texts = useReading((reading) => rowTexts(reading, index).join(SEPARATOR)).split(SEPARATOR);
+  const [label = '', unit = '', ...cells] = texts;
+  return (
+    <tr>
+      <th scope="row">
+        {label} {unit !== '' && <span className="sheet-table-unit">{unit}</span>}
+      </th>
+      {cells.map((cell, place) => (
+        // biome-ignore lint/suspicious/noArrayIndexKey: a cell is its place along the axis
+        <td key={place}>{cell}</td>
+      ))}
+    </tr>
+  );
+}
+
+function rowTexts({ sketch, analysis, view }: Reading, index: number): readonly string[] {
+  const row = worksheetOf(sketch, analysis).rows[index];
+  if (!row) return [];
+  return [row.label, rowUnit(row, view.unit), ...row.cells.map((cell) => cellText(cell, row, view.unit))];
+}

@@ -1,0 +1,67 @@
+import type { Sketch, WarningKind } from '../../engine/index.ts';
+import { settingAt } from '../../engine/index.ts';
+import { currentReading, useReading } from '../live/reading.ts';
+import { select, setView } from '../store/viewStore.ts';
+import type { ListedWarning } from './warningList.ts';
+import { listWarnings } from './warningList.ts';
+import './warnings.css';
+
+/** What cannot be built and what should be looked at, over all positions; a press selects it and goes to its position. */
+export function Warnings() {
+  const key = useReading(({ sketch }) =>
+    listWarnings(sketch)
+      .map((listed) => textOf(sketch, listed))
+      .join('\n'),
+  );
+  const { sketch } = currentReading();
+  const list = key === '' ? [] : listWarnings(sketch);
+  return (
+    <section className="panel warnings" id="warnings" aria-labelledby="warnings-title" tabIndex={-1}>
+      <h2 className="panel-title" id="warnings-title">
+        Warnings
+      </h2>
+      {list.length === 0 ? (
+        <p className="warnings-none">none</p>
+      ) : (
+        <ul>
+          {list.map((listed) => (
+            <li key={textOf(sketch, listed)}>
+              <button type="button" className="warnings-item" onClick={() => goTo(listed)}>
+                <span
+                  className={listed.warning.severity === 'cannot be built' ? 'warnings-bad' : 'warnings-look'}
+                >
+                  {listed.warning.severity === 'cannot be built' ? '✗ cannot be built' : 'look at this'}
+                </span>
+                <span>{listed.warning.sentence}</span>
+                <span className="warnings-where">{whereText(sketch, listed)}</span>
+              </button>
+            </li>
+          ))}
+        </ul>
+      )}
+    </section>
+  );
+}
+
+const textOf = (sketch: Sketch, listed: ListedWarning): string =>
+  `${listed.warning.severity} ${listed.warning.sentence} ${whereText(sketch, listed)}`;
+
+/** At which positions; nothing when it is all of them. */
+function whereText(sketch: Sketch, { positionIds }: ListedWarning): string {
+  if (positionIds.length === sketch.positions.length) return '';
+  const names = sketch.positions.filter(({ id }) => positionIds.includes(id)).map(({ name }) => name);
+  return `at ${names.join(', ')}`;
+}
+
+function goTo({ warning, positionIds }: ListedWarning): void {
+  const { setting } = currentReading();
+  const first = positionIds[0];
+  const isHere = setting.toNext === 0 && positionIds.includes(setting.at);
+  if (!isHere && first !== undefined) setView({ setting: settingAt(first) });
+  if (warning.partId !== null) select(warning.partId);
+  else if (ABOUT_THE_IMAGE.includes(warning.kind)) select('image');
+  else select();
+}
+
+/** A warning without a part is about the image's end, or about aperture and field, which the sketch's card sets. */
+const ABOUT_THE_IMAGE: readonly WarningKind[] = ['sensor not covered', 'out of focus', 'image inside'];

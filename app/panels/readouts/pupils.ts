@@ -1,0 +1,100 @@
+import type { Analysis } from '../../../engine/index.ts';
+import type { Readout } from './readout.ts';
+
+const fieldIsStopped = ({ windows }: Analysis): boolean => windows.fieldStop.ok;
+
+/** The stop, what is seen of it from both ends, and the same for what limits the field. */
+export const PUPIL_READOUTS: readonly Readout[] = [
+  {
+    id: 'stopDiameter',
+    label: 'Stop diameter',
+    kind: 'length',
+    digits: 3,
+    read: ({ pupils }) => pupils.stopDiameterMm,
+    formula: 'twice y of the marginal ray at the stop',
+  },
+  {
+    id: 'entrancePlace',
+    label: 'Entrance, behind first',
+    kind: 'length',
+    digits: 3,
+    read: ({ pupils }) => pupils.entrance.zMm,
+    formula: 'from the first vertex to where the chief ray in front of the layout crosses the axis: −nȳ / nū',
+  },
+  {
+    id: 'entranceDiameter',
+    label: 'Entrance diameter',
+    kind: 'length',
+    digits: 3,
+    read: ({ pupils }) => pupils.entrance.diameterMm,
+    formula: 'stop diameter times the magnification of the stop into object space',
+  },
+  {
+    id: 'entranceMagnification',
+    label: 'Entrance over stop',
+    kind: 'ratio',
+    digits: 4,
+    read: ({ pupils }) => pupils.entrance.magnification,
+    formula: 'magnification of the stop into object space',
+  },
+  {
+    id: 'exitPlace',
+    label: 'Exit, behind last',
+    kind: 'length',
+    digits: 3,
+    read: ({ pupils }) => pupils.exit.zMm,
+    formula: 'from the last vertex to where the chief ray behind the layout crosses the axis: −n′ȳ / nū',
+  },
+  {
+    id: 'exitDiameter',
+    label: 'Exit diameter',
+    kind: 'length',
+    digits: 3,
+    read: ({ pupils }) => pupils.exit.diameterMm,
+    formula: 'stop diameter times the magnification of the stop into image space',
+  },
+  {
+    id: 'exitMagnification',
+    label: 'Exit over stop',
+    kind: 'ratio',
+    digits: 4,
+    read: ({ pupils }) => pupils.exit.magnification,
+    formula: 'magnification of the stop into image space',
+  },
+  {
+    id: 'entranceWindowPlace',
+    label: 'Entrance window at',
+    kind: 'length',
+    digits: 3,
+    read: ({ windows }) => windows.entrance.zMm,
+    formula: 'from the first vertex to the image in object space of what limits the field',
+    applies: fieldIsStopped,
+  },
+  {
+    id: 'entranceWindowDiameter',
+    label: 'Entrance window',
+    kind: 'length',
+    digits: 3,
+    read: ({ windows }) => windows.entrance.diameterMm,
+    formula: 'diameter of the image in object space of what limits the field',
+    applies: fieldIsStopped,
+  },
+  {
+    id: 'exitWindowPlace',
+    label: 'Exit window at',
+    kind: 'length',
+    digits: 3,
+    read: ({ windows }) => windows.exit.zMm,
+    formula: 'from the last vertex to the image in image space of what limits the field',
+    applies: fieldIsStopped,
+  },
+  {
+    id: 'exitWindowDiameter',
+    label: 'Exit window',
+    kind: 'length',
+    digits: 3,
+    read: ({ windows }) => windows.exit.diameterMm,
+    formula: 'diameter of the image in image space of what limits the field',
+    applies: fieldIsStopped,
+  },
+];
