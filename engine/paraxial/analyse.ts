@@ -4,7 +4,7 @@ import { type ApertureAt, apertureAt, type Places, placesOf } from '../train/pla
 import { trainOf } from '../train/train.ts';
 import type { Train } from '../train/types.ts';
 import type { Absence } from './absence.ts';
-import { type Axial, axialOf } from './axial.ts';
+import { axialOf } from './axial.ts';
 import { type ClearNeed, clearDiameters } from './clear.ts';
 import { type Colour, type Petzval, petzval, thinColour } from './colour.ts';
 import { type Conjugates, conjugates } from './conjugates.ts';
@@ -23,7 +23,6 @@ export interface Analysis {
   readonly train: Train;
   readonly places: Places;
   readonly aperture: ApertureAt;
-  readonly axial: Axial;
   readonly firstOrder: FirstOrder;
   readonly conjugates: Conjugates;
   readonly ledger: readonly LedgerRow[];
@@ -58,7 +57,6 @@ export function analyse(sketch: Sketch, setting: Setting): Analysis {
     train,
     places: placesOf(sketch, setting),
     aperture,
-    axial,
     firstOrder: first,
     conjugates: ends,
     ledger: conjugateChain(train, axial),

@@ -1,7 +1,7 @@
 import { none, some } from '../outcome.ts';
 import type { Train } from '../train/types.ts';
-import { finite, type Quantity } from './absence.ts';
-import { isNegligible, rayScale } from './scale.ts';
+import type { Quantity } from './absence.ts';
+import { axisCrossing, rayScale } from './scale.ts';
 import { type ParaxialRay, paraxialRay } from './trace.ts';
 
 /** A ray from the axial object point, of no particular size, and the image that it forms. */
@@ -23,7 +23,7 @@ export function axialOf(train: Train): Axial {
   const y = objectZ === null ? 1 : -objectZ / train.index[0]!;
   const ray = paraxialRay(train, y, nu);
   const scale = rayScale(train, 0, y, nu);
-  const imageDistanceMm = count === 0 ? none('no parts' as const) : crossing(train, ray, scale, count);
+  const imageDistanceMm = count === 0 ? none('no parts' as const) : imageOf(train, ray, scale);
   return {
     ray,
     scale,
@@ -32,8 +32,5 @@ export function axialOf(train: Train): Axial {
   };
 }
 
-/** Where the ray crosses the axis behind surface `space` − 1, from that surface's vertex. */
-function crossing(train: Train, ray: ParaxialRay, scale: ParaxialRay, space: number): Quantity {
-  if (isNegligible(ray.nu[space]!, scale.nu[space]!)) return none('image at infinity');
-  return finite((-train.index[space]! * ray.y[space - 1]!) / ray.nu[space]!);
-}
+const imageOf = ({ count, index }: Train, ray: ParaxialRay, scale: ParaxialRay): Quantity =>
+  axisCrossing(index[count]!, ray.y[count - 1]!, ray.nu[count]!, scale.nu[count]!, 'image at infinity');

@@ -1,6 +1,6 @@
 import { none, type Outcome, some } from '../outcome.ts';
 import type { Train } from '../train/types.ts';
-import { type Absence, derive, finite, type Quantity } from './absence.ts';
+import { type Absence, finite, type Quantity } from './absence.ts';
 import type { Axial } from './axial.ts';
 import type { ReferenceRays } from './rays.ts';
 import { isNegligible } from './scale.ts';
@@ -68,14 +68,18 @@ export function thinColour(train: Train, rays: ReferenceRays, axial: Axial): Col
   const m = marginal.value;
   const nuRear = m.nu[count]!;
   const axialMm = contributions(train, m, m, -train.index[count]! / (nuRear * nuRear));
-  const lateralMm = chief.ok ? contributions(train, m, chief.value, 1 / nuRear) : null;
-  const sum = (values: Float64Array) => finite(values.reduce((total, value) => total + value, 0));
+  const lateral = chief.ok ? some(contributions(train, m, chief.value, 1 / nuRear)) : chief;
+  const terms = { axialMm, lateralMm: lateral.ok ? lateral.value : null };
   return {
-    axialMm: sum(axialMm),
-    lateralMm: lateralMm ? sum(lateralMm) : chief.ok ? none('no Abbe number') : chief,
-    perSurface: derive(sum(axialMm), () => 0).ok ? some({ axialMm, lateralMm }) : none('out of range'),
+    axialMm: sumOf(axialMm),
+    lateralMm: lateral.ok ? sumOf(lateral.value) : lateral,
+    perSurface: isFiniteList(axialMm) && isFiniteList(terms.lateralMm) ? some(terms) : none('out of range'),
   };
 }
+
+const sumOf = (terms: Float64Array): Quantity => finite(terms.reduce((sum, term) => sum + term, 0));
+
+const isFiniteList = (terms: Float64Array | null): boolean => terms?.every(Number.isFinite) ?? true;
 
 const disperses = (train: Train): boolean =>
   train.powerSpread.some((spread) => spread !== 0) || train.indexSpread.some((spread) => spread !== 0);

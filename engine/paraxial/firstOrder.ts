@@ -1,4 +1,4 @@
-import { none } from '../outcome.ts';
+import { none, type Outcome, some } from '../outcome.ts';
 import type { Train } from '../train/types.ts';
 import { type Absence, finite, type Quantity } from './absence.ts';
 import { isZeroPower, type Matrix, systemMatrix } from './matrix.ts';
@@ -8,7 +8,8 @@ import { isZeroPower, type Matrix, systemMatrix } from './matrix.ts';
  * last. With the matrix a b c d on (y, nu), power φ = −c, outer indices n and n′. Absent: 'afocal', 'no parts', 'out of range'.
  */
 export interface FirstOrder {
-  readonly matrix: Matrix;
+  /** First vertex to last vertex. */
+  readonly matrix: Outcome<Matrix, Absence>;
   readonly powerPerMm: Quantity;
   readonly afocal: boolean;
   /** The power is so small a rest of what the parts contribute that the angular magnification says more than the focal length. */
@@ -46,14 +47,13 @@ export function firstOrder(train: Train): FirstOrder {
   const { a, c, d, cScale } = matrix;
   const n = train.index[0]!;
   const nRear = train.index[train.count]!;
-  const afocal = isZeroPower(matrix);
-  const absent: Absence | null = train.count === 0 ? 'no parts' : afocal ? 'afocal' : null;
+  const absent = absenceOf(train, matrix);
   const perPower = (numerator: number): Quantity => (absent ? none(absent) : finite(numerator / -c));
   const nearlyAfocal = Math.abs(c) <= NEARLY_AFOCAL * cScale;
   return {
-    matrix,
-    powerPerMm: finite(c === 0 ? 0 : -c),
-    afocal,
+    matrix: isFiniteMatrix(matrix) ? some(matrix) : none('out of range'),
+    powerPerMm: train.count === 0 ? none('no parts') : finite(c === 0 ? 0 : -c),
+    afocal: absent === 'afocal',
     nearlyAfocal,
     focalLengthMm: perPower(1),
     frontFocalLengthMm: perPower(-n),
@@ -68,3 +68,11 @@ export function firstOrder(train: Train): FirstOrder {
     vertexLengthMm: train.count === 0 ? 0 : train.z[train.count - 1]!,
   };
 }
+
+function absenceOf(train: Train, matrix: Matrix): Absence | null {
+  if (train.count === 0) return 'no parts';
+  if (!isFiniteMatrix(matrix)) return 'out of range';
+  return isZeroPower(matrix) ? 'afocal' : null;
+}
+
+const isFiniteMatrix = (matrix: Matrix): boolean => Object.values(matrix).every(Number.isFinite);

@@ -1,8 +1,8 @@
 import { none } from '../outcome.ts';
 import type { Train } from '../train/types.ts';
-import { derive, finite, type Quantity } from './absence.ts';
+import { derive, derive2, type Quantity } from './absence.ts';
 import { type Axial, axialOf } from './axial.ts';
-import { isNegligible } from './scale.ts';
+import { axisCrossing } from './scale.ts';
 import { powerAt } from './trace.ts';
 
 export type ConjugateKind = 'real' | 'virtual' | 'at infinity';
@@ -54,28 +54,20 @@ function rowOf(train: Train, { ray, scale }: Axial, first: number, behind: numbe
   const { index, z } = train;
   const nu = ray.nu[first]!;
   const nuAfter = ray.nu[behind]!;
-  const fromInfinity = isNegligible(nu, scale.nu[first]!);
-  const toInfinity = isNegligible(nuAfter, scale.nu[behind]!);
-  const object = fromInfinity
-    ? none('object at infinity' as const)
-    : finite((-index[first]! * ray.y[first]!) / nu);
-  const image = toInfinity
-    ? none('image at infinity' as const)
-    : finite((-index[behind]! * ray.y[behind - 1]!) / nuAfter);
+  const object = axisCrossing(index[first]!, ray.y[first]!, nu, scale.nu[first]!, 'object at infinity');
+  const image = axisCrossing(
+    index[behind]!,
+    ray.y[behind - 1]!,
+    nuAfter,
+    scale.nu[behind]!,
+    'image at infinity',
+  );
   // Light that runs to the left, behind a mirror, has its real objects on the right.
   const facing = Math.sign(index[first]!);
   const facingAfter = Math.sign(index[behind]!);
-  const magnification = fromInfinity
-    ? none('object at infinity' as const)
-    : !image.ok
-      ? image
-      : finite(nu / nuAfter);
+  const magnification = derive2(object, image, () => nu / nuAfter);
   const running =
-    train.objectZ === null
-      ? none('object at infinity' as const)
-      : !image.ok
-        ? image
-        : finite(ray.nu[0]! / nuAfter);
+    train.objectZ === null ? none('object at infinity' as const) : derive(image, () => ray.nu[0]! / nuAfter);
   return {
     partIndex: train.partOf[first]!,
     objectDistanceMm: object,

@@ -1,4 +1,6 @@
+import { none } from '../outcome.ts';
 import type { Train } from '../train/types.ts';
+import { type Absence, finite, type Quantity } from './absence.ts';
 import { type ParaxialRay, powerAt } from './trace.ts';
 
 /** Share of its scale below which a number counts as 0: rounding stays a thousand times smaller, drawn layouts far larger. */
@@ -8,8 +10,16 @@ const NEGLIGIBLE = 1e-12;
  * THE test for "afocal", "at infinity", "at a focus": true when `value` is no more than rounding makes of numbers as large as `scale`,
  * which comes from `rayScale`. It depends on no unit and no length of the layout.
  */
-export const isNegligible = (value: number, scale: number): boolean =>
-  Math.abs(value) <= NEGLIGIBLE * scale && scale < Number.POSITIVE_INFINITY;
+export const isNegligible = (value: number, scale: number): boolean => Math.abs(value) <= NEGLIGIBLE * scale;
+
+/**
+ * Where a ray with height `y` at a vertex and index times slope `nu` crosses the axis, in mm from that vertex: −n·y/nu. Without `nu`, judged
+ * against its scale, it does so at infinity, which `absence` says.
+ */
+export function axisCrossing(n: number, y: number, nu: number, nuScale: number, absence: Absence): Quantity {
+  if (!(Number.isFinite(y) && Number.isFinite(nuScale))) return none('out of range');
+  return isNegligible(nu, nuScale) ? none(absence) : finite((-n * y) / nu);
+}
 
 /**
  * What each number of `rayThrough` was made from: how far it would move if every term added on the way were changed by its own size, the

@@ -3,7 +3,7 @@ import type { Train } from '../train/types.ts';
 import type { Absence } from './absence.ts';
 import { type Axial, axialOf } from './axial.ts';
 import { isNegligible, rayScale } from './scale.ts';
-import { type ParaxialRay, rayThrough } from './trace.ts';
+import { isFiniteRay, type ParaxialRay, rayThrough } from './trace.ts';
 
 /** What limits the axial bundle, and the ray through its centre. */
 export interface Stop {
@@ -20,18 +20,17 @@ export interface Stop {
 /** The stop in use: the given one, else the rim with the least semi-diameter over axial ray height; 'no stop' when all are open. */
 export function stopOf(train: Train, axial: Axial = axialOf(train)): Outcome<Stop, Absence> {
   if (train.count === 0) return none('no parts');
-  if (train.stopSurface >= 0) return some(stopAt(train, train.stopSurface, 'stop'));
+  if (train.stopSurface >= 0) return stopAt(train, train.stopSurface, 'stop');
   const rim = limitingRim(train, axial);
-  return rim < 0 ? none('no stop') : some(stopAt(train, rim, 'rim'));
+  return rim < 0 ? none('no stop') : stopAt(train, rim, 'rim');
 }
 
-function stopAt(train: Train, surface: number, limitedBy: Stop['limitedBy']): Stop {
-  return {
-    surface,
-    limitedBy,
-    central: rayThrough(train, surface, 0, 1),
-    centralScale: rayScale(train, surface, 0, 1),
-  };
+function stopAt(train: Train, surface: number, limitedBy: Stop['limitedBy']): Outcome<Stop, Absence> {
+  const central = rayThrough(train, surface, 0, 1);
+  const centralScale = rayScale(train, surface, 0, 1);
+  return isFiniteRay(central) && isFiniteRay(centralScale)
+    ? some({ surface, limitedBy, central, centralScale })
+    : none('out of range');
 }
 
 /** A rim where the axial ray crosses the axis limits nothing. The first of equal rims is taken. */

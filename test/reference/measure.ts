@@ -6,6 +6,7 @@ import { conjugates } from '../../engine/paraxial/conjugates.ts';
 import { firstOrder } from '../../engine/paraxial/firstOrder.ts';
 import { conjugateChain } from '../../engine/paraxial/ledger.ts';
 import { light } from '../../engine/paraxial/light.ts';
+import { systemMatrix } from '../../engine/paraxial/matrix.ts';
 import { pupils } from '../../engine/paraxial/pupils.ts';
 import { referenceRays } from '../../engine/paraxial/rays.ts';
 import type { FieldSize } from '../../engine/sketch/types.ts';
@@ -46,7 +47,7 @@ const plus = (value: Quantity, more: number): Quantity => derive(value, (mm) => 
 
 function cardinals({ train, firstZ, lastZ, elements: each }: Laid): Rows {
   const first = firstOrder(train);
-  const { a, b, c, d } = first.matrix;
+  const { a, b, c, d } = systemMatrix(train);
   const abs = absoluteMatrix(train);
   const n = Math.abs(train.index[0] ?? 1);
   const nRear = Math.abs(train.index[train.count] ?? 1);
