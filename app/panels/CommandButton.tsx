@@ -8,10 +8,12 @@ export type Commands = ReadonlyMap<string, Command>;
 interface CommandButtonProps {
   readonly commands: Commands;
   readonly id: string;
+  /** Stands on the button where the place already says what the command acts on. */
+  readonly word: string;
 }
 
-/** A command in words; nothing when the app has none of that id. */
-export function CommandButton({ commands, id }: CommandButtonProps) {
+/** A command in a word, its whole label in the tooltip; nothing when the app has none of that id. */
+function CommandButton({ commands, id, word }: CommandButtonProps) {
   const command = commands.get(id);
   const available = useReading(() => command?.available() ?? false);
   if (!command) return null;
@@ -21,25 +23,26 @@ export function CommandButton({ commands, id }: CommandButtonProps) {
       type="button"
       className="text-button"
       disabled={!available}
-      title={key === undefined ? undefined : `${command.label} (${key})`}
+      title={key === undefined ? command.label : `${command.label} (${key})`}
       onClick={() => command.run()}
     >
-      {command.label}
+      {word}
     </button>
   );
 }
 
 interface CommandRowProps {
   readonly commands: Commands;
-  readonly ids: readonly string[];
+  /** Ids and words. */
+  readonly row: readonly (readonly [id: string, word: string])[];
 }
 
 /** Commands side by side. */
-export function CommandRow({ commands, ids }: CommandRowProps) {
+export function CommandRow({ commands, row }: CommandRowProps) {
   return (
     <div className="card-actions">
-      {ids.map((id) => (
-        <CommandButton key={id} commands={commands} id={id} />
+      {row.map(([id, word]) => (
+        <CommandButton key={id} commands={commands} id={id} word={word} />
       ))}
     </div>
   );

@@ -71,7 +71,6 @@ function Row({ id }: { readonly id: PartId }) {
   const chosen = useReading(({ view }) => view.selection.includes(id));
   const cells = useReading((reading) => cellsOf(reading, id).join(SEPARATOR)).split(SEPARATOR);
   return (
-    // biome-ignore lint/a11y/useKeyWithClickEvents: the button in the first cell is the key's way
     <tr className={chosen ? 'sheet-table-chosen' : undefined} onClick={() => select(id)}>
       <th scope="row">
         <button type="button" className="sheet-table-part" aria-pressed={chosen} title={name}>

@@ -7,6 +7,7 @@ import { currentReading, useReading } from '../live/reading.ts';
 import { setView } from '../store/viewStore.ts';
 import { formatNumber } from '../ui/format.ts';
 import { settingName } from './names.ts';
+import { PositionsButton } from './Positions.tsx';
 import { addPositionHere, goToPosition, settingOf, standOf } from './steps.ts';
 import './scrubber.css';
 
@@ -29,6 +30,7 @@ export function Scrubber() {
         <button type="button" className="text-button scrubber-add" onClick={addPositionHere}>
           {isBetween ? 'Add position here' : '+ position'}
         </button>
+        {count > 1 && <PositionsButton />}
       </div>
     </div>
   );

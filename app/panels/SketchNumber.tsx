@@ -2,10 +2,10 @@ import type { ReactNode } from 'react';
 import type { Edit } from '../../engine/index.ts';
 import type { Reading } from '../live/reading.ts';
 import { currentReading, useReading } from '../live/reading.ts';
-import { cancelEdit, previewEdit, sketchStore } from '../store/sketchStore.ts';
+import { cancelEdit } from '../store/sketchStore.ts';
 import type { EntryUnit } from '../ui/entry.ts';
 import { NumberField } from '../ui/NumberField.tsx';
-import { refusalOf, tryEdit } from './edit.ts';
+import { tryEdit, tryPreview } from './edit.ts';
 import type { PerPositionEdits } from './perPosition.ts';
 import { SplitMark } from './SplitMark.tsx';
 
@@ -51,10 +51,7 @@ export function SketchNumber(props: SketchNumberProps) {
       hint={isBetween ? 'between positions; add a position here to set it' : props.hint}
       aside={perPosition && <SplitMark label={label} {...perPosition} />}
       onCommit={(next) => tryEdit(editFor(next))}
-      onPreview={(next) => {
-        previewEdit(editFor(next));
-        return refusalOf(sketchStore.getState().note);
-      }}
+      onPreview={(next) => tryPreview(editFor(next))}
       onCancel={cancelEdit}
     />
   );

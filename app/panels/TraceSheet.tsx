@@ -66,7 +66,7 @@ function Sheet() {
   const rows = useReading(({ sketch, analysis }) => worksheetOf(sketch, analysis).rows.length);
   return (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: a wide sheet scrolls, also by keys
-    <div className="sheet-table-scroll" tabIndex={0} role="region" aria-label="Worksheet">
+    <section className="sheet-table-scroll" tabIndex={0} aria-label="Worksheet">
       <table>
         <caption className="visually-hidden">
           Marginal ray y and nu, chief ray ȳ and nū, surface by surface
@@ -91,7 +91,7 @@ function Sheet() {
           ))}
         </tbody>
       </table>
-    </div>
+    </section>
   );
 }
 

@@ -16,7 +16,7 @@ export function Warnings() {
   const { sketch } = currentReading();
   const list = key === '' ? [] : listWarnings(sketch);
   return (
-    <section className="panel warnings" id="warnings" aria-labelledby="warnings-title" tabIndex={-1}>
+    <section className="panel warnings" aria-labelledby="warnings-title">
       <h2 className="panel-title" id="warnings-title">
         Warnings
       </h2>

@@ -31,15 +31,21 @@ export function OnePart({ id, commands }: OnePartProps) {
       {kind === 'plate' && <PlateFields id={id} />}
       <PlaceFields id={id} />
       <RimField id={id} />
-      <StopFields id={id} commands={commands} />
+      <StopFields id={id} />
       {kind === 'thin' && <GlassFields id={id} />}
       <LightThrough id={id} />
       <PartTexts id={id} />
       <TiedIn id={id} />
-      <CommandRow commands={commands} ids={['flipSign', 'flip', 'duplicate', 'delete']} />
+      <CommandRow commands={commands} row={kind === 'thin' ? [FLIP_SIGN, ...ACTIONS] : ACTIONS} />
     </>
   );
 }
+
+const FLIP_SIGN = ['flipSign', 'Flip sign'] as const;
+const ACTIONS = [
+  ['duplicate', 'Duplicate'],
+  ['delete', 'Delete'],
+] as const;
 
 const KIND_WORDS = { thin: 'thin element', stop: 'stop', plate: 'flat plate' } as const;
 

@@ -11,6 +11,13 @@ import { partName } from '../names.ts';
 import { SketchNumber } from '../SketchNumber.tsx';
 import { ScaleFactorField } from '../sketch/ScaleFactorField.tsx';
 
+const ACTIONS = [
+  ['untie', 'Untie'],
+  ['flip', 'Flip'],
+  ['duplicate', 'Duplicate'],
+  ['delete', 'Delete'],
+] as const;
+
 interface SeveralPartsProps {
   readonly ids: readonly PartId[];
   readonly commands: Commands;
@@ -38,7 +45,7 @@ export function SeveralParts({ ids, commands }: SeveralPartsProps) {
       />
       <ScaleFactorField label="Scale by" edit={(factor) => (sketch) => scaleParts(sketch, ids, factor)} />
       <TieField ids={ids} />
-      <CommandRow commands={commands} ids={['untie', 'flip', 'duplicate', 'delete']} />
+      <CommandRow commands={commands} row={ACTIONS} />
     </>
   );
 }
