@@ -18,8 +18,10 @@ const APP_ROOMS = [
   ['live/'],
   ['board/'],
   ['drawing/'],
-  ['ribbon/', 'panels/', 'plots/', 'desk/'],
+  ['ribbon/'],
+  ['layout/', 'panels/', 'plots/', 'desk/'],
   ['commands/'],
+  ['page/'],
   ['App.'],
   ['main.'],
 ];

@@ -16,7 +16,8 @@ interface HelpProps {
 export function Help({ groups, apple, onClose }: HelpProps) {
   return (
     <SheetDialog title="Help" onClose={onClose}>
-      <div className="help">
+      {/* biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls must be reachable by keyboard (WCAG 2.1.1) */}
+      <section className="help" tabIndex={0} aria-label="Keys and gestures">
         <p className="help-lead">
           Drag parts along the axis, click a dimension and type, and read the numbers beside it. Letters act
           while the drawing has the focus: click it, or reach it by Tab.
@@ -90,7 +91,7 @@ export function Help({ groups, apple, onClose }: HelpProps) {
         <p className="help-foot">
           Gapwright {version}, MIT licence. Sketches stay in this browser and in your own files.
         </p>
-      </div>
+      </section>
     </SheetDialog>
   );
 }

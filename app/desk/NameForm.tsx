@@ -1,4 +1,4 @@
-import { useId, useState } from 'react';
+import { useEffect, useId, useRef, useState } from 'react';
 
 interface NameFormProps {
   readonly label: string;
@@ -7,7 +7,7 @@ interface NameFormProps {
   /** What the button does. */
   readonly verb: string;
   readonly onName: (name: string) => void;
-  /** Given when the entry can be left again. */
+  /** Given when the entry was opened for this and can be left again; then it takes the focus. */
   readonly onCancel?: () => void;
 }
 
@@ -15,6 +15,13 @@ interface NameFormProps {
 export function NameForm({ label, name, verb, onName, onCancel }: NameFormProps) {
   const id = useId();
   const [draft, setDraft] = useState(name);
+  const input = useRef<HTMLInputElement>(null);
+  const opened = onCancel !== undefined;
+
+  useEffect(() => {
+    if (opened) input.current?.select();
+  }, [opened]);
+
   return (
     <form
       className="name-form"
@@ -34,6 +41,7 @@ export function NameForm({ label, name, verb, onName, onCancel }: NameFormProps)
       </label>
       <input
         id={id}
+        ref={input}
         className="field-input name-form-input"
         value={draft}
         maxLength={80}

@@ -1,4 +1,4 @@
-import { useEffect, useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { useStore } from 'zustand';
 import { sketchStore } from '../store/sketchStore.ts';
 import { SheetDialog } from '../ui/SheetDialog.tsx';
@@ -88,22 +88,27 @@ interface EntriesProps {
 function Entries({ desk, onOpen }: EntriesProps) {
   const shelf = useStore(deskStore, (state) => state.shelf);
   const openName = useStore(deskStore, (state) => state.shelfName);
+  const place = useRef<HTMLDivElement>(null);
   if (shelf === null) return <p className="desk-quiet">Looking…</p>;
   if (!shelf.ok) return <p className="desk-bad">{shelf.why}</p>;
-  if (shelf.value.length === 0)
-    return <p className="desk-quiet">Nothing yet: give the open sketch a name above to keep it.</p>;
   return (
-    <ul className="shelf-list">
-      {shelf.value.map((entry) => (
-        <ShelfRow
-          key={entry.name}
-          entry={entry}
-          isOpen={entry.name === openName}
-          shelf={desk.shelf}
-          onOpen={() => onOpen(entry.name)}
-        />
-      ))}
-    </ul>
+    <div ref={place} tabIndex={-1}>
+      {shelf.value.length === 0 && (
+        <p className="desk-quiet">Nothing yet: give the open sketch a name above to keep it.</p>
+      )}
+      <ul className="shelf-list">
+        {shelf.value.map((entry) => (
+          <ShelfRow
+            key={entry.name}
+            entry={entry}
+            isOpen={entry.name === openName}
+            shelf={desk.shelf}
+            onOpen={() => onOpen(entry.name)}
+            onGone={() => place.current?.focus()}
+          />
+        ))}
+      </ul>
+    </div>
   );
 }
 

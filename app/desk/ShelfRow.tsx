@@ -1,4 +1,5 @@
-import { useState } from 'react';
+import { useRef, useState } from 'react';
+import { flushSync } from 'react-dom';
 import { Icon } from '../ui/Icon.tsx';
 import { NameForm } from './NameForm.tsx';
 import type { Shelf } from './shelf.ts';
@@ -9,11 +10,14 @@ interface ShelfRowProps {
   readonly isOpen: boolean;
   readonly shelf: Shelf;
   readonly onOpen: () => void;
+  /** The row went away or has another name now: the focus needs a place. */
+  readonly onGone: () => void;
 }
 
 /** One sketch on the shelf: its name opens it; rename, duplicate and remove stand beside it. */
-export function ShelfRow({ entry, isOpen, shelf, onOpen }: ShelfRowProps) {
+export function ShelfRow({ entry, isOpen, shelf, onOpen, onGone }: ShelfRowProps) {
   const [renaming, setRenaming] = useState(false);
+  const row = useRef<HTMLLIElement>(null);
   const { name, savedAt } = entry;
 
   if (renaming)
@@ -25,15 +29,18 @@ export function ShelfRow({ entry, isOpen, shelf, onOpen }: ShelfRowProps) {
           verb="Rename"
           onName={(next) => {
             setRenaming(false);
-            void shelf.rename(name, next);
+            void shelf.rename(name, next).then(onGone);
           }}
-          onCancel={() => setRenaming(false)}
+          onCancel={() => {
+            flushSync(() => setRenaming(false));
+            row.current?.querySelector('button')?.focus();
+          }}
         />
       </li>
     );
 
   return (
-    <li className="shelf-row">
+    <li ref={row} className="shelf-row">
       <button type="button" className="text-button shelf-name" onClick={onOpen}>
         {name}
       </button>
@@ -62,7 +69,7 @@ export function ShelfRow({ entry, isOpen, shelf, onOpen }: ShelfRowProps) {
           type="button"
           className="icon-button"
           aria-label={`Remove ${name}`}
-          onClick={() => void shelf.remove(name)}
+          onClick={() => void shelf.remove(name).then(onGone)}
         >
           <Icon name="remove" />
         </button>

@@ -1,23 +1,28 @@
-import type { Analysis, Setting, Sketch } from '../../engine/index.ts';
-import { analyse } from '../../engine/index.ts';
+import type { Analysis, Setting, Sketch, Warning } from '../../engine/index.ts';
+import { analyse, warningsOf } from '../../engine/index.ts';
 
-const remembered = new WeakMap<Sketch, Map<string, Analysis>>();
+/** `compute` of a sketch at a setting, remembered by the identity of the sketch. */
+function remembering<T>(compute: (sketch: Sketch, setting: Setting) => T) {
+  const remembered = new WeakMap<Sketch, Map<string, T>>();
+  return (sketch: Sketch, setting: Setting): T => {
+    const settings = remembered.get(sketch) ?? new Map<string, T>();
+    remembered.set(sketch, settings);
+    const key = `${setting.at}+${setting.toNext}`;
+    const known = settings.get(key);
+    if (known !== undefined) return known;
+    const result = compute(sketch, setting);
+    settings.set(key, result);
+    return result;
+  };
+}
 
 /**
- * Everything first order of `sketch` at `setting`. Remembered by the identity of the sketch, so that drawing, ribbon and
- * panels of one frame share one computation.
+ * Everything first order of a sketch at a setting. Remembered, so that drawing, ribbon and panels of one frame share one
+ * computation.
  */
-export function analysisOf(sketch: Sketch, setting: Setting): Analysis {
-  let settings = remembered.get(sketch);
-  if (!settings) {
-    settings = new Map();
-    remembered.set(sketch, settings);
-  }
-  const key = `${setting.at}+${setting.toNext}`;
-  let analysis = settings.get(key);
-  if (!analysis) {
-    analysis = analyse(sketch, setting);
-    settings.set(key, analysis);
-  }
-  return analysis;
-}
+export const analysisOf: (sketch: Sketch, setting: Setting) => Analysis = remembering(analyse);
+
+/** What a person should know about a sketch at a setting, what cannot be built first; remembered likewise. */
+export const warningsAt: (sketch: Sketch, setting: Setting) => readonly Warning[] = remembering(
+  (sketch, setting) => warningsOf(sketch, setting, analysisOf(sketch, setting)),
+);

@@ -1,9 +1,9 @@
 import { useSyncExternalStore } from 'react';
-import type { Analysis, Setting, Sketch } from '../../engine/index.ts';
+import type { Analysis, Setting, Sketch, Warning } from '../../engine/index.ts';
 import { sketchStore } from '../store/sketchStore.ts';
 import type { View } from '../store/viewStore.ts';
 import { settingIn, viewStore } from '../store/viewStore.ts';
-import { analysisOf } from './analysis.ts';
+import { analysisOf, warningsAt } from './analysis.ts';
 import { frameLoop } from './frame.ts';
 
 /** What everything on screen is read from. The analysis is worked out when first asked for. */
@@ -12,6 +12,7 @@ export interface Reading {
   readonly view: View;
   readonly setting: Setting;
   readonly analysis: Analysis;
+  readonly warnings: readonly Warning[];
 }
 
 let last: Reading | null = null;
@@ -28,6 +29,9 @@ export function currentReading(): Reading {
     setting,
     get analysis() {
       return analysisOf(sketch, setting);
+    },
+    get warnings() {
+      return warningsAt(sketch, setting);
     },
   };
   return last;

@@ -16,14 +16,17 @@ import './readouts.css';
 /** Everything first order about the layout at the present position, grouped by the question it answers. */
 export function Readouts() {
   const title = useReading(({ sketch, setting }) => settingName(sketch, setting));
+  const isEmpty = useReading(({ sketch }) => sketch.parts.length === 0);
   return (
     <section className="panel" aria-labelledby="readouts-title">
       <h2 className="panel-title" id="readouts-title">
         {title}
       </h2>
-      {READOUT_GROUPS.map((group) => (
-        <FoldingReadouts key={group} group={group} />
-      ))}
+      {isEmpty ? (
+        <p className="readouts-none">{sentenceOf('no parts')}</p>
+      ) : (
+        READOUT_GROUPS.map((group) => <FoldingReadouts key={group} group={group} />)
+      )}
     </section>
   );
 }

@@ -14,35 +14,39 @@ interface SummaryStripProps {
 
 /** The four things always in view: focal length or angular magnification, magnification, defocus, the count of warnings. */
 export function SummaryStrip({ onWarnings = () => setView({ panel: 'warnings' }) }: SummaryStripProps) {
-  const afocal = useReading(({ analysis }) => analysis.firstOrder.afocal);
+  const leads = useReading(leadingReadout);
   return (
     <div className="strip">
-      <dl className="strip-list">
-        <StripItem
-          key={String(afocal)}
-          label={afocal ? 'angular' : 'f'}
-          name={afocal ? 'Angular magnification' : 'Focal length'}
-          id={afocal ? 'afocalMagnification' : 'focalLength'}
-        />
-        <StripItem label="m" name="Magnification" id="magnification" />
-        <StripItem label="defocus" name="Defocus" id="defocus" />
-      </dl>
+      {leads === null ? (
+        <span className="strip-none">nothing on the axis yet</span>
+      ) : (
+        <dl className="strip-list">
+          <StripItem key={leads} label={leads === 'focalLength' ? 'f' : 'angular'} id={leads} />
+          <StripItem label="m" id="magnification" />
+          <StripItem label="defocus" id="defocus" />
+        </dl>
+      )}
       <WarningCount onPress={onWarnings} />
     </div>
   );
 }
 
+/** An afocal layout has an angular magnification in place of a focal length; an empty one has neither. */
+function leadingReadout({ analysis, sketch }: Reading): 'focalLength' | 'afocalMagnification' | null {
+  if (sketch.parts.length === 0) return null;
+  return analysis.firstOrder.afocal ? 'afocalMagnification' : 'focalLength';
+}
+
 interface StripItemProps {
   readonly label: string;
-  readonly name: string;
   readonly id: string;
 }
 
-function StripItem({ label, name, id }: StripItemProps) {
+function StripItem({ label, id }: StripItemProps) {
   const text = useReading((reading) => stripText(id, reading));
   return (
     <div className="strip-item">
-      <dt title={name}>{label}</dt>
+      <dt title={readoutById(id, []).label}>{label}</dt>
       <dd>{text}</dd>
     </div>
   );

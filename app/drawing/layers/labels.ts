@@ -1,0 +1,194 @@
+import type { LabelPlace, LabelWish, Side } from '../../board/labels.ts';
+import { placeLabels } from '../../board/labels.ts';
+import type { MeasureText } from '../../board/measure.ts';
+import type { Pen } from '../../board/pen.ts';
+import type { TextStyle } from '../../board/styles.ts';
+import type { Viewport } from '../../board/viewport.ts';
+import { xOf, yOf } from '../../board/viewport.ts';
+import type { LengthUnit } from '../../store/viewStore.ts';
+import type { Scene, ScenePart } from '../scene.ts';
+import { nameOf, plain, plainLength } from '../words.ts';
+import { objectTipPx } from './ends.ts';
+
+/** A text on the drawing, before its place is found. */
+export interface Label extends LabelWish {
+  readonly text: string;
+  readonly style: TextStyle;
+}
+
+const LINE_PX = 16;
+/** How far in from the left edge rays are named when they come from beyond it. */
+const NAME_AT_PX = 84;
+
+/** Every text the drawing wants to show, the most needed first. */
+export function labelsOf(
+  scene: Scene,
+  view: Viewport,
+  unit: LengthUnit,
+  measure: MeasureText,
+): readonly Label[] {
+  const labels: Label[] = [];
+  const add = (
+    id: string,
+    text: string,
+    style: TextStyle,
+    xPx: number,
+    yPx: number,
+    sides: readonly Side[],
+    priority: number,
+    distancePx = 4,
+  ) =>
+    labels.push({
+      id,
+      text,
+      style,
+      xPx,
+      yPx,
+      sides,
+      priority,
+      distancePx,
+      widthPx: measure(text, style),
+      heightPx: LINE_PX,
+    });
+
+  for (const part of scene.parts) {
+    const x = xOf(view, (part.frontMm + part.rearMm) / 2);
+    const style = part.selected ? 'label strong' : 'label';
+    const top = yOf(view, Math.max(part.semiMm, part.carriesStop ? (scene.stop?.semiMm ?? 0) : 0));
+    add(
+      `part:${part.part.id}`,
+      partText(part, unit),
+      style,
+      x,
+      top,
+      ['above', 'above right', 'above left'],
+      9,
+      10,
+    );
+  }
+  const { stage } = scene;
+  if (stage.objectMm !== null) {
+    const x = xOf(view, stage.objectMm);
+    const tip = objectTipPx(view, scene.objectHeightMm ?? 0);
+    add(
+      'object',
+      objectText(scene, view, unit),
+      'label quiet',
+      x,
+      tip,
+      ['right', 'below right', 'above right'],
+      8,
+      10,
+    );
+  }
+  if (stage.imageMm !== null) {
+    const x = xOf(view, stage.imageMm);
+    const bottom = Math.max(
+      yOf(view, -(scene.sensorSemiMm ?? 0)),
+      yOf(view, scene.imageHeightMm ?? 0),
+      yOf(view, 0) + 8,
+    );
+    add('image', scene.sensorFixed ? 'sensor' : 'image', 'label', x, bottom, ['below', 'below left'], 8, 6);
+  }
+  if (scene.mountMm !== null)
+    add(
+      'mount',
+      'mount',
+      'label quiet',
+      xOf(view, scene.mountMm),
+      yOf(view, -scene.tallestMm),
+      ['below', 'above'],
+      4,
+    );
+  for (const image of scene.images) {
+    const part = scene.parts[image.objectOf ?? image.partIndex];
+    if (!part) continue;
+    const name = nameOf(part.part, part.index);
+    const text = image.objectOf === null ? `image of ${name}` : `object for ${name}`;
+    const x = xOf(view, image.zMm);
+    const y = yOf(view, image.heightMm);
+    const sides: Side[] =
+      image.heightMm >= 0 ? ['above', 'above right', 'right'] : ['below', 'below right', 'right'];
+    add(`image:${image.partIndex}`, text, 'label quiet', x, y, sides, 5);
+  }
+  for (const plane of scene.planes) {
+    const focus = plane.name.endsWith('focus');
+    const y = focus ? yOf(view, 0) + 4 : yOf(view, -(plane.semiMm ?? scene.tallestMm));
+    add(
+      plane.name,
+      plane.name,
+      'label quiet',
+      xOf(view, plane.zMm),
+      y,
+      ['below', 'below right', 'below left'],
+      3,
+      10,
+    );
+  }
+  const rayNames = [
+    ['marginal ray', 'label marginal ray', scene.marginal[0]],
+    ['chief ray', 'label chief ray', scene.chief],
+  ] as const;
+  for (const [text, style, line] of rayNames) {
+    if (!line) continue;
+    const z = Math.max(line[0] ?? 0, view.fold?.toMm ?? Number.NEGATIVE_INFINITY, leftOf(view));
+    const y = heightOnFirstStretch(line, z);
+    const upward = text === 'marginal ray';
+    add(
+      text,
+      text,
+      style,
+      xOf(view, z) + 4,
+      yOf(view, y),
+      upward ? ['above right'] : ['below right', 'above right'],
+      6,
+    );
+  }
+  return labels;
+}
+
+/** Puts every label where it is free and writes it; returns the places, which the next frame may keep. */
+export function labelsLayer(
+  pen: Pen,
+  labels: readonly Label[],
+  view: Viewport,
+  bottomPx: number,
+  former: readonly LabelPlace[],
+  frozen: ReadonlySet<string>,
+): readonly LabelPlace[] {
+  const bounds = { xPx: 4, yPx: 4, widthPx: view.widthPx - 8, heightPx: bottomPx - 8 };
+  const inside = labels.filter((label) => label.xPx > -40 && label.xPx < view.widthPx + 40);
+  const places = placeLabels(inside, { bounds, former, frozen });
+  for (const [i, place] of places.entries()) {
+    const label = inside[i];
+    if (!label) continue;
+    pen.text(place.xPx, place.yPx + place.heightPx / 2, label.text, label.style, {
+      align: 'left',
+      baseline: 'middle',
+    });
+  }
+  return places;
+}
+
+function partText({ part, index, carriesStop }: ScenePart, unit: LengthUnit): string {
+  const stop = carriesStop ? ', stop' : '';
+  if (part.kind === 'thin') {
+    const f = plainLength(part.focalLengthMm, unit).replace(` ${unit}`, '');
+    return `f ${f}${stop}`;
+  }
+  if (part.kind === 'stop') return carriesStop ? part.name || 'stop' : nameOf(part, index);
+  return `${nameOf(part, index)}${stop}`;
+}
+
+function objectText({ stage, objectHeightMm }: Scene, view: Viewport, unit: LengthUnit): string {
+  const away = `object ${plainLength(-(stage.objectMm ?? 0), unit)} away`;
+  const size = objectHeightMm === null ? '' : `, ±${plain(Math.abs(objectHeightMm), 1)} mm`;
+  return `${away}${size}${view.fold ? ', not to scale' : ''}`;
+}
+
+const leftOf = (view: Viewport): number => view.originMm + NAME_AT_PX / view.pxPerMm;
+
+function heightOnFirstStretch(line: Float64Array, zMm: number): number {
+  const [z0 = 0, y0 = 0, z1 = 0, y1 = 0] = line;
+  return z1 === z0 ? y0 : y0 + ((y1 - y0) * (zMm - z0)) / (z1 - z0);
+}

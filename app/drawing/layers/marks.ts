@@ -1,0 +1,63 @@
+import type { Pen } from '../../board/pen.ts';
+import { segment } from '../../board/pen.ts';
+import type { Viewport } from '../../board/viewport.ts';
+import { xOf, yOf } from '../../board/viewport.ts';
+import { onScreen } from '../project.ts';
+import type { Scene, ScenePart, ScenePlane } from '../scene.ts';
+
+const ARROW_PX = 4;
+const FOCUS_PX = 3.5;
+const PUPIL_BAR_PX = 6;
+/** How far below the axis a selected part's own focal points stand on their stems. */
+export const FOCAL_STEM_PX = 14;
+
+/** Intermediate images, and the pupils, principal planes and focal points that are switched on. */
+export function marksLayer(pen: Pen, scene: Scene, view: Viewport): void {
+  for (const image of scene.images) {
+    if (image.extension) {
+      pen.polyline(onScreen(view, image.extension), 'marginal ray virtual');
+      pen.polyline(onScreen(view, mirrored(image.extension)), 'marginal ray virtual');
+    }
+    const x = xOf(view, image.zMm);
+    const foot = yOf(view, 0);
+    const tip = yOf(view, image.heightMm);
+    const style = image.real ? 'image' : 'image virtual';
+    const back = tip < foot ? ARROW_PX : -ARROW_PX;
+    segment(pen, x, foot, x, tip, style);
+    pen.polyline([x - ARROW_PX, tip + back, x, tip, x + ARROW_PX, tip + back], 'image');
+  }
+  for (const plane of scene.planes) drawPlane(pen, plane, scene.tallestMm, view);
+  for (const part of scene.parts) if (part.selected) ownFocalPoints(pen, part, view);
+}
+
+function mirrored(line: Float64Array): Float64Array {
+  return line.map((value, i) => (i % 2 === 1 ? -value : value));
+}
+
+function drawPlane(pen: Pen, plane: ScenePlane, tallestMm: number, view: Viewport): void {
+  const x = xOf(view, plane.zMm);
+  if (plane.name === 'front focus' || plane.name === 'rear focus') {
+    pen.circle(x, yOf(view, 0), FOCUS_PX, 'focal point');
+    return;
+  }
+  if (plane.name === 'front principal plane' || plane.name === 'rear principal plane') {
+    segment(pen, x, yOf(view, tallestMm), x, yOf(view, -tallestMm), 'principal plane');
+    return;
+  }
+  for (const side of [1, -1]) {
+    const y = yOf(view, side * (plane.semiMm ?? 0));
+    segment(pen, x - PUPIL_BAR_PX, y, x + PUPIL_BAR_PX, y, 'pupil');
+    segment(pen, x, y, x, y - side * 12, 'pupil');
+  }
+}
+
+/** The selected part's own focal points, on stems below the axis. */
+function ownFocalPoints(pen: Pen, { part, frontMm }: ScenePart, view: Viewport): void {
+  if (part.kind !== 'thin') return;
+  const y = yOf(view, 0);
+  for (const side of [-1, 1]) {
+    const x = xOf(view, frontMm + side * part.focalLengthMm);
+    segment(pen, x, y, x, y + FOCAL_STEM_PX, 'leader');
+    pen.circle(x, y, 2, 'ink');
+  }
+}

@@ -1,0 +1,74 @@
+import type { Pen } from '../../board/pen.ts';
+import { segment } from '../../board/pen.ts';
+import type { MarkStyle } from '../../board/styles.ts';
+import type { Viewport } from '../../board/viewport.ts';
+import { xOf, yOf } from '../../board/viewport.ts';
+import type { Scene, ScenePart } from '../scene.ts';
+
+const ARROW_PX = 6.5;
+const STOP_BAR_PX = 7;
+const STOP_WING_PX = 16;
+
+/** Every part in its textbook form, and the aperture stop's edges. `hovered` is the id of the part under the pointer. */
+export function partsLayer(pen: Pen, scene: Scene, view: Viewport, hovered: string | null): void {
+  for (const part of scene.parts) drawPart(pen, part, view, part.part.id === hovered);
+  if (scene.stop) drawStop(pen, scene.stop, view);
+}
+
+function drawPart(pen: Pen, drawn: ScenePart, view: Viewport, hovered: boolean): void {
+  const style: MarkStyle = drawn.selected ? 'part selected' : hovered ? 'part hover' : 'part';
+  const { part } = drawn;
+  if (part.kind === 'thin') drawThin(pen, drawn, part.focalLengthMm > 0, view, style);
+  else if (part.kind === 'plate') drawPlate(pen, drawn, view, style);
+  else if (!drawn.carriesStop) drawDiaphragm(pen, drawn, view, hovered || drawn.selected);
+}
+
+/** A line with arrowheads outward (positive) or inward (negative). */
+function drawThin(pen: Pen, drawn: ScenePart, positive: boolean, view: Viewport, style: MarkStyle): void {
+  const x = xOf(view, drawn.frontMm);
+  const top = yOf(view, drawn.semiMm);
+  const bottom = yOf(view, -drawn.semiMm);
+  segment(pen, x, top, x, bottom, style);
+  const back = positive ? ARROW_PX : -ARROW_PX;
+  pen.polyline([x - ARROW_PX, top + back, x, top, x + ARROW_PX, top + back], style);
+  pen.polyline([x - ARROW_PX, bottom - back, x, bottom, x + ARROW_PX, bottom - back], style);
+  drawRoom(pen, drawn, view, top, bottom);
+}
+
+/** Dotted lines where the room reserved for real glass ends. */
+function drawRoom(pen: Pen, { part, frontMm }: ScenePart, view: Viewport, top: number, bottom: number): void {
+  if (part.kind !== 'thin') return;
+  for (const offset of [-part.roomFrontMm, part.roomBehindMm]) {
+    if (offset === 0) continue;
+    const x = xOf(view, frontMm + offset);
+    segment(pen, x, top, x, bottom, 'room');
+  }
+}
+
+function drawPlate(pen: Pen, drawn: ScenePart, view: Viewport, style: MarkStyle): void {
+  const left = xOf(view, drawn.frontMm);
+  const right = xOf(view, drawn.rearMm);
+  const top = yOf(view, drawn.semiMm);
+  const bottom = yOf(view, -drawn.semiMm);
+  const outline = [left, top, right, top, right, bottom, left, bottom];
+  pen.closed(outline, 'glass');
+  if (style !== 'part') pen.polyline([...outline, left, top], style);
+}
+
+/** A diaphragm that is not the aperture stop: open at its own clear diameter. */
+function drawDiaphragm(pen: Pen, drawn: ScenePart, view: Viewport, strong: boolean): void {
+  drawEdges(pen, view, drawn.frontMm, drawn.semiMm, strong ? 'stop hover' : 'stop');
+}
+
+function drawStop(pen: Pen, stop: NonNullable<Scene['stop']>, view: Viewport): void {
+  drawEdges(pen, view, stop.zMm, stop.semiMm, 'stop');
+}
+
+function drawEdges(pen: Pen, view: Viewport, zMm: number, semiMm: number, style: MarkStyle): void {
+  const x = xOf(view, zMm);
+  for (const side of [1, -1]) {
+    const y = yOf(view, side * semiMm);
+    segment(pen, x - STOP_BAR_PX, y, x + STOP_BAR_PX, y, style);
+    segment(pen, x, y, x, y - side * STOP_WING_PX, style);
+  }
+}

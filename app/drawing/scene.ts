@@ -1,0 +1,267 @@
+import type { Analysis, ParaxialRay, Part, PartId, Sketch, Train } from '../../engine/index.ts';
+import { heightInSpace } from '../../engine/index.ts';
+import type { View } from '../store/viewStore.ts';
+import { type Stage, stageOf } from './stage.ts';
+
+/** A ray as it is drawn: z and y in mm, alternating, from the stage's start to its end. */
+export type RayLine = Float64Array;
+
+export interface ScenePart {
+  readonly part: Part;
+  readonly index: number;
+  readonly frontMm: number;
+  readonly rearMm: number;
+  /** Half the height it is drawn at. */
+  readonly semiMm: number;
+  readonly carriesStop: boolean;
+  readonly selected: boolean;
+}
+
+/** Off-axis rays of one field; `share` is its fraction of the largest field. */
+export interface SceneBundle {
+  readonly share: number;
+  readonly rays: readonly RayLine[];
+}
+
+/** An image between two parts (or in front of all of them), as arrow from the axis to the full field's height. */
+export interface SceneImage {
+  /** Index of the part that forms it. */
+  readonly partIndex: number;
+  readonly zMm: number;
+  readonly heightMm: number;
+  readonly real: boolean;
+  /** It serves the part behind as an object beyond it. */
+  readonly objectOf: number | null;
+  /** Marginal ray's straight extension to the image, where light itself does not go; null when light gets there. */
+  readonly extension: RayLine | null;
+}
+
+/** An upright mark of a plane, with half its size where it has one. */
+export interface ScenePlane {
+  readonly name:
+    | 'entrance pupil'
+    | 'exit pupil'
+    | 'front principal plane'
+    | 'rear principal plane'
+    | 'front focus'
+    | 'rear focus';
+  readonly zMm: number;
+  readonly semiMm: number | null;
+}
+
+/** The layout at one setting, in mm from the first part's front vertex: all that the layers draw. */
+export interface Scene {
+  readonly stage: Stage;
+  readonly parts: readonly ScenePart[];
+  readonly stop: { readonly zMm: number; readonly semiMm: number } | null;
+  readonly marginal: readonly RayLine[];
+  readonly chief: RayLine | null;
+  readonly axial: readonly RayLine[];
+  readonly bundles: readonly SceneBundle[];
+  readonly images: readonly SceneImage[];
+  readonly planes: readonly ScenePlane[];
+  /** Height of the largest field's object point; null at infinity. */
+  readonly objectHeightMm: number | null;
+  /** Where the largest field's chief ray meets the image plane. */
+  readonly imageHeightMm: number | null;
+  readonly sensorFixed: boolean;
+  readonly sensorSemiMm: number | null;
+  readonly mountMm: number | null;
+  /** Tallest thing near the parts, for fitting. */
+  readonly tallestMm: number;
+}
+
+/** Height of an open part where no ray tells how tall it has to be, as a share of the stage's length. */
+const BARE_SHARE = 0.12;
+/** Open parts are drawn a little taller than the rays need. */
+const OPEN_MARGIN = 1.15;
+
+/** The scene of a sketch at the view's setting. */
+export function sceneOf(sketch: Sketch, analysis: Analysis, view: View): Scene {
+  const stage = stageOf(sketch, analysis);
+  const { train } = analysis;
+  const marginal = analysis.rays.marginal.ok ? analysis.rays.marginal.value : null;
+  const chief = analysis.rays.chief.ok ? analysis.rays.chief.value : null;
+  const parts = partsOf(sketch, analysis, view, stage, marginal, chief);
+  const line = (share: number, pupil: number) => rayLine(train, stage, chief, share, marginal, pupil);
+  const stop = stopOf(analysis, marginal);
+  const sensorSemiMm = semiOf(sketch);
+  const tallestMm = Math.max(
+    ...parts.map((part) => part.semiMm),
+    stop?.semiMm ?? 0,
+    sensorSemiMm ?? 0,
+    Number.MIN_VALUE,
+  );
+  return {
+    stage,
+    parts,
+    stop,
+    marginal: marginal ? [line(0, 1), line(0, -1)] : [],
+    chief: chief ? line(1, 0) : null,
+    axial: marginal && view.shown.bundles ? pupilSteps(view.raysPerBundle, -1, 1).map((p) => line(0, p)) : [],
+    bundles: marginal && chief && view.shown.bundles ? bundlesOf(analysis, view, line) : [],
+    images: view.shown.images && marginal ? imagesOf(analysis, stage, marginal, chief) : [],
+    planes: planesOf(analysis, view),
+    objectHeightMm: stage.objectMm !== null && chief ? heightInSpace(train, chief, 0, stage.objectMm) : null,
+    imageHeightMm:
+      stage.imageMm !== null && chief ? heightInSpace(train, chief, train.count, stage.imageMm) : null,
+    sensorFixed: sketch.image === 'fixed',
+    sensorSemiMm,
+    mountMm: sketch.registerMm !== null && stage.imageMm !== null ? stage.imageMm - sketch.registerMm : null,
+    tallestMm: parts.length === 0 ? 0 : tallestMm,
+  };
+}
+
+/** Half the largest extent of the sensor in mm, or null when none is given. */
+export function semiOf({ sensor }: Sketch): number | null {
+  if (!sensor) return null;
+  return 'diagonalMm' in sensor.size
+    ? sensor.size.diagonalMm / 2
+    : Math.hypot(sensor.size.widthMm, sensor.size.heightMm) / 2;
+}
+
+function partsOf(
+  sketch: Sketch,
+  { places, train }: Analysis,
+  view: View,
+  stage: Stage,
+  marginal: ParaxialRay | null,
+  chief: ParaxialRay | null,
+): ScenePart[] {
+  const selection = new Set<string>(view.selection);
+  const needed = new Float64Array(sketch.parts.length);
+  for (let k = 0; k < train.count; k++) {
+    const reach = Math.abs(marginal?.y[k] ?? 0) + Math.abs(chief?.y[k] ?? 0);
+    const index = train.partOf[k] ?? 0;
+    needed[index] = Math.max(needed[index] ?? 0, reach);
+  }
+  const bareMm = BARE_SHARE * (stage.parts.toMm - stage.parts.fromMm);
+  const leastMm = 0.25 * Math.max(...needed);
+  return sketch.parts.map((part, index) => {
+    const place = places.parts[index];
+    const open = Math.max((needed[index] ?? 0) * OPEN_MARGIN, leastMm) || bareMm;
+    return {
+      part,
+      index,
+      frontMm: place?.frontMm ?? 0,
+      rearMm: place?.rearMm ?? 0,
+      semiMm: part.semiDiameterMm ?? open,
+      carriesStop: sketch.stop === part.id,
+      selected: selection.has(part.id),
+    };
+  });
+}
+
+function stopOf({ pupils, train }: Analysis, marginal: ParaxialRay | null): Scene['stop'] {
+  const surface = pupils.stopSurface;
+  if (!surface.ok || !marginal) return null;
+  return { zMm: train.z[surface.value] ?? 0, semiMm: Math.abs(marginal.y[surface.value] ?? 0) };
+}
+
+/** A straight-line drawing of share · chief + pupil · marginal. */
+function rayLine(
+  train: Train,
+  stage: Stage,
+  chief: ParaxialRay | null,
+  share: number,
+  marginal: ParaxialRay | null,
+  pupil: number,
+): RayLine {
+  const points = new Float64Array(2 * (train.count + 2));
+  const combine = (of: (ray: ParaxialRay) => number) =>
+    (chief && share !== 0 ? share * of(chief) : 0) + (marginal && pupil !== 0 ? pupil * of(marginal) : 0);
+  points[0] = stage.startMm;
+  points[1] = combine((ray) => heightInSpace(train, ray, 0, stage.startMm));
+  for (let k = 0; k < train.count; k++) {
+    points[2 * k + 2] = train.z[k] ?? 0;
+    points[2 * k + 3] = combine((ray) => ray.y[k] ?? 0);
+  }
+  points[2 * train.count + 2] = stage.endMm;
+  points[2 * train.count + 3] = combine((ray) => heightInSpace(train, ray, train.count, stage.endMm));
+  return points;
+}
+
+/** `count` pupil points from `low` to `high`, ends included. */
+function pupilSteps(count: number, low: number, high: number): number[] {
+  if (count <= 1) return [(low + high) / 2];
+  return Array.from({ length: count }, (_, i) => low + ((high - low) * i) / (count - 1));
+}
+
+function bundlesOf(
+  { vignetting }: Analysis,
+  view: View,
+  line: (share: number, pupil: number) => RayLine,
+): SceneBundle[] {
+  if (!vignetting.ok) return [];
+  const bundles: SceneBundle[] = [];
+  for (const { fraction, meridian } of vignetting.value) {
+    if (fraction === 0 || meridian === null) continue;
+    const rays = pupilSteps(view.raysPerBundle, meridian.lower, meridian.upper).map((p) => line(fraction, p));
+    bundles.push({ share: fraction, rays });
+  }
+  return bundles.sort((a, b) => Math.abs(a.share) - Math.abs(b.share));
+}
+
+function imagesOf(
+  { ledger, train, places }: Analysis,
+  stage: Stage,
+  marginal: ParaxialRay,
+  chief: ParaxialRay | null,
+): SceneImage[] {
+  const images: SceneImage[] = [];
+  const nearMm = 3 * (stage.endMm - stage.startMm);
+  for (const [row, entry] of ledger.entries()) {
+    const next = ledger[row + 1];
+    if (!entry.imageZ.ok || !next) continue;
+    const zMm = entry.imageZ.value;
+    if (Math.abs(zMm) > nearMm) continue;
+    const last = lastSurfaceOf(train, entry.partIndex);
+    const nextFrontMm = places.parts[next.partIndex]?.frontMm ?? 0;
+    const rearMm = places.parts[entry.partIndex]?.rearMm ?? 0;
+    const reached = zMm >= rearMm && zMm <= nextFrontMm;
+    images.push({
+      partIndex: entry.partIndex,
+      zMm,
+      heightMm: chief ? heightInSpace(train, chief, last + 1, zMm) : 0,
+      real: reached,
+      objectOf: zMm > nextFrontMm ? next.partIndex : null,
+      extension: reached ? null : Float64Array.of(train.z[last] ?? 0, marginal.y[last] ?? 0, zMm, 0),
+    });
+  }
+  return images;
+}
+
+function lastSurfaceOf(train: Train, partIndex: number): number {
+  let last = 0;
+  for (let k = 0; k < train.count; k++) if (train.partOf[k] === partIndex) last = k;
+  return last;
+}
+
+function planesOf({ firstOrder, pupils }: Analysis, { shown }: View): ScenePlane[] {
+  const planes: ScenePlane[] = [];
+  const lastMm = firstOrder.vertexLengthMm;
+  const { principalFrontMm, principalRearMm, frontFocusMm, backFocusMm } = firstOrder;
+  if (shown.pupils) {
+    const { entrance, exit } = pupils;
+    if (entrance.zMm.ok)
+      planes.push({ name: 'entrance pupil', zMm: entrance.zMm.value, semiMm: half(entrance.diameterMm) });
+    if (exit.zMm.ok)
+      planes.push({ name: 'exit pupil', zMm: lastMm + exit.zMm.value, semiMm: half(exit.diameterMm) });
+  }
+  if (shown.principalPlanes && principalFrontMm.ok && principalRearMm.ok) {
+    planes.push({ name: 'front principal plane', zMm: principalFrontMm.value, semiMm: null });
+    planes.push({ name: 'rear principal plane', zMm: lastMm + principalRearMm.value, semiMm: null });
+  }
+  if (shown.focalPoints && frontFocusMm.ok && backFocusMm.ok) {
+    planes.push({ name: 'front focus', zMm: frontFocusMm.value, semiMm: null });
+    planes.push({ name: 'rear focus', zMm: lastMm + backFocusMm.value, semiMm: null });
+  }
+  return planes;
+}
+
+const half = (diameter: Analysis['pupils']['entrance']['diameterMm']): number | null =>
+  diameter.ok ? diameter.value / 2 : null;
+
+/** The scene's part with this id. */
+export const partIn = (scene: Scene, id: PartId): ScenePart | undefined =>
+  scene.parts.find(({ part }) => part.id === id);

@@ -1,0 +1,71 @@
+import type { Analysis, Outcome, Sketch } from '../../engine/index.ts';
+import { foldOf } from '../board/fit.ts';
+import type { Fold, LengthRange } from '../board/viewport.ts';
+
+/** Where the drawing's lengths run, in mm from the first part's front vertex. */
+export interface Stage {
+  /** Where rays begin and end on the sheet. */
+  readonly startMm: number;
+  readonly endMm: number;
+  /** Front of the first part to the rear of the last, or to the image when it lies behind: what "fit the parts" shows. */
+  readonly parts: LengthRange;
+  /** Everything from the object to the image. */
+  readonly everything: LengthRange;
+  /** Null when the object is at infinity. */
+  readonly objectMm: number | null;
+  /** The plane the image is taken at; null when it is at infinity. */
+  readonly imageMm: number | null;
+}
+
+/** The axis of a sketch without parts. */
+const EMPTY_AXIS_MM = 200;
+/** The lead of rays in front of the first and behind the last part when the end itself is far away, as a share of the parts' length. */
+const LEAD_SHARE = 0.35;
+const LEAST_LEAD_MM = 10;
+
+/** The stage of a sketch at one setting. Never empty: a sketch without parts has 200 mm of axis. */
+export function stageOf(sketch: Sketch, analysis: Analysis): Stage {
+  const { places, conjugates } = analysis;
+  if (sketch.parts.length === 0) {
+    const range = { fromMm: 0, toMm: EMPTY_AXIS_MM };
+    return {
+      startMm: 0,
+      endMm: EMPTY_AXIS_MM,
+      parts: range,
+      everything: range,
+      objectMm: null,
+      imageMm: null,
+    };
+  }
+  const fronts = places.parts.map((place) => place.frontMm);
+  const rears = places.parts.map((place) => place.rearMm);
+  const firstMm = Math.min(...fronts);
+  const lastMm = Math.max(...rears);
+  const imageMm = places.sensorMm ?? behindLast(conjugates.imagePlaneMm, rears.at(-1) ?? 0);
+  const objectMm = places.objectMm;
+  const lengthMm = lastMm - firstMm;
+  const farMm = 20 * Math.max(lengthMm, LEAST_LEAD_MM);
+  const imageNear = imageMm !== null && imageMm > lastMm - farMm && imageMm < lastMm + farMm;
+  const toMm = imageNear ? Math.max(lastMm, imageMm) : lastMm;
+  const leadMm = Math.max(LEAST_LEAD_MM, LEAD_SHARE * (toMm - firstMm));
+  const startMm = objectMm ?? firstMm - leadMm;
+  const endMm = imageNear && imageMm > lastMm ? imageMm : lastMm + leadMm;
+  return {
+    startMm,
+    endMm,
+    parts: { fromMm: firstMm, toMm: imageNear && imageMm > lastMm ? imageMm : endMm },
+    everything: { fromMm: startMm, toMm: endMm },
+    objectMm,
+    imageMm: imageNear ? imageMm : null,
+  };
+}
+
+/** The long object space cut short, or null when it is drawn to scale. */
+export function stageFold(stage: Stage): Fold | null {
+  if (stage.objectMm === null) return null;
+  return foldOf({ fromMm: stage.objectMm, toMm: stage.parts.fromMm }, stage.parts.toMm - stage.parts.fromMm);
+}
+
+function behindLast(plane: Outcome<number, string>, lastMm: number): number | null {
+  return plane.ok ? lastMm + plane.value : null;
+}

@@ -1,0 +1,25 @@
+import type { Part, Sketch } from '../../engine/index.ts';
+import type { LengthUnit } from '../store/viewStore.ts';
+import { formatLength, formatNumber } from '../ui/format.ts';
+
+/** At most `digits` decimals, without trailing zeros. */
+export const plain = (value: number, digits = 3): string => shortened(formatNumber(value, digits));
+
+/** A length in `unit` with at most `digits` decimals of a millimetre, without trailing zeros, and its unit. */
+export const plainLength = (lengthMm: number, unit: LengthUnit, digits = 3): string =>
+  `${shortened(formatLength(lengthMm, unit, digits))} ${unit}`;
+
+const shortened = (text: string): string => (text.includes('.') ? text.replace(/\.?0+$/, '') : text);
+
+const KIND_NAMES = { thin: 'element', stop: 'stop', plate: 'plate' } as const;
+
+/** What a part is called: its name, or its kind and place among all parts. */
+export function nameOf(part: Part, index: number): string {
+  return part.name || `${KIND_NAMES[part.kind]} ${index + 1}`;
+}
+
+/** The name of the part at `index`, empty when there is none. */
+export function nameAt(sketch: Sketch, index: number): string {
+  const part = sketch.parts[index];
+  return part ? nameOf(part, index) : '';
+}

@@ -1,0 +1,109 @@
+import type { PointerEvent } from 'react';
+import { useRef, useState } from 'react';
+import { useReading } from '../live/reading.ts';
+import { setView } from '../store/viewStore.ts';
+import type { Board } from './board.ts';
+import './jogStrip.css';
+
+interface JogStripProps {
+  readonly board: () => Board | null;
+}
+
+/** The grips that a finger can take without covering them, by the start of their ids. */
+const CHIPS = [
+  { id: 'part:', end: '', label: 'Position' },
+  { id: 'focal:', end: ':rear', label: 'Focal' },
+  { id: 'rim:', end: ':upper', label: 'Rim' },
+  { id: 'thickness:', end: '', label: 'Thickness' },
+] as const;
+
+/**
+ * The phone's way to drag: chips choose a grip of the selected part, the strip moves it, so that the finger never covers it. Two
+ * toggles stand for Shift and Alt.
+ */
+export function JogStrip({ board }: JogStripProps) {
+  const selected = useReading(({ sketch, view }) =>
+    view.selection.length === 1 ? (sketch.parts.find(({ id }) => id === view.selection[0]) ?? null) : null,
+  );
+  const behindMoves = useReading(({ view }) => view.otherRule);
+  const snap = useReading(({ view }) => view.snap);
+  const [chip, setChip] = useState<(typeof CHIPS)[number]>(CHIPS[0]);
+  const from = useRef<{ readonly x: number; readonly y: number } | null>(null);
+  if (!selected) return <p className="jog-hint">Tap a part to move it from here.</p>;
+
+  const chips = CHIPS.filter(({ id }) => {
+    if (id === 'focal:') return selected.kind === 'thin';
+    if (id === 'thickness:') return selected.kind === 'plate';
+    return id === 'part:' || selected.kind !== 'stop';
+  });
+  const chosen = chips.includes(chip) ? chip : chips[0];
+  const handleId = `${chosen?.id}${selected.id}${chosen?.end}`;
+
+  const onMove = (event: PointerEvent) => {
+    const { current } = from;
+    if (!current) return;
+    const along = event.clientX - current.x;
+    const vertical = chosen?.id === 'rim:';
+    board()?.jog(handleId, vertical ? 0 : along, vertical ? -along : 0, snap);
+  };
+  const onEnd = (keep: boolean) => () => {
+    if (!from.current) return;
+    from.current = null;
+    board()?.endJog(keep);
+  };
+
+  return (
+    <div className="jog">
+      <div className="jog-chips" role="group" aria-label="What the strip moves">
+        {chips.map((item) => (
+          <button
+            key={item.id}
+            type="button"
+            className="jog-chip"
+            aria-pressed={item === chosen}
+            onClick={() => setChip(item)}
+          >
+            {item.label}
+          </button>
+        ))}
+        <button
+          type="button"
+          className="jog-chip"
+          aria-pressed={behindMoves}
+          onClick={() => setView({ otherRule: !behindMoves })}
+        >
+          behind moves
+        </button>
+        <button
+          type="button"
+          className="jog-chip"
+          aria-pressed={snap}
+          onClick={() => setView({ snap: !snap })}
+        >
+          snap
+        </button>
+      </div>
+      <div className="jog-row">
+        <button
+          type="button"
+          className="jog-value"
+          onClick={() => board()?.type(handleId)}
+          aria-label={`Type ${chosen?.label.toLowerCase()}`}
+        >
+          123
+        </button>
+        <div
+          className="jog-strip"
+          aria-hidden="true"
+          onPointerDown={(event) => {
+            event.currentTarget.setPointerCapture(event.pointerId);
+            from.current = { x: event.clientX, y: event.clientY };
+          }}
+          onPointerMove={onMove}
+          onPointerUp={onEnd(true)}
+          onPointerCancel={onEnd(false)}
+        />
+      </div>
+    </div>
+  );
+}

@@ -1,0 +1,215 @@
+import type { Sketch } from '../../engine/index.ts';
+import { canvasPen } from '../board/canvasPen.ts';
+import { keyStepMm } from '../board/fit.ts';
+import { createHost } from '../board/host.ts';
+import type { LabelPlace } from '../board/labels.ts';
+import { canvasMeasure } from '../board/measure.ts';
+import type { Pen } from '../board/pen.ts';
+import { type Mark, recorderPen } from '../board/recorderPen.ts';
+import { createSliderMirror } from '../board/sliderMirror.ts';
+import { PALETTES, type ThemeName } from '../board/styles.ts';
+import { createSurface } from '../board/surface.ts';
+import type { Fold, Viewport } from '../board/viewport.ts';
+import { panBy, refolded, stretchBy, withLengthAt, xOf, zOf, zoomAbout } from '../board/viewport.ts';
+import type { Handle } from '../drawing/handle.ts';
+import { partIn, type Scene } from '../drawing/scene.ts';
+import { frameLoop } from '../live/frame.ts';
+import { currentReading, onReading } from '../live/reading.ts';
+import { sketchStore } from '../store/sketchStore.ts';
+import { setView, viewStore } from '../store/viewStore.ts';
+import { cameraAt, fitCamera, foldIn, needsFit, sameFold, viewportOf } from './camera.ts';
+import { createHand, type Hand } from './hand.ts';
+import { type HandState, overlayLayer } from './overlay.ts';
+import { paintParts, paintRays } from './paint.ts';
+import { type Picture, pictureOf, sceneOfReading } from './picture.ts';
+
+/** What the board asks of the app around it. */
+export interface BoardClient {
+  readonly theme: () => ThemeName;
+  /** One plain sentence for the person: why something cannot be dragged. */
+  readonly say: (sentence: string) => void;
+  /** Several grips lie under a finger: let the person choose one by name. */
+  readonly choose: (handles: readonly Handle[], xPx: number, yPx: number) => void;
+  /** Something waits in the tray and the axis was clicked here. */
+  readonly setDown: (zMm: number) => void;
+  /** The grip with the focus and its value, in words, whenever either changes; null when none has it. */
+  readonly speak: (text: string | null) => void;
+  /** A frame has been drawn. */
+  readonly onFrame: () => void;
+}
+
+/** The drawing and its ribbon as one board. */
+export interface Board extends Pick<Hand, 'jog' | 'endJog' | 'type'> {
+  readonly fit: (what: 'parts' | 'everything') => void;
+  /** The picture of the last frame; null before the first. */
+  readonly picture: () => Picture | null;
+  readonly panBy: (dxPx: number) => void;
+  readonly stretchBy: (factor: number) => void;
+  readonly zoomBy: (factor: number) => void;
+  /** The length on the axis under a point of the window; null when the point is not over the board. */
+  readonly lengthAt: (clientX: number, clientY: number) => number | null;
+  /** Shows where the thing from the tray would be set down. */
+  readonly showDrop: (zMm: number | null) => void;
+  readonly focusGrip: (handleId: string) => boolean;
+  readonly repaint: () => void;
+  readonly destroy: () => void;
+}
+
+type Layer = 'rays' | 'parts' | 'overlay';
+
+const NONE: ReadonlySet<string> = new Set();
+
+/** Mounts the board in `element`: it draws a frame whenever the reading changes and gives the hand its grips. */
+export function createBoard(element: HTMLElement, client: BoardClient): Board {
+  let picture: Picture | null = null;
+  let labelPlaces: readonly LabelPlace[] = [];
+  let fold: Fold | null = null;
+  let drawn: Sketch | null = null;
+  let resized = true;
+  let state: HandState = { hover: null, focus: null, dragging: null, dropXPx: null };
+
+  const handleOf = (id: string | null): Handle | null =>
+    picture?.handles.find((handle) => handle.id === id) ?? null;
+  const view = (): Viewport => viewportOf(viewStore.getState().camera, surface.size(), fold);
+  const show = (change: Partial<HandState>) => {
+    state = { ...state, ...change };
+    frameLoop.ask('draw', 'hand', drawParts);
+  };
+  const speak = () => {
+    const handle = handleOf(state.focus);
+    client.speak(handle?.slider ? `${handle.label}: ${handle.slider.valueText}` : null);
+  };
+  const hand = createHand({
+    handleOf,
+    view,
+    show,
+    focus: ({ id }) => mirror.focus(id),
+    say: client.say,
+    choose: client.choose,
+    setDown: client.setDown,
+  });
+
+  const surface = createSurface<Layer>(element, ['rays', 'parts', 'overlay'], () => {
+    resized = true;
+    frameLoop.ask('draw', 'board', draw);
+  });
+  const { measure, forget } = canvasMeasure(
+    surface.canvas('parts').getContext('2d') as CanvasRenderingContext2D,
+  );
+  document.fonts.ready.then(() => {
+    forget();
+    frameLoop.ask('draw', 'board', draw);
+  });
+
+  const paint = (layer: Layer, drawOn: (pen: Pen) => void) => {
+    const ctx = surface.begin(layer);
+    if (ctx) drawOn(canvasPen(ctx, PALETTES[client.theme()], surface.size().pixelRatio));
+  };
+
+  const draw = () => {
+    const size = surface.size();
+    if (size.widthPx === 0 || size.heightPx === 0) return;
+    const scene = sceneOfReading(currentReading());
+    if (picture) keepPlace(picture, scene);
+    if (!hand.busy() && !sketchStore.getState().running) settleCamera(scene);
+    const now = pictureOf(currentReading(), view(), measure, scene);
+    picture = now;
+    paint('rays', (pen) => paintRays(pen, now));
+    drawParts();
+    mirror.update(now.handles);
+    if (drawn !== now.reading.sketch) speak();
+    drawn = now.reading.sketch;
+    client.onFrame();
+  };
+
+  /** Lengths count from the first part: when another part has become the first, the sheet moves so that the rest stays. */
+  const keepPlace = (before: Picture, scene: Scene) => {
+    const first = scene.parts[0]?.part.id;
+    if (first === undefined || before.scene.parts[0]?.part.id === first) return;
+    const stayed = before.scene.parts.find(({ part }) => partIn(scene, part.id));
+    const now = stayed && partIn(scene, stayed.part.id);
+    if (!stayed || !now) return;
+    const place = withLengthAt(view(), now.frontMm, xOf(before.view, stayed.frontMm));
+    setView({ camera: cameraAt(place, viewStore.getState().camera.follow) });
+  };
+
+  /** Between gestures: folds a long space, and fits again when what the camera follows has left the sheet. */
+  const settleCamera = (scene: Scene) => {
+    const size = surface.size();
+    let { camera } = viewStore.getState();
+    const before = view();
+    fold = foldIn(scene, camera);
+    if (!sameFold(before.fold, fold))
+      camera = cameraAt(refolded(before, fold, xOf(before, 0)), camera.follow);
+    const { follow } = camera;
+    if (follow && (resized || needsFit(scene, viewportOf(camera, size, fold), follow)))
+      camera = fitCamera(scene, size, follow);
+    resized = false;
+    if (camera !== viewStore.getState().camera) setView({ camera });
+  };
+
+  const drawParts = () => {
+    const now = picture;
+    if (!now) return;
+    paint('parts', (pen) => {
+      const still = state.dragging || state.hover || state.focus;
+      const frozen = still ? new Set(labelPlaces.map(({ id }) => id)) : NONE;
+      labelPlaces = paintParts(pen, now, state.hover, labelPlaces, frozen);
+    });
+    paint('overlay', (pen) => overlayLayer(pen, now.handles, now.view, now.plan.topPx, state));
+  };
+
+  const host = createHost(element, {
+    grips: () => picture?.handles ?? [],
+    snapOn: () => viewStore.getState().snap,
+    onEffect: hand.onEffect,
+  });
+  const mirror = createSliderMirror(element, {
+    onStep: (id, steps, { shift }) => hand.step(id, steps * keyStepMm(view()), shift),
+    onFocus: (focus) => {
+      show({ focus });
+      speak();
+    },
+    onEnter: hand.type,
+  });
+  const stopReading = onReading(draw);
+  Object.assign(element, { record: () => recorded(picture) });
+
+  const changeView = (change: (view: Viewport) => Viewport) => setView({ camera: cameraAt(change(view())) });
+
+  return {
+    jog: hand.jog,
+    endJog: hand.endJog,
+    type: hand.type,
+    fit: (what) => setView({ camera: fitCamera(sceneOfReading(currentReading()), surface.size(), what) }),
+    picture: () => picture,
+    panBy: (dxPx) => changeView((now) => panBy(now, dxPx, 0)),
+    stretchBy: (factor) => changeView((now) => stretchBy(now, factor)),
+    zoomBy: (factor) => changeView((now) => zoomAbout(now, now.widthPx / 2, factor)),
+    lengthAt(clientX, clientY) {
+      const box = element.getBoundingClientRect();
+      const xPx = clientX - box.left;
+      const yPx = clientY - box.top;
+      const inside = xPx >= 0 && xPx <= box.width && yPx >= 0 && yPx <= box.height;
+      return inside ? zOf(view(), xPx) : null;
+    },
+    showDrop: (zMm) => show({ dropXPx: zMm === null ? null : xOf(view(), zMm) }),
+    focusGrip: (id) => mirror.focus(id),
+    repaint: draw,
+    destroy() {
+      stopReading();
+      host.destroy();
+      mirror.destroy();
+      surface.destroy();
+    },
+  };
+}
+
+/** What the picture draws, as plain data: browser tests read the drawing from `element.record()`. */
+function recorded(picture: Picture | null): readonly Mark[] {
+  if (!picture) return [];
+  const pen = recorderPen(3);
+  pen.group('rays', () => paintRays(pen, picture));
+  pen.group('parts', () => paintParts(pen, picture, null, [], NONE));
+  return pen.marks;
+}

@@ -1,0 +1,73 @@
+import { fitted, type Margins } from '../board/fit.ts';
+import type { Fold, LengthRange, Viewport } from '../board/viewport.ts';
+import { visibleRange, xOf } from '../board/viewport.ts';
+import type { Scene } from '../drawing/scene.ts';
+import { stageFold } from '../drawing/stage.ts';
+import { RIBBON_PX } from '../ribbon/layout.ts';
+import type { Camera } from '../store/viewStore.ts';
+
+/** The board's size, px. */
+export interface Size {
+  readonly widthPx: number;
+  readonly heightPx: number;
+}
+
+const WIDE: Margins = { left: 84, right: 56, top: 56, bottom: RIBBON_PX + 58 };
+const NARROW: Margins = { left: 34, right: 26, top: 40, bottom: RIBBON_PX + 40 };
+const NARROW_PX = 560;
+/** Heights are never drawn more than this much taller or flatter by a fit. */
+const FIT_STRETCH = { least: 0.5, most: 3 };
+/** A fit counts as still good while what it shows fills this share of the width. */
+const GOOD_FILL = 0.45;
+
+/** The view that a camera gives on a board of this size. */
+export function viewportOf(camera: Camera, size: Size, fold: Fold | null): Viewport {
+  const { originMm, pxPerMm, stretch, axisYPx } = camera;
+  return { ...size, originMm, pxPerMm, stretch, axisYPx, fold };
+}
+
+/** The camera at a view; it follows no longer unless `follow` says so. */
+export function cameraAt(view: Viewport, follow: Camera['follow'] = null): Camera {
+  const { originMm, pxPerMm, stretch, axisYPx } = view;
+  return { follow, originMm, pxPerMm, stretch, axisYPx };
+}
+
+/** The fold of the scene, which only the fit to the parts has. */
+export const foldIn = (scene: Scene, camera: Camera): Fold | null =>
+  camera.follow === 'everything' ? null : stageFold(scene.stage);
+
+/** The camera that shows the parts (a long object space folded) or everything from object to image. */
+export function fitCamera(scene: Scene, size: Size, what: 'parts' | 'everything'): Camera {
+  const start: Camera = { follow: what, originMm: 0, pxPerMm: 1, stretch: 1, axisYPx: size.heightPx / 2 };
+  const fold = foldIn(scene, start);
+  const range = shownRange(scene, fold, what);
+  const margins = size.widthPx < NARROW_PX ? NARROW : WIDE;
+  const view = fitted(viewportOf(start, size, fold), { ...range, maxHeightMm: scene.tallestMm }, margins);
+  const stretch = Math.min(FIT_STRETCH.most, Math.max(FIT_STRETCH.least, view.stretch));
+  const tall = scene.tallestMm * view.pxPerMm * stretch;
+  const room = (size.heightPx - margins.top - margins.bottom) / 2;
+  return cameraAt({ ...view, stretch: tall > room ? view.stretch : stretch }, what);
+}
+
+/** Whether what the camera follows has left the sheet or shrunk on it, so that it is time to fit again. */
+export function needsFit(scene: Scene, view: Viewport, what: 'parts' | 'everything'): boolean {
+  const range = shownRange(scene, view.fold, what);
+  const visible = visibleRange(view);
+  if (range.fromMm < visible.fromMm || range.toMm > visible.toMm) return true;
+  if (xOf(view, range.toMm) - xOf(view, range.fromMm) < GOOD_FILL * view.widthPx) return true;
+  const tallPx = scene.tallestMm * view.pxPerMm * view.stretch;
+  return tallPx > view.axisYPx - 12 || (scene.tallestMm > 0 && tallPx < 24);
+}
+
+function shownRange({ stage }: Scene, fold: Fold | null, what: 'parts' | 'everything'): LengthRange {
+  if (what === 'everything') return stage.everything;
+  if (fold) return { fromMm: fold.fromMm, toMm: stage.parts.toMm };
+  return {
+    fromMm: Math.max(stage.startMm, stage.parts.fromMm - (stage.parts.toMm - stage.parts.fromMm)),
+    toMm: stage.parts.toMm,
+  };
+}
+
+/** Whether two folds cut the same piece. */
+export const sameFold = (a: Fold | null, b: Fold | null): boolean =>
+  a === b || (a !== null && b !== null && a.fromMm === b.fromMm && a.toMm === b.toMm);

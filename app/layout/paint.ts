@@ -1,0 +1,34 @@
+import type { LabelPlace } from '../board/labels.ts';
+import type { Pen } from '../board/pen.ts';
+import { endsLayer, scaleLayer } from '../drawing/layers/ends.ts';
+import { labelsLayer } from '../drawing/layers/labels.ts';
+import { marksLayer } from '../drawing/layers/marks.ts';
+import { partsLayer } from '../drawing/layers/parts.ts';
+import { raysLayer } from '../drawing/layers/rays.ts';
+import { extensionLines, ribbonLayer } from '../ribbon/layer.ts';
+import type { Picture } from './picture.ts';
+
+/** Draws rays and marks, the part of the picture that changes with every move. */
+export function paintRays(pen: Pen, { scene, view, plan }: Picture): void {
+  extensionLines(pen, plan, view);
+  pen.clipped({ kind: 'box', xPx: 0, yPx: 0, widthPx: view.widthPx, heightPx: plan.topPx }, () => {
+    raysLayer(pen, scene, view);
+    marksLayer(pen, scene, view);
+  });
+}
+
+/** Draws parts, ends, ribbon and labels; returns where the labels stand, which the next frame may keep. */
+export function paintParts(
+  pen: Pen,
+  { reading, scene, view, plan, labels }: Picture,
+  hovered: string | null,
+  former: readonly LabelPlace[],
+  frozen: ReadonlySet<string>,
+): readonly LabelPlace[] {
+  const hoveredPart = hovered?.startsWith('part:') ? hovered.slice('part:'.length) : null;
+  endsLayer(pen, scene, view);
+  partsLayer(pen, scene, view, hoveredPart);
+  scaleLayer(pen, view, reading.view.unit, plan.topPx - 26);
+  ribbonLayer(pen, plan, view, hovered);
+  return labelsLayer(pen, labels, view, plan.topPx - 44, former, frozen);
+}

@@ -1,0 +1,41 @@
+import { useStore } from 'zustand';
+import { Help } from '../commands/Help.tsx';
+import type { CommandGroup, Services } from '../commands/services.ts';
+import { HandOver } from '../desk/HandOver.tsx';
+import { RefusedFile } from '../desk/RefusedFile.tsx';
+import { Shelf } from '../desk/Shelf.tsx';
+import { sheetScale } from '../layout/sheetDrawing.ts';
+import { currentReading } from '../live/reading.ts';
+import { setView, viewStore } from '../store/viewStore.ts';
+
+interface SheetsProps {
+  readonly groups: readonly CommandGroup[];
+  readonly services: Services;
+}
+
+const close = () => setView({ sheet: null });
+
+/** The sheets that lie over the page, one at a time, and above them what a refused file is told. */
+export function Sheets({ groups, services }: SheetsProps) {
+  const sheet = useStore(viewStore, (view) => view.sheet);
+  return (
+    <>
+      {sheet === 'help' && (
+        <Help groups={groups} apple={/Mac|iPhone|iPad/.test(navigator.platform)} onClose={close} />
+      )}
+      {sheet === 'shelf' && <Shelf desk={services.desk} onClose={close} />}
+      {sheet === 'handOver' && (
+        <HandOver
+          drawSheet={services.drawSheet}
+          date={new Date()}
+          scale={sheetScale(currentReading())}
+          clipboard={services.clipboard}
+          download={services.download}
+          print={services.print}
+          onClose={close}
+        />
+      )}
+      <RefusedFile />
+    </>
+  );
+}

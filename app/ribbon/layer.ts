@@ -1,0 +1,87 @@
+import type { Pen } from '../board/pen.ts';
+import { segment } from '../board/pen.ts';
+import type { MarkStyle, TextStyle } from '../board/styles.ts';
+import type { Viewport } from '../board/viewport.ts';
+import { yOf } from '../board/viewport.ts';
+import type { PlacedCell, RibbonPlan } from './layout.ts';
+
+const TICK_PX = 5;
+const HATCH_PX = 6;
+
+/**
+ * The dimension lines after ISO 129-1: oblique ticks, values above the line, the overall dimension below. A gap that cannot be built
+ * is drawn reversed and hatched.
+ */
+export function ribbonLayer(pen: Pen, plan: RibbonPlan, view: Viewport, hovered: string | null): void {
+  for (const cell of plan.cells)
+    drawCell(pen, cell, view, cell.id === hovered || `cell:${cell.id}` === hovered);
+  const { overall } = plan;
+  if (!overall) return;
+  const { fromPx, toPx, linePx } = overall;
+  segment(pen, fromPx, linePx, toPx, linePx, 'dimension quiet');
+  for (const x of [fromPx, toPx]) tick(pen, x, linePx, 'dimension quiet');
+  pen.text((fromPx + toPx) / 2, linePx - 4, overall.text, 'value quiet', {
+    align: 'centre',
+    baseline: 'bottom',
+  });
+}
+
+function drawCell(pen: Pen, cell: PlacedCell, view: Viewport, hovered: boolean): void {
+  const { fromPx, toPx, linePx } = cell;
+  const style: MarkStyle = cell.bad ? 'dimension bad' : hovered ? 'dimension hover' : 'dimension';
+  for (const x of [fromPx, toPx]) {
+    segment(pen, x, Math.min(linePx - 26, view.heightPx), x, linePx + TICK_PX, 'dimension quiet');
+    tick(pen, x, linePx, 'dimension tick');
+  }
+  segment(pen, fromPx, linePx, toPx, linePx, style);
+  if (cell.bad) hatch(pen, fromPx, toPx, linePx);
+  if (cell.onLeader) segment(pen, cell.textXPx, linePx, cell.textXPx, cell.textYPx - 8, 'leader');
+  const value: TextStyle = cell.bad
+    ? 'value bad'
+    : cell.follows
+      ? 'value quiet'
+      : hovered
+        ? 'value strong'
+        : 'value';
+  pen.text(cell.textXPx, cell.textYPx, cell.text, value, { align: 'centre', baseline: 'middle' });
+  if (cell.bad)
+    pen.text(cell.textXPx, linePx + 18, 'cannot be built', 'label bad', {
+      align: 'centre',
+      baseline: 'middle',
+    });
+  else if (!cell.onLeader) mark(pen, cell);
+}
+
+/** What kind of value it is: shared by all positions, or following the focus. */
+function mark(pen: Pen, cell: PlacedCell): void {
+  const text = cell.follows ? 'follows focus' : cell.common ? '= all' : '';
+  if (text === '' || Math.abs(cell.toPx - cell.fromPx) < 60) return;
+  pen.text((cell.fromPx + cell.toPx) / 2, cell.linePx + 14, text, 'label quiet', {
+    align: 'centre',
+    baseline: 'middle',
+  });
+}
+
+function tick(pen: Pen, x: number, y: number, style: MarkStyle): void {
+  segment(pen, x - TICK_PX, y + TICK_PX, x + TICK_PX, y - TICK_PX, style);
+}
+
+function hatch(pen: Pen, fromPx: number, toPx: number, y: number): void {
+  const left = Math.min(fromPx, toPx);
+  const right = Math.max(fromPx, toPx);
+  for (let x = left; x < right; x += HATCH_PX)
+    segment(pen, x, y + 8, Math.min(x + HATCH_PX, right), y + 2, 'hatch');
+}
+
+/** Hairlines from the parts down to the ribbon. */
+export function extensionLines(pen: Pen, plan: RibbonPlan, view: Viewport): void {
+  const top = yOf(view, 0) + 20;
+  const seen = new Set<number>();
+  for (const cell of plan.cells) {
+    for (const x of [cell.fromPx, cell.toPx]) {
+      if (seen.has(x)) continue;
+      seen.add(x);
+      segment(pen, x, Math.max(top, plan.topPx - 26), x, plan.topPx + 8, 'grid');
+    }
+  }
+}

@@ -1,0 +1,82 @@
+import type { MeasureText } from '../board/measure.ts';
+import type { Viewport } from '../board/viewport.ts';
+import { xOf } from '../board/viewport.ts';
+import type { Sight } from '../drawing/sight.ts';
+import { formatLength } from '../ui/format.ts';
+import type { Cell } from './cells.ts';
+
+/** Height of the ribbon at the foot of the board, px. */
+export const RIBBON_PX = 112;
+/** Px from the ribbon's top to the dimension line, and to the overall dimension's line. */
+const LINE_PX = 34;
+const OVERALL_PX = 92;
+const VALUE_ABOVE_PX = 7;
+/** Where values that are wider than their cell stand, below the line and staggered. */
+const LEADER_ROWS_PX = [22, 40];
+const ASIDE_PX = 10;
+
+/** A cell with its place on screen. */
+export interface PlacedCell extends Cell {
+  readonly fromPx: number;
+  readonly toPx: number;
+  readonly linePx: number;
+  readonly text: string;
+  /** Middle of the value's text. */
+  readonly textXPx: number;
+  readonly textYPx: number;
+  readonly halfTextPx: number;
+  /** The value stands below the line on a leader. */
+  readonly onLeader: boolean;
+}
+
+export interface RibbonPlan {
+  readonly topPx: number;
+  readonly cells: readonly PlacedCell[];
+  readonly overall: {
+    readonly fromPx: number;
+    readonly toPx: number;
+    readonly linePx: number;
+    readonly text: string;
+  } | null;
+}
+
+/** The ribbon's places on screen: values above their line, those too wide below it on leaders that avoid each other. */
+export function ribbonPlan(cells: readonly Cell[], sight: Sight, measure: MeasureText): RibbonPlan {
+  const { view, reading, scene } = sight;
+  const topPx = view.heightPx - RIBBON_PX;
+  const linePx = topPx + LINE_PX;
+  const { unit, digits } = reading.view;
+  const rowEnds = LEADER_ROWS_PX.map(() => Number.NEGATIVE_INFINITY);
+  const placed = cells.map((cell): PlacedCell => {
+    const text = formatLength(cell.valueMm, unit, digits);
+    const halfTextPx = measure(text, 'value') / 2;
+    const [fromPx, toPx] = ends(cell, view);
+    const middle = (fromPx + toPx) / 2;
+    const base = { ...cell, fromPx, toPx, linePx, text, halfTextPx };
+    if (Math.abs(toPx - fromPx) >= 2 * halfTextPx + ASIDE_PX)
+      return { ...base, textXPx: middle, textYPx: linePx - VALUE_ABOVE_PX - 7, onLeader: false };
+    const row = Math.max(
+      0,
+      rowEnds.findIndex((end) => end < middle - halfTextPx),
+    );
+    rowEnds[row] = middle + halfTextPx + ASIDE_PX;
+    return { ...base, textXPx: middle, textYPx: linePx + (LEADER_ROWS_PX[row] ?? 0), onLeader: true };
+  });
+  const { imageMm } = scene.stage;
+  const first = scene.parts[0];
+  const overall =
+    first && imageMm !== null && scene.parts.length > 1
+      ? {
+          fromPx: xOf(view, 0),
+          toPx: xOf(view, imageMm),
+          linePx: topPx + OVERALL_PX,
+          text: formatLength(imageMm, unit, digits),
+        }
+      : null;
+  return { topPx, cells: placed, overall };
+}
+
+/** A folded space is dimensioned from where its object is drawn. */
+function ends(cell: Cell, view: Viewport): readonly [number, number] {
+  return [xOf(view, cell.fromMm), xOf(view, cell.toMm)];
+}
