@@ -36,6 +36,13 @@ describe('fitting a layout into the sheet', () => {
     expect(xOf(view, 110)).toBeCloseTo(1040, 9);
   });
 
+  it('counts only the piece of a fold that is in range', () => {
+    const fold = { fromMm: -500, toMm: -100, widthPx: 20 };
+    const view = fitted({ ...sheet, fold }, { fromMm: -300, toMm: 110, maxHeightMm: 10 }, margins);
+    expect(xOf(view, -300)).toBeCloseTo(40, 9);
+    expect(xOf(view, 110)).toBeCloseTo(1040, 9);
+  });
+
   it('always keeps both ends and the greatest height inside the margins', () => {
     const range = fc.record({
       fromMm: fc.double({ min: -1000, max: 1000, noNaN: true }),
@@ -90,6 +97,7 @@ describe('round lengths', () => {
   it('shows a bar of 1, 2 or 5 that is nearly as wide as allowed', () => {
     expect(scaleBar({ ...sheet, pxPerMm: 6 })).toEqual({ length: 10, widthPx: 60 });
     expect(scaleBar({ ...sheet, pxPerMm: 11 }, 110)).toEqual({ length: 10, widthPx: 110 });
+    expect(scaleBar({ ...sheet, pxPerMm: 22 }, 110)).toEqual({ length: 5, widthPx: 110 });
     expect(scaleBar({ ...sheet, pxPerMm: 700 })).toEqual({ length: 0.1, widthPx: 70 });
     expect(scaleBar({ ...sheet, pxPerMm: 6 }, 110, 25.4)).toEqual({
       length: 0.5,

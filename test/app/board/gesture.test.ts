@@ -95,6 +95,18 @@ describe('pressing again in the same place', () => {
     new FakeHand().click(103, 100).wait(1000).click(103, 110).expectDone({ do: 'click', grip: 'first' });
   });
 
+  it('after a drag begins afresh', () => {
+    new FakeHand()
+      .click(103, 100)
+      .wait(1000)
+      .press(103, 100)
+      .moveTo(140, 100)
+      .release()
+      .wait(1000)
+      .click(103, 100)
+      .expectDone({ do: 'click', grip: 'first' });
+  });
+
   it('by touch offers the grips by name', () => {
     new FakeHand('touch')
       .click(103, 100)
@@ -277,6 +289,11 @@ describe('two fingers', () => {
   it('spread upwards stretch the heights', () => {
     const hand = pinch().moveTo(500, 340, 2).moveTo(500, 380, 2);
     hand.expectDone({ do: 'pan' }, { do: 'stretch', factor: 2 });
+  });
+
+  it('pinched nearly together do not let the zoom run away', () => {
+    const hand = pinch().moveTo(440, 310, 2).moveTo(401, 310, 2);
+    expect(hand.last('zoom')?.factor).toBeCloseTo(24 / 40, 12);
   });
 
   it('go back to panning when one is lifted, and a third is ignored', () => {

@@ -67,6 +67,12 @@ describe('placing labels', () => {
     expect(kept.map((place) => place.side)).toEqual(['above', 'below']);
   });
 
+  it('leaves a pointed-at label where it dodged to, also when its better side is free again', () => {
+    const before = placeLabels([wish('a', 100), wish('b', 110, { priority: 5 })], { bounds });
+    const alone = placeLabels([wish('a', 100)], { bounds, former: before, frozen: new Set(['a']) });
+    expect([before[0]?.side, alone[0]?.side]).toEqual(['below', 'below']);
+  });
+
   it('answers in the order of the wishes and never covers a label while there is room', () => {
     const spots = fc.uniqueArray(fc.integer({ min: 1, max: 12 }), { minLength: 1, maxLength: 12 });
     fc.assert(

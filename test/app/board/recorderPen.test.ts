@@ -36,6 +36,6 @@ describe('the recorder', () => {
   it('keeps as many decimals as it was told, and no negative zero', () => {
     const pen = recorderPen(3);
     pen.polyline([-0.0001, 1.23456, 2, 3], 'axis');
-    expect(pen.toText()).toBe('line [axis] 0,1.235 2,3');
+    expect(pen.marks).toEqual([{ kind: 'lines', style: 'axis', lines: [[0, 1.235, 2, 3]] }]);
   });
 });

@@ -6,6 +6,7 @@ function screen(widthPx: number, heightPx: number, devicePixelRatio = 2) {
   const cleared: string[] = [];
   const observers: (() => void)[] = [];
   const queries: (() => void)[] = [];
+  const watched: string[] = [];
   const children: { width: number; height: number; style: Record<string, string> }[] = [];
   const view = {
     devicePixelRatio,
@@ -20,8 +21,11 @@ function screen(widthPx: number, heightPx: number, devicePixelRatio = 2) {
         observers.pop();
       }
     },
-    matchMedia: () => ({
-      addEventListener: (_type: string, changed: () => void) => queries.push(changed),
+    matchMedia: (query: string) => ({
+      addEventListener: (_type: string, changed: () => void) => {
+        watched.push(query);
+        queries.push(changed);
+      },
       removeEventListener: () => queries.pop(),
     }),
   };
@@ -51,7 +55,7 @@ function screen(widthPx: number, heightPx: number, devicePixelRatio = 2) {
     getBoundingClientRect: () => box,
     appendChild: (child: (typeof children)[number]) => children.push(child),
   };
-  return { host: host as unknown as HTMLElement, view, box, children, cleared, observers, queries };
+  return { host: host as unknown as HTMLElement, view, box, children, cleared, observers, queries, watched };
 }
 
 describe('the canvases of a sheet', () => {
@@ -89,7 +93,7 @@ describe('the canvases of a sheet', () => {
   });
 
   it('follow the size of their place and the pixel ratio of the screen', () => {
-    const { host, view, box, children, observers, queries } = screen(300, 200);
+    const { host, view, box, children, observers, queries, watched } = screen(300, 200);
     const sizes: SurfaceSize[] = [];
     createSurface(host, ['rays'], (size) => sizes.push(size));
     box.width = 500;
@@ -98,6 +102,7 @@ describe('the canvases of a sheet', () => {
     queries[0]?.();
     expect(sizes.at(-1)).toEqual({ widthPx: 500, heightPx: 200, pixelRatio: 3 });
     expect(children[0]?.width).toBe(1500);
+    expect(watched).toEqual(['(resolution: 2dppx)', '(resolution: 3dppx)']);
   });
 
   it('draw nothing without an area, and leave nothing behind', () => {

@@ -44,9 +44,10 @@ describe('tracing a line', () => {
     const far = fc.double({ min: -1e8, max: 1e8, noNaN: true });
     fc.assert(
       fc.property(far, far, fc.double({ min: -900, max: 900, noNaN: true }), (x, y, near) => {
-        const calls = traced([near, 300, x, y]);
+        const [there, back] = [traced([near, 300, x, y]), traced([x, y, near, 300])];
+        const calls = [...there, ...back];
         const length = Math.hypot(x - near, y - 300);
-        expect(calls).toHaveLength(2);
+        expect(calls).toHaveLength(4);
         for (const [, px, py] of calls) {
           expect(Math.max(Math.abs(px), Math.abs(py))).toBeLessThanOrEqual(30000 * (1 + 1e-9));
           const off = Math.abs((px - near) * (y - 300) - (py - 300) * (x - near)) / (length || 1);
