@@ -274,7 +274,7 @@ export const LOOKS: ReadonlyMap<MarkStyle, MarkLook> = new Map<MarkStyle, MarkLo
   ...(Object.entries(MARKS) as [MarkStyle, MarkLook][]),
   ...(Object.entries(RAYS) as [RayName, MarkLook][]).flatMap(([name, look]): [MarkStyle, MarkLook][] => [
     [name, look],
-    [`${name} virtual`, { ...look, width: 'hairline', dash: DOTTED }],
+    [`${name} virtual`, { ...look, width: 1.2, dash: DOTTED }],
     [`${name} paraxial`, { ...look, dash: DASHED }],
   ]),
 ]);

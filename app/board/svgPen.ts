@@ -12,7 +12,7 @@ export interface SvgSheet {
   readonly description?: string;
   /** Printed size; without it the document is as large as its px. */
   readonly printed?: { readonly widthMm: number; readonly heightMm: number };
-  /** Width of hairlines, px. Default 0.6. */
+  /** Width of hairlines, px. Default 0.75. */
   readonly hairlinePx?: number;
   /** Whether the sheet's colour is laid under everything. Default true. */
   readonly background?: boolean;
@@ -39,7 +39,7 @@ export function svgPen(sheet: SvgSheet): SvgPen {
     depth--;
     put('</g>');
   };
-  const paint = (style: MarkStyle): string => paintOf(style, palette, sheet.hairlinePx ?? 0.6);
+  const paint = (style: MarkStyle): string => paintOf(style, palette, sheet.hairlinePx ?? 0.75);
 
   return {
     polyline(points, style) {
