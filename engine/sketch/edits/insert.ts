@@ -70,15 +70,12 @@ function insertBehind(
   return { ...sketch, parts };
 }
 
-/** A length as the same share of the gap at every position, exact at `positionId`. */
+/** A length as the same share of the gap at every position, or as much beyond its end; exact at `positionId`. */
 function shareOf(gap: PerPosition, lengthMm: number, positionId: PositionId): PerPosition {
   const own = valueOn(gap, positionId);
   const share = own === 0 ? 0 : lengthMm / own;
-  return withValue(
-    everyPosition(gap, (whole) => whole * share),
-    positionId,
-    lengthMm,
-  );
+  const lead = everyPosition(gap, (whole) => (lengthMm > own ? whole + (lengthMm - own) : whole * share));
+  return withValue(lead, positionId, lengthMm);
 }
 
 const withGapAndMedium = (part: Part, lengthMm: PerPosition, medium: Medium): Part => ({

@@ -2,6 +2,10 @@ import type { Aperture, FieldSize, Lines, PositionId, Sketch } from '../types.ts
 import { joinValue, splitValue, withValue } from '../values.ts';
 import { withField } from './change.ts';
 
+/*
+ * −0 plus 0 is 0: the file could not give −0 back.
+ */
+
 /** Sets kind and value of the aperture. */
 export const setAperture = (sketch: Sketch, aperture: Aperture): Sketch =>
   withField(sketch, 'aperture', aperture);
@@ -31,13 +35,20 @@ export const joinStopDiameter = (sketch: Sketch, positionId: PositionId): Sketch
       })
     : sketch;
 
-/** Sets kind and size of the largest field. */
-export const setField = (sketch: Sketch, size: FieldSize): Sketch =>
-  withField(sketch, 'field', withField(sketch.field, 'size', size));
+/** Sets kind and size of the largest field, a magnitude. */
+export function setField(sketch: Sketch, size: FieldSize): Sketch {
+  const plain: FieldSize =
+    size.kind === 'angle'
+      ? { ...size, angleDeg: size.angleDeg + 0 }
+      : { ...size, heightMm: size.heightMm + 0 };
+  return withField(sketch, 'field', withField(sketch.field, 'size', plain));
+}
 
 /** Sets the fields drawn, as shares of the largest, each from −1 to 1. */
-export const setFractions = (sketch: Sketch, fractions: readonly number[]): Sketch =>
-  withField(sketch, 'field', withField(sketch.field, 'fractions', fractions));
+export function setFractions(sketch: Sketch, fractions: readonly number[]): Sketch {
+  const plain = fractions.map((fraction) => fraction + 0);
+  return withField(sketch, 'field', withField(sketch.field, 'fractions', plain));
+}
 
 /** Sets the share of the pupil's height, 0 to 1, that may be lost at the largest field. */
 export const setVignetting = (sketch: Sketch, vignetting: number): Sketch =>

@@ -21,9 +21,11 @@ export interface SketchSize {
   readonly mostPositions?: number;
 }
 
-/** A number between two limits: often round, otherwise any double; never −0. */
+/** A number between two limits: often round, otherwise any double; never −0, nor so small that lengths in mm lose it. */
 export function anyNumber(low: number, high: number): fc.Arbitrary<number> {
-  const any = fc.double({ min: low, max: high, noNaN: true }).map((value) => value + 0);
+  const any = fc
+    .double({ min: low, max: high, noNaN: true })
+    .map((value) => (Math.abs(value) < 1e-9 && low <= 0 ? 0 : value));
   const [least, most] = [Math.ceil(low), Math.floor(high)];
   return least > most ? any : fc.oneof(any, fc.integer({ min: least, max: most }));
 }

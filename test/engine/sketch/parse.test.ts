@@ -92,16 +92,16 @@ describe('a text that is no sketch', () => {
 
   test('is refused however deep or wide it is', () => {
     const head = '{"format":"gapwright-sketch","version":1,';
-    expect(sentencesIn('['.repeat(LONGEST_FILE))).toHaveLength(1);
-    expect(sentencesIn(`${head}"title":${'['.repeat(5e5)}${']'.repeat(5e5)}}`).length).toBeLessThanOrEqual(
+    expect(sentencesIn('['.repeat(2e5))).toHaveLength(1);
+    expect(sentencesIn(`${head}"title":${'['.repeat(1e5)}${']'.repeat(1e5)}}`).length).toBeLessThanOrEqual(
       50,
     );
-    expect(sentencesIn(`${head}"parts":[${'{},'.repeat(6e5)}{}]}`)).toEqual([
-      'The list “parts” has 600,001 entries; it must have at most 200.',
+    expect(sentencesIn(`${head}"parts":[${'{},'.repeat(1e5)}{}]}`)).toEqual([
+      'The list “parts” has 100,001 entries; it must have at most 200.',
     ]);
-    const keys = Array.from({ length: 1e5 }, (_, index) => `"k${index}":1`).join(',');
+    const keys = Array.from({ length: 2e4 }, (_, index) => `"k${index}":1`).join(',');
     expect(sentencesIn(`${head}${keys}}`)).toEqual([
-      'The sketch has 100,000 entries; it must have at most 100.',
+      'The sketch has 20,000 entries; it must have at most 100.',
     ]);
   });
 

@@ -18,7 +18,7 @@ import { at } from './layout.ts';
 const positionsOf = (count: number): readonly Position[] =>
   ['a', 'b', 'c', 'd', 'e', 'f'].slice(0, count).map((name) => ({ id: at(name), name }));
 
-const valueOf = (numbers: readonly number[]) =>
+const splitOver = (numbers: readonly number[]) =>
   Object.fromEntries(numbers.map((number, index) => [positionsOf(6)[index]?.id, number]));
 
 const between = (name: string, toNext: number) => ({ at: at(name), toNext });
@@ -29,21 +29,21 @@ describe('a value between positions', () => {
   });
 
   test('is halfway on the straight line between two positions', () => {
-    expect(valueAt(valueOf([10, 30]), positionsOf(2), between('a', 0.5))).toBe(20);
+    expect(valueAt(splitOver([10, 30]), positionsOf(2), between('a', 0.5))).toBe(20);
   });
 
   test('keeps a straight run straight', () => {
-    expect(valueAt(valueOf([0, 10, 20, 30]), positionsOf(4), between('b', 0.25))).toBeCloseTo(12.5, 12);
+    expect(valueAt(splitOver([0, 10, 20, 30]), positionsOf(4), between('b', 0.25))).toBeCloseTo(12.5, 12);
   });
 
   test('rests at a turning point', () => {
     // Rises 10 and −10: slope 0 at b, so just behind b the loss grows with the square of the share.
-    const fall = (share: number) => 10 - valueAt(valueOf([0, 10, 0]), positionsOf(3), between('b', share));
+    const fall = (share: number) => 10 - valueAt(splitOver([0, 10, 0]), positionsOf(3), between('b', share));
     expect(fall(0.002) / fall(0.001)).toBeCloseTo(4, 1);
   });
 
   test('takes a setting of no known position as the first, and one beyond the last as the last', () => {
-    const value = valueOf([1, 2]);
+    const value = splitOver([1, 2]);
     expect(valueAt(value, positionsOf(2), between('gone', 0))).toBe(1);
     expect(valueAt(value, positionsOf(2), between('b', 0.5))).toBe(2);
   });
@@ -54,7 +54,7 @@ describe('a value between positions', () => {
       const from = index % (numbers.length - 1);
       const [low, high] = [numbers[from] ?? 0, numbers[from + 1] ?? 0].toSorted((a, b) => a - b);
       const setting = { at: positionsOf(6)[from]?.id ?? at('a'), toNext: share };
-      const value = valueAt(valueOf(numbers), positionsOf(numbers.length), setting);
+      const value = valueAt(splitOver(numbers), positionsOf(numbers.length), setting);
       expect(value).toBeGreaterThanOrEqual(low ?? 0);
       expect(value).toBeLessThanOrEqual(high ?? 0);
     },
@@ -66,7 +66,7 @@ describe('a value between positions', () => {
       const positions = positionsOf(numbers.length);
       const from = index % numbers.length;
       const here = positions[from];
-      const value = valueOf(numbers);
+      const value = splitOver(numbers);
       if (here === undefined) return;
       expect(valueAt(value, positions, settingAt(here.id))).toBe(numbers[from]);
       const before = positions[from - 1];
@@ -99,11 +99,11 @@ describe('an object distance between positions', () => {
 describe('changing a value', () => {
   test('changes a common one for all positions and a split one where it stands', () => {
     expect(withValue<number>(5, at('b'), 7)).toBe(7);
-    expect(withValue<number>(valueOf([1, 2, 3]), at('b'), 7)).toEqual({ a: 1, b: 7, c: 3 });
+    expect(withValue<number>(splitOver([1, 2, 3]), at('b'), 7)).toEqual({ a: 1, b: 7, c: 3 });
   });
 
   test('gives the same object back when nothing changes', () => {
-    const value = valueOf([1, 2, 3]);
+    const value = splitOver([1, 2, 3]);
     expect(withValue(value, at('b'), 2)).toBe(value);
     expect(everyPosition(value, (number) => number)).toBe(value);
     expect(splitValue(value, positionsOf(3))).toBe(value);
@@ -111,8 +111,8 @@ describe('changing a value', () => {
 
   test('splits and joins', () => {
     expect(splitValue<number>(4, positionsOf(2))).toEqual({ a: 4, b: 4 });
-    expect(joinValue(valueOf([1, 2]), at('b'))).toBe(2);
-    expect(combineValues(1, valueOf([1, 2]), positionsOf(2), (a, b) => a + b)).toEqual({ a: 2, b: 3 });
+    expect(joinValue(splitOver([1, 2]), at('b'))).toBe(2);
+    expect(combineValues(1, splitOver([1, 2]), positionsOf(2), (a, b) => a + b)).toEqual({ a: 2, b: 3 });
   });
 
   test('stores 0 for −0, which a file could not give back', () => {
@@ -121,6 +121,6 @@ describe('changing a value', () => {
   });
 
   test('throws when it is asked for a position that has no value', () => {
-    expect(() => valueOn(valueOf([1]), at('b'))).toThrow('valueOn: no value at position b');
+    expect(() => valueOn(splitOver([1]), at('b'))).toThrow('valueOn: no value at position b');
   });
 });
