@@ -80,6 +80,8 @@ export function createHost(element: HTMLElement, client: HostClient): Host {
     } else feed({ on: 'modifiers', modifiers: modifiersOf(event) });
   };
   const { ownerDocument } = element;
+  // A key released in another window is never heard of here.
+  ownerDocument.defaultView?.addEventListener('blur', () => feed({ on: 'space', held: false }), { signal });
   ownerDocument.addEventListener('keydown', onKey, { signal, capture: true });
   ownerDocument.addEventListener('keyup', onKey, { signal, capture: true });
 

@@ -54,7 +54,7 @@ export function JogStrip({ board }: JogStripProps) {
 
   return (
     <div className="jog">
-      <div className="jog-chips" role="group" aria-label="What the strip moves">
+      <fieldset className="jog-chips" aria-label="What the strip moves">
         {chips.map((item) => (
           <button
             key={item.id}
@@ -82,7 +82,7 @@ export function JogStrip({ board }: JogStripProps) {
         >
           snap
         </button>
-      </div>
+      </fieldset>
       <div className="jog-row">
         <button
           type="button"

@@ -66,13 +66,12 @@ export function Layout({ theme, onBoard, say, speak }: LayoutProps) {
 
   return (
     <div className="layout">
-      {/* biome-ignore lint/a11y/noNoninteractiveTabindex: the drawing takes keys; its grips are real sliders inside it */}
-      <div
+      <section
         ref={host}
         className="board"
         data-drawing
+        // biome-ignore lint/a11y/noNoninteractiveTabindex: the drawing takes keys; its grips are real sliders inside it
         tabIndex={0}
-        role="group"
         aria-label="Drawing and ribbon"
       />
       <Typed key={typing ?? ''} board={board.current} typing={typing} frame={frame} />

@@ -1,6 +1,7 @@
 import type { KeyboardEvent } from 'react';
 import { useId, useLayoutEffect, useRef, useState } from 'react';
 import type { Handle, HandleEntry } from '../drawing/handle.ts';
+import { RIBBON_PX } from '../ribbon/layout.ts';
 import { applyEdit, dismissNote, sketchStore } from '../store/sketchStore.ts';
 import { formatEntry, parseEntry } from '../ui/entry.ts';
 import type { Picture } from './picture.ts';
@@ -66,7 +67,7 @@ export function TypeBox({ handle, entry, picture, onClose }: TypeBoxProps) {
 
   const { widthPx, heightPx } = picture.view;
   const left = Math.min(widthPx - WIDTH_PX - 8, Math.max(8, handle.xPx - WIDTH_PX / 2));
-  const top = Math.min(heightPx - 84, Math.max(8, handle.yPx - 18));
+  const top = Math.min(heightPx + RIBBON_PX - 84, Math.max(8, handle.yPx - 18));
 
   return (
     <div className="type-box" style={{ left, top, width: WIDTH_PX }}>

@@ -1,19 +1,21 @@
 /** How often the live region may speak. */
 const QUIET_MS = 500;
 
-/** Texts for one polite live region, the newest at most twice a second. */
+/** Texts for one polite live region: only the newest, and at most twice a second. */
 export function createAnnouncer(write: (text: string) => void): (text: string) => void {
   let waiting: string | null = null;
-  let timer: ReturnType<typeof setTimeout> | null = null;
+  let resting = false;
   const speak = () => {
-    timer = null;
+    resting = waiting !== null;
     if (waiting === null) return;
     write(waiting);
     waiting = null;
-    timer = setTimeout(speak, QUIET_MS);
+    setTimeout(speak, QUIET_MS);
   };
   return (text) => {
     waiting = text;
-    timer ??= setTimeout(speak, QUIET_MS);
+    if (resting) return;
+    resting = true;
+    setTimeout(speak, QUIET_MS);
   };
 }

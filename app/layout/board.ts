@@ -91,7 +91,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
 
   const surface = createSurface<Layer>(element, ['rays', 'parts', 'overlay'], () => {
     resized = true;
-    frameLoop.ask('draw', 'board', draw);
+    draw();
   });
   const { measure, forget } = canvasMeasure(
     surface.canvas('parts').getContext('2d') as CanvasRenderingContext2D,

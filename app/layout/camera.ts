@@ -12,18 +12,19 @@ export interface Size {
   readonly heightPx: number;
 }
 
-const WIDE: Margins = { left: 84, right: 56, top: 56, bottom: RIBBON_PX + 58 };
-const NARROW: Margins = { left: 34, right: 26, top: 40, bottom: RIBBON_PX + 40 };
+const WIDE: Margins = { left: 84, right: 56, top: 56, bottom: 58 };
+const NARROW: Margins = { left: 34, right: 26, top: 40, bottom: 40 };
 const NARROW_PX = 560;
 /** Heights are never drawn more than this much taller or flatter by a fit. */
 const FIT_STRETCH = { least: 0.5, most: 3 };
 /** A fit counts as still good while what it shows fills this share of the width. */
 const GOOD_FILL = 0.45;
 
-/** The view that a camera gives on a board of this size. */
+/** The view of the drawing that a camera gives on a board of this size: the ribbon lies below it. */
 export function viewportOf(camera: Camera, size: Size, fold: Fold | null): Viewport {
   const { originMm, pxPerMm, stretch, axisYPx } = camera;
-  return { ...size, originMm, pxPerMm, stretch, axisYPx, fold };
+  const heightPx = Math.max(0, size.heightPx - RIBBON_PX);
+  return { widthPx: size.widthPx, heightPx, originMm, pxPerMm, stretch, axisYPx, fold };
 }
 
 /** The camera at a view; it follows no longer unless `follow` says so. */
@@ -45,7 +46,7 @@ export function fitCamera(scene: Scene, size: Size, what: 'parts' | 'everything'
   const view = fitted(viewportOf(start, size, fold), { ...range, maxHeightMm: scene.tallestMm }, margins);
   const stretch = Math.min(FIT_STRETCH.most, Math.max(FIT_STRETCH.least, view.stretch));
   const tall = scene.tallestMm * view.pxPerMm * stretch;
-  const room = (size.heightPx - margins.top - margins.bottom) / 2;
+  const room = (view.heightPx - margins.top - margins.bottom) / 2;
   return cameraAt({ ...view, stretch: tall > room ? view.stretch : stretch }, what);
 }
 

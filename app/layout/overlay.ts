@@ -43,14 +43,13 @@ export function overlayLayer(
     segment(pen, fromPx, 16, fromPx, bottomPx, 'former place');
   if (move.caught) {
     const x = xOf(view, move.caught.at - move.frameMm);
-    segment(pen, x, 30, x, bottomPx, 'snap');
-    pen.text(x + 6, 24, move.caught.name, 'label snap', { align: 'left', baseline: 'middle' });
+    segment(pen, x, view.axisYPx, x, bottomPx, 'snap');
   }
   const right = xPx > view.widthPx - 170;
-  pen.text(xPx + (right ? -16 : 16), Math.max(20, yPx - 18), move.says, 'label strong', {
-    align: right ? 'right' : 'left',
-    baseline: 'middle',
-  });
+  const textPx = xPx + (right ? -16 : 16);
+  const place = { align: right ? 'right' : 'left', baseline: 'middle' } as const;
+  pen.text(textPx, Math.max(20, yPx - 18), move.says, 'label strong', place);
+  if (move.caught) pen.text(textPx, Math.max(36, yPx - 2), move.caught.name, 'label snap', place);
 }
 
 function drawGrip(pen: Pen, { look, xPx, yPx, drag }: Handle, strong: boolean): void {

@@ -28,7 +28,7 @@ export function paintParts(
   const hoveredPart = hovered?.startsWith('part:') ? hovered.slice('part:'.length) : null;
   endsLayer(pen, scene, view);
   partsLayer(pen, scene, view, hoveredPart);
-  scaleLayer(pen, view, reading.view.unit, plan.topPx - 26);
+  scaleLayer(pen, view, reading.view.unit, view.heightPx - 26);
   ribbonLayer(pen, plan, view, hovered);
-  return labelsLayer(pen, labels, view, plan.topPx - 44, former, frozen);
+  return labelsLayer(pen, labels, view, former, frozen);
 }

@@ -19,7 +19,7 @@ export function sheetDrawing(reading: Reading, measure: MeasureText): string {
   const view = viewportOf(camera, SIZE, foldIn(scene, camera));
   const picture = pictureOf(plainReading, view, measure, scene);
   const { title } = reading.sketch;
-  const pen = svgPen({ ...SIZE, palette: PALETTES.paper, title, description: describe(reading) });
+  const pen = svgPen({ ...SIZE, palette: PALETTES.paper, title, description: summaryOf(reading) });
   pen.group('rays', () => paintRays(pen, picture));
   pen.group('parts', () => paintParts(pen, picture, null, [], new Set()));
   return pen.document();
@@ -43,7 +43,7 @@ const withoutHand = ({ sketch, setting, view, analysis, warnings }: Reading): Re
   warnings,
 });
 
-function describe({ sketch, setting }: Reading): string {
+function summaryOf({ sketch, setting }: Reading): string {
   const position = sketch.positions.find(({ id }) => id === setting.at)?.name ?? '';
   return `Layout of ${sketch.parts.length} parts${sketch.positions.length > 1 ? `, position ${position}` : ''}`;
 }
