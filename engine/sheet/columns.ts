@@ -71,8 +71,8 @@ function gapColumns(sketch: Sketch, grid: Grid): ColumnSpec[] {
     const next = sketch.parts[k + 1];
     const title =
       next === undefined
-        ? `${labelOf(sketch, k)} to ${imageWord(sketch)} (from ${planeOf(part)})`
-        : `${labelOf(sketch, k)} to ${labelOf(sketch, k + 1)} (${planeOf(part)} to ${planeOf(next)})`;
+        ? `${capital(labelOf(sketch, k))} to ${imageWord(sketch)} (from ${planeOf(part)})`
+        : `${capital(labelOf(sketch, k))} to ${labelOf(sketch, k + 1)} (${planeOf(part)} to ${planeOf(next)})`;
     return {
       column: { id: `gap:${part.id}`, title, unit: grid.unit, kind: 'gap' },
       cellOf: ({ printed }) => grid.cellOf(gapBehind(printed, k)),

@@ -1,18 +1,24 @@
 import { readdirSync } from 'node:fs';
+import { fileURLToPath } from 'node:url';
 import { describe, expect, it } from 'vitest';
-import { analyse } from '../../engine/paraxial/analyse.ts';
+import { type Analysis, analyse } from '../../engine/paraxial/analyse.ts';
 import { unbuildable, warningsOf } from '../../engine/paraxial/warnings.ts';
+import { cautionOf } from '../../engine/sheet/notes.ts';
 import { writeSketch } from '../../engine/sketch/file.ts';
 import { parseSketch } from '../../engine/sketch/parse.ts';
 import type { Part, PerPosition, Position, Sketch } from '../../engine/sketch/types.ts';
 import { settingAt } from '../../engine/sketch/values.ts';
+import { given } from '../engine/quantity.ts';
 import { STARTING_SKETCHES } from './startingSketches.ts';
 
 /** The images were placed by closed forms in double precision; rounding along a handful of parts stays far below this (mm). */
 const ON_SENSOR_MM = 1e-9;
 
+/** Decimals that rounding along a handful of parts leaves alone. */
+const ROUNDING_DIGITS = 12;
+
 const folder = new URL('../../public/sketches/', import.meta.url);
-const pathOf = (file: string): string => new URL(file, folder).pathname;
+const pathOf = (file: string): string => fileURLToPath(new URL(file, folder));
 
 const listText = `${JSON.stringify(
   STARTING_SKETCHES.map(({ file, sketch, summary }) => ({ file, title: sketch.title, summary })),
@@ -29,9 +35,54 @@ describe('the starting sketches', () => {
     const files = readdirSync(folder).sort();
     expect(files).toEqual(['index.json', ...STARTING_SKETCHES.map(({ file }) => file)].sort());
   });
+});
 
-  it('are for inspection, relaying, a long back focus, a beam, close distances and the eye', () => {
-    expect(STARTING_SKETCHES.length).toBeGreaterThanOrEqual(5);
+describe('what each starting sketch is there to show', () => {
+  it('the inspection zoom reaches its three magnifications and focal lengths at f/5.6', () => {
+    const shown = analysesOf('inspection-zoom.json').map(({ conjugates, firstOrder, light }) => [
+      given(conjugates.magnification).toFixed(5),
+      given(firstOrder.focalLengthMm).toFixed(4),
+      given(light.workingFNumber).toFixed(3),
+    ]);
+    expect(shown).toEqual([
+      ['-0.05000', '25.7481', '5.600'],
+      ['-0.08000', '41.1975', '5.600'],
+      ['-0.12000', '61.2888', '5.600'],
+    ]);
+  });
+
+  it('the relay is telecentric on both sides and 60 mm over 100 mm in size', () => {
+    const [relay] = analysesOf('sorting-chute-relay.json');
+    expect([relay?.pupils.entrance.zMm, relay?.pupils.exit.zMm]).toEqual([
+      { ok: false, why: 'pupil at infinity' },
+      { ok: false, why: 'pupil at infinity' },
+    ]);
+    expect(given(relay?.conjugates.magnification)).toBeCloseTo(-0.6, ROUNDING_DIGITS);
+  });
+
+  it('the colour check camera leaves more back focus than its focal length and clears its mount', () => {
+    const [camera] = analysesOf('colour-check-camera.json');
+    expect(given(camera?.firstOrder.backFocusMm)).toBeGreaterThan(given(camera?.firstOrder.focalLengthMm));
+    expect(given(camera?.sensor.mountClearanceMm)).toBeGreaterThan(0);
+  });
+
+  it('the expander makes a beam four times wider, and carries the caution', () => {
+    const [expander] = analysesOf('chute-scanner-expander.json');
+    expect(given(expander?.firstOrder.angularMagnification)).toBeCloseTo(0.25, ROUNDING_DIGITS);
+    expect(cautionOf(sketchIn('chute-scanner-expander.json'))).toContain('IEC 60825-1');
+  });
+
+  it('the macro gives half size and life size through its window', () => {
+    const sizes = analysesOf('germination-macro.json').map(({ conjugates }) =>
+      given(conjugates.magnification),
+    );
+    expect(sizes[0]).toBeCloseTo(-0.5, ROUNDING_DIGITS);
+    expect(sizes[1]).toBeCloseTo(-1, ROUNDING_DIGITS);
+  });
+
+  it('the loupe puts the image at infinity for the eye', () => {
+    const [loupe] = analysesOf('sorters-loupe.json');
+    expect(loupe?.conjugates.imageDistanceMm).toEqual({ ok: false, why: 'image at infinity' });
   });
 });
 
@@ -76,6 +127,17 @@ describe.each(STARTING_SKETCHES)('the starting sketch $file', ({ file, sketch })
         expect(areaShare).toBeGreaterThan(0.9);
   });
 });
+
+function sketchIn(file: string): Sketch {
+  const found = STARTING_SKETCHES.find((starting) => starting.file === file);
+  if (found === undefined) throw new Error(`no starting sketch ${file}`);
+  return found.sketch;
+}
+
+function analysesOf(file: string): readonly Analysis[] {
+  const sketch = sketchIn(file);
+  return sketch.positions.map(({ id }) => analyse(sketch, settingAt(id)));
+}
 
 /** How far the image falls behind the sensor: the imaging equation of every part in turn, 1/s′ = 1/s + 1/f. */
 function imageBehindSensor(sketch: Sketch, position: Position): number {

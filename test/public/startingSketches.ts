@@ -9,6 +9,7 @@ import type {
   Space,
   ThinPart,
 } from '../../engine/sketch/types.ts';
+import { inspectionZoom } from '../engine/demo.ts';
 
 /** A sketch that comes with the tool, and what the list of starting sketches says about it. */
 export interface StartingSketch {
@@ -22,7 +23,7 @@ export const STARTING_SKETCHES: readonly StartingSketch[] = [
   {
     file: 'inspection-zoom.json',
     summary: 'Four groups, three positions, the image held on the sensor',
-    sketch: inspectionZoom(),
+    sketch: seedLineCamera(),
   },
   {
     file: 'sorting-chute-relay.json',
@@ -51,29 +52,13 @@ export const STARTING_SKETCHES: readonly StartingSketch[] = [
   },
 ];
 
-function inspectionZoom(): Sketch {
-  const [wide, middle, narrow] = positions('wide', 'middle', 'narrow');
-  const gap = (atWide: number, atMiddle: number, atNarrow: number): Partial<ThinPart> => ({
-    space: air({ [wide.id]: atWide, [middle.id]: atMiddle, [narrow.id]: atNarrow }),
-  });
+function seedLineCamera(): Sketch {
   return {
-    ...emptySketch('Seed line camera'),
+    ...inspectionZoom(),
+    title: 'Seed line camera',
     notes:
       'Inspection camera of a seed-sorting line. The chute is 500 mm in front of the first group; the fourth group and the sensor stand still.',
-    object: { distanceMm: 500, medium: 'air' },
-    parts: [
-      thin('p1', 'First group', -32, gap(41.2187245423499, 26.2723430337247, 15.9437475806799)),
-      thin('p2', 'Second group', 28, gap(16.5123679494863, 25.3145182543316, 41.9317551092688)),
-      thin('p3', 'Third group', -46, gap(26.2689075081639, 32.4131387119437, 26.1244973100513)),
-      thin('p4', 'Fourth group', 48, { space: air(26) }),
-    ],
-    image: 'fixed',
-    sensor: { size: { widthMm: 8.8, heightMm: 6.6 }, pixelPitchMm: 0.00345 },
-    stop: id('p2'),
-    aperture: { kind: 'workingFNumber', fNumber: 5.6 },
-    field: { size: { kind: 'imageHeight', heightMm: 5.5 }, fractions: [0, 0.7, 1], vignetting: 0 },
     lines: LINES.e,
-    positions: [wide, middle, narrow],
   };
 }
 
@@ -83,15 +68,15 @@ function sortingChuteRelay(): Sketch {
     notes: 'The stop stands in the common focus of both lenses, so seeds nearer or farther keep their size.',
     object: { distanceMm: 100, medium: 'air' },
     parts: [
-      thin('p1', 'Chute lens', 100, {
+      thin('p1', 'chute lens', 100, {
         space: air(100),
         semiDiameterMm: 14.5,
         abbeNumber: 64.2,
         roomFrontMm: 5,
         roomBehindMm: 5,
       }),
-      { ...newStop(id('p2')), name: 'Stop', space: air(60) },
-      thin('p3', 'Camera lens', 60, {
+      { ...newStop(id('p2')), name: 'stop', space: air(60) },
+      thin('p3', 'camera lens', 60, {
         space: air(60),
         semiDiameterMm: 11.5,
         abbeNumber: 64.2,
@@ -117,9 +102,9 @@ function colourCheckCamera(): Sketch {
     notes:
       'Looks over the whole belt. The register distance of the camera asks for a back focus longer than the focal length.',
     parts: [
-      thin('p1', 'Front lens', front, { space: air(24), abbeNumber: 58.6, roomBehindMm: 2 }),
-      { ...newStop(id('p2')), name: 'Stop', space: air(4) },
-      thin('p3', 'Rear lens', rear, {
+      thin('p1', 'front lens', front, { space: air(24), abbeNumber: 58.6, roomBehindMm: 2 }),
+      { ...newStop(id('p2')), name: 'stop', space: air(4) },
+      thin('p3', 'rear lens', rear, {
         space: air(focalLength * (1 - apart / front)),
         abbeNumber: 70.2,
         roomFrontMm: 2,
@@ -141,8 +126,8 @@ function chuteScannerExpander(): Sketch {
     notes:
       'Widens the beam of a laser diode four times before it reaches the scanning mirror. Backwards it concentrates the beam.',
     parts: [
-      thin('p1', 'Entry lens', -25, { space: air(75), semiDiameterMm: 4 }),
-      thin('p2', 'Exit lens', 100, { space: air(60), semiDiameterMm: 12 }),
+      thin('p1', 'entry lens', -25, { space: air(75), semiDiameterMm: 4 }),
+      thin('p2', 'exit lens', 100, { space: air(60), semiDiameterMm: 12 }),
     ],
     stop: id('p1'),
     aperture: { kind: 'entrancePupilDiameter', diameterMm: 4 },
@@ -165,12 +150,12 @@ function germinationMacro(): Sketch {
     parts: [
       {
         ...window,
-        name: 'Window',
+        name: 'window',
         space: air({ [half.id]: windowToLens(lens + 36), [life.id]: windowToLens(lens) }),
       },
-      thin('p2', 'Front lens', lens, { space: air(10), abbeNumber: 60.3, roomFrontMm: 3, roomBehindMm: 3 }),
-      { ...newStop(id('p3')), name: 'Stop', space: air(10) },
-      thin('p4', 'Rear lens', lens, {
+      thin('p2', 'front lens', lens, { space: air(10), abbeNumber: 60.3, roomFrontMm: 3, roomBehindMm: 3 }),
+      { ...newStop(id('p3')), name: 'stop', space: air(10) },
+      thin('p4', 'rear lens', lens, {
         space: air({ [half.id]: 42, [life.id]: 60 }),
         abbeNumber: 60.3,
         roomFrontMm: 3,
@@ -183,7 +168,7 @@ function germinationMacro(): Sketch {
     aperture: { kind: 'stopDiameter', diameterMm: { [half.id]: 9, [life.id]: 12 } },
     field: { size: { kind: 'imageHeight', heightMm: 8 }, fractions: [0, 0.7, 1], vignetting: 0 },
     positions: [half, life],
-    groups: [{ id: 'g1' as GroupId, name: 'Lens', partIds: [id('p2'), id('p3'), id('p4')] }],
+    groups: [{ id: 'g1' as GroupId, name: 'lens', partIds: [id('p2'), id('p3'), id('p4')] }],
   };
 }
 
@@ -193,9 +178,9 @@ function sortersLoupe(): Sketch {
     notes: 'For looking at a single seed. It stands in the front focus; the pupil of the eye is the stop.',
     object: { distanceMm: 6.4, medium: 'air' },
     parts: [
-      thin('p1', 'Field lens', 32, { space: air(24), semiDiameterMm: 7, abbeNumber: 57.4 }),
-      thin('p2', 'Eye lens', 32, { space: air(14), semiDiameterMm: 6, abbeNumber: 57.4 }),
-      { ...newStop(id('p3')), name: 'Eye', space: air(20) },
+      thin('p1', 'field lens', 32, { space: air(24), semiDiameterMm: 7, abbeNumber: 57.4 }),
+      thin('p2', 'eye lens', 32, { space: air(14), semiDiameterMm: 6, abbeNumber: 57.4 }),
+      { ...newStop(id('p3')), name: 'eye', space: air(20) },
     ],
     stop: id('p3'),
     aperture: { kind: 'stopDiameter', diameterMm: 3 },

@@ -4,7 +4,7 @@ import { everyPosition } from '../../../engine/sketch/values.ts';
 import { anySketch } from '../sketch/arbitrary.ts';
 
 /** Names that a separator, a quote, a line break, a formula or a mark could break. */
-export const AWKWARD_NAMES = [
+const AWKWARD_NAMES = [
   '',
   'first group',
   '=1+2',
@@ -25,7 +25,7 @@ const anyName = (): fc.Arbitrary<string> => fc.constantFrom(...AWKWARD_NAMES);
 
 /** Any sound sketch whose parts keep clear of each other at every position, with awkward names. */
 export const anyLayout = (): fc.Arbitrary<Sketch> =>
-  anySketch({ leastParts: 1 }).chain((sketch) =>
+  anySketch({ leastParts: 1, mostParts: 5, mostPositions: 3 }).chain((sketch) =>
     fc
       .record({
         title: anyName(),

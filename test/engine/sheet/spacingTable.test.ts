@@ -36,7 +36,7 @@ describe('the spacing table of the inspection zoom', () => {
 
   it('says that its gaps run from principal plane to principal plane', () => {
     const titles = table.positions.columns.map(({ title }) => title);
-    expect(titles).toContain('first group to second group (principal plane to principal plane)');
+    expect(titles).toContain('First group to second group (principal plane to principal plane)');
     expect(table.notes.join(' ')).toContain('from principal plane to principal plane');
   });
 
@@ -67,7 +67,7 @@ describe('the spacing table of the inspection zoom', () => {
     const inches = tableOf(inspectionZoom(), { unit: 'in' });
     expect(columnTexts(inches.positions, 'gap:p4')).toEqual(['1.02362', '1.02362', '1.02362']);
     expect(inches.positions.columns.map(headingOf).join()).toContain(
-      'fourth group to sensor (from principal plane) (in)',
+      'Fourth group to sensor (from principal plane) (in)',
     );
   });
 });
