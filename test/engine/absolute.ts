@@ -7,7 +7,7 @@ export interface AbsoluteRay {
   readonly nu: readonly number[];
 }
 
-/** The recurrence from in front of `from` to behind the last surface; entries in front of `from` are 0. */
+/** The recurrence from in front of surface `from` to both ends of the train. */
 export function absoluteRay(train: Train, from: number, yMm: number, nu: number): AbsoluteRay {
   const ray = { y: new Array<number>(train.count).fill(0), nu: new Array<number>(train.count + 1).fill(0) };
   let [height, slope] = [Math.abs(yMm), Math.abs(nu)];
@@ -17,6 +17,13 @@ export function absoluteRay(train: Train, from: number, yMm: number, nu: number)
     slope += Math.abs(powerAt(train, k)) * height;
     ray.nu[k + 1] = slope;
     height += Math.abs(train.gap[k]! / train.index[k + 1]!) * slope;
+  }
+  [height, slope] = [Math.abs(yMm), Math.abs(nu)];
+  for (let k = from - 1; k >= 0; k--) {
+    height += Math.abs(train.gap[k]! / train.index[k + 1]!) * slope;
+    ray.y[k] = height;
+    slope += Math.abs(powerAt(train, k)) * height;
+    ray.nu[k] = slope;
   }
   return ray;
 }
