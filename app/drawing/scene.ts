@@ -209,12 +209,13 @@ function imagesOf(
   chief: ParaxialRay | null,
 ): SceneImage[] {
   const images: SceneImage[] = [];
-  const nearMm = 3 * (stage.endMm - stage.startMm);
+  // Images further away than the parts are long are told by the ledger; drawn, their lines would only cross the sheet.
+  const lengthMm = stage.parts.toMm - stage.parts.fromMm;
   for (const [row, entry] of ledger.entries()) {
     const next = ledger[row + 1];
     if (!entry.imageZ.ok || !next) continue;
     const zMm = entry.imageZ.value;
-    if (Math.abs(zMm) > nearMm) continue;
+    if (zMm < stage.parts.fromMm - lengthMm || zMm > stage.parts.toMm + lengthMm) continue;
     const last = lastSurfaceOf(train, entry.partIndex);
     const nextFrontMm = places.parts[next.partIndex]?.frontMm ?? 0;
     const rearMm = places.parts[entry.partIndex]?.rearMm ?? 0;

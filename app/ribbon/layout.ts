@@ -5,7 +5,7 @@ import type { Sight } from '../drawing/sight.ts';
 import { formatLength } from '../ui/format.ts';
 import type { Cell } from './cells.ts';
 
-/** Height of the ribbon at the foot of the board, px. */
+/** Height of the ribbon below the drawing, px. */
 export const RIBBON_PX = 112;
 /** Px from the ribbon's top to the dimension line, and to the overall dimension's line. */
 const LINE_PX = 34;
@@ -43,7 +43,7 @@ export interface RibbonPlan {
 /** The ribbon's places on screen: values above their line, those too wide below it on leaders that avoid each other. */
 export function ribbonPlan(cells: readonly Cell[], sight: Sight, measure: MeasureText): RibbonPlan {
   const { view, reading, scene } = sight;
-  const topPx = view.heightPx - RIBBON_PX;
+  const topPx = view.heightPx;
   const linePx = topPx + LINE_PX;
   const { unit, digits } = reading.view;
   const rowEnds = LEADER_ROWS_PX.map(() => Number.NEGATIVE_INFINITY);

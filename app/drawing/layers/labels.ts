@@ -1,7 +1,7 @@
 import type { LabelPlace, LabelWish, Side } from '../../board/labels.ts';
 import { placeLabels } from '../../board/labels.ts';
 import type { MeasureText } from '../../board/measure.ts';
-import type { Pen } from '../../board/pen.ts';
+import { type Pen, segment } from '../../board/pen.ts';
 import type { TextStyle } from '../../board/styles.ts';
 import type { Viewport } from '../../board/viewport.ts';
 import { xOf, yOf } from '../../board/viewport.ts';
@@ -14,6 +14,8 @@ import { objectTipPx } from './ends.ts';
 export interface Label extends LabelWish {
   readonly text: string;
   readonly style: TextStyle;
+  /** Screen y that a hairline runs down from to the label; null for none. */
+  readonly leaderFromYPx: number | null;
 }
 
 const LINE_PX = 16;
@@ -37,6 +39,7 @@ export function labelsOf(
     sides: readonly Side[],
     priority: number,
     distancePx = 4,
+    leaderFromYPx: number | null = null,
   ) =>
     labels.push({
       id,
@@ -47,6 +50,7 @@ export function labelsOf(
       sides,
       priority,
       distancePx,
+      leaderFromYPx,
       widthPx: measure(text, style),
       heightPx: LINE_PX,
     });
@@ -106,10 +110,19 @@ export function labelsOf(
     const name = nameOf(part.part, part.index);
     const text = image.objectOf === null ? `image of ${name}` : `object for ${name}`;
     const x = xOf(view, image.zMm);
-    const y = yOf(view, image.heightMm);
-    const sides: Side[] =
-      image.heightMm >= 0 ? ['above', 'above right', 'right'] : ['below', 'below right', 'right'];
-    add(`image:${image.partIndex}`, text, 'label quiet', x, y, sides, 5);
+    const foot = yOf(view, Math.min(0, image.heightMm));
+    const y = Math.max(foot, yOf(view, -scene.tallestMm));
+    add(
+      `image:${image.partIndex}`,
+      text,
+      'label quiet',
+      x,
+      y,
+      ['below', 'below right', 'below left'],
+      5,
+      4,
+      foot,
+    );
   }
   for (const plane of scene.planes) {
     const focus = plane.name.endsWith('focus');
@@ -152,16 +165,17 @@ export function labelsLayer(
   pen: Pen,
   labels: readonly Label[],
   view: Viewport,
-  bottomPx: number,
   former: readonly LabelPlace[],
   frozen: ReadonlySet<string>,
 ): readonly LabelPlace[] {
-  const bounds = { xPx: 4, yPx: 4, widthPx: view.widthPx - 8, heightPx: bottomPx - 8 };
-  const inside = labels.filter((label) => label.xPx > -40 && label.xPx < view.widthPx + 40);
+  const bounds = { xPx: 4, yPx: 4, widthPx: view.widthPx - 8, heightPx: view.heightPx - 8 };
+  const inside = labels.filter(({ xPx }) => xPx >= 0 && xPx <= view.widthPx);
   const places = placeLabels(inside, { bounds, former, frozen });
   for (const [i, place] of places.entries()) {
     const label = inside[i];
     if (!label) continue;
+    if (label.leaderFromYPx !== null)
+      segment(pen, label.xPx, label.leaderFromYPx, label.xPx, place.yPx, 'leader');
     pen.text(place.xPx, place.yPx + place.heightPx / 2, label.text, label.style, {
       align: 'left',
       baseline: 'middle',
