@@ -76,10 +76,12 @@ export function listenToKeys(
   commands: Iterable<Command>,
   isDrawing: (element: Element) => boolean,
 ): () => void {
+  // An iterator could be gone through only once.
+  const all = [...commands];
   const onKeyDown = (event: KeyboardEvent) => {
     if (event.defaultPrevented) return;
     const place = placeOf(event.target, isDrawing);
-    const command = commandFor(event, commands, place);
+    const command = commandFor(event, all, place);
     if (!command) return;
     if (command.available()) {
       event.preventDefault();

@@ -1,4 +1,5 @@
-import { sheetText, spacingTable } from '../../engine/index.ts';
+import { cautionOf, sheetText, spacingTable } from '../../engine/index.ts';
+import { withCaution } from '../desk/cautioned.ts';
 import { copyText } from '../desk/clipboard.ts';
 import { downloadPng, downloadSvg } from '../desk/exports.ts';
 import { complain } from '../desk/notices.ts';
@@ -17,6 +18,8 @@ export function sketchCommands(services: Services): CommandGroup {
     if (spacing.ok) void copyText(clipboard, sheetText(spacing.value, 'tsv'), 'The spacing table is');
     else complain(spacing.refusals[0]?.sentence ?? 'The layout cannot be built as it is.');
   };
+
+  const drawing = () => withCaution(drawSheet(), cautionOf(sketchNow()));
 
   const print = () => {
     setView({ sheet: 'handOver' });
@@ -43,13 +46,13 @@ export function sketchCommands(services: Services): CommandGroup {
       command('print', 'Print the hand-over', ['Ctrl+P'], print),
       command('copyTable', 'Copy the spacing table', [], copyTable),
       command('exportSvg', 'Export the drawing as SVG', [], () =>
-        downloadSvg(download, drawSheet(), sketchNow().title),
+        downloadSvg(download, drawing(), sketchNow().title),
       ),
       command(
         'exportPng',
         'Export the drawing as PNG',
         [],
-        () => void downloadPng(download, drawSheet(), sketchNow().title, rasterise),
+        () => void downloadPng(download, drawing(), sketchNow().title, rasterise),
       ),
       command('copyLink', 'Copy a link to the sketch', [], () => void copyLink()),
     ],

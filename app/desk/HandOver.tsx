@@ -3,10 +3,13 @@ import { cautionOf, spacingTable } from '../../engine/index.ts';
 import { useReading } from '../live/reading.ts';
 import { select } from '../store/viewStore.ts';
 import { SheetDialog } from '../ui/SheetDialog.tsx';
+import { withCaution } from './cautioned.ts';
 import type { ClipboardHost } from './clipboard.ts';
+import { downloadPng, downloadSvg } from './exports.ts';
 import type { FileHost } from './files.ts';
 import { InlineSvg } from './InlineSvg.tsx';
 import { Notice } from './Notice.tsx';
+import { rasterise } from './rasterise.ts';
 import { SheetChoices } from './SheetChoices.tsx';
 import { SheetTables } from './SheetTables.tsx';
 import { Refusals, TakeAway } from './TakeAway.tsx';
@@ -43,8 +46,19 @@ export function HandOver({ drawSheet, date, scale, clipboard, download, print, o
       <div className="hand-over">
         <div className="hand-over-controls">
           <SheetChoices hasMount={sketch.registerMm !== null} />
-          <TakeAway table={table} whyNot={whyNot} clipboard={clipboard} download={download} print={print} />
-          <Notice />
+          <TakeAway
+            table={table}
+            whyNot={whyNot}
+            clipboard={clipboard}
+            download={download}
+            downloadDrawing={(kind) => {
+              const svg = withCaution(drawSheet(), caution);
+              if (kind === 'SVG') downloadSvg(download, svg, sketch.title);
+              else void downloadPng(download, svg, sketch.title, rasterise);
+            }}
+            print={print}
+          />
+          <Notice inSheet />
         </div>
         {!spacing.ok && (
           <Refusals

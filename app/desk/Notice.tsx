@@ -2,6 +2,7 @@ import { useEffect, useId } from 'react';
 import { useStore } from 'zustand';
 import type { Note } from '../../engine/index.ts';
 import { dismissNote, sketchStore } from '../store/sketchStore.ts';
+import { viewStore } from '../store/viewStore.ts';
 import { Icon } from '../ui/Icon.tsx';
 import { faultsLine } from './faultsText.ts';
 import type { NoticeBox } from './notices.ts';
@@ -15,9 +16,10 @@ const STAY_MS = 8000;
  * The one quiet place for messages: the newest notice, and above it why the last edit was refused. It never takes the
  * focus. A modal sheet shows its own, since what lies behind it is out of reach.
  */
-export function Notice() {
-  const notice = useStore(noticeStore, (state) => state.notice);
-  const note = useStore(sketchStore, (doc) => doc.note);
+export function Notice({ inSheet = false }: { readonly inSheet?: boolean }) {
+  const covered = useStore(viewStore, ({ sheet }) => !inSheet && (sheet === 'shelf' || sheet === 'handOver'));
+  const notice = useStore(noticeStore, (state) => (covered ? null : state.notice));
+  const note = useStore(sketchStore, (doc) => (covered ? null : doc.note));
   const leaves = notice !== null && !notice.urgent && notice.action === null;
   const id = notice?.id;
 

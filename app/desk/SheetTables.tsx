@@ -38,12 +38,8 @@ function BlockTable({ title, block }: { readonly title: string; readonly block: 
         <caption className="desk-head">{title}</caption>
         <thead>
           <tr>
-            {block.columns.map((column) => (
-              <th
-                key={column.id}
-                scope="col"
-                className={column.kind === 'name' ? 'sheet-table-name' : undefined}
-              >
+            {block.columns.map((column, index) => (
+              <th key={column.id} scope="col" className={index === 0 ? 'sheet-table-name' : undefined}>
                 {column.title}
                 {column.unit !== '' && <span className="sheet-table-unit"> {column.unit}</span>}
               </th>
@@ -55,7 +51,7 @@ function BlockTable({ title, block }: { readonly title: string; readonly block: 
             <tr key={row.id}>
               {block.columns.map((column, index) => {
                 const cell = row.cells[index];
-                return column.kind === 'name' && index === 0 ? (
+                return index === 0 ? (
                   <th key={column.id} scope="row" className="sheet-table-name">
                     {textOf(cell)}
                   </th>

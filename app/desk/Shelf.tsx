@@ -60,7 +60,7 @@ export function Shelf({ desk, onClose }: ShelfProps) {
             </button>
           </p>
         </section>
-        <Notice />
+        <Notice inSheet />
       </div>
     </SheetDialog>
   );
@@ -93,21 +93,22 @@ function Entries({ desk, onOpen }: EntriesProps) {
   if (!shelf.ok) return <p className="desk-bad">{shelf.why}</p>;
   return (
     <div ref={place} tabIndex={-1}>
-      {shelf.value.length === 0 && (
+      {shelf.value.length === 0 ? (
         <p className="desk-quiet">Nothing yet: give the open sketch a name above to keep it.</p>
+      ) : (
+        <ul className="shelf-list">
+          {shelf.value.map((entry) => (
+            <ShelfRow
+              key={entry.name}
+              entry={entry}
+              isOpen={entry.name === openName}
+              shelf={desk.shelf}
+              onOpen={() => onOpen(entry.name)}
+              onGone={() => place.current?.focus()}
+            />
+          ))}
+        </ul>
       )}
-      <ul className="shelf-list">
-        {shelf.value.map((entry) => (
-          <ShelfRow
-            key={entry.name}
-            entry={entry}
-            isOpen={entry.name === openName}
-            shelf={desk.shelf}
-            onOpen={() => onOpen(entry.name)}
-            onGone={() => place.current?.focus()}
-          />
-        ))}
-      </ul>
     </div>
   );
 }

@@ -13,11 +13,15 @@ interface TakeAwayProps {
   readonly whyNot: string;
   readonly clipboard: ClipboardHost;
   readonly download: FileHost['download'];
+  readonly downloadDrawing: (kind: 'SVG' | 'PNG') => void;
   readonly print: () => void;
 }
 
-/** Copy and download of every text form, and print. */
-export function TakeAway({ table, whyNot, clipboard, download, print }: TakeAwayProps) {
+const DRAWINGS = ['SVG', 'PNG'] as const;
+
+/** Copy and download of every text form of the table, download of the drawing, and print. */
+export function TakeAway(props: TakeAwayProps) {
+  const { table, whyNot, clipboard, download, downloadDrawing, print } = props;
   const refused = table === null ? { disabled: true, 'aria-describedby': whyNot } : {};
   return (
     <div className="take-away">
@@ -50,6 +54,20 @@ export function TakeAway({ table, whyNot, clipboard, download, print }: TakeAway
             </li>
           );
         })}
+        {DRAWINGS.map((kind) => (
+          <li key={kind} className="take-away-form">
+            <span className="take-away-name">{kind} drawing</span>
+            <button
+              type="button"
+              className="icon-button"
+              aria-label={`Download the drawing as ${kind}`}
+              {...refused}
+              onClick={() => downloadDrawing(kind)}
+            >
+              <Icon name="save" />
+            </button>
+          </li>
+        ))}
       </ul>
       <button type="button" className="main-button" {...refused} onClick={print}>
         Print

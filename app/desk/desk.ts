@@ -33,6 +33,8 @@ export interface Desk {
   readonly shelf: Shelf;
   /** Puts back sketch and view as they were left, or the demo; then opens the sketch in `hash`, if it holds one. */
   readonly reopen: (hash: string) => Promise<void>;
+  /** Opens the sketch that a link's hash carries; true when one is open, false when there is none or it is damaged. */
+  readonly openLink: (hash: string) => Promise<boolean>;
   /** Starts to save by itself; returns the way to stop. Call it once `reopen` is done. */
   readonly watch: () => () => void;
   /** Writes at once what is not yet written: the page may be about to go. */
@@ -81,6 +83,13 @@ export function createDesk(parts: DeskParts): Desk {
     return false;
   };
 
+  const openLink = async (hash: string) => {
+    const linked = await textInHash(hash);
+    return openRead(
+      linked?.ok ? { ok: true, value: { name: 'The link', text: linked.value, handle: null } } : linked,
+    );
+  };
+
   const openStarter = async (starter: Starter) => {
     const parsed = await loadStarter(fetchText, starter);
     if (parsed.ok) await session.open(parsed.sketch, {});
@@ -127,11 +136,9 @@ export function createDesk(parts: DeskParts): Desk {
       const view = await storage.readView();
       await restore();
       if (view.ok) setView(viewFrom(view.value));
-      const linked = await textInHash(hash);
-      await openRead(
-        linked?.ok ? { ok: true, value: { name: 'The link', text: linked.value, handle: null } } : linked,
-      );
+      await openLink(hash);
     },
+    openLink,
     watch: () => {
       const stops = [session.watch(), viewStore.subscribe(viewSave.mark)];
       return () => {

@@ -19,9 +19,12 @@ export async function linkOf(sketch: Sketch, page: string): Promise<Outcome<stri
     : none('The sketch is too large for a link: save it as a file instead.');
 }
 
+/** Whether the hash of an address carries a sketch. */
+export const carriesSketch = (hash: string): boolean => hash.startsWith(MARK);
+
 /** The sketch text that the hash of a link carries; null when it carries none, a sentence when it is damaged. */
 export async function textInHash(hash: string): Promise<Outcome<string, string> | null> {
-  if (!hash.startsWith(MARK)) return null;
+  if (!carriesSketch(hash)) return null;
   const damaged = none('The link holds a damaged sketch: ask for it again, or for the file.');
   try {
     const packed = new Blob([fromBase64Url(hash.slice(MARK.length))]);

@@ -1,6 +1,6 @@
-import { describe, expect, test } from 'vitest';
+import { afterEach, describe, expect, test, vi } from 'vitest';
 import type { KeyPlace, KeyPress } from '../../../app/commands/keys.ts';
-import { commandFor, keyName } from '../../../app/commands/keys.ts';
+import { commandFor, keyName, listenToKeys } from '../../../app/commands/keys.ts';
 import { keyWords } from '../../../app/commands/keyWords.ts';
 import type { Command } from '../../../app/store/command.ts';
 
@@ -90,4 +90,25 @@ describe('keys', () => {
     expect(keyWords('Ctrl+Shift+Z', true)).toBe('⌘⇧Z');
     expect(keyWords('Ctrl+Shift+Z', false)).toBe('Ctrl+Shift+Z');
   });
+
+  test('keys go on being heard, and what is not available is left alone', () => {
+    vi.stubGlobal('Element', class {});
+    const page = new EventTarget();
+    let runs = 0;
+    const command: Command = {
+      id: 'undo',
+      label: 'Undo',
+      keys: ['Ctrl+Z'],
+      available: () => runs < 2,
+      run: () => {
+        runs += 1;
+      },
+    };
+    const stop = listenToKeys(page as Document, new Map([['undo', command]]).values(), () => false);
+    for (let time = 0; time < 4; time += 1)
+      page.dispatchEvent(Object.assign(new Event('keydown'), press('z', ctrl)));
+    expect(runs).toBe(2);
+    stop();
+  });
+  afterEach(() => vi.unstubAllGlobals());
 });

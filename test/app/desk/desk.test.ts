@@ -3,6 +3,7 @@ import type { DeskParts } from '../../../app/desk/desk.ts';
 import { createDesk } from '../../../app/desk/desk.ts';
 import { deskStore, dismissRefused } from '../../../app/desk/deskStore.ts';
 import type { KeyValues } from '../../../app/desk/keyValues.ts';
+import { followLinks } from '../../../app/desk/links.ts';
 import { dismissNotice, noticeStore } from '../../../app/desk/notices.ts';
 import { createStorage } from '../../../app/desk/storage.ts';
 import {
@@ -296,6 +297,31 @@ describe('the desk', () => {
     expect(link.value).toMatch(/^https:\/\/example\.org\/gapwright\/\?x=1#sketch=[\w-]+$/);
     await tab(memory().keyValues, {}, new URL(link.value).hash);
     expect(title()).toBe('from afar');
+  });
+
+  test('a link followed while the page is open opens, keeps what was there, and leaves the address', async () => {
+    vi.useRealTimers();
+    const desk = await tab(memory().keyValues);
+    rename('from afar');
+    const link = await desk.link('https://example.org/');
+    if (!link.ok) throw new Error(link.why);
+    rename('my work');
+    const page = Object.assign(new EventTarget(), {
+      location: { hash: '', pathname: '/', search: '?x=1' },
+      history: {
+        replaceState: (_state: unknown, _title: string, address: string) => {
+          page.location = { ...page.location, hash: '' };
+          addresses.push(address);
+        },
+      },
+    });
+    const addresses: string[] = [];
+    stops.push(followLinks(desk, page as unknown as Window));
+    page.location = { ...page.location, hash: new URL(link.value).hash };
+    page.dispatchEvent(new Event('hashchange'));
+    await vi.waitFor(() => expect(addresses).toEqual(['/?x=1']));
+    expect(title()).toBe('from afar');
+    expect(notice()?.text).toBe('“my work” is kept on the shelf.');
   });
 
   test('a damaged link is said in one sentence and opens nothing', async () => {

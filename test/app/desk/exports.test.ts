@@ -1,4 +1,5 @@
 import { beforeEach, describe, expect, test } from 'vitest';
+import { withCaution } from '../../../app/desk/cautioned.ts';
 import { downloadPng, downloadSvg, downloadTable, svgSize, withStyle } from '../../../app/desk/exports.ts';
 import { dismissNotice, noticeStore } from '../../../app/desk/notices.ts';
 import type { PartId, SpacingTable } from '../../../engine/index.ts';
@@ -66,5 +67,18 @@ describe('what is taken away', () => {
   test('a style goes into the root and nowhere else', () => {
     expect(withStyle(svg, 'a{}')).toContain('role="img"><style>a{}</style><path/>');
     expect(withStyle(svg, '')).toBe(svg);
+  });
+
+  test('a caution stands under the whole drawing, broken into lines that fit, and the drawing is inside as it was', () => {
+    const caution = 'Caution: sunlight & laser beams burn. '.repeat(4).trim();
+    const whole = withCaution(svg, caution);
+    const inner = svg.slice(svg.indexOf('<svg'));
+    expect(whole).toContain(inner);
+    expect(whole.match(/<\?xml/)).toBeNull();
+    const lines = [...whole.matchAll(/<text[^>]*>(.*?)<\/text>/g)].map((line) => line[1] ?? '');
+    expect(lines.length).toBeGreaterThan(2);
+    expect(lines.join(' ')).toBe(caution.replaceAll('&', '&amp;'));
+    expect(svgSize(whole)?.heightPx).toBeGreaterThan(200 + 18 * lines.length);
+    expect(withCaution(svg, null)).toBe(svg);
   });
 });

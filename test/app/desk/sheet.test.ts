@@ -39,6 +39,7 @@ describe('the hand-over sheet', () => {
         whyNot: 'why',
         clipboard: {},
         download: () => {},
+        downloadDrawing: () => {},
         print: () => {},
       }),
     );
@@ -63,6 +64,7 @@ describe('the hand-over sheet', () => {
         whyNot: 'why',
         clipboard: {},
         download: () => {},
+        downloadDrawing: () => {},
         print: () => {},
       }),
     );

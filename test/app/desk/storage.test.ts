@@ -1,4 +1,5 @@
-import { describe, expect, test } from 'vitest';
+import { afterEach, describe, expect, test, vi } from 'vitest';
+import { browserKeyValues } from '../../../app/desk/keyValues.ts';
 import { createStorage, storageSentence } from '../../../app/desk/storage.ts';
 import { failure, memory } from './fakes.ts';
 
@@ -75,5 +76,28 @@ describe('what is kept in the browser', () => {
 
   test('something thrown that is no error still has a sentence', () => {
     expect(storageSentence('odd')).toBe("This browser's storage failed: save the sketch as a file.");
+  });
+});
+
+describe("the browser's own storage", () => {
+  afterEach(() => {
+    vi.unstubAllGlobals();
+    vi.useRealTimers();
+  });
+
+  test('where there is none, that is said', async () => {
+    const result = await createStorage(browserKeyValues()).readOpen();
+    expect(!result.ok && result.why).toMatch(/^This browser has no storage for sketches/);
+  });
+
+  test('one that never answers does not hold up the start', async () => {
+    vi.useFakeTimers();
+    vi.stubGlobal('indexedDB', { open: () => ({}) });
+    const reading = createStorage(browserKeyValues()).readOpen();
+    await vi.advanceTimersByTimeAsync(10_000);
+    expect(await reading).toEqual({
+      ok: false,
+      why: "This browser's storage does not answer: save the sketch as a file.",
+    });
   });
 });
