@@ -9,6 +9,7 @@ import { JogStrip } from './layout/JogStrip.tsx';
 import { Layout } from './layout/Layout.tsx';
 import { Tray } from './layout/Tray.tsx';
 import { useThemeName } from './layout/theme.ts';
+import { ViewTools } from './layout/ViewTools.tsx';
 import { Bar } from './page/Bar.tsx';
 import { BottomBar } from './page/BottomBar.tsx';
 import { Drawers } from './page/Drawers.tsx';
@@ -43,6 +44,7 @@ export function App({ groups, commands, services, board, onBoard }: AppProps) {
       </aside>
       <main className="app-sheet">
         <Layout theme={theme} onBoard={onBoard} say={say} speak={(text) => text && announce(text)} />
+        <ViewTools board={board} />
         <Hints />
         <div className="app-notice">
           <Notice />

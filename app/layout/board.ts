@@ -12,11 +12,12 @@ import { createSurface } from '../board/surface.ts';
 import type { Fold, Viewport } from '../board/viewport.ts';
 import { panBy, refolded, stretchBy, withLengthAt, xOf, zOf, zoomAbout } from '../board/viewport.ts';
 import type { Handle } from '../drawing/handle.ts';
+import { labelHandles } from '../drawing/handles/labels.ts';
 import { partIn, type Scene } from '../drawing/scene.ts';
 import { frameLoop } from '../live/frame.ts';
 import { currentReading, onReading } from '../live/reading.ts';
 import { sketchStore } from '../store/sketchStore.ts';
-import { setView, viewStore } from '../store/viewStore.ts';
+import { type Selected, setView, viewStore } from '../store/viewStore.ts';
 import { cameraAt, fitCamera, foldIn, needsFit, sameFold, viewportOf } from './camera.ts';
 import { createHand, type Hand } from './hand.ts';
 import { type HandState, overlayLayer } from './overlay.ts';
@@ -43,7 +44,6 @@ export interface Board extends Pick<Hand, 'jog' | 'endJog' | 'type'> {
   readonly fit: (what: 'parts' | 'everything') => void;
   /** The picture of the last frame; null before the first. */
   readonly picture: () => Picture | null;
-  readonly panBy: (dxPx: number) => void;
   readonly stretchBy: (factor: number) => void;
   readonly zoomBy: (factor: number) => void;
   /** The length on the axis under a point of the window; null when the point is not over the board. */
@@ -59,17 +59,33 @@ type Layer = 'rays' | 'parts' | 'overlay';
 
 const NONE: ReadonlySet<string> = new Set();
 
+const PAN_PX = 40;
+const zoomBy = (factor: number) => (view: Viewport) => zoomAbout(view, view.widthPx / 2, factor);
+
+/** What the keys do to the view while no grip has the focus. */
+const KEYS: Readonly<Record<string, (view: Viewport) => Viewport>> = {
+  ArrowLeft: (view) => panBy(view, PAN_PX, 0),
+  ArrowRight: (view) => panBy(view, -PAN_PX, 0),
+  ArrowUp: (view) => stretchBy(view, 1.1),
+  ArrowDown: (view) => stretchBy(view, 1 / 1.1),
+  '+': zoomBy(1.2),
+  '=': zoomBy(1.2),
+  '-': zoomBy(1 / 1.2),
+};
+
 /** Mounts the board in `element`: it draws a frame whenever the reading changes and gives the hand its grips. */
 export function createBoard(element: HTMLElement, client: BoardClient): Board {
   let picture: Picture | null = null;
   let labelPlaces: readonly LabelPlace[] = [];
+  let labelGrips: readonly Handle[] = [];
   let fold: Fold | null = null;
   let drawn: Sketch | null = null;
   let resized = true;
-  let state: HandState = { hover: null, focus: null, dragging: null, dropXPx: null };
+  let selected: readonly Selected[] = viewStore.getState().selection;
+  let state: HandState = { hover: null, focus: null, ring: false, dragging: null, dropXPx: null };
 
-  const handleOf = (id: string | null): Handle | null =>
-    picture?.handles.find((handle) => handle.id === id) ?? null;
+  const grips = (): readonly Handle[] => [...(picture?.handles ?? []), ...labelGrips];
+  const handleOf = (id: string | null): Handle | null => grips().find((handle) => handle.id === id) ?? null;
   const view = (): Viewport => viewportOf(viewStore.getState().camera, surface.size(), fold);
   const show = (change: Partial<HandState>) => {
     state = { ...state, ...change };
@@ -119,6 +135,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     mirror.update(now.handles);
     if (drawn !== now.reading.sketch) speak();
     drawn = now.reading.sketch;
+    followSelection(now.reading.view.selection);
     client.onFrame();
   };
 
@@ -148,6 +165,15 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     if (camera !== viewStore.getState().camera) setView({ camera });
   };
 
+  /** While the drawing has the focus, the newly selected part's grip takes it, so that the arrow keys move it. */
+  const followSelection = (selection: readonly Selected[]) => {
+    const changed = selection !== selected;
+    selected = selection;
+    const [only] = selection;
+    if (!changed || only === undefined || !element.contains(document.activeElement)) return;
+    mirror.focus(only === 'object' ? 'object:foot' : only === 'image' ? 'image' : `part:${only}`);
+  };
+
   const drawParts = () => {
     const now = picture;
     if (!now) return;
@@ -156,23 +182,31 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
       const frozen = still ? new Set(labelPlaces.map(({ id }) => id)) : NONE;
       labelPlaces = paintParts(pen, now, state.hover, labelPlaces, frozen);
     });
+    labelGrips = labelHandles(now.sight, labelPlaces);
     paint('overlay', (pen) => overlayLayer(pen, now.handles, now.view, now.plan.topPx, state));
   };
 
   const host = createHost(element, {
-    grips: () => picture?.handles ?? [],
+    grips,
     snapOn: () => viewStore.getState().snap,
     onEffect: hand.onEffect,
   });
   const mirror = createSliderMirror(element, {
     onStep: (id, steps, { shift }) => hand.step(id, steps * keyStepMm(view()), shift),
     onFocus: (focus) => {
-      show({ focus });
+      show({ focus, ring: document.activeElement?.matches(':focus-visible') ?? false });
       speak();
     },
     onEnter: hand.type,
   });
   const stopReading = onReading(draw);
+  const onKeyDown = (event: KeyboardEvent) => {
+    const change = event.target === element && !event.ctrlKey && !event.metaKey ? KEYS[event.key] : undefined;
+    if (!change) return;
+    event.preventDefault();
+    changeView(change);
+  };
+  element.addEventListener('keydown', onKeyDown);
   Object.assign(element, { record: () => recorded(picture) });
 
   const changeView = (change: (view: Viewport) => Viewport) => setView({ camera: cameraAt(change(view())) });
@@ -183,9 +217,8 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     type: hand.type,
     fit: (what) => setView({ camera: fitCamera(sceneOfReading(currentReading()), surface.size(), what) }),
     picture: () => picture,
-    panBy: (dxPx) => changeView((now) => panBy(now, dxPx, 0)),
     stretchBy: (factor) => changeView((now) => stretchBy(now, factor)),
-    zoomBy: (factor) => changeView((now) => zoomAbout(now, now.widthPx / 2, factor)),
+    zoomBy: (factor) => changeView(zoomBy(factor)),
     lengthAt(clientX, clientY) {
       const box = element.getBoundingClientRect();
       const xPx = clientX - box.left;
@@ -198,6 +231,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     repaint: draw,
     destroy() {
       stopReading();
+      element.removeEventListener('keydown', onKeyDown);
       host.destroy();
       mirror.destroy();
       surface.destroy();

@@ -2,6 +2,7 @@ import type { Effect, PointerKind } from '../board/hand.ts';
 import type { Viewport } from '../board/viewport.ts';
 import { panBy, stretchBy, withLengthAt, xOf, zOf, zoomAbout } from '../board/viewport.ts';
 import type { Handle, Move } from '../drawing/handle.ts';
+import { typedByLabel } from '../drawing/handles/labels.ts';
 import { frameLoop } from '../live/frame.ts';
 import { applyEdit, cancelEdit, commitEdit, previewEdit, sketchStore } from '../store/sketchStore.ts';
 import { type Selected, setView, viewStore } from '../store/viewStore.ts';
@@ -90,7 +91,9 @@ export function createHand(board: HandBoard): Hand {
     const handle = board.handleOf(effect.grip);
     if (!handle) return setView({ selection: [] });
     const { shift, ctrl, meta } = effect.modifiers;
-    if (handle.id.startsWith('cell:') || effect.do === 'double click') type(handle.id);
+    const labelled = typedByLabel(handle.id);
+    if (labelled) setView({ typing: labelled });
+    else if (handle.id.startsWith('cell:') || effect.do === 'double click') type(handle.id);
     else if (handle.selects && (shift || ctrl || meta)) toggle(handle.selects);
     else if (handle.selects) setView({ selection: [handle.selects] });
     if (handle.slider) board.focus(handle);

@@ -8,6 +8,8 @@ import type { Handle, Move } from '../drawing/handle.ts';
 export interface HandState {
   readonly hover: string | null;
   readonly focus: string | null;
+  /** Whether the focus came by the keyboard and shows its ring. */
+  readonly ring: boolean;
   readonly dragging: {
     readonly id: string;
     readonly xPx: number;
@@ -32,7 +34,7 @@ export function overlayLayer(
 ): void {
   for (const handle of handles)
     drawGrip(pen, handle, handle.id === hand.hover || handle.id === hand.dragging?.id);
-  const focused = handles.find(({ id }) => id === hand.focus);
+  const focused = hand.ring ? handles.find(({ id }) => id === hand.focus) : undefined;
   if (focused) drawFocus(pen, focused);
   if (hand.dropXPx !== null) segment(pen, hand.dropXPx, 16, hand.dropXPx, bottomPx, 'drop place');
   const { dragging } = hand;

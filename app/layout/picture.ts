@@ -6,7 +6,7 @@ import { partHandles } from '../drawing/handles/parts.ts';
 import { type Label, labelsOf } from '../drawing/layers/labels.ts';
 import type { Scene } from '../drawing/scene.ts';
 import { sceneOf } from '../drawing/scene.ts';
-import { sightOf } from '../drawing/sight.ts';
+import { type Sight, sightOf } from '../drawing/sight.ts';
 import type { Reading } from '../live/reading.ts';
 import { cellsOf } from '../ribbon/cells.ts';
 import { ribbonHandles } from '../ribbon/handles.ts';
@@ -20,6 +20,7 @@ export interface Picture {
   readonly plan: RibbonPlan;
   readonly labels: readonly Label[];
   readonly handles: readonly Handle[];
+  readonly sight: Sight;
 }
 
 /** The scene of a reading. */
@@ -36,6 +37,7 @@ export function pictureOf(
   const plan = ribbonPlan(cellsOf(sight), sight, measure);
   return {
     reading,
+    sight,
     view,
     scene,
     plan,

@@ -78,6 +78,9 @@ function image(pen: Pen, scene: Scene, view: Viewport): void {
   segment(pen, x, yOf(view, 0) - 6, x, yOf(view, 0) + 6, 'object');
 }
 
+/** The room that the scale bar and the heights' factor take at the lower right. */
+export const SCALE_PX = { width: 262, height: 62 } as const;
+
 /** The scale bar with its unit, and how much taller heights are drawn, at the lower right. */
 export function scaleLayer(pen: Pen, view: Viewport, unit: LengthUnit, bottomPx: number): void {
   const bar = scaleBar(view, 110, unit === 'in' ? MM_PER_INCH : 1);

@@ -8,7 +8,7 @@ import { xOf, yOf } from '../../board/viewport.ts';
 import type { LengthUnit } from '../../store/viewStore.ts';
 import type { Scene, ScenePart } from '../scene.ts';
 import { nameOf, plain, plainLength } from '../words.ts';
-import { objectTipPx } from './ends.ts';
+import { objectTipPx, SCALE_PX } from './ends.ts';
 
 /** A text on the drawing, before its place is found. */
 export interface Label extends LabelWish {
@@ -170,7 +170,13 @@ export function labelsLayer(
 ): readonly LabelPlace[] {
   const bounds = { xPx: 4, yPx: 4, widthPx: view.widthPx - 8, heightPx: view.heightPx - 8 };
   const inside = labels.filter(({ xPx }) => xPx >= 0 && xPx <= view.widthPx);
-  const places = placeLabels(inside, { bounds, former, frozen });
+  const scale = {
+    xPx: view.widthPx - SCALE_PX.width,
+    yPx: view.heightPx - SCALE_PX.height,
+    widthPx: SCALE_PX.width,
+    heightPx: SCALE_PX.height,
+  };
+  const places = placeLabels(inside, { bounds, obstacles: [scale], former, frozen });
   for (const [i, place] of places.entries()) {
     const label = inside[i];
     if (!label) continue;
