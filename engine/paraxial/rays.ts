@@ -7,7 +7,7 @@ import { type Axial, axialOf } from './axial.ts';
 import { firstOrder } from './firstOrder.ts';
 import { isNegligible } from './scale.ts';
 import { type Stop, stopOf } from './stop.ts';
-import { isFiniteRay, type ParaxialRay, scaledRay } from './trace.ts';
+import { emptyRay, isFiniteRay, type ParaxialRay, scaledRay } from './trace.ts';
 
 export type RayOutcome = Outcome<ParaxialRay, Absence>;
 
@@ -59,7 +59,7 @@ export function bundle(
   chief: ParaxialRay,
   fraction: number,
   pupil: number,
-  into: ParaxialRay = { y: new Float64Array(train.count), nu: new Float64Array(train.count + 1) },
+  into: ParaxialRay = emptyRay(train.count),
 ): ParaxialRay {
   for (let k = 0; k < train.count; k++) into.y[k] = fraction * chief.y[k]! + pupil * marginal.y[k]!;
   for (let k = 0; k <= train.count; k++) into.nu[k] = fraction * chief.nu[k]! + pupil * marginal.nu[k]!;

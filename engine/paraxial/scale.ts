@@ -1,7 +1,7 @@
 import { none } from '../outcome.ts';
 import type { Train } from '../train/types.ts';
 import { type Absence, finite, type Quantity } from './absence.ts';
-import { type ParaxialRay, powerAt } from './trace.ts';
+import { emptyRay, type ParaxialRay, powerAt } from './trace.ts';
 
 /** Share of its scale below which a number counts as 0: rounding stays a thousand times smaller, drawn layouts far larger. */
 const NEGLIGIBLE = 1e-12;
@@ -28,7 +28,7 @@ export function axisCrossing(n: number, y: number, nu: number, nuScale: number, 
  * thirty afocal.
  */
 export function rayScale(train: Train, surface: number, yMm: number, nu: number): ParaxialRay {
-  const scale = { y: new Float64Array(train.count), nu: new Float64Array(train.count + 1) };
+  const scale = emptyRay(train.count);
   spreadBehind(train, scale, surface, yMm, nu);
   spreadInFront(train, scale, surface, yMm, nu);
   return scale;

@@ -13,6 +13,12 @@ export interface ParaxialRay {
 export const paraxialRay = (train: Train, yMm: number, nu: number): ParaxialRay =>
   rayThrough(train, 0, yMm, nu);
 
+/** A ray of zeros through `count` surfaces, its two lists in one block. */
+export function emptyRay(count: number): ParaxialRay {
+  const block = new Float64Array(2 * count + 1);
+  return { y: block.subarray(0, count), nu: block.subarray(count) };
+}
+
 /**
  * The ray that meets `surface` at height `yMm` with index times slope `nu` in front of it, traced both ways from there, so that a ray
  * through the centre of the stop is there exactly 0. Transfer y′ = y + t·nu/n, refraction nu′ = nu − φ·y (Kingslake, Lens Design
@@ -20,7 +26,7 @@ export const paraxialRay = (train: Train, yMm: number, nu: number): ParaxialRay 
  */
 export function rayThrough(train: Train, surface: number, yMm: number, nu: number): ParaxialRay {
   const { count, gap, index } = train;
-  const ray = { y: new Float64Array(count), nu: new Float64Array(count + 1) };
+  const ray = emptyRay(count);
   let height = yMm;
   let slope = nu;
   ray.nu[surface] = slope;
@@ -70,10 +76,12 @@ export const slopeIn = (train: Train, ray: ParaxialRay, space: number): number =
   ray.nu[space]! / train.index[space]!;
 
 /** `factor` times the ray. */
-export const scaledRay = (ray: ParaxialRay, factor: number): ParaxialRay => ({
-  y: ray.y.map((y) => y * factor),
-  nu: ray.nu.map((nu) => nu * factor),
-});
+export function scaledRay(ray: ParaxialRay, factor: number): ParaxialRay {
+  const result = emptyRay(ray.y.length);
+  for (let k = 0; k < ray.y.length; k++) result.y[k] = factor * ray.y[k]!;
+  for (let k = 0; k < ray.nu.length; k++) result.nu[k] = factor * ray.nu[k]!;
+  return result;
+}
 
 /** True when every number of the ray is finite. */
 export const isFiniteRay = (ray: ParaxialRay): boolean =>

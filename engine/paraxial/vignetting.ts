@@ -84,26 +84,32 @@ function meridianOf(discs: readonly Disc[]): Vignetting['meridian'] {
   return lower < upper ? { lower, upper, lowerSurface, upperSurface } : null;
 }
 
-/** Area common to all discs, in units of the pupil radius squared. All centres lie on one line, so one strip width serves. */
+/**
+ * Area common to all discs, in units of the pupil radius squared. All centres lie on the meridian, so the squared half widths differ by
+ * straight lines in the height: walking up, the narrowest disc gives way only to one that is centred lower.
+ */
 function commonArea(discs: readonly Disc[], lower: number, upper: number): number {
-  const breaks = [lower, upper];
-  for (const [i, one] of discs.entries()) {
-    for (const other of discs.slice(i + 1)) {
-      const at = crossing(one, other);
-      if (at > lower && at < upper) breaks.push(at);
-    }
-  }
-  breaks.sort((one, other) => one - other);
+  let disc = narrowest(discs, lower);
+  let from = lower;
   let area = 0;
-  for (let i = 0; i + 1 < breaks.length; i++) {
-    const from = breaks[i] ?? lower;
-    const to = breaks[i + 1] ?? upper;
-    area += stripArea(narrowest(discs, (from + to) / 2), from, to);
+  while (from < upper) {
+    let to = upper;
+    let next = disc;
+    for (const other of discs) {
+      if (other.centre >= disc.centre) continue;
+      const at = Math.max(from, crossing(disc, other));
+      if (at >= to) continue;
+      to = at;
+      next = other;
+    }
+    area += stripArea(disc, from, to);
+    from = to;
+    disc = next;
   }
   return area;
 }
 
-/** Where the circles of two discs cross, on the meridian; not finite for equal centres. */
+/** Where the circles of two discs cross, on the meridian. */
 const crossing = (one: Disc, other: Disc): number =>
   (one.centre +
     other.centre +

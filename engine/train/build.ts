@@ -39,15 +39,13 @@ export interface TrainSpec {
  */
 export function buildTrain(spec: TrainSpec): Train {
   const count = spec.surfaces.length;
-  const gap = new Float64Array(count);
-  const z = new Float64Array(count);
-  const curvature = new Float64Array(count);
-  const conic = new Float64Array(count);
-  const thinPower = new Float64Array(count);
-  const index = new Float64Array(count + 1);
-  const indexSpread = new Float64Array(count + 1);
-  const powerSpread = new Float64Array(count);
-  const semiDiameter = new Float64Array(count);
+  // One block for all the numbers: a small buffer of its own for each array costs more than filling it.
+  const block = new Float64Array(9 * count + 2);
+  const list = (place: number) => block.subarray(place * count, (place + 1) * count);
+  const [gap, z, curvature, conic] = [list(0), list(1), list(2), list(3)];
+  const [thinPower, powerSpread, semiDiameter] = [list(4), list(5), list(6)];
+  const index = block.subarray(7 * count, 8 * count + 1);
+  const indexSpread = block.subarray(8 * count + 1);
   const partOf = new Int32Array(count);
   index[0] = spec.objectIndex;
   indexSpread[0] = spec.objectSpread ?? 0;

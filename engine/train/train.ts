@@ -53,29 +53,37 @@ function pushSurfaces(
   isStop: boolean,
 ): void {
   const after = drawn.space.medium;
-  const behind = { part, indexAfter: indexIn(after, share), spreadAfter: spreadOf(after), gapMm };
-  const semiDiameterMm = drawn.semiDiameterMm ?? Number.POSITIVE_INFINITY;
+  const indexAfter = indexIn(after, share);
+  const spreadAfter = spreadOf(after);
+  let thinPowerPerMm = 0;
+  let powerSpreadPerMm = 0;
+  let semiDiameterMm = drawn.semiDiameterMm ?? Number.POSITIVE_INFINITY;
   if (drawn.kind === 'thin') {
     const power = 1 / drawn.focalLengthMm;
-    const powerSpreadPerMm = drawn.abbeNumber === null ? 0 : power / drawn.abbeNumber;
-    surfaces.push({
-      ...behind,
-      thinPowerPerMm: power + powerSpreadPerMm * share,
-      powerSpreadPerMm,
-      semiDiameterMm,
-    });
+    powerSpreadPerMm = drawn.abbeNumber === null ? 0 : power / drawn.abbeNumber;
+    thinPowerPerMm = power + powerSpreadPerMm * share;
   } else if (drawn.kind === 'plate') {
     surfaces.push({
       part,
+      thinPowerPerMm,
+      powerSpreadPerMm,
       semiDiameterMm,
       indexAfter: indexIn(drawn.material, share),
       spreadAfter: spreadOf(drawn.material),
       gapMm: drawn.thicknessMm,
     });
-    surfaces.push({ ...behind, semiDiameterMm });
-  } else {
-    surfaces.push(isStop ? behind : { ...behind, semiDiameterMm });
+  } else if (isStop) {
+    semiDiameterMm = Number.POSITIVE_INFINITY;
   }
+  surfaces.push({
+    part,
+    thinPowerPerMm,
+    powerSpreadPerMm,
+    semiDiameterMm,
+    indexAfter,
+    spreadAfter,
+    gapMm,
+  });
 }
 
 const spreadOf = (medium: Medium): number =>
