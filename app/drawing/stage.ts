@@ -22,6 +22,8 @@ const EMPTY_AXIS_MM = 200;
 /** The lead of rays in front of the first and behind the last part when the end itself is far away, as a share of the parts' length. */
 const LEAD_SHARE = 0.35;
 const LEAST_LEAD_MM = 10;
+/** An image is drawn up to this many times the parts' length, or the shortest focal length, away from them. */
+const FAR = 20;
 
 /** The stage of a sketch at one setting. Never empty: a sketch without parts has 200 mm of axis. */
 export function stageOf(sketch: Sketch, analysis: Analysis): Stage {
@@ -44,8 +46,9 @@ export function stageOf(sketch: Sketch, analysis: Analysis): Stage {
   const imageMm = places.sensorMm ?? behindLast(conjugates.imagePlaneMm, rears.at(-1) ?? 0);
   const objectMm = places.objectMm;
   const lengthMm = lastMm - firstMm;
-  const farMm = 20 * Math.max(lengthMm, LEAST_LEAD_MM);
-  const imageNear = imageMm !== null && imageMm > lastMm - farMm && imageMm < lastMm + farMm;
+  const farMm = FAR * Math.max(lengthMm, LEAST_LEAD_MM, shortestFocalMm(sketch));
+  const imageNear =
+    imageMm !== null && (places.sensorMm !== null || (imageMm > lastMm - farMm && imageMm < lastMm + farMm));
   const toMm = imageNear ? Math.max(lastMm, imageMm) : lastMm;
   const leadMm = Math.max(LEAST_LEAD_MM, LEAD_SHARE * (toMm - firstMm));
   const startMm = objectMm ?? firstMm - leadMm;
@@ -64,6 +67,13 @@ export function stageOf(sketch: Sketch, analysis: Analysis): Stage {
 export function stageFold(stage: Stage): Fold | null {
   if (stage.objectMm === null) return null;
   return foldOf({ fromMm: stage.objectMm, toMm: stage.parts.fromMm }, stage.parts.toMm - stage.parts.fromMm);
+}
+
+/** The least focal length of the thin parts in size, which a single element is as long as; 0 without any. */
+function shortestFocalMm({ parts }: Sketch): number {
+  const sizes = parts.map((part) => (part.kind === 'thin' ? Math.abs(part.focalLengthMm) : Infinity));
+  const least = Math.min(...sizes);
+  return Number.isFinite(least) ? least : 0;
 }
 
 function behindLast(plane: Outcome<number, string>, lastMm: number): number | null {
