@@ -98,7 +98,7 @@ export function sceneOf(sketch: Sketch, analysis: Analysis, view: View): Scene {
     stop,
     marginal: marginal ? [line(0, 1), line(0, -1)] : [],
     chief: chief ? line(1, 0) : null,
-    axial: marginal && view.shown.bundles ? pupilSteps(view.raysPerBundle, -1, 1).map((p) => line(0, p)) : [],
+    axial: marginal && view.shown.bundles ? axialOf(analysis, view, line) : [],
     bundles: marginal && chief && view.shown.bundles ? bundlesOf(analysis, view, line) : [],
     images: view.shown.images && marginal ? imagesOf(analysis, stage, marginal, chief) : [],
     planes: planesOf(analysis, view),
@@ -185,6 +185,17 @@ function rayLine(
 function pupilSteps(count: number, low: number, high: number): number[] {
   if (count <= 1) return [(low + high) / 2];
   return Array.from({ length: count }, (_, i) => low + ((high - low) * i) / (count - 1));
+}
+
+/** The bundle of the axis point, as far as rims are known to let it through. */
+function axialOf(
+  { vignetting }: Analysis,
+  view: View,
+  line: (share: number, pupil: number) => RayLine,
+): RayLine[] {
+  const onAxis = vignetting.ok ? vignetting.value.find(({ fraction }) => fraction === 0) : undefined;
+  const limits = onAxis ? onAxis.meridian : { lower: -1, upper: 1 };
+  return limits ? pupilSteps(view.raysPerBundle, limits.lower, limits.upper).map((p) => line(0, p)) : [];
 }
 
 function bundlesOf(
