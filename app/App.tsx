@@ -13,6 +13,7 @@ import { ViewTools } from './layout/ViewTools.tsx';
 import { Bar } from './page/Bar.tsx';
 import { BottomBar } from './page/BottomBar.tsx';
 import { Drawers } from './page/Drawers.tsx';
+import { EmptySheet } from './page/EmptySheet.tsx';
 import { Sheets } from './page/Sheets.tsx';
 import { SidePanel } from './page/SidePanel.tsx';
 import type { Commands } from './panels/CommandButton.tsx';
@@ -45,6 +46,7 @@ export function App({ groups, commands, services, board, onBoard }: AppProps) {
       <main className="app-sheet">
         <Layout theme={theme} onBoard={onBoard} say={say} speak={(text) => text && announce(text)} />
         <ViewTools board={board} />
+        <EmptySheet />
         <Hints />
         <div className="app-notice">
           <Notice />

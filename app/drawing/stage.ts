@@ -46,11 +46,12 @@ export function stageOf(sketch: Sketch, analysis: Analysis): Stage {
   const imageMm = places.sensorMm ?? behindLast(conjugates.imagePlaneMm, rears.at(-1) ?? 0);
   const objectMm = places.objectMm;
   const lengthMm = lastMm - firstMm;
+  const aloneMm = sketch.parts.length === 1 ? shortestFocalMm(sketch) : 0;
   const farMm = FAR * Math.max(lengthMm, LEAST_LEAD_MM, shortestFocalMm(sketch));
   const imageNear =
     imageMm !== null && (places.sensorMm !== null || (imageMm > lastMm - farMm && imageMm < lastMm + farMm));
   const toMm = imageNear ? Math.max(lastMm, imageMm) : lastMm;
-  const leadMm = Math.max(LEAST_LEAD_MM, LEAD_SHARE * (toMm - firstMm));
+  const leadMm = Math.max(LEAST_LEAD_MM, aloneMm, LEAD_SHARE * (toMm - firstMm));
   const startMm = objectMm ?? firstMm - leadMm;
   const endMm = imageNear && imageMm > lastMm ? imageMm : lastMm + leadMm;
   return {

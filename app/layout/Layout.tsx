@@ -4,6 +4,7 @@ import type { ThemeName } from '../board/styles.ts';
 import type { Handle } from '../drawing/handle.ts';
 import { setView, viewStore } from '../store/viewStore.ts';
 import { type Board, createBoard } from './board.ts';
+import type { Picture } from './picture.ts';
 import { TypeBox } from './TypeBox.tsx';
 import { setDown } from './tray.ts';
 import './layout.css';
@@ -103,6 +104,12 @@ export function Layout({ theme, onBoard, say, speak }: LayoutProps) {
   );
 }
 
+/** A focal length is typed at its part: its focal points may be far away. */
+function placeOfEntry(handle: Handle, { handles }: Picture): Handle {
+  const part = handle.id.startsWith('focal:') && handles.find(({ id }) => id === `part:${handle.selects}`);
+  return part ? { ...handle, xPx: part.xPx, yPx: (part.line?.topPx ?? part.yPx) - 34 } : handle;
+}
+
 interface TypedProps {
   readonly board: Board | null;
   readonly typing: string | null;
@@ -116,7 +123,7 @@ function Typed({ board, typing }: TypedProps) {
   if (!picture || !handle?.entry) return null;
   return (
     <TypeBox
-      handle={handle}
+      handle={placeOfEntry(handle, picture)}
       entry={handle.entry}
       picture={picture}
       onClose={(back) => {

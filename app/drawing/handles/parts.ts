@@ -58,7 +58,12 @@ export function placing(sight: Sight, part: ScenePart): Pick<Handle, 'drag' | 's
     entry:
       part.part.id === first
         ? null
-        : { label, unit: 'mm', value: part.frontMm, set: (value) => move(value - part.frontMm, false) },
+        : {
+            label,
+            unit: 'mm',
+            value: part.frontMm,
+            set: (value) => move(value - part.frontMm, reading.view.otherRule),
+          },
     why: null,
   };
 }
@@ -70,7 +75,8 @@ function dragPart(
   drag: LayoutDrag,
   move: (deltaMm: number, other: boolean) => Edit,
 ): Move {
-  const snapped = snapTo(catchesFor(sight, ids), part.frontMm + drag.dzMm, drag.toleranceMm, drag.snap);
+  const catches = catchesFor(sight, ids, drag.other);
+  const snapped = snapTo(catches, part.frontMm + drag.dzMm, drag.toleranceMm, drag.snap);
   const deltaMm = snapped.value - part.frontMm;
   const movesFirst = ids.includes(sight.reading.sketch.parts[0]?.id as PartId);
   return {
