@@ -108,8 +108,10 @@ describe('the desk', () => {
 
   test('a drag is not saved before it is released', async () => {
     const { keyValues, kept } = memory();
-    await tab(keyValues);
+    const desk = await tab(keyValues);
+    await desk.flush();
     previewEdit((sketch) => setTitle(sketch, 'half-way'));
+    expect(deskStore.getState().save).toBe('saved');
     await vi.advanceTimersByTimeAsync(QUIET_MS);
     expect(kept.get('open') ?? '').not.toContain('half-way');
     cancelEdit();

@@ -62,6 +62,17 @@ describe('the frame loop', () => {
     expect(runs).toBe(2);
   });
 
+  test('what one frame has done the next one does not do again', () => {
+    const frames = handFrames();
+    const loop = createFrameLoop(frames.request);
+    const ran: string[] = [];
+    loop.ask('draw', 'scene', () => ran.push('scene'));
+    frames.next();
+    loop.ask('draw', 'readers', () => ran.push('readers'));
+    frames.next();
+    expect(ran).toEqual(['scene', 'readers']);
+  });
+
   test('flush does not wait, and the frame that was asked for has nothing left to do', () => {
     const frames = handFrames();
     const loop = createFrameLoop(frames.request);
