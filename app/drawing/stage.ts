@@ -54,11 +54,13 @@ export function stageOf(sketch: Sketch, analysis: Analysis): Stage {
   const leadMm = Math.max(LEAST_LEAD_MM, aloneMm, LEAD_SHARE * (toMm - firstMm));
   const startMm = objectMm ?? firstMm - leadMm;
   const endMm = imageNear && imageMm > lastMm ? imageMm : lastMm + leadMm;
+  // A virtual image close in front of the parts belongs to them.
+  const fromMm = imageNear ? Math.min(firstMm, Math.max(imageMm, firstMm - 2 * leadMm)) : firstMm;
   return {
     startMm,
     endMm,
-    parts: { fromMm: firstMm, toMm: imageNear && imageMm > lastMm ? imageMm : endMm },
-    everything: { fromMm: startMm, toMm: endMm },
+    parts: { fromMm, toMm: endMm },
+    everything: { fromMm: Math.min(startMm, fromMm), toMm: endMm },
     objectMm,
     imageMm: imageNear ? imageMm : null,
   };

@@ -80,7 +80,9 @@ export function cellsOf({ reading, scene }: Sight): readonly Cell[] {
       label: next ? `gap behind ${name}` : `${scene.sensorFixed ? 'sensor' : 'image'} behind ${name}`,
       ...(next || scene.sensorFixed ? stored(part.space.lengthMm) : { common: false, split: false }),
       follows: !next && !scene.sensorFixed,
-      bad: warnings.some(({ kind, partId }) => partId === part.id && UNBUILDABLE_GAPS.has(kind)),
+      bad:
+        (next !== undefined || scene.sensorFixed) &&
+        warnings.some(({ kind, partId }) => partId === part.id && UNBUILDABLE_GAPS.has(kind)),
     });
   }
   return cells;

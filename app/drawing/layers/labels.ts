@@ -85,6 +85,10 @@ export function labelsOf(
       10,
     );
   }
+  if (stage.objectMm === null)
+    add('object', 'object at infinity', 'label quiet', 8, yOf(view, 0), ['above right', 'below right'], 2);
+  if (scene.parts.length === 0)
+    add('image', 'image', 'label quiet', view.widthPx - 8, yOf(view, 0), ['above left'], 2);
   if (stage.imageMm !== null) {
     const x = xOf(view, stage.imageMm);
     const bottom = Math.max(
