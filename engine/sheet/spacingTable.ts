@@ -30,9 +30,10 @@ export type Spacing =
  */
 export function spacingTable(sketch: Sketch, options: SheetOptions): Spacing {
   const grid = gridOf(options);
+  if (sketch.parts.length === 0) return { ok: false, why: 'cannot be built', refusals: [NO_PARTS] };
   const refusals: Refusal[] = refusalsOf(sketch, options.datum);
   const sheets: PositionSheet[] = [];
-  for (const position of refusals.length === 0 ? sketch.positions : []) {
+  for (const position of sketch.positions) {
     const setting = settingAt(position.id);
     const printed = printedLayout(sketch, setting, options.datum, grid);
     if (printed.ok) sheets.push({ position, analysis: analyse(sketch, setting), printed: printed.value });
@@ -58,21 +59,23 @@ export function spacingTable(sketch: Sketch, options: SheetOptions): Spacing {
   };
 }
 
+const NO_PARTS: Refusal = {
+  partId: null,
+  positionId: null,
+  sentence: 'The sketch has no parts: there is nothing to space.',
+};
+
+const NO_MOUNT: Refusal = {
+  partId: null,
+  positionId: null,
+  sentence: 'There is no mount plane to count from: give a register distance or choose another datum.',
+};
+
 function refusalsOf(sketch: Sketch, datum: Datum): Refusal[] {
-  if (sketch.parts.length === 0)
-    return [
-      { partId: null, positionId: null, sentence: 'The sketch has no parts: there is nothing to space.' },
-    ];
-  const mountless: Refusal = {
-    partId: null,
-    positionId: null,
-    sentence: 'There is no mount plane to count from: give a register distance or choose another datum.',
-  };
-  const missing = datum === 'mount' && sketch.registerMm === null ? [mountless] : [];
   const faulty = unbuildable(sketch).map(({ partId, positionId, sentence }) => ({
     partId,
     positionId,
     sentence,
   }));
-  return [...missing, ...faulty];
+  return datum === 'mount' && sketch.registerMm === null ? [NO_MOUNT, ...faulty] : faulty;
 }

@@ -1,4 +1,4 @@
-import { analyse, type Analysis } from '../../engine/paraxial/analyse.ts';
+import { type Analysis, analyse } from '../../engine/paraxial/analyse.ts';
 import { moveParts } from '../../engine/sketch/edits/gaps.ts';
 import { propose, unsettled } from '../../engine/sketch/propose.ts';
 import type { Setting, Sketch } from '../../engine/sketch/types.ts';

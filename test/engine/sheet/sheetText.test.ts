@@ -24,6 +24,9 @@ const DELIMITED: readonly { form: SheetForm; separator: string; decimal: string 
   { form: 'tsv', separator: '\t', decimal: '.' },
 ];
 
+/** Tables are whole analyses: enough of them to meet every awkward name many times over. */
+const RUNS = 50;
+
 describe('the text of a spacing table', () => {
   it('begins with the headings and a line for each position, in commas', () => {
     const lines = sheetText(demoTable(), 'csv').split('\r\n');
@@ -106,6 +109,7 @@ describe('reading a spacing table back', () => {
             valuesOf(block),
           );
       }),
+      { numRuns: RUNS },
     );
   });
 
@@ -119,6 +123,7 @@ describe('reading a spacing table back', () => {
           expect(readBlock(tables[b]?.slice(1) ?? [], block, Number)).toEqual(valuesOf(block));
         }
       }),
+      { numRuns: RUNS },
     );
   });
 
@@ -132,6 +137,7 @@ describe('reading a spacing table back', () => {
             cellsOf(table[name]).map((cells) => cells.map(jsonValue)),
           );
       }),
+      { numRuns: RUNS },
     );
   });
 });

@@ -12,6 +12,9 @@ import { inspectionZoom, MIDDLE } from '../demo.ts';
 import { given } from '../quantity.ts';
 import { anyLayout } from './anyLayout.ts';
 
+/** Tables are whole analyses: enough of them to meet every datum, unit and kind of part many times over. */
+const RUNS = 50;
+
 describe('the spacing table of the inspection zoom', () => {
   const table = tableOf(inspectionZoom());
 
@@ -48,6 +51,14 @@ describe('the spacing table of the inspection zoom', () => {
     expect(columnTexts(table.elements, 'clearNeeded')[3]).toBe(Math.max(...wanted).toFixed(3));
     expect(columnTexts(table.elements, 'neededAt')[3]).toBe('middle');
     expect(columnTexts(table.elements, 'clearGiven')).toEqual(['open', 'open', 'open', 'open']);
+  });
+
+  it('prints the clear diameter given, twice the semi-diameter', () => {
+    const parts = inspectionZoom().parts.map((part, k) =>
+      k === 3 ? { ...part, semiDiameterMm: 8.25 } : part,
+    );
+    const given = columnTexts(tableOf({ ...inspectionZoom(), parts }).elements, 'clearGiven');
+    expect(given).toEqual(['open', 'open', 'open', '16.500']);
   });
 
   it('tells where the stop is when it rides on an element', () => {
@@ -166,6 +177,18 @@ describe('a table is refused', () => {
     for (const { sentence } of refusals) expect(sentence).toMatch(/1\.000 mm/);
   });
 
+  it('with every reason at once: a gap that cannot be built and a datum that is not there', () => {
+    const space = { lengthMm: -75, medium: 'air' } as const;
+    const reversed: Sketch = {
+      ...beamExpander(),
+      parts: [{ ...newThin(25), space }, newThin(-100, 'p2' as PartId)],
+    };
+    expect(refusalTexts(reversed, { datum: 'sensor' })).toEqual([
+      expect.stringMatching(/75\.000 mm/),
+      expect.stringMatching(/image at infinity/),
+    ]);
+  });
+
   it('when there are no parts', () => {
     expect(refusalTexts(emptySketch(), {})).toEqual(['The sketch has no parts: there is nothing to space.']);
   });
@@ -225,6 +248,7 @@ describe('any table', () => {
             expect(front + thickness + (steps(positions, cells, `gap:${part.id}`) ?? 0n)).toBe(behind);
           }
       }),
+      { numRuns: RUNS },
     );
   });
 
@@ -244,6 +268,7 @@ describe('any table', () => {
           }
         }
       }),
+      { numRuns: RUNS },
     );
   });
 });
