@@ -207,7 +207,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     changeView(change);
   };
   element.addEventListener('keydown', onKeyDown);
-  Object.assign(element, { record: () => recorded(picture) });
+  Object.assign(element, { record: () => recorded(picture, state) });
 
   const changeView = (change: (view: Viewport) => Viewport) => setView({ camera: cameraAt(change(view())) });
 
@@ -239,11 +239,13 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
   };
 }
 
-/** What the picture draws, as plain data: browser tests read the drawing from `element.record()`. */
-function recorded(picture: Picture | null): readonly Mark[] {
+/** What is drawn, as plain data: browser tests read the drawing from `element.record()`. */
+function recorded(picture: Picture | null, state: HandState): readonly Mark[] {
   if (!picture) return [];
   const pen = recorderPen(3);
   pen.group('rays', () => paintRays(pen, picture));
   pen.group('parts', () => paintParts(pen, picture, null, [], NONE));
+  const { handles, view, plan } = picture;
+  pen.group('overlay', () => overlayLayer(pen, handles, view, plan.topPx, state));
   return pen.marks;
 }
