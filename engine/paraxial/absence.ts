@@ -43,9 +43,9 @@ export const sentenceOf = (absence: Absence): string => SENTENCES[absence];
 /** A number, or why there is none. */
 export type Quantity = Outcome<number, Absence>;
 
-/** The number as an outcome; 'out of range' when it overflowed. The only way numbers leave this room. */
+/** The number as an outcome, never −0; 'out of range' when it overflowed. The only way numbers leave this room. */
 export const finite = (value: number): Quantity =>
-  Number.isFinite(value) ? some(value) : none('out of range');
+  Number.isFinite(value) ? some(value + 0) : none('out of range');
 
 /** `change` of a quantity, kept finite; an absent one stays absent. */
 export const derive = (quantity: Quantity, change: (value: number) => number): Quantity =>
