@@ -70,7 +70,7 @@ export function createHost(element: HTMLElement, client: HostClient): Host {
   );
 
   const onKey = (event: KeyboardEvent) => {
-    if (event.key === 'Escape' && gesture.at !== 'idle') {
+    if (givesUp(event) && gesture.at !== 'idle') {
       event.preventDefault();
       event.stopPropagation();
       feed({ on: 'escape' });
@@ -105,6 +105,11 @@ function pointerAt(element: HTMLElement, event: PointerEvent): PointerAt {
 function placeIn(element: HTMLElement, event: MouseEvent): { readonly xPx: number; readonly yPx: number } {
   const box = element.getBoundingClientRect();
   return { xPx: event.clientX - box.left, yPx: event.clientY - box.top };
+}
+
+/** Escape, or undo, which during a gesture takes back the gesture alone. */
+function givesUp({ key, ctrlKey, metaKey }: KeyboardEvent): boolean {
+  return key === 'Escape' || ((ctrlKey || metaKey) && key.toLowerCase() === 'z');
 }
 
 function modifiersOf(event: MouseEvent | KeyboardEvent): Modifiers {
