@@ -13,20 +13,20 @@ export function Ledger() {
   const ids = useReading(ledgerIds);
   const unit = useReading(({ view }) => view.unit);
   return (
-    <section className="sheet-table" aria-label="Ledger">
+    <section className="panel-table" aria-label="Ledger">
       <RealIsPositive />
-      <div className="sheet-table-scroll">
+      <div className="panel-table-scroll">
         <table>
           <caption className="visually-hidden">Object and image of every part in turn</caption>
           <thead>
             <tr>
               <th scope="col">part</th>
               <th scope="col">object, {unit}</th>
-              <th scope="col" className="sheet-table-words">
+              <th scope="col" className="panel-table-words">
                 object is
               </th>
               <th scope="col">image, {unit}</th>
-              <th scope="col" className="sheet-table-words">
+              <th scope="col" className="panel-table-words">
                 image is
               </th>
               <th scope="col">magnification</th>
@@ -36,7 +36,7 @@ export function Ledger() {
           <tbody>
             {ids === '' ? (
               <tr>
-                <td colSpan={7} className="sheet-table-none">
+                <td colSpan={7} className="panel-table-none">
                   Nothing on the axis forms an image yet.
                 </td>
               </tr>
@@ -71,14 +71,14 @@ function Row({ id }: { readonly id: PartId }) {
   const chosen = useReading(({ view }) => view.selection.includes(id));
   const cells = useReading((reading) => cellsOf(reading, id).join(SEPARATOR)).split(SEPARATOR);
   return (
-    <tr className={chosen ? 'sheet-table-chosen' : undefined} onClick={() => select(id)}>
+    <tr className={chosen ? 'panel-table-chosen' : undefined} onClick={() => select(id)}>
       <th scope="row">
-        <button type="button" className="sheet-table-part" aria-pressed={chosen} title={name}>
+        <button type="button" className="panel-table-part" aria-pressed={chosen} title={name}>
           {name}
         </button>
       </th>
       {COLUMNS.map((column, index) => (
-        <td key={column} className={column.endsWith('Is') ? 'sheet-table-words' : undefined}>
+        <td key={column} className={column.endsWith('Is') ? 'panel-table-words' : undefined}>
           {cells[index]}
         </td>
       ))}

@@ -31,23 +31,49 @@ export function Readouts() {
   );
 }
 
+/** A group shows its main readouts; the others come with "more". */
 function FoldingReadouts({ group }: { readonly group: ReadoutGroup }) {
   const [folded, fold] = useFolding(group);
+  const [short, shorten] = useFolding(`${group}: all`, true);
   return (
-    <Group title={group} folded={folded} onFold={fold}>
-      <ReadoutList group={group} />
+    <Group
+      title={group}
+      folded={folded}
+      onFold={fold}
+      aside={
+        !folded && (
+          <button
+            type="button"
+            className="readouts-more"
+            aria-expanded={!short}
+            aria-label={`${group}: ${short ? 'more' : 'fewer'} readouts`}
+            onClick={() => shorten(!short)}
+          >
+            {short ? 'more' : 'less'}
+          </button>
+        )
+      }
+    >
+      <ReadoutList group={group} short={short} />
     </Group>
   );
 }
 
+interface ReadoutListProps {
+  readonly group: ReadoutGroup;
+  readonly short: boolean;
+}
+
 /** Renders anew only when other readouts apply; a number that changes renders its own leaf. */
-function ReadoutList({ group }: { readonly group: ReadoutGroup }) {
+function ReadoutList({ group, short }: ReadoutListProps) {
   const fractions = useReading(({ sketch }) => sketch.field.fractions);
   const ids = useReading(({ analysis, sketch }) =>
     readoutsIn(group, analysis, sketch.field.fractions)
+      .filter(({ isMain = false }) => isMain || !short)
       .map(({ id }) => id)
       .join(' '),
   );
+  if (ids === '') return null;
   return (
     <dl className="readouts" onKeyDown={moveFocus}>
       {ids.split(' ').map((id, index) => (

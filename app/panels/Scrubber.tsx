@@ -87,10 +87,11 @@ function Thumb() {
   const words = useReading(thumbWords);
 
   const onKeyDown = (event: KeyboardEvent) => {
-    const target = keyTarget(event, stand, last);
+    const { sketch, setting } = currentReading();
+    const target = keyTarget(event, standOf(sketch, setting), last);
     if (target === null) return;
     event.preventDefault();
-    setView({ setting: settingOf(currentReading().sketch, target) });
+    setView({ setting: settingOf(sketch, target) });
   };
 
   return (
@@ -99,7 +100,7 @@ function Thumb() {
       style={{ left: `${(100 * stand) / last}%` }}
       role="slider"
       tabIndex={0}
-      aria-label="Position"
+      aria-label="Scrubber"
       aria-valuemin={1}
       aria-valuemax={last + 1}
       aria-valuenow={Number((stand + 1).toFixed(3))}

@@ -20,9 +20,6 @@ export function SketchCard() {
       <h2 className="panel-title" id="sketch-card-title">
         Sketch
       </h2>
-      <Section name="Title and notes">
-        <TextFields />
-      </Section>
       <Section name="Object">
         <ObjectDistanceField />
         <MediumFields label="Medium" where="object" />
@@ -34,21 +31,30 @@ export function SketchCard() {
       <Section name="Image and sensor">
         <SensorFields />
       </Section>
-      <Section name="Lines and allowances">
+      <Section name="Title and notes" startsFolded>
+        <TextFields />
+      </Section>
+      <Section name="Lines and allowances" startsFolded>
         <LinesFields />
       </Section>
-      <Section name="Drawn">
+      <Section name="Drawn" startsFolded>
         <ShownFields />
       </Section>
-      <Section name="Scale the sketch">
+      <Section name="Scale the sketch" startsFolded>
         <ScaleFields />
       </Section>
     </section>
   );
 }
 
-function Section({ name, children }: { readonly name: string; readonly children: ReactNode }) {
-  const [folded, fold] = useFolding(`sketch: ${name}`);
+interface SectionProps {
+  readonly name: string;
+  readonly startsFolded?: boolean;
+  readonly children: ReactNode;
+}
+
+function Section({ name, startsFolded = false, children }: SectionProps) {
+  const [folded, fold] = useFolding(`sketch: ${name}`, startsFolded);
   return (
     <Group title={name} folded={folded} onFold={fold}>
       {children}

@@ -26,15 +26,15 @@ export function TraceSheet({ onCopy }: TraceSheetProps) {
     onCopy(worksheetTsv(worksheetOf(sketch, analysis)));
   };
   return (
-    <section className="sheet-table" aria-label="Trace sheet">
-      <div className="sheet-table-head">
+    <section className="panel-table" aria-label="Trace sheet">
+      <div className="panel-table-head">
         <h2 className="panel-title">{readout.label}</h2>
         <ReadoutLine readout={readout} />
         <button type="button" className="text-button" onClick={copy}>
           <Icon name="copy" /> Copy
         </button>
       </div>
-      <p className="sheet-table-note">{readout.formula}.</p>
+      <p className="panel-table-note">{readout.formula}.</p>
       <FocalLengths />
       <Sheet />
     </section>
@@ -48,7 +48,7 @@ function ReadoutLine({ readout }: { readonly readout: Readout }) {
     const number = quantityText(outcome.value, readout.kind, readout.digits, view.unit);
     return `${number} ${quantityUnit(readout.kind, view.unit)}`;
   });
-  return <span className="sheet-table-value">{text}</span>;
+  return <span className="panel-table-value">{text}</span>;
 }
 
 function FocalLengths() {
@@ -58,7 +58,7 @@ function FocalLengths() {
     const length = (value: number) => `${formatLength(value, view.unit)} ${view.unit}`;
     return `Front focal length −n/φ ${length(front.value)}, rear focal length n′/φ ${length(rear.value)}.`;
   });
-  return text === '' ? null : <p className="sheet-table-note">{text}</p>;
+  return text === '' ? null : <p className="panel-table-note">{text}</p>;
 }
 
 function Sheet() {
@@ -66,7 +66,7 @@ function Sheet() {
   const rows = useReading(({ sketch, analysis }) => worksheetOf(sketch, analysis).rows.length);
   return (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: a wide sheet scrolls, also by keys
-    <section className="sheet-table-scroll" tabIndex={0} aria-label="Worksheet">
+    <section className="panel-table-scroll" tabIndex={0} aria-label="Worksheet">
       <table>
         <caption className="visually-hidden">
           Marginal ray y and nu, chief ray ȳ and nū, surface by surface
@@ -105,7 +105,7 @@ function SheetRow({ index }: { readonly index: number }) {
   return (
     <tr>
       <th scope="row">
-        {label} {unit !== '' && <span className="sheet-table-unit">{unit}</span>}
+        {label} {unit !== '' && <span className="panel-table-unit">{unit}</span>}
       </th>
       {cells.map((cell, place) => (
         // biome-ignore lint/suspicious/noArrayIndexKey: a cell is its place along the axis

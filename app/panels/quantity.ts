@@ -38,7 +38,7 @@ export function quantityUnit(kind: QuantityKind, unit: LengthUnit): string {
     case 'share':
       return '%';
     case 'power':
-      return 'm⁻¹';
+      return '1/m';
     default:
       return '';
   }

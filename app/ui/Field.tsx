@@ -19,7 +19,7 @@ interface FieldProps {
 export function Field({ id, label, labelHidden, unit, fault, hint, aside, wide, children }: FieldProps) {
   return (
     <div className={wide ? 'field field-wide' : 'field'}>
-      <label htmlFor={id} className={labelHidden ? 'visually-hidden' : 'field-label'}>
+      <label id={`${id}-label`} htmlFor={id} className={labelHidden ? 'visually-hidden' : 'field-label'}>
         {label}
       </label>
       <span className="field-value">{children}</span>

@@ -1,4 +1,4 @@
-import type { FocusEvent, KeyboardEvent, ReactNode } from 'react';
+import type { KeyboardEvent, ReactNode } from 'react';
 import { useId, useLayoutEffect, useRef, useState } from 'react';
 import type { EntryUnit } from './entry.ts';
 import { formatEntry, fromBase, parseEntry, toBase } from './entry.ts';
@@ -39,7 +39,7 @@ const STEPS: Readonly<Record<EntryUnit, number>> = {
   nm: 1,
   '°': 0.5,
   '%': 5,
-  'm⁻¹': 1,
+  '1/m': 1,
   '': 0.1,
 };
 
@@ -54,7 +54,8 @@ export function NumberField(props: NumberFieldProps) {
   const [editing, setEditing] = useState(false);
   const [draft, setDraft] = useState<string | null>(null);
   const [fault, setFault] = useState<string | null>(null);
-  const previewed = useRef(false);
+  /** Where stepping by preview has got to; keys may come faster than the page renders. */
+  const stepped = useRef<number | null>(null);
   const leaving = useRef(false);
 
   useLayoutEffect(() => {
@@ -69,9 +70,10 @@ export function NumberField(props: NumberFieldProps) {
   const settle = (): boolean => {
     const typed = draft?.trim() ?? stored;
     setFault(null);
-    if (previewed.current && value !== null && (draft === null || typed === stored)) {
-      previewed.current = false;
-      return answered(onCommit(value));
+    const reached = stepped.current;
+    if (reached !== null && (draft === null || typed === stored)) {
+      stepped.current = null;
+      return answered(onCommit(reached));
     }
     if (draft === null || typed === stored) return true;
     if (typed === '' && whenEmpty !== undefined) return answered(onCommit(null));
@@ -86,14 +88,15 @@ export function NumberField(props: NumberFieldProps) {
   };
 
   const stepBy = (direction: 1 | -1, times: number) => {
-    if (value === null || !Number.isFinite(value)) return;
+    const from = stepped.current ?? value;
+    if (from === null || !Number.isFinite(from)) return;
     const step = toBase(props.step ?? STEPS[unit], unit);
-    const next = Number((value + direction * step * times).toPrecision(15));
+    const next = Number((from + direction * step * times).toPrecision(15));
+    const previews = editing && onPreview !== undefined;
+    const refusal = previews ? onPreview(next) : onCommit(next);
+    if (previews && refusal === null) stepped.current = next;
     setDraft(null);
-    if (editing && onPreview) {
-      previewed.current = true;
-      setFault(onPreview(next));
-    } else setFault(onCommit(next));
+    setFault(refusal);
   };
 
   const onKeyDown = (event: KeyboardEvent) => {
@@ -106,11 +109,11 @@ export function NumberField(props: NumberFieldProps) {
     } else if (event.key === 'Enter') {
       event.preventDefault();
       if (settle()) requestAnimationFrame(() => input.current?.select());
-    } else if (event.key === 'Escape' && (draft !== null || previewed.current || fault !== null)) {
+    } else if (event.key === 'Escape' && (draft !== null || stepped.current !== null || fault !== null)) {
       event.preventDefault();
       event.stopPropagation();
-      if (previewed.current) onCancel?.();
-      previewed.current = false;
+      if (stepped.current !== null) onCancel?.();
+      stepped.current = null;
       setDraft(null);
       setFault(null);
     } else if (event.key === 'Escape') {
@@ -119,10 +122,11 @@ export function NumberField(props: NumberFieldProps) {
     }
   };
 
-  const onBlur = (_event: FocusEvent) => {
-    if (!leaving.current) settle();
+  const onBlur = () => {
+    // A bad entry typed over a stepped value leaves the step as the last good one.
+    if (!leaving.current && !settle() && stepped.current !== null) onCommit(stepped.current);
     leaving.current = false;
-    previewed.current = false;
+    stepped.current = null;
     setDraft(null);
     setEditing(false);
   };
@@ -134,17 +138,10 @@ export function NumberField(props: NumberFieldProps) {
       id={id}
       label={label}
       labelHidden={props.labelHidden ?? false}
-      unit={unit}
+      unit={value === null && !editing ? '' : unit}
       fault={fault && fault + kept}
       hint={props.hint}
-      aside={
-        <>
-          {props.aside}
-          {!props.disabled && value !== null && Number.isFinite(value) && (
-            <StepButtons label={label} stepBy={stepBy} />
-          )}
-        </>
-      }
+      aside={props.aside}
     >
       <input
         ref={input}
@@ -170,23 +167,27 @@ export function NumberField(props: NumberFieldProps) {
         onChange={(event) => setDraft(event.target.value)}
         onKeyDown={onKeyDown}
       />
+      {!props.disabled && value !== null && Number.isFinite(value) && (
+        <StepButtons labelId={`${id}-label`} stepBy={stepBy} />
+      )}
     </Field>
   );
 }
 
 interface StepButtonsProps {
-  readonly label: string;
+  readonly labelId: string;
   readonly stepBy: (direction: 1 | -1, times: number) => void;
 }
 
 /** The way to step without a keyboard; the arrow keys do the same, so the buttons are no tab stops. */
-function StepButtons({ label, stepBy }: StepButtonsProps) {
+function StepButtons({ labelId, stepBy }: StepButtonsProps) {
   const button = (direction: 1 | -1, name: string, icon: 'plus' | 'minus') => (
     <button
       type="button"
       className="field-step"
       tabIndex={-1}
-      aria-label={`${label}, ${name}`}
+      aria-label={name}
+      aria-describedby={labelId}
       onPointerDown={(event) => event.preventDefault()}
       onClick={(event) => stepBy(direction, event.shiftKey ? 10 : event.altKey ? 0.1 : 1)}
     >

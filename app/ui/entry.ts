@@ -2,7 +2,7 @@ import type { Outcome } from '../../engine/index.ts';
 import { none, some } from '../../engine/index.ts';
 
 /** What a number field holds; the empty unit is a bare number. Values are stored in the base of each unit's family. */
-export type EntryUnit = 'mm' | 'in' | 'µm' | 'nm' | '°' | '%' | 'm⁻¹' | '';
+export type EntryUnit = 'mm' | 'in' | 'µm' | 'nm' | '°' | '%' | '1/m' | '';
 
 export interface EntryContext {
   /** The unit of a number typed without one. */
@@ -46,7 +46,7 @@ const FAMILIES: Readonly<Record<EntryUnit, Family>> = {
   nm: WAVELENGTH,
   '°': ANGLE,
   '%': SHARE,
-  'm⁻¹': POWER,
+  '1/m': POWER,
   '': BARE,
 };
 

@@ -15,7 +15,7 @@ export function PowerFields({ id }: { readonly id: PartId }) {
       />
       <SketchNumber
         label="Power"
-        unit="m⁻¹"
+        unit="1/m"
         digits={4}
         read={readThin(id, (part) => 1000 / part.focalLengthMm)}
         edit={(value) => (sketch) => setFocalLength(sketch, id, 1000 / value)}

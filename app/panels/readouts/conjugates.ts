@@ -5,6 +5,7 @@ import type { Readout } from './readout.ts';
 export const CONJUGATE_READOUTS: readonly Readout[] = [
   {
     id: 'magnification',
+    isMain: true,
     label: 'Magnification',
     kind: 'ratio',
     digits: 4,
@@ -22,6 +23,7 @@ export const CONJUGATE_READOUTS: readonly Readout[] = [
   },
   {
     id: 'defocus',
+    isMain: true,
     label: 'Defocus',
     kind: 'length',
     digits: 3,
@@ -30,6 +32,7 @@ export const CONJUGATE_READOUTS: readonly Readout[] = [
   },
   {
     id: 'track',
+    isMain: true,
     label: 'Track',
     kind: 'length',
     digits: 3,

@@ -5,6 +5,7 @@ import type { Readout } from './readout.ts';
 export const LIGHT_READOUTS: readonly Readout[] = [
   {
     id: 'workingFNumber',
+    isMain: true,
     label: 'Working f-number',
     kind: 'number',
     digits: 3,
@@ -23,7 +24,7 @@ export const LIGHT_READOUTS: readonly Readout[] = [
     id: 'imageNA',
     label: 'NA at the image',
     kind: 'number',
-    digits: 4,
+    digits: 5,
     read: ({ light }) => light.imageNA,
     formula:
       'index times the sine of the marginal ray’s angle at the image, the angle being the arctangent of its slope',
@@ -32,7 +33,7 @@ export const LIGHT_READOUTS: readonly Readout[] = [
     id: 'objectNA',
     label: 'NA at the object',
     kind: 'number',
-    digits: 4,
+    digits: 5,
     read: ({ light }) => light.objectNA,
     formula:
       'index times the sine of the marginal ray’s angle at the object, the angle being the arctangent of its slope',
@@ -56,6 +57,7 @@ export const LIGHT_READOUTS: readonly Readout[] = [
   },
   {
     id: 'imageHeight',
+    isMain: true,
     label: 'Image height',
     kind: 'length',
     digits: 3,
@@ -72,6 +74,7 @@ export const LIGHT_READOUTS: readonly Readout[] = [
   },
   {
     id: 'chiefAngleImage',
+    isMain: true,
     label: 'Chief ray at sensor',
     kind: 'angle',
     digits: 2,
@@ -122,6 +125,7 @@ export const LIGHT_READOUTS: readonly Readout[] = [
   },
   {
     id: 'petzval',
+    isMain: true,
     label: 'Petzval radius',
     kind: 'length',
     digits: 2,
@@ -151,7 +155,7 @@ export const LIGHT_READOUTS: readonly Readout[] = [
 export const passingReadouts = (fractions: readonly number[]): readonly Readout[] =>
   fractions.map((fraction, index) => ({
     id: `passing${index}`,
-    label: `Passes at ${String(fraction).replace('-', '\u2212')} field`,
+    label: passingLabel(fraction),
     kind: 'share',
     digits: 1,
     read: ({ vignetting }) => {
@@ -162,3 +166,9 @@ export const passingReadouts = (fractions: readonly number[]): readonly Readout[
     formula:
       'area common to the stop and all clear diameters as seen from this field, over the area of the stop',
   }));
+
+function passingLabel(fraction: number): string {
+  if (fraction === 0) return 'Passes on the axis';
+  const share = Math.abs(fraction) === 1 ? 'full' : String(Math.abs(fraction));
+  return `Passes at ${fraction < 0 ? '\u2212' : ''}${share} field`;
+}

@@ -7,6 +7,7 @@ const mediaDiffer = ({ train }: Analysis): boolean => train.index[0] !== train.i
 export const POWER_READOUTS: readonly Readout[] = [
   {
     id: 'focalLength',
+    isMain: true,
     label: 'Focal length',
     kind: 'length',
     digits: 3,
@@ -16,6 +17,7 @@ export const POWER_READOUTS: readonly Readout[] = [
   },
   {
     id: 'afocalMagnification',
+    isMain: true,
     label: 'Angular magnification',
     kind: 'ratio',
     digits: 4,
@@ -33,6 +35,7 @@ export const POWER_READOUTS: readonly Readout[] = [
   },
   {
     id: 'backFocus',
+    isMain: true,
     label: 'Back focus',
     kind: 'length',
     digits: 3,

@@ -7,6 +7,7 @@ const fieldIsStopped = ({ windows }: Analysis): boolean => windows.fieldStop.ok;
 export const PUPIL_READOUTS: readonly Readout[] = [
   {
     id: 'stopDiameter',
+    isMain: true,
     label: 'Stop diameter',
     kind: 'length',
     digits: 3,
@@ -15,6 +16,7 @@ export const PUPIL_READOUTS: readonly Readout[] = [
   },
   {
     id: 'entrancePlace',
+    isMain: true,
     label: 'Entrance, behind first',
     kind: 'length',
     digits: 3,
@@ -23,6 +25,7 @@ export const PUPIL_READOUTS: readonly Readout[] = [
   },
   {
     id: 'entranceDiameter',
+    isMain: true,
     label: 'Entrance diameter',
     kind: 'length',
     digits: 3,

@@ -7,6 +7,8 @@ export type ReadoutGroup = (typeof READOUT_GROUPS)[number];
 /** One number of the analysis as a panel shows it. To add one, add an entry to the list of its group. */
 export interface Readout {
   readonly id: string;
+  /** Among the few of its group that are shown before more is asked for. */
+  readonly isMain?: true;
   readonly label: string;
   readonly kind: QuantityKind;
   readonly digits: number;

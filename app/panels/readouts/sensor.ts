@@ -28,6 +28,7 @@ export const SENSOR_READOUTS: readonly Readout[] = [
   },
   {
     id: 'objectDiagonal',
+    isMain: true,
     label: 'Diagonal at object',
     kind: 'length',
     digits: 2,
@@ -55,6 +56,7 @@ export const SENSOR_READOUTS: readonly Readout[] = [
   },
   {
     id: 'diagonalAngle',
+    isMain: true,
     label: 'Diagonal, full angle',
     kind: 'angle',
     digits: 2,
@@ -64,6 +66,7 @@ export const SENSOR_READOUTS: readonly Readout[] = [
   },
   {
     id: 'pixelAtObject',
+    isMain: true,
     label: 'Pixel at the object',
     kind: 'micro',
     digits: 2,
@@ -81,6 +84,7 @@ export const SENSOR_READOUTS: readonly Readout[] = [
   },
   {
     id: 'airyPixels',
+    isMain: true,
     label: 'Airy disc in pixels',
     kind: 'number',
     digits: 2,
