@@ -17,6 +17,7 @@ import type { Sight } from '../sight.ts';
 
 /** Change of a folded object's distance or height for each px of drag. */
 const FOLDED_PER_PX = 0.002;
+/** No drag shrinks a length or a height below this; a height that is smaller has no grip. */
 const LEAST_MM = 0.01;
 /** A drag never scales aperture or field by more than this at once. */
 const MOST_RATIO = 1000;
@@ -29,7 +30,7 @@ export function endHandles(sight: Sight): readonly Handle[] {
 function stopHandles(sight: Sight): readonly Handle[] {
   const { scene, view, reading } = sight;
   const { stop } = scene;
-  if (!stop || stop.semiMm === 0) return [];
+  if (!stop || stop.semiMm < LEAST_MM) return [];
   const { sketch, setting } = reading;
   const selected = scene.parts.some((part) => part.carriesStop && part.selected);
   const set = (semiMm: number): Edit => {
@@ -149,7 +150,7 @@ function objectHandles(sight: Sight): readonly Handle[] {
     why: held ? BETWEEN : null,
   };
   const heightMm = scene.objectHeightMm;
-  if (heightMm === null || heightMm === 0) return [foot];
+  if (heightMm === null || Math.abs(heightMm) < LEAST_MM) return [foot];
   return [
     foot,
     fieldHandle(
@@ -167,7 +168,7 @@ function fieldEnd(sight: Sight): readonly Handle[] {
   const { scene, view } = sight;
   const { imageMm } = scene.stage;
   const heightMm = scene.imageHeightMm;
-  if (imageMm === null || heightMm === null || heightMm === 0) return [];
+  if (imageMm === null || heightMm === null || Math.abs(heightMm) < LEAST_MM) return [];
   return [
     fieldHandle(sight, 'field:end', 'field, image height', xOf(view, imageMm), yOf(view, heightMm), heightMm),
   ];

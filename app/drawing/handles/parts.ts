@@ -51,19 +51,19 @@ export function placing(sight: Sight, part: ScenePart): Pick<Handle, 'drag' | 's
   const label = `${nameOf(part.part, part.index)}, behind the first part`;
   if (isBetween(sight) && touchesSplitGap(sight, ids))
     return { drag: null, step: null, entry: null, why: BETWEEN };
-  const first = sketch.parts[0]?.id;
+  const movesFirst = ids.includes(sketch.parts[0]?.id as PartId);
   return {
     drag: (drag) => dragPart(sight, part, ids, drag, move),
     step: move,
-    entry:
-      part.part.id === first
-        ? null
-        : {
-            label,
-            unit: 'mm',
-            value: part.frontMm,
-            set: (value) => move(value - part.frontMm, reading.view.otherRule),
-          },
+    // The first part is what places are measured from: what moves with it has no place to type.
+    entry: movesFirst
+      ? null
+      : {
+          label,
+          unit: 'mm',
+          value: part.frontMm,
+          set: (value) => move(value - part.frontMm, reading.view.otherRule),
+        },
     why: null,
   };
 }

@@ -111,6 +111,12 @@ describe('dragging a part', () => {
     expect(grip(picture, 'part:p1').entry).toBeNull();
   });
 
+  it('by typing is not offered where the first part, which places count from, moves along', () => {
+    const tied = tieParts(demo, ['p1', 'p2'] as PartId[], 'front');
+    expect(grip(pictureFor(tied, { setting: AT_MIDDLE }), 'part:p2').entry).toBeNull();
+    expect(grip(selecting('p1', 'p2'), 'part:p2').entry).toBeNull();
+  });
+
   it('by typing follows the toggle that stands for Shift', () => {
     const toggled = demoPicture({ otherRule: true });
     const after = edited(demo, grip(toggled, 'part:p3').entry!.set(THIRD + 2));
