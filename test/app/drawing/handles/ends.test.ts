@@ -4,7 +4,7 @@ import { BETWEEN } from '../../../../app/drawing/handle.ts';
 import { analysisOf } from '../../../../app/live/analysis.ts';
 import type { Aperture, FieldSize, PartId, Sketch } from '../../../../engine/index.ts';
 import { emptySketch, newThin, splitObjectDistance, splitStopDiameter } from '../../../../engine/index.ts';
-import { inspectionZoom, MIDDLE, NARROW } from '../../../engine/demo.ts';
+import { inspectionZoom, MIDDLE, NARROW, WIDE } from '../../../engine/demo.ts';
 import {
   AT_MIDDLE,
   BETWEEN_MIDDLE_AND_NARROW,
@@ -258,7 +258,7 @@ describe('the sensor', () => {
       ...demo,
       parts: demo.parts.with(3, {
         ...demo.parts[3]!,
-        space: { lengthMm: { wide: 26, middle: 26, narrow: 27 }, medium: 'air' },
+        space: { lengthMm: { [WIDE]: 26, [MIDDLE]: 26, [NARROW]: 27 }, medium: 'air' },
       }),
     };
     const between = pictureFor(split, { setting: BETWEEN_MIDDLE_AND_NARROW });
