@@ -27,12 +27,12 @@ export function manyOnScreen(
 ): { readonly points: Float64Array; readonly starts: readonly number[] } {
   const screen = lines.map((line) => onScreen(view, line));
   const points = new Float64Array(screen.reduce((sum, line) => sum + line.length, 0));
-  const starts = [0];
+  const starts: number[] = [];
   let at = 0;
   for (const line of screen) {
+    starts.push(at / 2);
     points.set(line, at);
     at += line.length;
-    starts.push(at / 2);
   }
   return { points, starts };
 }
