@@ -1,5 +1,7 @@
 import type { PointerEvent } from 'react';
 import { useRef, useState } from 'react';
+import type { Part } from '../../engine/index.ts';
+import type { Reading } from '../live/reading.ts';
 import { useReading } from '../live/reading.ts';
 import { setView } from '../store/viewStore.ts';
 import type { Board } from './board.ts';
@@ -22,22 +24,21 @@ const CHIPS = [
  * toggles stand for Shift and Alt.
  */
 export function JogStrip({ board }: JogStripProps) {
-  const selected = useReading(({ sketch, view }) =>
-    view.selection.length === 1 ? (sketch.parts.find(({ id }) => id === view.selection[0]) ?? null) : null,
-  );
+  const id = useReading((reading) => onlySelected(reading)?.id);
+  const kind = useReading((reading) => onlySelected(reading)?.kind);
   const behindMoves = useReading(({ view }) => view.otherRule);
   const snap = useReading(({ view }) => view.snap);
   const [chip, setChip] = useState<(typeof CHIPS)[number]>(CHIPS[0]);
   const from = useRef<{ readonly x: number; readonly y: number } | null>(null);
-  if (!selected) return <p className="jog-hint">Tap a part to move it from here.</p>;
+  if (id === undefined) return <p className="jog-hint">Tap a part to move it from here.</p>;
 
-  const chips = CHIPS.filter(({ id }) => {
-    if (id === 'focal:') return selected.kind === 'thin';
-    if (id === 'thickness:') return selected.kind === 'plate';
-    return id === 'part:' || selected.kind !== 'stop';
+  const chips = CHIPS.filter((item) => {
+    if (item.id === 'focal:') return kind === 'thin';
+    if (item.id === 'thickness:') return kind === 'plate';
+    return item.id === 'part:' || kind !== 'stop';
   });
   const chosen = chips.includes(chip) ? chip : chips[0];
-  const handleId = `${chosen?.id}${selected.id}${chosen?.end}`;
+  const handleId = `${chosen?.id}${id}${chosen?.end}`;
 
   const onMove = (event: PointerEvent) => {
     const { current } = from;
@@ -106,4 +107,9 @@ export function JogStrip({ board }: JogStripProps) {
       </div>
     </div>
   );
+}
+
+/** The one part that is selected. */
+function onlySelected({ sketch, view: { selection } }: Reading): Part | undefined {
+  return selection.length === 1 ? sketch.parts.find(({ id }) => id === selection[0]) : undefined;
 }

@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { useMemo } from 'react';
 import type { Edit } from '../../engine/index.ts';
 import type { Reading } from '../live/reading.ts';
 import { currentReading, useReading } from '../live/reading.ts';
@@ -38,6 +39,11 @@ export function SketchNumber(props: SketchNumberProps) {
   const digits = (props.digits ?? 3) + (props.unit === 'length' && unit === 'in' ? 2 : 0);
   const editFor = (next: number | null): Edit =>
     next === null ? (empty?.edit ?? ((sketch) => sketch)) : edit(next, currentReading());
+  // Kept, so that the mark renders only when it changes, not with every value.
+  const aside = useMemo(
+    () => perPosition && <SplitMark label={label} {...perPosition} />,
+    [label, perPosition],
+  );
   return (
     <NumberField
       label={label}
@@ -49,7 +55,7 @@ export function SketchNumber(props: SketchNumberProps) {
       allowInfinity={props.allowInfinity ?? false}
       disabled={(props.disabled ?? false) || isBetween}
       hint={isBetween ? 'between positions; add a position here to set it' : props.hint}
-      aside={perPosition && <SplitMark label={label} {...perPosition} />}
+      aside={aside}
       onCommit={(next) => tryEdit(editFor(next))}
       onPreview={(next) => tryPreview(editFor(next))}
       onCancel={cancelEdit}

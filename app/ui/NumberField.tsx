@@ -1,5 +1,5 @@
-import type { KeyboardEvent, ReactNode } from 'react';
-import { useId, useLayoutEffect, useRef, useState } from 'react';
+import type { KeyboardEvent, ReactNode, RefObject } from 'react';
+import { memo, useId, useLayoutEffect, useRef, useState } from 'react';
 import type { EntryUnit } from './entry.ts';
 import { formatEntry, fromBase, parseEntry, toBase } from './entry.ts';
 import { Field } from './Field.tsx';
@@ -99,6 +99,9 @@ export function NumberField(props: NumberFieldProps) {
     setFault(refusal);
   };
 
+  const latestStep = useRef(stepBy);
+  latestStep.current = stepBy;
+
   const onKeyDown = (event: KeyboardEvent) => {
     const up = event.key === 'ArrowUp' || event.key === 'PageUp';
     const down = event.key === 'ArrowDown' || event.key === 'PageDown';
@@ -168,7 +171,7 @@ export function NumberField(props: NumberFieldProps) {
         onKeyDown={onKeyDown}
       />
       {!props.disabled && value !== null && Number.isFinite(value) && (
-        <StepButtons labelId={`${id}-label`} stepBy={stepBy} />
+        <StepButtons labelId={`${id}-label`} stepBy={latestStep} />
       )}
     </Field>
   );
@@ -176,11 +179,12 @@ export function NumberField(props: NumberFieldProps) {
 
 interface StepButtonsProps {
   readonly labelId: string;
-  readonly stepBy: (direction: 1 | -1, times: number) => void;
+  /** By reference, so that the buttons stay as they are while the number beside them changes. */
+  readonly stepBy: RefObject<(direction: 1 | -1, times: number) => void>;
 }
 
 /** The way to step without a keyboard; the arrow keys do the same, so the buttons are no tab stops. */
-function StepButtons({ labelId, stepBy }: StepButtonsProps) {
+const StepButtons = memo(function StepButtons({ labelId, stepBy }: StepButtonsProps) {
   const button = (direction: 1 | -1, name: string, icon: 'plus' | 'minus') => (
     <button
       type="button"
@@ -189,7 +193,7 @@ function StepButtons({ labelId, stepBy }: StepButtonsProps) {
       aria-label={name}
       aria-describedby={labelId}
       onPointerDown={(event) => event.preventDefault()}
-      onClick={(event) => stepBy(direction, event.shiftKey ? 10 : event.altKey ? 0.1 : 1)}
+      onClick={(event) => stepBy.current(direction, event.shiftKey ? 10 : event.altKey ? 0.1 : 1)}
     >
       <Icon name={icon} />
     </button>
@@ -200,4 +204,4 @@ function StepButtons({ labelId, stepBy }: StepButtonsProps) {
       {button(1, 'more', 'plus')}
     </span>
   );
-}
+});
