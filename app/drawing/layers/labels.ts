@@ -7,7 +7,7 @@ import type { Viewport } from '../../board/viewport.ts';
 import { xOf, yOf } from '../../board/viewport.ts';
 import type { LengthUnit } from '../../store/viewStore.ts';
 import type { Scene, ScenePart } from '../scene.ts';
-import { nameOf, plain, plainLength } from '../words.ts';
+import { nameOf, plainLength } from '../words.ts';
 import { objectTipPx, SCALE_PX } from './ends.ts';
 
 /** A text on the drawing, before its place is found. */
@@ -206,7 +206,7 @@ function partText({ part, index, carriesStop }: ScenePart, unit: LengthUnit): st
 
 function objectText({ stage, objectHeightMm }: Scene, view: Viewport, unit: LengthUnit): string {
   const away = `object ${plainLength(-(stage.objectMm ?? 0), unit)} away`;
-  const size = objectHeightMm === null ? '' : `, ±${plain(Math.abs(objectHeightMm), 1)} mm`;
+  const size = objectHeightMm === null ? '' : `, ±${plainLength(Math.abs(objectHeightMm), unit, 1)}`;
   return `${away}${size}${view.fold ? ', not to scale' : ''}`;
 }
 

@@ -1,0 +1,110 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { overlaps } from '../../../../app/board/labels.ts';
+import { roughMeasure } from '../../../../app/board/measure.ts';
+import { recorderPen } from '../../../../app/board/recorderPen.ts';
+import { newViewport } from '../../../../app/board/viewport.ts';
+import { labelsLayer, labelsOf } from '../../../../app/drawing/layers/labels.ts';
+import type { Picture } from '../../../../app/layout/picture.ts';
+import type { PartId } from '../../../../engine/index.ts';
+import { emptySketch, newPlate, newStop } from '../../../../engine/index.ts';
+import { inspectionZoom } from '../../../engine/demo.ts';
+import { anySketch } from '../../../engine/sketch/arbitrary.ts';
+import { ALL_SHOWN, AT_MIDDLE, DESKTOP, demoPicture, PHONE, pictureFor, sceneFor } from '../seen.ts';
+
+const placesOf = ({ labels, view }: Picture) => labelsLayer(recorderPen(), labels, view, [], new Set());
+const textsOf = ({ labels }: Picture) => Object.fromEntries(labels.map(({ id, text }) => [id, text]));
+
+describe('the labels of the demo', () => {
+  it('say the focal lengths, and which part carries the stop', () => {
+    expect(textsOf(demoPicture())).toMatchObject({
+      'part:p1': 'f \u221232',
+      'part:p2': 'f 28, stop',
+      'part:p3': 'f \u221246',
+      'part:p4': 'f 48',
+      image: 'sensor',
+      'marginal ray': 'marginal ray',
+      'chief ray': 'chief ray',
+    });
+  });
+
+  it('say how far away and how large the object is, in the unit shown', () => {
+    expect(textsOf(demoPicture())).toMatchObject({
+      object: expect.stringMatching(/^object 500 mm away, ±68\.[78] mm, not to scale$/),
+    });
+    expect(textsOf(demoPicture({ unit: 'in' }))).toMatchObject({
+      object: expect.stringMatching(/^object 19\.68504 in away, ±2\.70\d in, not to scale$/),
+    });
+    const whole = pictureFor(inspectionZoom(), { setting: AT_MIDDLE }, DESKTOP, 'everything');
+    expect(textsOf(whole).object).toMatch(/^object 500 mm away, ±68\.[78] mm$/);
+  });
+
+  it('name an image after the part that forms it, or as the object of the part in front of it', () => {
+    expect(textsOf(demoPicture())).toMatchObject({
+      'image:0': 'image of first group',
+      'image:1': 'object for third group',
+    });
+  });
+
+  it('stand where none covers another', () => {
+    const picture = demoPicture({ shown: ALL_SHOWN });
+    const places = placesOf(picture);
+    expect(places.length).toBeGreaterThan(12);
+    expect(places.filter(({ crowded }) => crowded).map(({ id }) => id)).toEqual([]);
+  });
+
+  it('are left out when switched off', () => {
+    expect(demoPicture({ shown: { ...ALL_SHOWN, labels: false } }).labels).toEqual([]);
+  });
+
+  it('keep their side while something is hovered, though the layout moves under them', () => {
+    const before = placesOf(demoPicture());
+    const { labels, view } = demoPicture({ setting: { ...AT_MIDDLE, toNext: 0.2 } });
+    const frozen = new Set(before.map(({ id }) => id));
+    const after = labelsLayer(recorderPen(), labels, view, before, frozen);
+    const sides = (places: typeof before) => new Map(places.map(({ id, side, step }) => [id, [side, step]]));
+    for (const [id, side] of sides(after)) if (frozen.has(id)) expect(side).toEqual(sides(before).get(id));
+  });
+});
+
+describe('labels', () => {
+  it('call a plate and a diaphragm by name or kind, and a stop a stop', () => {
+    const sketch = {
+      ...emptySketch(),
+      parts: [newPlate(2, 'p1' as PartId), newStop('p2' as PartId), newStop('p3' as PartId)],
+      stop: 'p2' as PartId,
+    };
+    expect(textsOf(pictureFor(sketch))).toMatchObject({
+      'part:p1': 'plate 1',
+      'part:p2': 'stop',
+      'part:p3': 'stop 3',
+    });
+  });
+
+  it('of what lies beside the view are not drawn', () => {
+    const scene = sceneFor(inspectionZoom(), { setting: AT_MIDDLE });
+    const close = { ...newViewport(400, 300), originMm: 80, pxPerMm: 20 };
+    const pen = recorderPen();
+    labelsLayer(pen, labelsOf(scene, close, 'mm', roughMeasure), close, [], new Set());
+    const texts = pen.marks.flatMap((mark) => (mark.kind === 'text' ? [mark.text] : []));
+    expect(texts).toContain('f 48');
+    expect(texts).not.toContain('f 28, stop');
+  });
+
+  it('never cover each other on any sketch, except where it is said that room has run out', () => {
+    fc.assert(
+      fc.property(
+        anySketch({ leastParts: 1 }),
+        fc.constantFrom(DESKTOP, PHONE),
+        fc.constantFrom('parts' as const, 'everything' as const),
+        (sketch, size, what) => {
+          const free = placesOf(pictureFor(sketch, { shown: ALL_SHOWN }, size, what)).filter(
+            ({ crowded }) => !crowded,
+          );
+          const pairs = free.flatMap((one, i) => free.slice(i + 1).map((other) => [one, other] as const));
+          expect(pairs.filter(([one, other]) => overlaps(one, other))).toEqual([]);
+        },
+      ),
+    );
+  });
+});
