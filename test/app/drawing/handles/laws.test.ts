@@ -1,8 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Handle } from '../../../../app/drawing/handle.ts';
-import type { Picture } from '../../../../app/layout/picture.ts';
 import type { Size } from '../../../../app/layout/camera.ts';
+import type { Picture } from '../../../../app/layout/picture.ts';
 import type { View } from '../../../../app/store/viewStore.ts';
 import type { PartId, Setting, Sketch } from '../../../../engine/index.ts';
 import { anySetting, anySketch } from '../../../engine/sketch/arbitrary.ts';
