@@ -1,8 +1,8 @@
-import { SheetDialog } from '../ui/SheetDialog.tsx';
 import { version } from '../../package.json';
+import { SheetDialog } from '../ui/SheetDialog.tsx';
 import { GESTURES } from './gestures.ts';
-import type { CommandGroup } from './services.ts';
 import { keyWords } from './keyWords.ts';
+import type { CommandGroup } from './services.ts';
 import './help.css';
 
 interface HelpProps {

@@ -10,7 +10,7 @@ import { selectionCommands, viewCommands } from './viewCommands.ts';
 export function createCommands(services: Services): readonly CommandGroup[] {
   return [
     sketchCommands(services),
-    partCommands(services),
+    partCommands(),
     selectionCommands(),
     clipCommands(services),
     stopAndImageCommands(),

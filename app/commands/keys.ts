@@ -58,7 +58,7 @@ function actsAt(name: string, place: KeyPlace): boolean {
 }
 
 /** Where `target` stands; `isDrawing` tells whether an element belongs to the drawing. */
-export function placeOf(target: EventTarget | null, isDrawing: (element: Element) => boolean): KeyPlace {
+function placeOf(target: EventTarget | null, isDrawing: (element: Element) => boolean): KeyPlace {
   if (!(target instanceof Element)) return 'page';
   if (
     target.closest(

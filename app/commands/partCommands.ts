@@ -13,41 +13,23 @@ import {
   tieParts,
   untie,
 } from '../../engine/index.ts';
+import { setDown } from '../layout/tray.ts';
 import { analysisOf } from '../live/analysis.ts';
 import { applyEdit } from '../store/sketchStore.ts';
-import { select, viewStore } from '../store/viewStore.ts';
+import { select, type TrayKind, viewStore } from '../store/viewStore.ts';
 import { command, selectedNow, settingNow, sketchNow } from './now.ts';
 import { placeBehind } from './placing.ts';
-import type { CommandGroup, Services } from './services.ts';
-
-/** What a new thin part starts with, in mm; its entry is opened at once. */
-const FIRST_FOCAL_LENGTH_MM = 50;
-const FIRST_THICKNESS_MM = 1;
+import type { CommandGroup } from './services.ts';
 
 /** Adding, removing and changing parts. */
-export function partCommands({ enterFocalLength }: Services): CommandGroup {
-  const addThin = (focalLengthMm: number) => {
-    const [added] = place((sketch, atMm, positionId) =>
-      insertPart(sketch, newThin(focalLengthMm, freshPartId(sketch)), atMm, positionId),
-    );
-    if (added) enterFocalLength(added);
-  };
-
+export function partCommands(): CommandGroup {
   return {
     title: 'Parts',
     commands: [
-      command('addPositive', 'Add a positive element behind the selection', ['P'], () =>
-        addThin(FIRST_FOCAL_LENGTH_MM),
-      ),
-      command('addNegative', 'Add a negative element behind the selection', ['N'], () =>
-        addThin(-FIRST_FOCAL_LENGTH_MM),
-      ),
-      command('addStop', 'Add a stop behind the selection', ['S'], () => place(dropStop)),
-      command('addPlate', 'Add a plate behind the selection', ['L'], () =>
-        place((sketch, atMm, positionId) =>
-          insertPart(sketch, newPlate(FIRST_THICKNESS_MM, freshPartId(sketch)), atMm, positionId),
-        ),
-      ),
+      command('addPositive', 'Add a positive element behind the selection', ['P'], add('positive')),
+      command('addNegative', 'Add a negative element behind the selection', ['N'], add('negative')),
+      command('addStop', 'Add a stop behind the selection', ['S'], add('stop')),
+      command('addPlate', 'Add a plate behind the selection', ['L'], add('plate')),
       command('delete', 'Delete the selected parts', ['Delete', 'Backspace'], removeSelected, hasSelected),
       command('duplicate', 'Duplicate the selected parts', ['D'], duplicateSelected, hasSelected),
       command('flip', 'Flip: reverse the order of the selected parts, or of all', ['V'], flip, hasParts),
@@ -81,12 +63,12 @@ export function addAndSelect(edit: Edit): readonly PartId[] {
   return added;
 }
 
-function place(insert: (sketch: Sketch, atMm: number, positionId: PositionId) => Sketch): readonly PartId[] {
+/** Sets a new part down behind the selection, as the tray does. */
+const add = (kind: TrayKind) => () => {
   const sketch = sketchNow();
-  const { at } = settingNow();
-  const atMm = placeBehind(sketch, viewStore.getState().selection, analysisOf(sketch, settingAt(at)));
-  return addAndSelect((before) => insert(before, atMm, at));
-}
+  const analysis = analysisOf(sketch, settingAt(settingNow().at));
+  setDown(kind, { zMm: placeBehind(sketch, viewStore.getState().selection, analysis), onto: null });
+};
 
 const hasParts = () => sketchNow().parts.length > 0;
 const hasSelected = () => selectedNow().length > 0;

@@ -14,8 +14,6 @@ export interface Services {
   /** The dimensioned drawing as an SVG text, on paper. */
   readonly drawSheet: () => string;
   readonly fitView: (what: 'parts' | 'everything') => void;
-  /** Opens the entry of a part's focal length, once the part is on the screen. */
-  readonly enterFocalLength: (partId: PartId) => void;
   /** Prints what is on the screen, once it is drawn. */
   readonly print: () => void;
   /** The address of the page, for a link that carries the sketch. */

@@ -22,7 +22,7 @@ export function SheetTables({ table }: { readonly table: SpacingTable }) {
 }
 
 /** The block with only the columns of these kinds. */
-export function columnsOf(block: Block<string>, kinds: readonly ColumnKind[]): Block<string> {
+function columnsOf(block: Block<string>, kinds: readonly ColumnKind[]): Block<string> {
   const kept = block.columns.map((column) => kinds.includes(column.kind));
   return {
     columns: block.columns.filter((_, index) => kept[index]),

@@ -1,5 +1,5 @@
 import { FONT_FAMILY, PALETTES } from '../board/styles.ts';
-import { svgSize } from './exports.ts';
+import { svgSize, withoutProlog } from './exports.ts';
 
 const SIZE_PX = 13;
 const LINE_PX = 18;
@@ -22,7 +22,7 @@ export function withCaution(svg: string, caution: string | null): string {
   return [
     `<svg xmlns="http://www.w3.org/2000/svg" width="${widthPx}" height="${wholePx}" viewBox="0 0 ${widthPx} ${wholePx}">`,
     `  <rect width="${widthPx}" height="${wholePx}" fill="${paper}"/>`,
-    svg.replace(/^\s*<\?xml[^>]*\?>\s*/, ''),
+    withoutProlog(svg),
     ...texts,
     '</svg>\n',
   ].join('\n');

@@ -66,10 +66,8 @@ export function svgSize(svg: string): { readonly widthPx: number; readonly heigh
   return widthPx > 0 && heightPx > 0 ? { widthPx, heightPx } : null;
 }
 
-/** `svg` with a style sheet as its first child. */
-export function withStyle(svg: string, css: string): string {
-  return css === '' ? svg : svg.replace(/<svg\b[^>]*>/, (root) => `${root}<style>${css}</style>`);
-}
+/** The root element of an SVG text alone, to stand inside another. */
+export const withoutProlog = (svg: string): string => svg.replace(/^\s*<\?xml[^>]*\?>\s*/, '');
 
 /** Says what to do when no picture comes out. */
 export const noPicture = (): Outcome<Blob, string> =>

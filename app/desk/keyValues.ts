@@ -12,7 +12,7 @@ export interface KeyValues {
 const PATIENCE_MS = 5000;
 
 /** What a store that does not answer fails with. */
-export class NoAnswer extends Error {
+class NoAnswer extends Error {
   override readonly name = 'NoAnswer';
 }
 

@@ -1,6 +1,6 @@
 import { beforeEach, describe, expect, test } from 'vitest';
 import { withCaution } from '../../../app/desk/cautioned.ts';
-import { downloadPng, downloadSvg, downloadTable, svgSize, withStyle } from '../../../app/desk/exports.ts';
+import { downloadPng, downloadSvg, downloadTable, svgSize } from '../../../app/desk/exports.ts';
 import { dismissNotice, noticeStore } from '../../../app/desk/notices.ts';
 import type { PartId, SpacingTable } from '../../../engine/index.ts';
 import { emptySketch, newThin, SHEET_FORMS, sheetText, spacingTable } from '../../../engine/index.ts';
@@ -62,11 +62,6 @@ describe('what is taken away', () => {
     expect(svgSize('<svg viewBox="0 0 1 1"/>')).toBeNull();
     expect(svgSize('<svg width="0" height="5"/>')).toBeNull();
     expect(svgSize('')).toBeNull();
-  });
-
-  test('a style goes into the root and nowhere else', () => {
-    expect(withStyle(svg, 'a{}')).toContain('role="img"><style>a{}</style><path/>');
-    expect(withStyle(svg, '')).toBe(svg);
   });
 
   test('a caution stands under the whole drawing, broken into lines that fit, and the drawing is inside as it was', () => {
