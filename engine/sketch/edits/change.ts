@@ -5,6 +5,14 @@ export function withField<T extends object, K extends keyof T>(record: T, key: K
   return sameData(record[key], value) ? record : { ...record, [key]: value === 0 ? 0 : value };
 }
 
+/** The record with several entries changed; the same object when all hold these data already. */
+export function withFields<T extends object>(record: T, changes: Partial<T>): T {
+  let next = record;
+  for (const key of Object.keys(changes) as (keyof T)[])
+    next = withField(next, key, changes[key] as T[keyof T]);
+  return next;
+}
+
 /** The sketch with one part changed; the same object when the part does not exist or `change` gives it back. */
 export function changePart(sketch: Sketch, partId: PartId, change: (part: Part) => Part): Sketch {
   return changePartAt(sketch, indexOfPart(sketch, partId), change);

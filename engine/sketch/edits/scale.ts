@@ -1,6 +1,6 @@
 import type { Aperture, FieldSize, ObjectDistance, Part, PartId, Sketch } from '../types.ts';
 import { everyPosition } from '../values.ts';
-import { withGap } from './change.ts';
+import { withField, withFields, withGap } from './change.ts';
 
 /**
  * The whole layout made larger by a factor: focal lengths, gaps, object distance, diameters, room and the field's heights.
@@ -11,13 +11,12 @@ export function scaleSketch(sketch: Sketch, factor: number): Sketch {
   const distanceMm = everyPosition(sketch.object.distanceMm, (distance: ObjectDistance) =>
     distance === 'infinity' ? distance : distance * factor,
   );
-  return {
-    ...sketch,
-    object: { ...sketch.object, distanceMm },
+  return withFields(sketch, {
+    object: withField(sketch.object, 'distanceMm', distanceMm),
     parts: sketch.parts.map((part) => scaledGap(scaledPart(part, factor), factor)),
     aperture: scaledAperture(sketch.aperture, factor),
-    field: { ...sketch.field, size: scaledField(sketch.field.size, factor) },
-  };
+    field: withField(sketch.field, 'size', scaledField(sketch.field.size, factor)),
+  });
 }
 
 /** The whole layout scaled so that its focal length goes from `presentMm` to `wantedMm`; unlike signs change nothing. */
@@ -36,7 +35,7 @@ export function scaleParts(sketch: Sketch, ids: readonly PartId[], factor: numbe
     const scaled = scaledPart(part, factor);
     return next !== undefined && ids.includes(next.id) ? scaledGap(scaled, factor) : scaled;
   });
-  return { ...sketch, parts };
+  return withField(sketch, 'parts', parts);
 }
 
 const isFactor = (factor: number): boolean => factor > 0 && Number.isFinite(factor) && factor !== 1;
@@ -49,15 +48,15 @@ const scaledGap = (part: Part, factor: number): Part =>
 
 function scaledPart(part: Part, factor: number): Part {
   const semiDiameterMm = part.semiDiameterMm === null ? null : part.semiDiameterMm * factor;
-  if (part.kind === 'stop') return { ...part, semiDiameterMm };
-  if (part.kind === 'plate') return { ...part, semiDiameterMm, thicknessMm: part.thicknessMm * factor };
-  return {
-    ...part,
+  if (part.kind === 'stop') return withField(part, 'semiDiameterMm', semiDiameterMm);
+  if (part.kind === 'plate')
+    return withFields(part, { semiDiameterMm, thicknessMm: part.thicknessMm * factor });
+  return withFields(part, {
     semiDiameterMm,
     focalLengthMm: part.focalLengthMm * factor,
     roomFrontMm: part.roomFrontMm * factor,
     roomBehindMm: part.roomBehindMm * factor,
-  };
+  });
 }
 
 function scaledAperture(aperture: Aperture, factor: number): Aperture {

@@ -1,4 +1,5 @@
 import { readdirSync, readFileSync } from 'node:fs';
+import { isDeepStrictEqual } from 'node:util';
 import { fc, test } from '@fast-check/vitest';
 import { describe, expect } from 'vitest';
 import { parseSketch } from '../../../../engine/sketch/parse.ts';
@@ -56,7 +57,7 @@ describe('every edit', () => {
       const before = new Map(sketch.parts.map((part) => [part.id, part]));
       for (const part of edited.parts) {
         const old = before.get(part.id);
-        if (old !== undefined && JSON.stringify(old) === JSON.stringify(part)) expect(part).toBe(old);
+        if (old !== undefined && isDeepStrictEqual(old, part)) expect(part).toBe(old);
       }
     },
   );
