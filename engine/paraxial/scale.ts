@@ -23,9 +23,8 @@ export function axisCrossing(n: number, y: number, nu: number, nuScale: number, 
 
 /**
  * What each number of `rayThrough` was made from: how far it would move if every term added on the way were changed by its own size, the
- * changes carried on by the same y–nu recurrence and summed as squares. Never smaller than the number itself; in a short train about
- * the same recurrence with absolute values, which however grows 3.7 times per lens of a relay and would call a chain of
- * thirty afocal.
+ * changes carried on by the same y–nu recurrence and summed as squares. In a short train this is about the recurrence with absolute
+ * values; that one, however, grows 3.7 times with every lens of a relay and would call a chain of thirty afocal.
  */
 export function rayScale(train: Train, surface: number, yMm: number, nu: number): ParaxialRay {
   const scale = emptyRay(train.count);

@@ -121,7 +121,7 @@ function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
       look(
         'sensor not covered',
         null,
-        `The field reaches ${mm(reached)} from the axis, the sensor's corner stands at ${mm(wanted)}.`,
+        `The field reaches ${mm(reached)} from the axis, the sensor’s corner stands at ${mm(wanted)}.`,
       );
     }
   }
