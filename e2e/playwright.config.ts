@@ -5,6 +5,9 @@ export default defineConfig({
   testDir: '.',
   outputDir: '../test-results/browser',
   fullyParallel: true,
+  workers: 2,
+  timeout: 60_000,
+  expect: { timeout: 10_000 },
   forbidOnly: Boolean(process.env.CI),
   reporter: 'list',
   use: {
@@ -12,6 +15,7 @@ export default defineConfig({
     browserName: 'chromium',
     viewport: { width: 1440, height: 900 },
     launchOptions: launchOptions(),
+    actionTimeout: 10_000,
     trace: 'retain-on-failure',
   },
   webServer: {
