@@ -17,7 +17,6 @@ import { createStorage } from './desk/storage.ts';
 import type { Board } from './layout/board.ts';
 import { sheetDrawing } from './layout/sheetDrawing.ts';
 import { currentReading } from './live/reading.ts';
-import { setView } from './store/viewStore.ts';
 
 let board: Board | null = null;
 
@@ -39,7 +38,6 @@ const services: Services = {
   rasterise,
   drawSheet: () => sheetDrawing(currentReading(), measure),
   fitView: (what) => board?.fit(what),
-  enterFocalLength: (partId) => setView({ typing: `focal:${partId}:rear` }),
   print: printSoon,
   page: () => location.href,
 };

@@ -1,13 +1,8 @@
-import type { Edit, PartId, PositionId, Sketch } from '../../engine/index.ts';
+import type { Edit, PartId } from '../../engine/index.ts';
 import {
-  dropStop,
   duplicateParts,
   flipParts,
   flipSign,
-  freshPartId,
-  insertPart,
-  newPlate,
-  newThin,
   removeParts,
   settingAt,
   tieParts,

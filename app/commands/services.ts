@@ -1,4 +1,3 @@
-import type { PartId } from '../../engine/index.ts';
 import type { ClipboardHost } from '../desk/clipboard.ts';
 import type { Desk } from '../desk/desk.ts';
 import type { Rasterise } from '../desk/exports.ts';

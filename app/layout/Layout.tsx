@@ -44,9 +44,9 @@ export function Layout({ theme, onBoard, say, speak }: LayoutProps) {
       say: (sentence) => client.current.say(sentence),
       speak: (text) => client.current.speak(text),
       choose: (handles, xPx, yPx) => setChoice({ handles, xPx, yPx }),
-      setDown: (zMm) => {
+      setDown: (spot) => {
         const { placing } = viewStore.getState();
-        if (placing) setDown(placing, zMm);
+        if (placing) setDown(placing, spot);
       },
       onFrame: () => {
         if (typingNow.current) setFrame((count) => count + 1);

@@ -23,12 +23,12 @@ export function Tray({ board }: TrayProps) {
   };
   const onMove = (event: PointerEvent<HTMLButtonElement>) => {
     if (!event.currentTarget.hasPointerCapture(event.pointerId)) return;
-    board()?.showDrop(board()?.lengthAt(event.clientX, event.clientY) ?? null);
+    board()?.showDrop(board()?.spotUnder(event.clientX, event.clientY)?.zMm ?? null);
   };
   const onUp = (kind: TrayKind) => (event: PointerEvent<HTMLButtonElement>) => {
-    const zMm = board()?.lengthAt(event.clientX, event.clientY) ?? null;
+    const spot = board()?.spotUnder(event.clientX, event.clientY) ?? null;
     board()?.showDrop(null);
-    if (zMm !== null) setDown(kind, zMm);
+    if (spot) setDown(kind, spot);
     else if (armed.current || !inside(event)) setView({ placing: null });
   };
   const onCancel = () => {

@@ -23,6 +23,7 @@ import { createHand, type Hand } from './hand.ts';
 import { type HandState, overlayLayer } from './overlay.ts';
 import { paintParts, paintRays } from './paint.ts';
 import { type Picture, pictureOf, sceneOfReading } from './picture.ts';
+import type { Spot } from './tray.ts';
 
 /** What the board asks of the app around it. */
 export interface BoardClient {
@@ -32,7 +33,7 @@ export interface BoardClient {
   /** Several grips lie under a finger: let the person choose one by name. */
   readonly choose: (handles: readonly Handle[], xPx: number, yPx: number) => void;
   /** Something waits in the tray and the axis was clicked here. */
-  readonly setDown: (zMm: number) => void;
+  readonly setDown: (spot: Spot) => void;
   /** The grip with the focus and its value, in words, whenever either changes; null when none has it. */
   readonly speak: (text: string | null) => void;
   /** A frame has been drawn. */
@@ -46,8 +47,8 @@ export interface Board extends Pick<Hand, 'jog' | 'endJog' | 'type'> {
   readonly picture: () => Picture | null;
   readonly stretchBy: (factor: number) => void;
   readonly zoomBy: (factor: number) => void;
-  /** The length on the axis under a point of the window; null when the point is not over the board. */
-  readonly lengthAt: (clientX: number, clientY: number) => number | null;
+  /** The spot on the axis under a point of the window; null when the point is not over the board. */
+  readonly spotUnder: (clientX: number, clientY: number) => Spot | null;
   /** Shows where the thing from the tray would be set down. */
   readonly showDrop: (zMm: number | null) => void;
   readonly focusGrip: (handleId: string) => boolean;
@@ -59,6 +60,8 @@ type Layer = 'rays' | 'parts' | 'overlay';
 
 const NONE: ReadonlySet<string> = new Set();
 
+/** How near a part something is set down on it, px. */
+const ONTO_PX = 9;
 const PAN_PX = 40;
 const zoomBy = (factor: number) => (view: Viewport) => zoomAbout(view, view.widthPx / 2, factor);
 
@@ -91,6 +94,14 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     state = { ...state, ...change };
     frameLoop.ask('draw', 'hand', drawParts);
   };
+  const spotAt = (xPx: number): Spot => {
+    const parts = (picture?.scene.parts ?? []).map(({ part, frontMm }) => ({
+      id: part.id,
+      asidePx: Math.abs(xOf(view(), frontMm) - xPx),
+    }));
+    const near = parts.filter(({ asidePx }) => asidePx < ONTO_PX).sort((a, b) => a.asidePx - b.asidePx)[0];
+    return { zMm: zOf(view(), xPx), onto: near?.id ?? null };
+  };
   const speak = () => {
     const handle = handleOf(state.focus);
     client.speak(handle?.slider ? `${handle.label}: ${handle.slider.valueText}` : null);
@@ -102,7 +113,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     focus: ({ id }) => mirror.focus(id),
     say: client.say,
     choose: client.choose,
-    setDown: client.setDown,
+    setDown: (xPx) => client.setDown(spotAt(xPx)),
   });
 
   const surface = createSurface<Layer>(element, ['rays', 'parts', 'overlay'], () => {
@@ -219,12 +230,12 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     picture: () => picture,
     stretchBy: (factor) => changeView((now) => stretchBy(now, factor)),
     zoomBy: (factor) => changeView(zoomBy(factor)),
-    lengthAt(clientX, clientY) {
+    spotUnder(clientX, clientY) {
       const box = element.getBoundingClientRect();
       const xPx = clientX - box.left;
       const yPx = clientY - box.top;
       const inside = xPx >= 0 && xPx <= box.width && yPx >= 0 && yPx <= box.height;
-      return inside ? zOf(view(), xPx) : null;
+      return inside ? spotAt(xPx) : null;
     },
     showDrop: (zMm) => show({ dropXPx: zMm === null ? null : xOf(view(), zMm) }),
     focusGrip: (id) => mirror.focus(id),

@@ -1,6 +1,6 @@
 import type { Effect, PointerKind } from '../board/hand.ts';
 import type { Viewport } from '../board/viewport.ts';
-import { panBy, stretchBy, withLengthAt, xOf, zOf, zoomAbout } from '../board/viewport.ts';
+import { panBy, stretchBy, withLengthAt, xOf, zoomAbout } from '../board/viewport.ts';
 import type { Handle, Move } from '../drawing/handle.ts';
 import { typedByLabel } from '../drawing/handles/labels.ts';
 import { frameLoop } from '../live/frame.ts';
@@ -17,7 +17,7 @@ export interface HandBoard {
   readonly focus: (handle: Handle) => void;
   readonly say: (sentence: string) => void;
   readonly choose: (handles: readonly Handle[], xPx: number, yPx: number) => void;
-  readonly setDown: (zMm: number) => void;
+  readonly setDown: (xPx: number) => void;
 }
 
 export interface Hand {
@@ -87,7 +87,7 @@ export function createHand(board: HandBoard): Hand {
   };
 
   const click = (effect: Extract<Effect, { do: 'click' | 'double click' }>) => {
-    if (viewStore.getState().placing) return board.setDown(zOf(board.view(), effect.xPx));
+    if (viewStore.getState().placing) return board.setDown(effect.xPx);
     const handle = board.handleOf(effect.grip);
     if (!handle) return setView({ selection: [] });
     const { shift, ctrl, meta } = effect.modifiers;

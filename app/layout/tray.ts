@@ -1,5 +1,5 @@
 import type { PartId, PositionId, Sketch } from '../../engine/index.ts';
-import { dropStop, freshPartId, insertPart, newPlate, newThin } from '../../engine/index.ts';
+import { dropStop, freshPartId, insertPart, newPlate, newThin, rideStop } from '../../engine/index.ts';
 import { currentReading } from '../live/reading.ts';
 import { applyEdit, sketchStore } from '../store/sketchStore.ts';
 import { setView, type TrayKind } from '../store/viewStore.ts';
@@ -12,27 +12,38 @@ export const TRAY: readonly { readonly kind: TrayKind; readonly label: string }[
   { kind: 'plate', label: 'plate' },
 ];
 
+/** What a new thin part starts with; its entry is opened at once. */
 const FIRST_FOCAL_LENGTH_MM = 50;
+const FIRST_THICKNESS_MM = 1;
 
-function insertOf(kind: TrayKind, sketch: Sketch, atMm: number, position: PositionId): Sketch {
-  if (kind === 'stop') return dropStop(sketch, atMm, position);
-  const id = freshPartId(sketch);
-  if (kind === 'plate') return insertPart(sketch, newPlate(1, id), atMm, position);
-  const focalLengthMm = kind === 'positive' ? FIRST_FOCAL_LENGTH_MM : -FIRST_FOCAL_LENGTH_MM;
-  return insertPart(sketch, newThin(focalLengthMm, id), atMm, position);
+/** A place on the axis, in mm from the first part, and the part that stands there. */
+export interface Spot {
+  readonly zMm: number;
+  readonly onto: PartId | null;
 }
 
-/** Sets a new part down at `atMm` from the first part, selects it and opens its focal length for typing. */
-export function setDown(kind: TrayKind, atMm: number): PartId | null {
+/**
+ * Sets a new part down, selects it and opens its focal length for typing. A stop set down on a part rides on it. The first element
+ * of a sketch carries the stop until another is chosen: a lone lens is its own stop.
+ */
+export function setDown(kind: TrayKind, { zMm, onto }: Spot): void {
   const { at } = currentReading().setting;
   const known = new Set(sketchStore.getState().sketch.parts.map((part) => part.id));
-  applyEdit((sketch) => insertOf(kind, sketch, atMm, at));
-  const added = sketchStore.getState().sketch.parts.find((part) => !known.has(part.id));
-  if (!added) {
-    setView({ placing: null });
-    return null;
-  }
-  const typing = added.kind === 'thin' ? `focal:${added.id}:rear` : null;
-  setView({ placing: null, selection: [added.id], typing });
-  return added.id;
+  applyEdit((sketch) => (kind === 'stop' && onto ? rideStop(sketch, onto) : added(kind, sketch, zMm, at)));
+  const made = sketchStore.getState().sketch.parts.find((part) => !known.has(part.id));
+  const chosen = made?.id ?? (kind === 'stop' ? onto : null);
+  setView({
+    placing: null,
+    ...(chosen && { selection: [chosen] }),
+    typing: made?.kind === 'thin' ? `focal:${made.id}:rear` : null,
+  });
+}
+
+function added(kind: TrayKind, sketch: Sketch, atMm: number, position: PositionId): Sketch {
+  if (kind === 'stop') return dropStop(sketch, atMm, position);
+  const id = freshPartId(sketch);
+  if (kind === 'plate') return insertPart(sketch, newPlate(FIRST_THICKNESS_MM, id), atMm, position);
+  const focalLengthMm = kind === 'positive' ? FIRST_FOCAL_LENGTH_MM : -FIRST_FOCAL_LENGTH_MM;
+  const placed = insertPart(sketch, newThin(focalLengthMm, id), atMm, position);
+  return sketch.parts.length === 0 ? rideStop(placed, id) : placed;
 }

@@ -1,6 +1,6 @@
-import { renderToStaticMarkup } from 'react-dom/server';
 import { createElement } from 'react';
-import { beforeEach, describe, expect, test } from 'vitest';
+import { renderToStaticMarkup } from 'react-dom/server';
+import { afterAll, beforeAll, beforeEach, describe, expect, test, vi } from 'vitest';
 import { commandsById, createCommands } from '../../../app/commands/commands.ts';
 import { Help } from '../../../app/commands/Help.tsx';
 import type { Services } from '../../../app/commands/services.ts';
@@ -38,7 +38,6 @@ const services: Services = {
   rasterise: async () => ({ ok: false, why: 'no canvas' }),
   drawSheet: () => '<svg/>',
   fitView: (what) => called.push(`fit ${what}`),
-  enterFocalLength: (id) => called.push(`enter ${id}`),
   print: () => called.push('print'),
   page: () => 'https://example.org/',
 };
@@ -78,6 +77,9 @@ async function threeElements(): Promise<readonly [PartId, PartId, PartId]> {
 }
 
 describe('commands', () => {
+  // Nothing is drawn here.
+  beforeAll(() => vi.stubGlobal('requestAnimationFrame', () => 0));
+  afterAll(() => vi.unstubAllGlobals());
   beforeEach(() => {
     openSketch(emptySketch('Test'));
     viewStore.setState(startView, true);
@@ -116,7 +118,8 @@ describe('commands', () => {
     await run('addPositive');
     expect(sketch().parts).toMatchObject([{ kind: 'thin', focalLengthMm: 50 }]);
     expect(selection()).toEqual(ids());
-    expect(called).toEqual([`enter ${ids()[0]}`]);
+    expect(viewStore.getState().typing).toBe(`focal:${ids()[0]}:rear`);
+    expect(sketch().stop).toBe(ids()[0]);
   });
 
   test('a new part goes into the middle of the gap behind the selection', async () => {
