@@ -16,7 +16,7 @@ export interface DecimalMatrix {
 }
 
 /** `left` after `right`. */
-export const times = (left: DecimalMatrix, right: DecimalMatrix): DecimalMatrix => ({
+const times = (left: DecimalMatrix, right: DecimalMatrix): DecimalMatrix => ({
   a: left.a.times(right.a).plus(left.b.times(right.c)),
   b: left.a.times(right.b).plus(left.b.times(right.d)),
   c: left.c.times(right.a).plus(left.d.times(right.c)),
@@ -26,7 +26,7 @@ export const times = (left: DecimalMatrix, right: DecimalMatrix): DecimalMatrix 
 const ONE: DecimalMatrix = { a: new D(1), b: new D(0), c: new D(0), d: new D(1) };
 
 /** Power of one surface. */
-export const powerOf = (train: Train, k: number): Decimal =>
+const powerOf = (train: Train, k: number): Decimal =>
   new D(train.index[k + 1]!).minus(train.index[k]!).times(train.curvature[k]!).plus(train.thinPower[k]!);
 
 const refraction = (train: Train, k: number): DecimalMatrix => ({ ...ONE, c: powerOf(train, k).neg() });
