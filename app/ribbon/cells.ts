@@ -47,7 +47,7 @@ export function cellsOf({ reading, scene }: Sight): readonly Cell[] {
       label: 'object distance',
       ...stored(sketch.object.distanceMm),
       follows: false,
-      bad: false,
+      bad: warnings.some(({ kind }) => kind === 'object inside'),
     });
   }
   for (const [i, { part, index, frontMm, rearMm }] of scene.parts.entries()) {

@@ -49,7 +49,7 @@ function valueHandle(cell: PlacedCell, sight: Sight): Handle {
           const value = kept(scrubbed(drag.dzMm, drag.dxPx));
           return {
             ...plainMove(set(value, drag.other), sight.length(value)),
-            frameMm: first && !folded ? drag.dzMm : 0,
+            frameMm: first && !folded ? value - cell.valueMm : 0,
           };
         },
     step: between ? null : (amountMm, other) => set(kept(cell.valueMm + amountMm), other),

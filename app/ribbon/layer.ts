@@ -3,7 +3,7 @@ import { segment } from '../board/pen.ts';
 import type { MarkStyle, TextStyle } from '../board/styles.ts';
 import type { Viewport } from '../board/viewport.ts';
 import { yOf } from '../board/viewport.ts';
-import type { PlacedCell, RibbonPlan } from './layout.ts';
+import { CANNOT_BE_BUILT, type PlacedCell, type RibbonPlan } from './layout.ts';
 
 const TICK_PX = 5;
 const HATCH_PX = 6;
@@ -35,7 +35,7 @@ function drawCell(pen: Pen, cell: PlacedCell, view: Viewport, hovered: boolean):
   }
   segment(pen, fromPx, linePx, toPx, linePx, style);
   if (cell.bad) hatch(pen, fromPx, toPx, linePx);
-  if (cell.onLeader) segment(pen, cell.textXPx, linePx, cell.textXPx, cell.textYPx - 8, 'leader');
+  if (cell.onLeader) segment(pen, (fromPx + toPx) / 2, linePx, cell.textXPx, cell.textYPx - 8, 'leader');
   const value: TextStyle = cell.bad
     ? 'value bad'
     : cell.follows
@@ -44,12 +44,13 @@ function drawCell(pen: Pen, cell: PlacedCell, view: Viewport, hovered: boolean):
         ? 'value strong'
         : 'value';
   pen.text(cell.textXPx, cell.textYPx, cell.text, value, { align: 'centre', baseline: 'middle' });
+  if (cell.onLeader) return;
   if (cell.bad)
-    pen.text(cell.textXPx, linePx + 18, 'cannot be built', 'label bad', {
+    pen.text(cell.textXPx, linePx + 18, CANNOT_BE_BUILT, 'label bad', {
       align: 'centre',
       baseline: 'middle',
     });
-  else if (!cell.onLeader) mark(pen, cell);
+  else mark(pen, cell);
 }
 
 /** What kind of value it is: shared by all positions, or following the focus. */

@@ -14,6 +14,8 @@ const VALUE_ABOVE_PX = 7;
 /** Where values that are wider than their cell stand, below the line and staggered. */
 const LEADER_ROWS_PX = [22, 40];
 const ASIDE_PX = 10;
+/** Said of a dimension that parts cannot have. */
+export const CANNOT_BE_BUILT = 'cannot be built';
 
 /** A cell with its place on screen. */
 export interface PlacedCell extends Cell {
@@ -40,7 +42,10 @@ export interface RibbonPlan {
   } | null;
 }
 
-/** The ribbon's places on screen: values above their line, those too wide below it on leaders that avoid each other. */
+/**
+ * The ribbon's places on screen: values above their line, those too wide below it on leaders, in the first row that is free or else
+ * pushed aside in the one that ends first.
+ */
 export function ribbonPlan(cells: readonly Cell[], sight: Sight, measure: MeasureText): RibbonPlan {
   const { view, reading, scene } = sight;
   const topPx = view.heightPx;
@@ -48,19 +53,20 @@ export function ribbonPlan(cells: readonly Cell[], sight: Sight, measure: Measur
   const { unit, digits } = reading.view;
   const rowEnds = LEADER_ROWS_PX.map(() => Number.NEGATIVE_INFINITY);
   const placed = cells.map((cell): PlacedCell => {
-    const text = formatLength(cell.valueMm, unit, digits);
-    const halfTextPx = measure(text, 'value') / 2;
+    const value = formatLength(cell.valueMm, unit, digits);
     const [fromPx, toPx] = ends(cell, view);
     const middle = (fromPx + toPx) / 2;
-    const base = { ...cell, fromPx, toPx, linePx, text, halfTextPx };
-    if (Math.abs(toPx - fromPx) >= 2 * halfTextPx + ASIDE_PX)
-      return { ...base, textXPx: middle, textYPx: linePx - VALUE_ABOVE_PX - 7, onLeader: false };
-    const row = Math.max(
-      0,
-      rowEnds.findIndex((end) => end < middle - halfTextPx),
-    );
-    rowEnds[row] = middle + halfTextPx + ASIDE_PX;
-    return { ...base, textXPx: middle, textYPx: linePx + (LEADER_ROWS_PX[row] ?? 0), onLeader: true };
+    const onLeader = Math.abs(toPx - fromPx) < measure(value, 'value') + ASIDE_PX;
+    const text = onLeader && cell.bad ? `${value} ${CANNOT_BE_BUILT}` : value;
+    const halfTextPx = measure(text, 'value') / 2;
+    const base = { ...cell, fromPx, toPx, linePx, text, halfTextPx, onLeader };
+    if (!onLeader) return { ...base, textXPx: middle, textYPx: linePx - VALUE_ABOVE_PX - 7 };
+    const leftPx = middle - halfTextPx;
+    const free = rowEnds.findIndex((end) => end <= leftPx);
+    const row = free < 0 ? rowEnds.indexOf(Math.min(...rowEnds)) : free;
+    const textXPx = Math.max(leftPx, rowEnds[row] ?? leftPx) + halfTextPx;
+    rowEnds[row] = textXPx + halfTextPx + ASIDE_PX;
+    return { ...base, textXPx, textYPx: linePx + (LEADER_ROWS_PX[row] ?? 0) };
   });
   const { imageMm } = scene.stage;
   const first = scene.parts[0];

@@ -1,0 +1,177 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { roughMeasure } from '../../../app/board/measure.ts';
+import { recorderPen } from '../../../app/board/recorderPen.ts';
+import { xOf } from '../../../app/board/viewport.ts';
+import { extensionLines, ribbonLayer } from '../../../app/ribbon/layer.ts';
+import { type PlacedCell, RIBBON_PX } from '../../../app/ribbon/layout.ts';
+import type { PartId, Sketch } from '../../../engine/index.ts';
+import { emptySketch, newThin } from '../../../engine/index.ts';
+import { inspectionZoom } from '../../engine/demo.ts';
+import { anySketch } from '../../engine/sketch/arbitrary.ts';
+import { AT_MIDDLE, DESKTOP, demoPicture, PHONE, pictureFor } from '../drawing/seen.ts';
+
+/** Height of a value's text, px. */
+const TEXT_PX = 12;
+/** Least distance that two values on leaders keep, px. */
+const APART_PX = 4;
+
+/** Thin elements with these gaps behind them, the last one's image at the focus. */
+const row = (...gaps: readonly number[]): Sketch => ({
+  ...emptySketch(),
+  parts: gaps.map((lengthMm, index) => ({
+    ...newThin(200, `p${index + 1}` as PartId),
+    space: { lengthMm, medium: 'air' },
+  })),
+});
+
+const boxOf = ({ textXPx, textYPx, halfTextPx }: PlacedCell) => ({
+  left: textXPx - halfTextPx,
+  right: textXPx + halfTextPx,
+  top: textYPx - TEXT_PX / 2,
+  bottom: textYPx + TEXT_PX / 2,
+});
+
+function covering(cells: readonly PlacedCell[], apartPx = 0): readonly string[] {
+  return cells.flatMap((one, i) =>
+    cells.slice(i + 1).flatMap((other) => {
+      const [a, b] = [boxOf(one), boxOf(other)];
+      const clear =
+        a.right + apartPx <= b.left || b.right + apartPx <= a.left || a.bottom <= b.top || b.bottom <= a.top;
+      return clear ? [] : [`${one.id} on ${other.id}`];
+    }),
+  );
+}
+
+const textsOf = (picture: ReturnType<typeof demoPicture>, hovered: string | null = null) => {
+  const pen = recorderPen();
+  ribbonLayer(pen, picture.plan, picture.view, hovered);
+  return pen.marks.flatMap((mark) => (mark.kind === 'text' ? [mark] : []));
+};
+
+describe('the ribbon', () => {
+  it('shows every dimension under its space, with the digits and the unit chosen', () => {
+    const { plan, view } = demoPicture();
+    for (const cell of plan.cells) {
+      expect([cell.fromPx, cell.toPx]).toEqual([xOf(view, cell.fromMm), xOf(view, cell.toMm)]);
+    }
+    expect(plan.cells.map(({ text }) => text)).toEqual(['500.000', '26.272', '25.315', '32.413', '26.000']);
+    expect(demoPicture({ digits: 1 }).plan.cells[1]?.text).toBe('26.3');
+    expect(demoPicture({ unit: 'in' }).plan.cells[1]?.text).toBe('1.03434');
+  });
+
+  it('shows the length from the first part to the image below', () => {
+    const { plan, view } = demoPicture();
+    expect(plan.overall).toMatchObject({ fromPx: xOf(view, 0), text: '110.000' });
+    expect(plan.overall?.toPx).toBeCloseTo(xOf(view, 110), 6);
+    expect(pictureFor(row(0)).plan.overall).toBeNull();
+    expect(pictureFor(emptySketch()).plan).toMatchObject({ cells: [], overall: null });
+  });
+
+  it('lies below the drawing and within its height', () => {
+    const { plan, view } = demoPicture();
+    expect(plan.topPx).toBe(view.heightPx);
+    for (const cell of [...plan.cells, ...pictureFor(row(1, 1, 1, 1, 200, 0)).plan.cells]) {
+      expect(boxOf(cell).top).toBeGreaterThan(plan.topPx);
+      expect(boxOf(cell).bottom).toBeLessThan(plan.topPx + RIBBON_PX);
+    }
+  });
+
+  it('sets a value that is wider than its space on a leader below the line', () => {
+    const { plan } = pictureFor(row(1, 60, 0));
+    const [narrow, wide] = plan.cells;
+    expect(narrow).toMatchObject({ id: 'gap:p1', onLeader: true });
+    expect(narrow?.textYPx).toBeGreaterThan(narrow?.linePx ?? 0);
+    expect(wide).toMatchObject({ id: 'gap:p2', onLeader: false });
+    expect(wide?.textYPx).toBeLessThan(wide?.linePx ?? 0);
+  });
+
+  it('staggers narrow neighbours', () => {
+    const { plan } = pictureFor(row(3, 3, 3, 200, 0));
+    const rows = new Set(plan.cells.filter(({ onLeader }) => onLeader).map(({ textYPx }) => textYPx));
+    expect(rows.size).toBe(2);
+    expect(covering(plan.cells)).toEqual([]);
+  });
+
+  it('keeps many narrow values apart, pushing them aside where two rows are not enough', () => {
+    const { plan } = pictureFor(row(1, 1, 1, 1, 1, 1, 1, 1, 150, 0));
+    const leaders = plan.cells.filter(({ onLeader }) => onLeader);
+    expect(leaders.length).toBeGreaterThanOrEqual(8);
+    expect(covering(leaders, APART_PX)).toEqual([]);
+  });
+
+  it('never lets a value cover another on any sketch whose parts stand in their order', () => {
+    fc.assert(
+      fc.property(
+        anySketch({ leastParts: 1 }),
+        fc.constantFrom(DESKTOP, PHONE),
+        fc.constantFrom('parts' as const, 'everything' as const),
+        fc.constantFrom('mm' as const, 'in' as const),
+        (sketch, size, what, unit) => {
+          const { cells } = pictureFor(sketch, { unit }, size, what).plan;
+          const upright = cells.filter(({ fromMm, toMm, fromPx, toPx }) => toMm >= fromMm && toPx >= fromPx);
+          expect(covering(upright)).toEqual([]);
+        },
+      ),
+    );
+  });
+});
+
+describe('the ribbon’s words', () => {
+  it('are the values, then what is common or follows, and the whole length', () => {
+    expect(textsOf(demoPicture()).map(({ text }) => text)).toEqual(
+      expect.arrayContaining(['26.272', '= all', '110.000']),
+    );
+    const following = pictureFor({ ...inspectionZoom(), image: 'focus' }, { setting: AT_MIDDLE });
+    expect(textsOf(following).map(({ text }) => text)).toContain('follows focus');
+  });
+
+  it('are stronger while hovered and quiet where they follow', () => {
+    const styleOf = (text: string, hovered: string | null) =>
+      textsOf(demoPicture(), hovered).find((mark) => mark.text === text)?.style;
+    expect(styleOf('26.272', null)).toBe('value');
+    expect(styleOf('26.272', 'cell:gap:p1')).toBe('value strong');
+    const following = pictureFor({ ...inspectionZoom(), image: 'focus' }, { setting: AT_MIDDLE });
+    expect(textsOf(following).find(({ text }) => text === '26.000')?.style).toBe('value quiet');
+  });
+
+  it.each([
+    ['wide', -30],
+    ['narrow', -2],
+  ])('say once that a %s gap cannot be built, clear of its value', (_which, gapMm) => {
+    const picture = pictureFor(row(40, gapMm, 40, 0));
+    const cell = picture.plan.cells.find(({ id }) => id === 'gap:p2');
+    expect(cell?.bad).toBe(true);
+    const words = textsOf(picture).filter(({ text }) => text.includes('cannot be built'));
+    expect(words).toHaveLength(1);
+    const value = textsOf(picture).find(({ text }) => text.startsWith(`\u2212${-gapMm}.000`));
+    const apart = Math.abs((value?.yPx ?? 0) - (words[0]?.yPx ?? 0));
+    expect(value?.text === words[0]?.text || apart >= TEXT_PX).toBe(true);
+  });
+
+  it('come with a hatch and a reversed line where a gap cannot be built', () => {
+    const picture = pictureFor(row(40, -30, 40, 0));
+    const pen = recorderPen();
+    ribbonLayer(pen, picture.plan, picture.view, null);
+    const lines = (style: string) =>
+      pen.marks.flatMap((mark) => (mark.kind === 'lines' && mark.style === style ? mark.lines : []));
+    expect(lines('hatch').length).toBeGreaterThan(3);
+    const [bad] = lines('dimension bad');
+    expect(bad?.[0]).toBeGreaterThan(bad?.[2] ?? 0);
+  });
+});
+
+describe('extension lines', () => {
+  it('come down once from every place that is dimensioned', () => {
+    const { plan, view } = demoPicture();
+    const pen = recorderPen(6);
+    extensionLines(pen, plan, view);
+    const places = new Set(plan.cells.flatMap(({ fromPx, toPx }) => [fromPx, toPx]));
+    expect(pen.marks).toHaveLength(places.size);
+  });
+
+  it('are measured with the type that is drawn', () => {
+    const [cell] = demoPicture().plan.cells;
+    expect(cell?.halfTextPx).toBe(roughMeasure('500.000', 'value') / 2);
+  });
+});
