@@ -1,6 +1,6 @@
 import greek from '@fontsource-variable/source-sans-3/files/source-sans-3-greek-wght-normal.woff2?url';
-import latin from '@fontsource-variable/source-sans-3/files/source-sans-3-latin-wght-normal.woff2?url';
 import latinExt from '@fontsource-variable/source-sans-3/files/source-sans-3-latin-ext-wght-normal.woff2?url';
+import latin from '@fontsource-variable/source-sans-3/files/source-sans-3-latin-wght-normal.woff2?url';
 import type { Rasterise } from './exports.ts';
 import { noPicture, pictureOf, svgSize, withoutProlog } from './exports.ts';
 

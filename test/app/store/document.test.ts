@@ -3,7 +3,15 @@ import { describe, expect, test } from 'vitest';
 import type { Document } from '../../../app/store/document.ts';
 import * as document from '../../../app/store/document.ts';
 import type { Edit, PartId, PositionId, Sketch } from '../../../engine/index.ts';
-import { emptySketch, newThin, propose, setFocalLength, setGap, setTitle, unsettled } from '../../../engine/index.ts';
+import {
+  emptySketch,
+  newThin,
+  propose,
+  setFocalLength,
+  setGap,
+  setTitle,
+  unsettled,
+} from '../../../engine/index.ts';
 
 const ONLY = 'only' as PositionId;
 const [FIRST, SECOND] = ['p1', 'p2'] as PartId[] as [PartId, PartId];
@@ -111,7 +119,10 @@ describe('the document with its history', () => {
   });
 
   test('a whole drag is one step of history', () => {
-    const dragged = [1, 2, 3, 4].reduce((doc, mm) => document.preview(doc, gap(mm)), document.documentOf(start));
+    const dragged = [1, 2, 3, 4].reduce(
+      (doc, mm) => document.preview(doc, gap(mm)),
+      document.documentOf(start),
+    );
     const released = document.commit(dragged);
     expect(released.past).toEqual([start]);
     expect(document.undo(released).sketch).toBe(start);
