@@ -1,6 +1,8 @@
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import { useReading } from '../live/reading.ts';
-import { setView } from '../store/viewStore.ts';
+import type { Document } from '../store/document.ts';
+import { sketchStore } from '../store/sketchStore.ts';
+import { setView, viewStore } from '../store/viewStore.ts';
 import { Icon } from '../ui/Icon.tsx';
 import './hints.css';
 
@@ -15,8 +17,11 @@ type HintId = (typeof HINTS)[number]['id'];
 /** Three short hints at the edges of the drawing on the first run. Each is dismissed by itself; none is in the way. */
 export function Hints() {
   const wanted = useReading((reading) => reading.view.hints);
+  const empty = useReading(({ sketch }) => sketch.parts.length === 0);
   const [seen, setSeen] = useState<readonly HintId[]>([]);
-  if (!wanted) return null;
+  // Whoever has changed something needs no hint any more.
+  useEffect(() => sketchStore.subscribe(endWithFirstEdit), []);
+  if (!wanted || empty) return null;
 
   const dismiss = (id: HintId) => {
     const next = [...seen, id];
@@ -41,4 +46,8 @@ export function Hints() {
       ))}
     </aside>
   );
+}
+
+function endWithFirstEdit({ past }: Document): void {
+  if (past.length > 0 && viewStore.getState().hints) setView({ hints: false });
 }

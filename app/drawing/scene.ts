@@ -100,7 +100,7 @@ export function sceneOf(sketch: Sketch, analysis: Analysis, view: View): Scene {
     chief: chief ? line(1, 0) : null,
     axial: marginal && view.shown.bundles ? axialOf(analysis, view, line) : [],
     bundles: marginal && chief && view.shown.bundles ? bundlesOf(analysis, view, line) : [],
-    images: view.shown.images && marginal ? imagesOf(analysis, stage, marginal, chief) : [],
+    images: view.shown.images && marginal ? imagesOf(sketch, analysis, stage, marginal, chief) : [],
     planes: planesOf(analysis, view),
     objectHeightMm: stage.objectMm !== null && chief ? heightInSpace(train, chief, 0, stage.objectMm) : null,
     imageHeightMm:
@@ -214,6 +214,7 @@ function bundlesOf(
 }
 
 function imagesOf(
+  sketch: Sketch,
   { ledger, train, places }: Analysis,
   stage: Stage,
   marginal: ParaxialRay,
@@ -224,7 +225,9 @@ function imagesOf(
   const lengthMm = stage.parts.toMm - stage.parts.fromMm;
   for (const [row, entry] of ledger.entries()) {
     const next = ledger[row + 1];
-    if (!entry.imageZ.ok || !next) continue;
+    // What a plate only shifts is no image of its own.
+    const shifts = sketch.parts[entry.partIndex]?.kind === 'plate';
+    if (!entry.imageZ.ok || !next || shifts) continue;
     const zMm = entry.imageZ.value;
     if (zMm < stage.parts.fromMm - lengthMm || zMm > stage.parts.toMm + lengthMm) continue;
     const last = lastSurfaceOf(train, entry.partIndex);

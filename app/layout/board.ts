@@ -18,7 +18,7 @@ import { frameLoop } from '../live/frame.ts';
 import { currentReading, onReading } from '../live/reading.ts';
 import { sketchStore } from '../store/sketchStore.ts';
 import { type Selected, setView, viewStore } from '../store/viewStore.ts';
-import { cameraAt, fitCamera, foldIn, needsFit, sameFold, viewportOf } from './camera.ts';
+import { cameraAt, fitCamera, foldIn, followed, sameFold, viewportOf } from './camera.ts';
 import { createHand, type Hand } from './hand.ts';
 import { type HandState, overlayLayer } from './overlay.ts';
 import { paintParts, paintRays } from './paint.ts';
@@ -169,9 +169,8 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     fold = foldIn(scene, camera);
     if (!sameFold(before.fold, fold))
       camera = cameraAt(refolded(before, fold, xOf(before, 0)), camera.follow);
-    const { follow } = camera;
-    if (follow && (resized || needsFit(scene, viewportOf(camera, size, fold), follow)))
-      camera = fitCamera(scene, size, follow);
+    if (resized && camera.follow) camera = fitCamera(scene, size, camera.follow);
+    else camera = followed(scene, camera, size, fold);
     resized = false;
     if (camera !== viewStore.getState().camera) setView({ camera });
   };

@@ -50,6 +50,24 @@ export function fitCamera(scene: Scene, size: Size, what: 'parts' | 'everything'
   return cameraAt({ ...view, stretch: tall > room ? view.stretch : stretch }, what);
 }
 
+/**
+ * The camera to go on with: the very same while it shows well what it follows, else fitted anew. A fit that cannot show it any better
+ * is the very same again, so that following comes to rest.
+ */
+export function followed(scene: Scene, camera: Camera, size: Size, fold: Fold | null): Camera {
+  const { follow } = camera;
+  if (!follow || !needsFit(scene, viewportOf(camera, size, fold), follow)) return camera;
+  const fit = fitCamera(scene, size, follow);
+  return sameCamera(fit, camera) ? camera : fit;
+}
+
+const sameCamera = (a: Camera, b: Camera): boolean =>
+  a.follow === b.follow &&
+  a.originMm === b.originMm &&
+  a.pxPerMm === b.pxPerMm &&
+  a.stretch === b.stretch &&
+  a.axisYPx === b.axisYPx;
+
 /** Whether what the camera follows has left the sheet or shrunk on it, so that it is time to fit again. */
 export function needsFit(scene: Scene, view: Viewport, what: 'parts' | 'everything'): boolean {
   const range = shownRange(scene, view.fold, what);
@@ -63,10 +81,8 @@ export function needsFit(scene: Scene, view: Viewport, what: 'parts' | 'everythi
 function shownRange({ stage }: Scene, fold: Fold | null, what: 'parts' | 'everything'): LengthRange {
   if (what === 'everything') return stage.everything;
   if (fold) return { fromMm: fold.fromMm, toMm: stage.parts.toMm };
-  return {
-    fromMm: Math.max(stage.startMm, stage.parts.fromMm - (stage.parts.toMm - stage.parts.fromMm)),
-    toMm: stage.parts.toMm,
-  };
+  const { fromMm, toMm } = stage.parts;
+  return { fromMm: Math.min(fromMm, Math.max(stage.startMm, 2 * fromMm - toMm)), toMm };
 }
 
 /** Whether two folds cut the same piece. */

@@ -3,15 +3,16 @@ import type { Pen } from '../board/pen.ts';
 import { endsLayer, scaleLayer } from '../drawing/layers/ends.ts';
 import { labelsLayer } from '../drawing/layers/labels.ts';
 import { marksLayer } from '../drawing/layers/marks.ts';
-import { partsLayer } from '../drawing/layers/parts.ts';
+import { glassLayer, partsLayer } from '../drawing/layers/parts.ts';
 import { raysLayer } from '../drawing/layers/rays.ts';
 import { extensionLines, ribbonLayer } from '../ribbon/layer.ts';
 import type { Picture } from './picture.ts';
 
-/** Draws rays and marks, the part of the picture that changes with every move. */
+/** Draws glass, rays and marks, the part of the picture that changes with every move. */
 export function paintRays(pen: Pen, { scene, view, plan }: Picture): void {
   extensionLines(pen, plan, view);
   pen.clipped({ kind: 'box', xPx: 0, yPx: 0, widthPx: view.widthPx, heightPx: plan.topPx }, () => {
+    glassLayer(pen, scene, view);
     raysLayer(pen, scene, view);
     marksLayer(pen, scene, view);
   });

@@ -80,7 +80,7 @@ export function labelsOf(
       'label quiet',
       x,
       tip,
-      ['right', 'below right', 'above right'],
+      ['below right', 'right', 'above right'],
       8,
       10,
     );

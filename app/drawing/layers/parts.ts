@@ -9,6 +9,12 @@ const ARROW_PX = 6.5;
 const STOP_BAR_PX = 7;
 const STOP_WING_PX = 16;
 
+/** The glass of plates; it lies under the rays. */
+export function glassLayer(pen: Pen, scene: Scene, view: Viewport): void {
+  for (const part of scene.parts)
+    if (part.part.kind === 'plate') pen.closed(plateOutline(part, view), 'glass');
+}
+
 /** Every part in its textbook form, and the aperture stop's edges. `hovered` is the id of the part under the pointer. */
 export function partsLayer(pen: Pen, scene: Scene, view: Viewport, hovered: string | null): void {
   for (const part of scene.parts) drawPart(pen, part, view, part.part.id === hovered);
@@ -45,14 +51,19 @@ function drawRoom(pen: Pen, { part, frontMm }: ScenePart, view: Viewport, top: n
   }
 }
 
+/** A plate chosen or pointed at is outlined as strongly as any part. */
 function drawPlate(pen: Pen, drawn: ScenePart, view: Viewport, style: MarkStyle): void {
-  const left = xOf(view, drawn.frontMm);
-  const right = xOf(view, drawn.rearMm);
-  const top = yOf(view, drawn.semiMm);
-  const bottom = yOf(view, -drawn.semiMm);
-  const outline = [left, top, right, top, right, bottom, left, bottom];
-  pen.closed(outline, 'glass');
-  if (style !== 'part') pen.polyline([...outline, left, top], style);
+  if (style === 'part') return;
+  const outline = plateOutline(drawn, view);
+  pen.polyline([...outline, ...outline.slice(0, 2)], style);
+}
+
+function plateOutline({ frontMm, rearMm, semiMm }: ScenePart, view: Viewport): number[] {
+  const left = xOf(view, frontMm);
+  const right = xOf(view, rearMm);
+  const top = yOf(view, semiMm);
+  const bottom = yOf(view, -semiMm);
+  return [left, top, right, top, right, bottom, left, bottom];
 }
 
 /** A diaphragm that is not the aperture stop: open at its own clear diameter. */
