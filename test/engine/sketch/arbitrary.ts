@@ -31,13 +31,13 @@ export function anyNumber(low: number, high: number): fc.Arbitrary<number> {
 }
 
 /** Focal lengths of either sign, from strong to nearly none. */
-export const anyFocalLength = (): fc.Arbitrary<number> =>
+const anyFocalLength = (): fc.Arbitrary<number> =>
   fc
     .tuple(fc.oneof(anyNumber(5, 300), fc.constantFrom(25, 50, 100), anyNumber(300, 1e6)), fc.boolean())
     .map(([size, negative]) => (negative ? -size : size));
 
 /** One to `most` positions; ids are not in order of the list. */
-export const anyPositions = (most = 4): fc.Arbitrary<readonly Position[]> =>
+const anyPositions = (most = 4): fc.Arbitrary<readonly Position[]> =>
   fc
     .uniqueArray(fc.constantFrom('wide', 'middle', 'narrow', 'only', 'pos1', 'pos2', 'near', 'far'), {
       minLength: 1,
@@ -46,7 +46,7 @@ export const anyPositions = (most = 4): fc.Arbitrary<readonly Position[]> =>
     .map((ids) => ids.map((id) => ({ id: id as PositionId, name: id })));
 
 /** A value common to all positions, or one for each. */
-export const anyPerPosition = <T>(
+const anyPerPosition = <T>(
   value: fc.Arbitrary<T>,
   positions: readonly Position[],
 ): fc.Arbitrary<PerPosition<T>> =>
@@ -77,7 +77,7 @@ const anyFixedMedium = () =>
   });
 
 /** A part of any kind, its gap common or split. */
-export const anyPart = (positions: readonly Position[], id: string): fc.Arbitrary<Part> => {
+const anyPart = (positions: readonly Position[], id: string): fc.Arbitrary<Part> => {
   const base = {
     id: fc.constant(id as PartId),
     name: fc.constantFrom('', 'first group', 'field lens', 'Ω “quoted” ✓'),
