@@ -8,6 +8,7 @@ import { quantityText, quantityUnit } from './quantity.ts';
 import type { Readout } from './readouts/readout.ts';
 import { readoutById } from './readouts/table.ts';
 import { topicStore } from './topic.ts';
+import type { Worksheet } from './worksheet.ts';
 import { cellText, rowUnit, worksheetOf, worksheetTsv } from './worksheet.ts';
 import './tables.css';
 
@@ -21,10 +22,7 @@ export function TraceSheet({ onCopy }: TraceSheetProps) {
   const id = useStore(topicStore, ({ readoutId }) => readoutId);
   const fractions = useReading(({ sketch }) => sketch.field.fractions);
   const readout = readoutById(id, fractions);
-  const copy = () => {
-    const { sketch, analysis } = currentReading();
-    onCopy(worksheetTsv(worksheetOf(sketch, analysis)));
-  };
+  const copy = () => onCopy(worksheetTsv(sheetOf(currentReading())));
   return (
     <section className="panel-table" aria-label="Trace sheet">
       <div className="panel-table-head">
@@ -63,7 +61,7 @@ function FocalLengths() {
 
 function Sheet() {
   const heads = useReading((reading) => headsOf(reading).join(SEPARATOR)).split(SEPARATOR);
-  const rows = useReading(({ sketch, analysis }) => worksheetOf(sketch, analysis).rows.length);
+  const rows = useReading((reading) => sheetOf(reading).rows.length);
   return (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: a wide sheet scrolls, also by keys
     <section className="panel-table-scroll" tabIndex={0} aria-label="Worksheet">
@@ -97,7 +95,16 @@ function Sheet() {
 
 const SEPARATOR = '\u0000';
 
-const headsOf = ({ sketch, analysis }: Reading): readonly string[] => worksheetOf(sketch, analysis).columns;
+const remembered = new WeakMap<Reading['analysis'], Worksheet>();
+
+/** One worksheet serves all rows of a frame. */
+function sheetOf({ sketch, analysis }: Reading): Worksheet {
+  const sheet = remembered.get(analysis) ?? worksheetOf(sketch, analysis);
+  remembered.set(analysis, sheet);
+  return sheet;
+}
+
+const headsOf = (reading: Reading): readonly string[] => sheetOf(reading).columns;
 
 function SheetRow({ index }: { readonly index: number }) {
   const texts = useReading((reading) => rowTexts(reading, index).join(SEPARATOR)).split(SEPARATOR);
@@ -115,8 +122,9 @@ function SheetRow({ index }: { readonly index: number }) {
   );
 }
 
-function rowTexts({ sketch, analysis, view }: Reading, index: number): readonly string[] {
-  const row = worksheetOf(sketch, analysis).rows[index];
+function rowTexts(reading: Reading, index: number): readonly string[] {
+  const { view } = reading;
+  const row = sheetOf(reading).rows[index];
   if (!row) return [];
   return [row.label, rowUnit(row, view.unit), ...row.cells.map((cell) => cellText(cell, row, view.unit))];
 }

@@ -1,6 +1,6 @@
 import type { PositionId, Sketch, Warning } from '../../engine/index.ts';
-import { settingAt, warningsOf } from '../../engine/index.ts';
-import { analysisOf } from '../live/analysis.ts';
+import { settingAt } from '../../engine/index.ts';
+import { warningsAt } from '../live/analysis.ts';
 
 /** A warning and the positions that have it, in the sketch's order. */
 export interface ListedWarning {
@@ -14,11 +14,7 @@ const remembered = new WeakMap<Sketch, readonly ListedWarning[]>();
 export function listWarnings(sketch: Sketch): readonly ListedWarning[] {
   let list = remembered.get(sketch);
   if (!list) {
-    list = merged(
-      sketch.positions.flatMap(({ id }) =>
-        warningsOf(sketch, settingAt(id), analysisOf(sketch, settingAt(id))),
-      ),
-    );
+    list = merged(sketch.positions.flatMap(({ id }) => warningsAt(sketch, settingAt(id))));
     remembered.set(sketch, list);
   }
   return list;

@@ -18,7 +18,7 @@ export function ApertureFields() {
         value={kind}
         choices={APERTURE_CHOICES}
         onChoose={(chosen) => {
-          const aperture = apertureOfKind(chosen, currentReading().analysis);
+          const aperture = apertureOfKind(chosen, currentReading());
           tryEdit((sketch) => (chosen === sketch.aperture.kind ? sketch : setAperture(sketch, aperture)));
         }}
         hint={trouble === '' ? undefined : `no marginal ray: ${trouble}`}

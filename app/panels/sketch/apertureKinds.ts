@@ -1,4 +1,7 @@
-import type { Analysis, Aperture, FieldSize, Quantity } from '../../../engine/index.ts';
+import type { Analysis, Aperture, FieldSize, PerPosition, Quantity, Sketch } from '../../../engine/index.ts';
+import { settingAt } from '../../../engine/index.ts';
+import { analysisOf } from '../../live/analysis.ts';
+import type { Reading } from '../../live/reading.ts';
 import type { Choice } from '../../ui/choices.tsx';
 import type { EntryUnit } from '../../ui/entry.ts';
 
@@ -18,14 +21,18 @@ export const FIELD_CHOICES: readonly Choice<FieldSize['kind']>[] = [
 
 /** Starts a kind of aperture that the layout has no value for yet. */
 const START = { fNumber: 4, na: 0.1, diameterMm: 10, angleDeg: 10, heightMm: 5 } as const;
-/** A value taken over keeps the digits that a person would set. */
-const TAKEN_DIGITS = 6;
+/** A value taken over drops the dust of its computation. */
+const TAKEN_DIGITS = 10;
 
-/** The aperture of another kind that lets as much light through as the present one, as far as the layout can say. */
-export function apertureOfKind(kind: Aperture['kind'], { light, pupils }: Analysis): Aperture {
+/**
+ * The aperture of another kind that lets as much light through as the present one, as far as the layout can say. A stop
+ * diameter becomes one for each position where they differ.
+ */
+export function apertureOfKind(kind: Aperture['kind'], { analysis, sketch }: Reading): Aperture {
+  const { light } = analysis;
   switch (kind) {
     case 'stopDiameter':
-      return { kind, diameterMm: taken(pupils.stopDiameterMm, START.diameterMm) };
+      return { kind, diameterMm: stopDiameters(sketch) };
     case 'entrancePupilDiameter':
       return { kind, diameterMm: taken(light.entrancePupilDiameterMm, START.diameterMm) };
     case 'objectNA':
@@ -33,6 +40,15 @@ export function apertureOfKind(kind: Aperture['kind'], { light, pupils }: Analys
     default:
       return { kind, fNumber: taken(light[kind], START.fNumber) };
   }
+}
+
+function stopDiameters(sketch: Sketch): PerPosition {
+  const each = sketch.positions.map(({ id }) => {
+    const { stopDiameterMm } = analysisOf(sketch, settingAt(id)).pupils;
+    return [id, taken(stopDiameterMm, START.diameterMm)] as const;
+  });
+  const first = each[0]?.[1] ?? START.diameterMm;
+  return each.every(([, diameterMm]) => diameterMm === first) ? first : Object.fromEntries(each);
 }
 
 /** The field of another kind that is as large as the present one, as far as the layout can say. */

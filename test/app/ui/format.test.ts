@@ -3,8 +3,6 @@ import { describe, expect, it } from 'vitest';
 import { formatLength, formatNumber, formatOutcome } from '../../../app/ui/format.ts';
 import { none, some } from '../../../engine/index.ts';
 
-const SEED = 20261201;
-
 describe('formatNumber', () => {
   it('writes fixed decimals and a real minus sign', () => {
     expect(formatNumber(41.19751, 3)).toBe('41.198');
@@ -28,7 +26,7 @@ describe('formatNumber', () => {
     expect(formatNumber(Number.NaN, 3)).toBe('–');
   });
 
-  test.prop([fc.double(), fc.integer({ min: 0, max: 8 })], { seed: SEED })(
+  test.prop([fc.double(), fc.integer({ min: 0, max: 8 })])(
     'never says NaN, undefined or minus zero, whatever the number',
     (value, digits) => {
       const text = formatNumber(value, digits);
@@ -37,7 +35,7 @@ describe('formatNumber', () => {
     },
   );
 
-  test.prop([fc.double({ min: 100, max: 999, noNaN: true }), fc.integer({ min: 0, max: 6 })], { seed: SEED })(
+  test.prop([fc.double({ min: 100, max: 999, noNaN: true }), fc.integer({ min: 0, max: 6 })])(
     'keeps its width while a value is dragged within one power of ten',
     (value, digits) => {
       expect(formatNumber(value, digits).length).toBe(formatNumber(100, digits).length);
