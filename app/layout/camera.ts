@@ -69,7 +69,7 @@ const sameCamera = (a: Camera, b: Camera): boolean =>
   a.axisYPx === b.axisYPx;
 
 /** Whether what the camera follows has left the sheet or shrunk on it, so that it is time to fit again. */
-export function needsFit(scene: Scene, view: Viewport, what: 'parts' | 'everything'): boolean {
+function needsFit(scene: Scene, view: Viewport, what: 'parts' | 'everything'): boolean {
   const range = shownRange(scene, view.fold, what);
   const visible = visibleRange(view);
   if (range.fromMm < visible.fromMm || range.toMm > visible.toMm) return true;
