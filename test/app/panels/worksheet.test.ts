@@ -66,8 +66,8 @@ describe('the trace sheet', () => {
     (sketch) => {
       const sheet = sheetOf(sketch);
       const lines = worksheetTsv(sheet)
-        .trimEnd()
         .split('\n')
+        .slice(0, -1)
         .map((line) => line.split('\t'));
       expect(lines.length).toBe(sheet.rows.length + 1);
       for (const [index, row] of sheet.rows.entries()) {
