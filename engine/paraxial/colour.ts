@@ -45,6 +45,8 @@ export interface Colour {
     { readonly axialMm: Float64Array; readonly lateralMm: Float64Array | null },
     Absence
   >;
+  /** Parts, by their place in the sketch, that bend or shift light but have no Abbe number: counted as free of dispersion. */
+  readonly partsLeftOut: readonly number[];
 }
 
 /**
@@ -56,10 +58,12 @@ export interface Colour {
 export function thinColour(train: Train, rays: ReferenceRays, axial: Axial): Colour {
   const { marginal, chief } = rays;
   const { count } = train;
+  const partsLeftOut = withoutDispersion(train);
   const absent = (why: Outcome<never, Absence> & { ok: false }): Colour => ({
     axialMm: why,
     lateralMm: why,
     perSurface: why,
+    partsLeftOut,
   });
   if (count === 0) return absent(none('no parts'));
   if (!disperses(train)) return absent(none('no Abbe number'));
@@ -74,6 +78,7 @@ export function thinColour(train: Train, rays: ReferenceRays, axial: Axial): Col
     axialMm: sumOf(axialMm),
     lateralMm: lateral.ok ? sumOf(lateral.value) : lateral,
     perSurface: isFiniteList(axialMm) && isFiniteList(terms.lateralMm) ? some(terms) : none('out of range'),
+    partsLeftOut,
   };
 }
 
@@ -83,6 +88,16 @@ const isFiniteList = (terms: Float64Array | null): boolean => terms?.every(Numbe
 
 const disperses = (train: Train): boolean =>
   train.powerSpread.some((spread) => spread !== 0) || train.indexSpread.some((spread) => spread !== 0);
+
+function withoutDispersion(train: Train): readonly number[] {
+  const parts = new Set<number>();
+  for (let k = 0; k < train.count; k++) {
+    const silentMedia = train.indexSpread[k] === 0 && train.indexSpread[k + 1] === 0;
+    const silentPower = train.thinPower[k] !== 0 && train.powerSpread[k] === 0;
+    if (silentPower || (train.index[k] !== train.index[k + 1] && silentMedia)) parts.add(train.partOf[k]!);
+  }
+  return [...parts];
+}
 
 /** `factor` times the sum's term at each surface: `second` is the marginal ray for axial colour, the chief ray for lateral. */
 function contributions(

@@ -75,6 +75,17 @@ describe('the thin colour', () => {
     expect(axialMm).toHaveLength(4);
   });
 
+  it('names the parts that it could not count', () => {
+    const bare = { material: { name: 'filter', index: 1.5, abbeNumber: null } };
+    const parts = [
+      thin('p1', 70, 12, abbe(60)),
+      thin('p2', 50, 5),
+      plate('p3', 2, 5, bare),
+      plate('p4', 2, 5),
+    ];
+    expect(analysed(parts).colour.partsLeftOut).toEqual([1, 2]);
+  });
+
   it('needs an Abbe number and an image', () => {
     expect(analysed([thin('p1', 80)]).colour.axialMm).toEqual({ ok: false, why: 'no Abbe number' });
     const expander = [thin('p1', -50, 150, abbe(60)), thin('p2', 200, 0, abbe(60))];
