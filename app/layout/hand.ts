@@ -193,13 +193,14 @@ function moveOf(handle: Handle, view: Viewport, { dxPx, dyPx, other, snapPx }: P
   });
 }
 
-/** Makes the move on the sketch at the press, and lets the view make up for a frame of reference that moved with it. */
+/** Makes the move on the sketch at the press, and lets the view at the press make up for a frame of reference that moved with it. */
 function previewMove(move: Move, view: Viewport): void {
   previewEdit(move.edit);
-  if (move.frameMm === 0 || sketchStore.getState().note?.kind === 'refused') return;
+  if (sketchStore.getState().note?.kind === 'refused') return;
   const { follow } = viewStore.getState().camera;
   const firstPx = xOf(view, 0) + move.frameMm * view.pxPerMm;
-  setView({ camera: cameraAt(withLengthAt(view, 0, firstPx), follow) });
+  const shown = move.frameMm === 0 ? view : withLengthAt(view, 0, firstPx);
+  setView({ camera: cameraAt(shown, follow) });
 }
 
 const otherRule = (shift: boolean): boolean => shift !== viewStore.getState().otherRule;
