@@ -10,6 +10,7 @@ import { browserClipboard } from './desk/clipboard.ts';
 import { createDesk, flushWhenHidden } from './desk/desk.ts';
 import { onFileDropped } from './desk/files.ts';
 import { browserKeyValues } from './desk/keyValues.ts';
+import { followLinks } from './desk/links.ts';
 import { printSoon } from './desk/print.ts';
 import { rasterise } from './desk/rasterise.ts';
 import { fetchBesideApp } from './desk/starters.ts';
@@ -26,7 +27,8 @@ const desk = createDesk({
   files,
   fetchText: fetchBesideApp,
   now: () => new Date(),
-  newStamp: () => crypto.randomUUID(),
+  // randomUUID exists only on https and localhost.
+  newStamp: () => crypto.getRandomValues(new Uint32Array(4)).join('-'),
 });
 const { measure } = canvasMeasure(
   document.createElement('canvas').getContext('2d') as CanvasRenderingContext2D,
@@ -63,5 +65,6 @@ createRoot(place).render(
 listenToKeys(document, commands.values(), (element) => element.closest('[data-drawing]') !== null);
 onFileDropped(window, (file) => void desk.openDropped(file));
 await desk.reopen(location.hash);
+followLinks(desk, window);
 desk.watch();
 flushWhenHidden(desk, document);

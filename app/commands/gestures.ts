@@ -67,12 +67,12 @@ export const GESTURES: readonly GestureGroup[] = [
       {
         does: 'Move a part; its two gaps change',
         hand: 'Drag its tick',
-        keys: 'Tab to the tick, ← →',
+        keys: '. to the part, ← →',
       },
       {
         does: 'Give a gap its own value at every position',
         hand: 'Click “= all”',
-        keys: 'Tab to it, Enter',
+        keys: '“= all” in the part’s card',
       },
     ],
   },

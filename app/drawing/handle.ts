@@ -50,6 +50,8 @@ export interface Handle extends Grip {
   readonly why: string | null;
   /** How the grip itself is drawn. */
   readonly look: 'square' | 'round' | 'none';
+  /** What a click does where it neither selects nor types. */
+  readonly press?: Edit;
 }
 
 /** A move that shifts no frame and was caught by nothing. */

@@ -35,6 +35,9 @@ export interface Hand {
 /** How near, in px along the axis, something catches a drag. */
 const SNAP_PX: Readonly<Record<PointerKind, number>> = { mouse: 7, pen: 7, touch: 12 };
 
+/** How the ids of the ribbon's values begin. */
+const CELL = 'cell:';
+
 interface Pressed {
   readonly handle: Handle;
   readonly view: Viewport;
@@ -92,10 +95,12 @@ export function createHand(board: HandBoard): Hand {
     if (!handle) return setView({ selection: [] });
     const { shift, ctrl, meta } = effect.modifiers;
     const labelled = typedByLabel(handle.id);
-    if (labelled) setView({ typing: labelled });
-    else if (handle.id.startsWith('cell:') || effect.do === 'double click') type(handle.id);
+    if (handle.press) applyEdit(handle.press);
+    else if (labelled) setView({ typing: labelled });
+    else if (handle.id.startsWith(CELL) || effect.do === 'double click') type(handle.id);
     else if (handle.selects && (shift || ctrl || meta)) toggle(handle.selects);
     else if (handle.selects) setView({ selection: [handle.selects] });
+    else if (handle.why) board.say(handle.why);
     if (handle.slider) board.focus(handle);
   };
 

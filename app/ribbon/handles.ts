@@ -1,19 +1,30 @@
 import type { Edit } from '../../engine/index.ts';
-import { setGap, setObjectDistance, setThickness } from '../../engine/index.ts';
+import {
+  setGap,
+  setObjectDistance,
+  setThickness,
+  splitGap,
+  splitObjectDistance,
+} from '../../engine/index.ts';
 import { xOf } from '../board/viewport.ts';
 import type { Handle } from '../drawing/handle.ts';
 import { BETWEEN, plainMove } from '../drawing/handle.ts';
 import { placing } from '../drawing/handles/parts.ts';
 import type { Sight } from '../drawing/sight.ts';
 import { nameOf } from '../drawing/words.ts';
-import type { PlacedCell, RibbonPlan } from './layout.ts';
+import { markPlace, markText, type PlacedCell, type RibbonPlan } from './layout.ts';
 
 const LEAST_MM = 0.01;
 const FOLDED_PER_PX = 0.002;
 
 /** The ribbon's grips: the values (click types, a sideways drag scrubs) and the ticks, which are the parts. */
 export function ribbonHandles(plan: RibbonPlan, sight: Sight): readonly Handle[] {
-  return [...plan.cells.map((cell) => valueHandle(cell, sight)), ...tickHandles(plan, sight)];
+  return [
+    ...plan.cells.map((cell) => valueHandle(cell, sight)),
+    ...tickHandles(plan, sight),
+    ...plan.cells.flatMap(splitHandle),
+    ...trackHandle(plan),
+  ];
 }
 
 function valueHandle(cell: PlacedCell, sight: Sight): Handle {
@@ -73,6 +84,48 @@ function setterOf(cell: PlacedCell, { reading }: Sight): (value: number, other: 
     return (value) => (sketch) => setObjectDistance(sketch, Number.isFinite(value) ? value : 'infinity', at);
   if (cell.kind === 'thickness') return (value) => (sketch) => setThickness(sketch, after, value);
   return (value, other) => (sketch) => setGap(sketch, after, value, at, other ? 'neighbours' : 'carry');
+}
+
+/** The mark "= all": a click gives every position its own value. */
+function splitHandle(cell: PlacedCell): readonly Handle[] {
+  if (!cell.common || markText(cell) === null) return [];
+  const { after } = cell;
+  return [
+    {
+      ...readOnly(`split:${cell.id}`, markPlace(cell)),
+      cursor: 'pointer',
+      label: `${cell.label}, the same at all positions`,
+      press: (sketch) => (after === null ? splitObjectDistance(sketch) : splitGap(sketch, after)),
+    },
+  ];
+}
+
+/** The overall dimension follows from the others and says so. */
+function trackHandle({ overall }: RibbonPlan): readonly Handle[] {
+  if (!overall) return [];
+  const place = { xPx: (overall.fromPx + overall.toPx) / 2, yPx: overall.linePx - 12 };
+  const why = 'The track follows from the gaps: it runs from the first part to the image plane.';
+  return [{ ...readOnly('track', place), label: 'track', why }];
+}
+
+function readOnly(id: string, place: { readonly xPx: number; readonly yPx: number }): Handle {
+  return {
+    id,
+    order: 9,
+    ...place,
+    line: null,
+    halfWidthPx: 14,
+    cursor: 'default',
+    label: '',
+    slider: null,
+    tabStop: false,
+    selects: null,
+    look: 'none',
+    drag: null,
+    step: null,
+    entry: null,
+    why: null,
+  };
 }
 
 function tickHandles(plan: RibbonPlan, sight: Sight): readonly Handle[] {

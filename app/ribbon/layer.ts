@@ -3,7 +3,7 @@ import { segment } from '../board/pen.ts';
 import type { MarkStyle, TextStyle } from '../board/styles.ts';
 import type { Viewport } from '../board/viewport.ts';
 import { yOf } from '../board/viewport.ts';
-import { CANNOT_BE_BUILT, type PlacedCell, type RibbonPlan } from './layout.ts';
+import { CANNOT_BE_BUILT, markPlace, markText, type PlacedCell, type RibbonPlan } from './layout.ts';
 
 const TICK_PX = 5;
 const HATCH_PX = 6;
@@ -55,12 +55,10 @@ function drawCell(pen: Pen, cell: PlacedCell, view: Viewport, hovered: boolean):
 
 /** What kind of value it is: shared by all positions, or following the focus. */
 function mark(pen: Pen, cell: PlacedCell): void {
-  const text = cell.follows ? 'follows focus' : cell.common ? '= all' : '';
-  if (text === '' || Math.abs(cell.toPx - cell.fromPx) < 60) return;
-  pen.text((cell.fromPx + cell.toPx) / 2, cell.linePx + 14, text, 'label quiet', {
-    align: 'centre',
-    baseline: 'middle',
-  });
+  const text = markText(cell);
+  if (text === null) return;
+  const { xPx, yPx } = markPlace(cell);
+  pen.text(xPx, yPx, text, 'label quiet', { align: 'centre', baseline: 'middle' });
 }
 
 function tick(pen: Pen, x: number, y: number, style: MarkStyle): void {

@@ -86,3 +86,18 @@ export function ribbonPlan(cells: readonly Cell[], sight: Sight, measure: Measur
 function ends(cell: Cell, view: Viewport): readonly [number, number] {
   return [xOf(view, cell.fromMm), xOf(view, cell.toMm)];
 }
+
+/** Least width of a cell that has room for its mark, px. */
+const MARKED_PX = 60;
+
+/** What stands under a cell's line: that its value holds at all positions, or follows the focus; null for nothing. */
+export function markText(cell: PlacedCell): string | null {
+  if (cell.onLeader || cell.bad || Math.abs(cell.toPx - cell.fromPx) < MARKED_PX) return null;
+  return cell.follows ? 'follows focus' : cell.common ? '= all' : null;
+}
+
+/** Where the mark's middle stands. */
+export const markPlace = (cell: PlacedCell): { readonly xPx: number; readonly yPx: number } => ({
+  xPx: (cell.fromPx + cell.toPx) / 2,
+  yPx: cell.linePx + 14,
+});
