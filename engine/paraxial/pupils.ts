@@ -88,12 +88,12 @@ export function windows(
   };
 }
 
-function fieldRim(train: Train, { chief, stop }: ReferenceRays): Outcome<number, Absence> {
+/** In the stop the chief ray has no height, so it is never found. */
+function fieldRim(train: Train, { chief }: ReferenceRays): Outcome<number, Absence> {
   if (!chief.ok) return chief;
   let least = Number.POSITIVE_INFINITY;
   let rim = -1;
   for (let k = 0; k < train.count; k++) {
-    if (stop.ok && k === stop.value.surface) continue;
     const ratio = train.semiDiameter[k]! / Math.abs(chief.value.y[k]!);
     if (ratio < least) {
       least = ratio;

@@ -68,6 +68,12 @@ describe('the pupils', () => {
     expect(open.limitedBy).toBeNull();
   });
 
+  it('are not set by a rim that stands on an image of the object', () => {
+    const parts = [thin('p1', 50, 75), thin('p2', 40, 20, { semiDiameterMm: 3 })];
+    const { pupils } = analysed(parts, null, { object: { distanceMm: 150, medium: 'air' } });
+    expect(pupils.stopSurface).toEqual({ ok: false, why: 'no stop' });
+  });
+
   it('move with the object when the rims decide', () => {
     const parts = [thin('p1', 50, 40, { semiDiameterMm: 10 }), diaphragm('p2', 5, { semiDiameterMm: 4 })];
     const stop = (distanceMm: number | 'infinity') =>
