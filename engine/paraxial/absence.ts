@@ -14,6 +14,7 @@ const SENTENCES = {
   'stop at an image':
     'The stop stands where the object or the image is formed, so it cannot limit the bundle: move the stop.',
   'no stop': 'Nothing limits the bundle: choose a stop or give a clear diameter.',
+  'no stop to size': 'The aperture is a stop diameter, but no part is the stop: choose one.',
   'no sensor': 'No sensor is given: type its size.',
   'only a diagonal': 'Only the diagonal of the sensor is given: type its width and height.',
   'object not at infinity': 'The object is at a finite distance: see the field as a size instead.',
@@ -21,16 +22,13 @@ const SENTENCES = {
   'no blur': 'No blur is given: type a blur or a pixel pitch.',
   'no Abbe number': 'No part has an Abbe number: type one to see colour.',
   'no mount': 'No register distance is given: type the distance from the mount plane to the sensor.',
-  'no image height':
-    'The chief ray meets the image plane on the axis, so there is no image size to compare with.',
   'flat field': 'The Petzval sum is zero: the field is flat and has no radius.',
   'no field stop': 'Nothing limits the field: give the sensor a size or a part a clear diameter.',
-  'not bent': 'The part does not bend this ray.',
   'NA beyond the medium': 'The numerical aperture must be smaller than the index in front of the first part.',
   'reaches infinity': 'Everything from the near limit to infinity is sharp.',
   'reaches the first part': 'Everything up to the first part is sharp.',
   'no real object': 'No object in front of the first part is sharp on this image plane.',
-  'no bundle': 'No light passes at this field.',
+  'no bundle': 'The bundle has no width here.',
   'out of range': 'The numbers grow too large to compute: check for extreme powers and gaps.',
 } as const;
 

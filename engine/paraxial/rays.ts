@@ -35,7 +35,7 @@ export function referenceRays(
 
 /**
  * The axial ray through the upper edge of the aperture: it leaves the object upwards (or above the axis). Every kind of aperture is a
- * scaling of the same ray. Absent: 'no stop', 'stop at an image', 'image at infinity', 'afocal', 'object at infinity', 'pupil at infinity'.
+ * scaling of the same ray. Absent: 'no stop', 'no stop to size', 'stop at an image', 'image at infinity', 'afocal', 'object at infinity', 'pupil at infinity'.
  */
 export function marginalRay(train: Train, aperture: ApertureAt): RayOutcome {
   const axial = axialOf(train);
@@ -97,7 +97,7 @@ function marginalFactor(
     case 'stopDiameter': {
       if (!stop.ok) return stop;
       // A rim that happens to limit the light is no stop whose diameter could be set.
-      if (stop.value.limitedBy === 'rim') return none('no stop');
+      if (stop.value.limitedBy === 'rim') return none('no stop to size');
       const { surface } = stop.value;
       if (isNegligible(ray.y[surface]!, scale.y[surface]!)) return none('stop at an image');
       return finite(aperture.diameterMm / (2 * Math.abs(ray.y[surface]!)));

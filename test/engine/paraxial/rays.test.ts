@@ -53,6 +53,10 @@ describe('the marginal ray of a lens of 50 mm with the stop on it', () => {
   it('needs a stop to set a stop diameter, but not to set the light itself', () => {
     const { marginal } = analysed(lens, null, { aperture: { kind: 'stopDiameter', diameterMm: 10 } }).rays;
     expect(marginal).toEqual({ ok: false, why: 'no stop' });
+    const rimmed = analysed([thin('p1', 50, 0, { semiDiameterMm: 6 })], null, {
+      aperture: { kind: 'stopDiameter', diameterMm: 10 },
+    });
+    expect(rimmed.rays.marginal).toEqual({ ok: false, why: 'no stop to size' });
     const bare = analysed(lens, null, { aperture: { kind: 'workingFNumber', fNumber: 5 } });
     expect(given(bare.rays.marginal).y[0]).toBeCloseTo(5, 13);
     expect(bare.rays.chief).toEqual({ ok: false, why: 'no stop' });
