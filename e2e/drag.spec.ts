@@ -4,7 +4,7 @@ import { analyse, moveParts, settingAt } from '../engine/index.ts';
 import { type App, expect, test } from './support/app.ts';
 import { endOf, linesIn, recorded, textsIn } from './support/board.ts';
 import { DEMO } from './support/engine.ts';
-import { grip, middleOf } from './support/hand.ts';
+import { grip, middleOf, numberAt } from './support/hand.ts';
 
 /** Coordinates are recorded to a thousandth of a px; grips stand at tenths. */
 const RECORDED_PX = 0.06;
@@ -92,7 +92,7 @@ for (const keys of ['Escape', 'Control+z']) {
 }
 
 test('a moved part keeps its neighbours; with Shift what is behind moves along', async ({ app, page }) => {
-  const gaps = () => Promise.all(['gap:p1', 'gap:p2', 'gap:p3'].map((id) => valueOf(app, `cell:${id}`)));
+  const gaps = () => Promise.all(['gap:p1', 'gap:p2', 'gap:p3'].map((id) => numberAt(page, `cell:${id}`)));
   const [first, second, third] = await gaps();
   await app.hand.pressGrip('part:p2', 40);
   await app.hand.move({ dx: -47 });
@@ -103,28 +103,28 @@ test('a moved part keeps its neighbours; with Shift what is behind moves along',
 
   // Pressed half-way, Shift makes the same movement anew by the other rule.
   await page.keyboard.down('Shift');
-  await expect.poll(() => valueOf(app, 'cell:gap:p2')).toBeCloseTo(second!, 9);
+  await expect.poll(() => numberAt(page, 'cell:gap:p2')).toBeCloseTo(second!, 9);
   const [carried1, , carried3] = await gaps();
   expect(carried1).toBeCloseTo(kept1!, 9);
   expect(carried3).toBeCloseTo(third!, 9);
   await page.keyboard.up('Shift');
-  await expect.poll(() => valueOf(app, 'cell:gap:p2')).toBeCloseTo(kept2!, 9);
+  await expect.poll(() => numberAt(page, 'cell:gap:p2')).toBeCloseTo(kept2!, 9);
   await app.hand.release();
 });
 
 test('Alt goes finely: a tenth of the motion', async ({ app, page }) => {
-  const before = await valueOf(app, 'part:p2');
+  const before = await numberAt(page, 'part:p2');
   await app.hand.pressGrip('part:p2', 40);
   await page.keyboard.down('Alt');
   await app.hand.move({ dx: 100 });
-  const fine = (await valueOf(app, 'part:p2')) - before;
+  const fine = (await numberAt(page, 'part:p2')) - before;
   await app.hand.release();
   await page.keyboard.up('Alt');
   await page.getByRole('button', { name: 'Undo' }).click();
 
   await app.hand.pressGrip('part:p2', 40);
   await app.hand.move({ dx: -100 });
-  const plain = (await valueOf(app, 'part:p2')) - before;
+  const plain = (await numberAt(page, 'part:p2')) - before;
   await app.hand.release();
   expect(fine / -plain).toBeGreaterThan(0.09);
   expect(fine / -plain).toBeLessThan(0.11);
@@ -133,7 +133,7 @@ test('Alt goes finely: a tenth of the motion', async ({ app, page }) => {
 test('a drag is caught at a focal plane of another part, and the drawing names it', async ({ app, page }) => {
   const rearFocusOfSecond = 41.2187245423499 + 28;
   const pxPerMm = await scaleOf(app);
-  const third = await valueOf(app, 'part:p3');
+  const third = await numberAt(page, 'part:p3');
   await app.hand.pressGrip('part:p3', 40);
   await app.hand.move({ dx: (rearFocusOfSecond - third) * pxPerMm - 4 });
   await expect(grip(page, 'part:p3')).toHaveAttribute('aria-valuetext', /69\.219 mm behind the first part$/);
@@ -151,9 +151,9 @@ test('focal point, rim, stop edge, object, sensor, field and ribbon value can be
   page,
 }) => {
   const change = async (id: string, way: { dx: number; dy?: number }) => {
-    const before = await valueOf(app, id);
+    const before = await numberAt(page, id);
     await app.hand.drag(id, way);
-    const after = await valueOf(app, id);
+    const after = await numberAt(page, id);
     await page.getByRole('button', { name: 'Undo' }).click();
     await expect(grip(page, id)).toHaveAttribute('aria-valuenow', String(before));
     await expect(page.getByRole('button', { name: 'Undo' })).toBeDisabled();
@@ -174,9 +174,6 @@ const focalLengthOf = (sketch: Sketch): number => {
   return focalLengthMm.ok ? focalLengthMm.value : Number.NaN;
 };
 
-const valueOf = async (app: App, id: string): Promise<number> =>
-  Number(await grip(app.page, id).getAttribute('aria-valuenow'));
-
 async function middleOfBoard(app: App): Promise<{ left: number; top: number }> {
   const box = await app.board.boundingBox();
   return { left: box?.x ?? 0, top: box?.y ?? 0 };
@@ -189,7 +186,7 @@ async function axisPx(app: App): Promise<number> {
 
 async function scaleOf(app: App): Promise<number> {
   const [first, last] = await Promise.all(['p1', 'p4'].map((id) => middleOf(grip(app.page, `part:${id}`))));
-  return (last!.x - first!.x) / (await valueOf(app, 'part:p4'));
+  return (last!.x - first!.x) / (await numberAt(app.page, 'part:p4'));
 }
 
 /** The ends of rays, in px of the board, that are not in the line of the sensor. */

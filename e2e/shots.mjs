@@ -149,7 +149,11 @@ async function pressButton(page, name) {
 /** @param {Page} page */
 async function dismissHints(page) {
   const hints = page.getByRole('button', { name: /^Dismiss the hint/ });
-  while ((await hints.count()) > 0) await hints.first().click();
+  while ((await hints.count()) > 0) {
+    const hint = page.getByLabel((await hints.first().getAttribute('aria-label')) ?? '', { exact: true });
+    await hint.click();
+    await hint.waitFor({ state: 'detached' });
+  }
 }
 
 /** @param {Page} page */

@@ -68,6 +68,12 @@ export class App {
     return this.panel.getByRole('textbox', { name: label, exact: true });
   }
 
+  /** The sentence under a field that says why an entry was not taken. */
+  refusal(label: string): Locator {
+    const input = this.page.getByRole('textbox', { name: label, exact: true });
+    return this.panel.locator('.field', { has: input }).getByRole('alert');
+  }
+
   async type(label: string, value: string): Promise<void> {
     const field = this.field(label);
     await field.fill(value);

@@ -69,6 +69,10 @@ export class Hand {
 /** The slider of a grip on the drawing or the ribbon. */
 export const grip = (page: Page, id: string): Locator => page.locator(`[role=slider][data-grip="${id}"]`);
 
+/** The number that a grip stands for. */
+export const numberAt = async (page: Page, id: string): Promise<number> =>
+  Number(await grip(page, id).getAttribute('aria-valuenow'));
+
 /** The middle of an element in px of the window. */
 export async function middleOf(element: Locator): Promise<Point> {
   const box = await element.boundingBox();

@@ -1,0 +1,73 @@
+import { AxeBuilder } from '@axe-core/playwright';
+import { type App, expect, test } from './support/app.ts';
+
+interface Screen {
+  readonly name: string;
+  readonly open: (app: App) => Promise<unknown>;
+  /** Back to where the next screen begins. */
+  readonly close?: (app: App) => Promise<unknown>;
+}
+
+const press = (button: string) => (app: App) =>
+  app.page.getByRole('button', { name: button, exact: true }).click();
+const tab = (name: string) => (app: App) => app.page.getByRole('tab', { name }).click();
+const escape = (app: App) => app.page.keyboard.press('Escape');
+
+const ON_A_DESK: readonly Screen[] = [
+  { name: 'first screen', open: async () => {} },
+  { name: 'all readouts', open: (app) => app.showAllReadouts() },
+  { name: 'part selected', open: (app) => app.hand.clickGrip('part:p2') },
+  { name: 'number typed on the drawing', open: (app) => app.hand.clickGrip('cell:gap:p1'), close: escape },
+  { name: 'ledger', open: tab('Ledger') },
+  { name: 'trace sheet', open: tab('Trace sheet') },
+  { name: 'spacing table', open: tab('Spacing table') },
+  { name: 'positions', open: press('Positions'), close: escape },
+  { name: 'hand-over', open: press('Hand over'), close: escape },
+  { name: 'help', open: press('Help'), close: escape },
+  { name: 'shelf', open: (app) => app.openShelf() },
+  { name: 'empty sketch', open: press('New empty sketch') },
+];
+
+const ON_A_PHONE: readonly Screen[] = [
+  { name: 'first screen', open: async () => {} },
+  { name: 'part selected', open: (app) => app.hand.clickGrip('part:p2') },
+  { name: 'part from below', open: press('Part'), close: press('Close Selected part') },
+  { name: 'readouts from below', open: press('Readouts'), close: press('Close Readouts') },
+  { name: 'sketch from below', open: press('Sketch') },
+];
+
+/** What axe finds serious or critical on the screens, one line each. Where only colours differ, only contrast is asked. */
+async function seriousOn(
+  app: App,
+  screens: readonly Screen[],
+  contrastOnly: boolean,
+): Promise<readonly string[]> {
+  const found: string[] = [];
+  await app.open();
+  for (const { name, open, close } of screens) {
+    await open(app);
+    const axe = new AxeBuilder({ page: app.page }).setLegacyMode().options({ resultTypes: ['violations'] });
+    const { violations } = await (contrastOnly ? axe.withRules(['color-contrast']) : axe).analyze();
+    for (const { id, impact, nodes } of violations) {
+      if (impact !== 'serious' && impact !== 'critical') continue;
+      found.push(...nodes.map((node) => `${name}: ${id}: ${node.html.slice(0, 160)}`));
+    }
+    await close?.(app);
+  }
+  return found;
+}
+
+for (const colorScheme of ['light', 'dark'] as const) {
+  test.describe(`${colorScheme} theme`, () => {
+    test.use({ colorScheme });
+
+    test('axe finds nothing serious in any main state', async ({ app }) => {
+      expect(await seriousOn(app, ON_A_DESK, colorScheme === 'dark')).toEqual([]);
+    });
+
+    test('axe finds nothing serious on a phone', async ({ app, page }) => {
+      await page.setViewportSize({ width: 390, height: 844 });
+      expect(await seriousOn(app, ON_A_PHONE, colorScheme === 'dark')).toEqual([]);
+    });
+  });
+}
