@@ -1,50 +1,107 @@
-/** The engine's only door. Everything it offers is a pure function over readonly data. */
-export * from './outcome.ts';
-export * from './paraxial/absence.ts';
-export * from './paraxial/analyse.ts';
-export * from './paraxial/axial.ts';
-export * from './paraxial/clear.ts';
-export * from './paraxial/colour.ts';
-export * from './paraxial/conjugates.ts';
-export * from './paraxial/depth.ts';
-export * from './paraxial/firstOrder.ts';
-export * from './paraxial/ledger.ts';
-export * from './paraxial/light.ts';
-export * from './paraxial/matrix.ts';
-export * from './paraxial/pupils.ts';
-export * from './paraxial/rays.ts';
-export * from './paraxial/sensor.ts';
-export * from './paraxial/trace.ts';
-export * from './paraxial/vignetting.ts';
-export * from './paraxial/warnings.ts';
-export * from './paraxial/work.ts';
-export * from './sheet/notes.ts';
-export * from './sheet/sheetText.ts';
-export * from './sheet/spacingTable.ts';
-export * from './sheet/table.ts';
-export * from './sketch/clip.ts';
-export * from './sketch/create.ts';
-export * from './sketch/edits/change.ts';
-export * from './sketch/edits/copy.ts';
-export * from './sketch/edits/ends.ts';
-export * from './sketch/edits/gaps.ts';
-export * from './sketch/edits/groups.ts';
-export * from './sketch/edits/insert.ts';
-export * from './sketch/edits/light.ts';
-export * from './sketch/edits/order.ts';
-export * from './sketch/edits/parts.ts';
-export * from './sketch/edits/positions.ts';
-export * from './sketch/edits/remove.ts';
-export * from './sketch/edits/scale.ts';
-export * from './sketch/edits/stop.ts';
-export * from './sketch/edits/text.ts';
-export * from './sketch/file.ts';
-export * from './sketch/parse.ts';
-export * from './sketch/propose.ts';
-export * from './sketch/rules.ts';
-export type * from './sketch/types.ts';
-export * from './sketch/values.ts';
-export * from './sketch/words.ts';
-export * from './train/places.ts';
-export * from './train/train.ts';
-export type * from './train/types.ts';
+/**
+ * The engine's only door: what the app uses, by name. Everything it offers is a pure function over readonly data; units, signs,
+ * absence and sources stand in the docstrings of the rooms.
+ */
+export { type Fault, none, type Outcome, some } from './outcome.ts';
+export { type Quantity, sentenceOf } from './paraxial/absence.ts';
+export { type Analysis, analyse } from './paraxial/analyse.ts';
+export { clearDiameters } from './paraxial/clear.ts';
+export { firstOrder } from './paraxial/firstOrder.ts';
+export { conjugateChain, type LedgerRow } from './paraxial/ledger.ts';
+export { isZeroPower, systemMatrix } from './paraxial/matrix.ts';
+export { pupils } from './paraxial/pupils.ts';
+export { chiefRay, marginalRay, type RayOutcome } from './paraxial/rays.ts';
+export { heightInSpace, type ParaxialRay, paraxialRay, powerAt } from './paraxial/trace.ts';
+export { type Warning, type WarningKind, warningsOf } from './paraxial/warnings.ts';
+export { cautionOf } from './sheet/notes.ts';
+export { SHEET_FORMS, type SheetForm, sheetText } from './sheet/sheetText.ts';
+export { type Refusal, spacingTable } from './sheet/spacingTable.ts';
+export {
+  type Block,
+  type Cell,
+  type ColumnKind,
+  cellText,
+  type Datum,
+  DEFAULT_SHEET_OPTIONS,
+  type SheetOptions,
+  type SpacingTable,
+} from './sheet/table.ts';
+export { parseClip, writeClip } from './sketch/clip.ts';
+export { emptySketch, freshPartId, LINES, newPlate, newStop, newThin } from './sketch/create.ts';
+export { withGroups } from './sketch/edits/change.ts';
+export { copyParts, duplicateParts, pasteParts } from './sketch/edits/copy.ts';
+export {
+  fixSensor,
+  joinObjectDistance,
+  setImagePlane,
+  setObjectAtInfinity,
+  setObjectDistance,
+  setRegister,
+  setSensor,
+  splitObjectDistance,
+} from './sketch/edits/ends.ts';
+export { joinGap, moveParts, setGap, setMedium, splitGap } from './sketch/edits/gaps.ts';
+export { tieParts, untie } from './sketch/edits/groups.ts';
+export { insertPart } from './sketch/edits/insert.ts';
+export {
+  joinStopDiameter,
+  setAperture,
+  setAssumedIndex,
+  setBlur,
+  setField,
+  setFractions,
+  setLines,
+  setStopDiameter,
+  setVignetting,
+  splitStopDiameter,
+} from './sketch/edits/light.ts';
+export { flipParts, reorderPart } from './sketch/edits/order.ts';
+export {
+  flipSign,
+  renamePart,
+  setAbbeNumber,
+  setFocalLength,
+  setIndex,
+  setMaterial,
+  setNote,
+  setRoom,
+  setSemiDiameter,
+  setThickness,
+} from './sketch/edits/parts.ts';
+export {
+  addPosition,
+  copyPosition,
+  movePosition,
+  removePosition,
+  renamePosition,
+} from './sketch/edits/positions.ts';
+export { removeParts } from './sketch/edits/remove.ts';
+export { scaleParts, scaleSketch, scaleToFocalLength } from './sketch/edits/scale.ts';
+export { dropStop, releaseStop, rideStop, setStop } from './sketch/edits/stop.ts';
+export { setNotes, setTitle } from './sketch/edits/text.ts';
+export { writeSketch } from './sketch/file.ts';
+export { type Parsed, parseSketch } from './sketch/parse.ts';
+export { type Edit, type Note, propose, type Settling, unsettled } from './sketch/propose.ts';
+export { faultsOf } from './sketch/rules.ts';
+export type {
+  Aperture,
+  Field,
+  FieldSize,
+  FixedMedium,
+  Lines,
+  Medium,
+  Part,
+  PartId,
+  PartKind,
+  PerPosition,
+  PlatePart,
+  PositionId,
+  Sensor,
+  Setting,
+  Sketch,
+  ThinPart,
+} from './sketch/types.ts';
+export { isCommon, objectDistanceAt, settingAt, valueAt } from './sketch/values.ts';
+export { placesOf } from './train/places.ts';
+export { trainOf } from './train/train.ts';
+export type { Train } from './train/types.ts';

@@ -4,6 +4,7 @@ import {
   flipParts,
   flipSign,
   removeParts,
+  reorderPart,
   settingAt,
   tieParts,
   untie,
@@ -34,6 +35,20 @@ export function partCommands(): CommandGroup {
         [],
         flipSigns,
         () => selectedThin().length > 0,
+      ),
+      command(
+        'earlier',
+        'Put the selected part one place to the left',
+        ['['],
+        reorder(-1),
+        () => oneSelected() !== null,
+      ),
+      command(
+        'later',
+        'Put the selected part one place to the right',
+        [']'],
+        reorder(1),
+        () => oneSelected() !== null,
       ),
       command('tie', 'Tie the selected parts into a group', [], tie, () => selectedNow().length > 1),
       command(
@@ -84,6 +99,18 @@ function duplicateSelected(): void {
   const ids = selectedNow();
   addAndSelect((sketch) => duplicateParts(sketch, ids));
 }
+
+const oneSelected = (): PartId | null => {
+  const [id, another] = selectedNow();
+  return id !== undefined && another === undefined ? id : null;
+};
+
+/** The gaps stay where they are; the part changes places with its neighbour. */
+const reorder = (by: 1 | -1) => () => {
+  const id = oneSelected();
+  const index = sketchNow().parts.findIndex((part) => part.id === id);
+  if (id !== null) applyEdit((sketch) => reorderPart(sketch, id, index + by));
+};
 
 function flip(): void {
   const ids = selectedNow();

@@ -95,6 +95,7 @@ function splitHandle(cell: PlacedCell): readonly Handle[] {
       ...readOnly(`split:${cell.id}`, markPlace(cell)),
       cursor: 'pointer',
       label: `${cell.label}, the same at all positions`,
+      why: 'Click the mark to give every position its own value.',
       press: (sketch) => (after === null ? splitObjectDistance(sketch) : splitGap(sketch, after)),
     },
   ];
