@@ -11,6 +11,7 @@ import type { Readout, ReadoutGroup } from './readouts/readout.ts';
 import { READOUT_GROUPS } from './readouts/readout.ts';
 import { readoutById, readoutsIn } from './readouts/table.ts';
 import { showTheWorking } from './topic.ts';
+import { UnitToggle } from './UnitToggle.tsx';
 import './readouts.css';
 
 /** Everything first order about the layout at the present position, grouped by the question it answers. */
@@ -19,9 +20,12 @@ export function Readouts() {
   const isEmpty = useReading(({ sketch }) => sketch.parts.length === 0);
   return (
     <section className="panel" aria-labelledby="readouts-title">
-      <h2 className="panel-title" id="readouts-title">
-        {title}
-      </h2>
+      <div className="panel-head">
+        <h2 className="panel-title" id="readouts-title">
+          {title}
+        </h2>
+        <UnitToggle />
+      </div>
       {isEmpty ? (
         <p className="readouts-none">{sentenceOf('no parts')}</p>
       ) : (

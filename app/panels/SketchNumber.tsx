@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import { useMemo } from 'react';
-import type { Edit } from '../../engine/index.ts';
+import type { Edit, Quantity } from '../../engine/index.ts';
 import type { Reading } from '../live/reading.ts';
 import { currentReading, useReading } from '../live/reading.ts';
 import { cancelEdit } from '../store/sketchStore.ts';
@@ -10,14 +10,19 @@ import { tryEdit, tryPreview } from './edit.ts';
 import type { PerPositionEdits } from './perPosition.ts';
 import { SplitMark } from './SplitMark.tsx';
 
+/** A quantity as a field reads it: its value, or the reason why it has none. */
+export const orWhy = (quantity: Quantity): number | string => (quantity.ok ? quantity.value : quantity.why);
+
 interface SketchNumberProps {
   readonly label: string;
   /** `length` is a length in the unit chosen for the screen. */
   readonly unit: EntryUnit | 'length';
   /** Decimals; of a millimetre where it is a length. */
   readonly digits?: number;
-  readonly read: (reading: Reading) => number | null;
-  readonly edit: (value: number, reading: Reading) => Edit;
+  /** A number, null where the sketch leaves it open, or the reason why there is none. */
+  readonly read: (reading: Reading) => number | string | null;
+  /** The edit that makes the change, or one sentence on why there is none. */
+  readonly edit: (value: number, reading: Reading) => Edit | string;
   /** What an emptied field means, and the edit it makes. */
   readonly empty?: { readonly words: string; readonly edit: Edit };
   readonly perPosition?: PerPositionEdits;
@@ -30,15 +35,17 @@ interface SketchNumberProps {
 /** A number of the sketch in a field: every change goes through the store, and why one was refused stands below. */
 export function SketchNumber(props: SketchNumberProps) {
   const { label, read, edit, empty, perPosition } = props;
-  const value = useReading(read);
+  const shown = useReading(read);
   const lengthUnit = useReading(({ view }) => view.unit);
   const isBetween = useReading(
     ({ sketch, setting }) => setting.toNext > 0 && perPosition !== undefined && !perPosition.isCommon(sketch),
   );
   const unit = props.unit === 'length' ? lengthUnit : props.unit;
   const digits = (props.digits ?? 3) + (props.unit === 'length' && unit === 'in' ? 2 : 0);
-  const editFor = (next: number | null): Edit =>
-    next === null ? (empty?.edit ?? ((sketch) => sketch)) : edit(next, currentReading());
+  const change = (next: number | null, make: (edit: Edit) => string | null): string | null => {
+    const asked = next === null ? empty?.edit : edit(next, currentReading());
+    return typeof asked === 'string' ? asked : make(asked ?? ((sketch) => sketch));
+  };
   // Kept, so that the mark renders only when it changes, not with every value.
   const aside = useMemo(
     () => perPosition && <SplitMark label={label} {...perPosition} />,
@@ -47,7 +54,8 @@ export function SketchNumber(props: SketchNumberProps) {
   return (
     <NumberField
       label={label}
-      value={value}
+      value={typeof shown === 'number' ? shown : null}
+      {...(typeof shown === 'string' && { absence: shown })}
       unit={unit}
       digits={digits}
       {...(empty && { whenEmpty: empty.words })}
@@ -56,8 +64,8 @@ export function SketchNumber(props: SketchNumberProps) {
       disabled={(props.disabled ?? false) || isBetween}
       hint={isBetween ? 'between positions; add a position here to set it' : props.hint}
       aside={aside}
-      onCommit={(next) => tryEdit(editFor(next))}
-      onPreview={(next) => tryPreview(editFor(next))}
+      onCommit={(next) => change(next, tryEdit)}
+      onPreview={(next) => change(next, tryPreview)}
       onCancel={cancelEdit}
     />
   );

@@ -44,10 +44,11 @@ interface StripItemProps {
 
 function StripItem({ label, id }: StripItemProps) {
   const text = useReading((reading) => stripText(id, reading));
+  const isAbsent = useReading(({ analysis }) => !readoutById(id, []).read(analysis).ok);
   return (
     <div className="strip-item">
       <dt title={readoutById(id, []).label}>{label}</dt>
-      <dd>{text}</dd>
+      <dd className={isAbsent ? 'strip-absent' : undefined}>{text}</dd>
     </div>
   );
 }

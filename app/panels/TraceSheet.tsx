@@ -32,8 +32,9 @@ export function TraceSheet({ onCopy }: TraceSheetProps) {
           <Icon name="copy" /> Copy
         </button>
       </div>
-      <p className="panel-table-note">{readout.formula}.</p>
-      <FocalLengths />
+      <p className="panel-table-note">
+        {readout.formula}. <FocalLengths />
+      </p>
       <Sheet />
     </section>
   );
@@ -56,7 +57,7 @@ function FocalLengths() {
     const length = (value: number) => `${formatLength(value, view.unit)} ${view.unit}`;
     return `Front focal length −n/φ ${length(front.value)}, rear focal length n′/φ ${length(rear.value)}.`;
   });
-  return text === '' ? null : <p className="panel-table-note">{text}</p>;
+  return text;
 }
 
 function Sheet() {

@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import './controls.css';
+import './field.css';
 
 interface FieldProps {
   /** Of the input that the label belongs to. */

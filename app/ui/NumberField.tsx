@@ -17,6 +17,8 @@ export interface NumberFieldProps {
   readonly digits: number;
   /** Shown in place of a value of null, such as "open". Given, an emptied field commits null. */
   readonly whenEmpty?: string;
+  /** Why there is no value, shown in its place; unlike `whenEmpty` it is nothing that can be set. */
+  readonly absence?: string;
   readonly allowInfinity?: boolean;
   /** How far an arrow key or a button goes, in `unit`. */
   readonly step?: number;
@@ -141,7 +143,7 @@ export function NumberField(props: NumberFieldProps) {
       id={id}
       label={label}
       labelHidden={props.labelHidden ?? false}
-      unit={value === null && !editing ? '' : unit}
+      unit={editing || Number.isFinite(value) ? unit : ''}
       fault={fault && fault + kept}
       hint={props.hint}
       aside={props.aside}
@@ -149,14 +151,14 @@ export function NumberField(props: NumberFieldProps) {
       <input
         ref={input}
         id={id}
-        className="field-input field-number"
+        className={`field-input field-number${value === null && props.absence ? ' field-number-absent' : ''}`}
         type="text"
         inputMode="text"
         enterKeyHint="done"
         autoComplete="off"
         spellCheck={false}
         value={text}
-        placeholder={whenEmpty}
+        placeholder={whenEmpty ?? props.absence}
         disabled={props.disabled}
         aria-invalid={fault !== null}
         aria-describedby={fault ? `${id}-fault` : props.hint ? `${id}-hint` : undefined}

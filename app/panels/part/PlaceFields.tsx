@@ -2,7 +2,7 @@ import type { PartId } from '../../../engine/index.ts';
 import { fixSensor, moveParts, placesOf, setGap, valueAt } from '../../../engine/index.ts';
 import { useReading } from '../../live/reading.ts';
 import { gapPerPosition } from '../perPosition.ts';
-import { SketchNumber } from '../SketchNumber.tsx';
+import { orWhy, SketchNumber } from '../SketchNumber.tsx';
 import { MediumFields } from '../sketch/MediumFields.tsx';
 import { ObjectDistanceField } from '../sketch/ObjectDistanceField.tsx';
 import { indexIn, partIn } from './partReading.ts';
@@ -67,9 +67,7 @@ function ImageGapField({ id }: { readonly id: PartId }) {
     <SketchNumber
       label={follows ? 'Image behind' : 'Sensor behind'}
       unit="length"
-      read={({ analysis }) =>
-        analysis.conjugates.imagePlaneMm.ok ? analysis.conjugates.imagePlaneMm.value : null
-      }
+      read={({ analysis }) => orWhy(analysis.conjugates.imagePlaneMm)}
       edit={(value, { setting }) =>
         (sketch) =>
           fixSensor(sketch, value, setting.at)

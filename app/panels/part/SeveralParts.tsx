@@ -8,8 +8,8 @@ import type { Commands } from '../CommandButton.tsx';
 import { CommandRow } from '../CommandButton.tsx';
 import { tryEdit } from '../edit.ts';
 import { partName } from '../names.ts';
-import { SketchNumber } from '../SketchNumber.tsx';
-import { ScaleFactorField } from '../sketch/ScaleFactorField.tsx';
+import { orWhy, SketchNumber } from '../SketchNumber.tsx';
+import { KEEPS_SIGN, ScaleFactorField } from '../sketch/ScaleFactorField.tsx';
 
 const ACTIONS = [
   ['untie', 'Untie'],
@@ -33,13 +33,11 @@ export function SeveralParts({ ids, commands }: SeveralPartsProps) {
       <SketchNumber
         label="Focal length"
         unit="length"
-        read={(reading) => {
-          const together = focalLengthTogether(reading, ids);
-          return together.ok ? together.value : null;
-        }}
+        read={(reading) => orWhy(focalLengthTogether(reading, ids))}
         edit={(value, reading) => {
           const together = focalLengthTogether(reading, ids);
-          return (sketch) => (together.ok ? scaleParts(sketch, ids, value / together.value) : sketch);
+          if (!together.ok || value / together.value <= 0) return KEEPS_SIGN;
+          return (sketch) => scaleParts(sketch, ids, value / together.value);
         }}
         hint="of the run from the first to the last of them; typing scales them"
       />

@@ -3,7 +3,7 @@ import { releaseStop, rideStop, setStop, setStopDiameter } from '../../../engine
 import { useReading } from '../../live/reading.ts';
 import { applyEdit } from '../../store/sketchStore.ts';
 import { STOP_PER_POSITION } from '../perPosition.ts';
-import { SketchNumber } from '../SketchNumber.tsx';
+import { orWhy, SketchNumber } from '../SketchNumber.tsx';
 import { partIn } from './partReading.ts';
 
 /** The aperture stop as far as this part has to do with it. */
@@ -44,9 +44,7 @@ function StopDiameter() {
     <SketchNumber
       label="Stop diameter"
       unit="length"
-      read={({ analysis }) =>
-        analysis.pupils.stopDiameterMm.ok ? analysis.pupils.stopDiameterMm.value : null
-      }
+      read={({ analysis }) => orWhy(analysis.pupils.stopDiameterMm)}
       edit={(value, { setting }) =>
         (sketch) =>
           setStopDiameter(sketch, value, setting.at)

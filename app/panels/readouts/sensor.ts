@@ -76,6 +76,7 @@ export const SENSOR_READOUTS: readonly Readout[] = [
   },
   {
     id: 'airyDiameter',
+    isMain: true,
     label: 'Airy disc',
     kind: 'micro',
     digits: 2,

@@ -37,8 +37,7 @@ export function FieldFields() {
   );
 }
 
-/** The size alone, for where the kind is chosen elsewhere. */
-export function FieldValue() {
+function FieldValue() {
   const kind = useReading(({ sketch }) => sketch.field.size.kind);
   return (
     <SketchNumber

@@ -2,6 +2,9 @@ import type { Edit } from '../../../engine/index.ts';
 import { NumberField } from '../../ui/NumberField.tsx';
 import { tryEdit } from '../edit.ts';
 
+/** Said where a focal length of the other sign is typed to scale to. */
+export const KEEPS_SIGN = 'Scaling keeps the sign: type a focal length of the same sign.';
+
 interface ScaleFactorFieldProps {
   readonly label: string;
   readonly edit: (factor: number) => Edit;

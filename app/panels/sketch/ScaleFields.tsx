@@ -1,7 +1,7 @@
 import { scaleSketch, scaleToFocalLength } from '../../../engine/index.ts';
 import { useReading } from '../../live/reading.ts';
-import { SketchNumber } from '../SketchNumber.tsx';
-import { ScaleFactorField } from './ScaleFactorField.tsx';
+import { orWhy, SketchNumber } from '../SketchNumber.tsx';
+import { KEEPS_SIGN, ScaleFactorField } from './ScaleFactorField.tsx';
 
 /** The whole sketch by a factor, or to a focal length. */
 export function ScaleFields() {
@@ -15,15 +15,12 @@ export function ScaleFields() {
         <SketchNumber
           label="To focal length"
           unit="length"
-          read={({ analysis: { firstOrder } }) =>
-            firstOrder.focalLengthMm.ok ? firstOrder.focalLengthMm.value : null
-          }
-          edit={(value, { analysis: { firstOrder } }) =>
-            (sketch) =>
-              firstOrder.focalLengthMm.ok
-                ? scaleToFocalLength(sketch, firstOrder.focalLengthMm.value, value)
-                : sketch
-            }
+          read={({ analysis }) => orWhy(analysis.firstOrder.focalLengthMm)}
+          edit={(value, { analysis: { firstOrder } }) => {
+            const present = firstOrder.focalLengthMm;
+            if (!present.ok || value / present.value <= 0) return KEEPS_SIGN;
+            return (sketch) => scaleToFocalLength(sketch, present.value, value);
+          }}
           hint="of this position; sensor and mount keep their size"
         />
       )}

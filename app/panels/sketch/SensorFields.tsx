@@ -6,7 +6,7 @@ import type { Choice } from '../../ui/choices.tsx';
 import { Select } from '../../ui/choices.tsx';
 import { tryEdit } from '../edit.ts';
 import { gapPerPosition } from '../perPosition.ts';
-import { SketchNumber } from '../SketchNumber.tsx';
+import { orWhy, SketchNumber } from '../SketchNumber.tsx';
 
 type SensorForm = 'none' | 'sides' | 'diagonal';
 
@@ -84,9 +84,7 @@ function ImagePlaneFields() {
       <SketchNumber
         label={follows ? 'Image behind' : 'Sensor behind'}
         unit="length"
-        read={({ analysis: { conjugates } }) =>
-          conjugates.imagePlaneMm.ok ? conjugates.imagePlaneMm.value : null
-        }
+        read={({ analysis }) => orWhy(analysis.conjugates.imagePlaneMm)}
         edit={(value, { setting }) =>
           (sketch) =>
             fixSensor(sketch, value, setting.at)

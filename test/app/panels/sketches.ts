@@ -1,5 +1,5 @@
 import type { PartId, PositionId, Sketch } from '../../../engine/index.ts';
-import { emptySketch, insertPart, newThin, parseSketch } from '../../../engine/index.ts';
+import { emptySketch, insertPart, newThin } from '../../../engine/index.ts';
 
 const ONLY = 'only' as PositionId;
 const id = (name: string) => name as PartId;
@@ -13,10 +13,3 @@ export const single = (): Sketch => insertPart(emptySketch(), newThin(50, id('p1
 /** Two positive elements a sum of focal lengths apart. */
 export const afocal = (): Sketch =>
   insertPart(insertPart(emptySketch(), newThin(50, id('p1')), 0, ONLY), newThin(100, id('p2')), 150, ONLY);
-
-/** A sketch file's text read; throws on a fault, which would be the test's own mistake. */
-export function readSketch(text: string): Sketch {
-  const parsed = parseSketch(text);
-  if (!parsed.ok) throw new Error(parsed.faults.map(({ sentence }) => sentence).join(' '));
-  return parsed.sketch;
-}
