@@ -112,6 +112,22 @@ export function sceneOf(sketch: Sketch, analysis: Analysis, view: View): Scene {
   };
 }
 
+/**
+ * How far from the axis (mm) the drawn rays are where they come into the sheet at `zMm`, in front of the parts. Far-off objects would
+ * flatten everything else, so it counts up to twice the tallest part.
+ */
+export function tallestAt({ bundles, axial, tallestMm }: Scene, zMm: number): number {
+  const lines = [...axial, ...bundles.flatMap(({ rays }) => rays)];
+  const heights = lines.map((line) => Math.abs(heightOnFirstStretch(line, zMm)));
+  return Math.max(tallestMm, Math.min(2 * tallestMm, Math.max(0, ...heights)));
+}
+
+/** Height in mm of a ray's line at `zMm`, along the straight line of its first stretch. */
+export function heightOnFirstStretch(line: RayLine, zMm: number): number {
+  const [z0 = 0, y0 = 0, z1 = 0, y1 = 0] = line;
+  return z1 === z0 ? y0 : y0 + ((y1 - y0) * (zMm - z0)) / (z1 - z0);
+}
+
 /** Half the largest extent of the sensor in mm, or null when none is given. */
 export function semiOf({ sensor }: Sketch): number | null {
   if (!sensor) return null;

@@ -1,7 +1,7 @@
 import { fitted, type Margins } from '../board/fit.ts';
 import type { Fold, LengthRange, Viewport } from '../board/viewport.ts';
 import { visibleRange, xOf } from '../board/viewport.ts';
-import type { Scene } from '../drawing/scene.ts';
+import { type Scene, tallestAt } from '../drawing/scene.ts';
 import { stageFold } from '../drawing/stage.ts';
 import { RIBBON_PX } from '../ribbon/layout.ts';
 import type { Camera } from '../store/viewStore.ts';
@@ -42,10 +42,11 @@ export function fitCamera(scene: Scene, size: Size, what: 'parts' | 'everything'
   const start: Camera = { follow: what, originMm: 0, pxPerMm: 1, stretch: 1, axisYPx: size.heightPx / 2 };
   const fold = foldIn(scene, start);
   const range = shownRange(scene, fold, what);
+  const maxHeightMm = tallestAt(scene, fold?.toMm ?? range.fromMm);
   const margins = size.widthPx < NARROW_PX ? NARROW : WIDE;
-  const view = fitted(viewportOf(start, size, fold), { ...range, maxHeightMm: scene.tallestMm }, margins);
+  const view = fitted(viewportOf(start, size, fold), { ...range, maxHeightMm }, margins);
   const stretch = Math.min(FIT_STRETCH.most, Math.max(FIT_STRETCH.least, view.stretch));
-  const tall = scene.tallestMm * view.pxPerMm * stretch;
+  const tall = maxHeightMm * view.pxPerMm * stretch;
   const room = (view.heightPx - margins.top - margins.bottom) / 2;
   return cameraAt({ ...view, stretch: tall > room ? view.stretch : stretch }, what);
 }

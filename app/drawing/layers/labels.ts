@@ -6,7 +6,7 @@ import type { TextStyle } from '../../board/styles.ts';
 import type { Viewport } from '../../board/viewport.ts';
 import { xOf, yOf } from '../../board/viewport.ts';
 import type { LengthUnit } from '../../store/viewStore.ts';
-import type { Scene, ScenePart } from '../scene.ts';
+import { heightOnFirstStretch, type Scene, type ScenePart } from '../scene.ts';
 import { nameOf, plainLength } from '../words.ts';
 import { objectTipPx, SCALE_PX } from './ends.ts';
 
@@ -211,8 +211,3 @@ function objectText({ stage, objectHeightMm }: Scene, view: Viewport, unit: Leng
 }
 
 const leftOf = (view: Viewport): number => view.originMm + NAME_AT_PX / view.pxPerMm;
-
-function heightOnFirstStretch(line: Float64Array, zMm: number): number {
-  const [z0 = 0, y0 = 0, z1 = 0, y1 = 0] = line;
-  return z1 === z0 ? y0 : y0 + ((y1 - y0) * (zMm - z0)) / (z1 - z0);
-}
