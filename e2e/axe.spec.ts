@@ -11,19 +11,19 @@ interface Screen {
 const press = (button: string) => (app: App) =>
   app.page.getByRole('button', { name: button, exact: true }).click();
 const tab = (name: string) => (app: App) => app.page.getByRole('tab', { name }).click();
-const escape = (app: App) => app.page.keyboard.press('Escape');
+const pressEscape = (app: App) => app.page.keyboard.press('Escape');
 
 const ON_A_DESK: readonly Screen[] = [
   { name: 'first screen', open: async () => {} },
   { name: 'all readouts', open: (app) => app.showAllReadouts() },
   { name: 'part selected', open: (app) => app.hand.clickGrip('part:p2') },
-  { name: 'number typed on the drawing', open: (app) => app.hand.clickGrip('cell:gap:p1'), close: escape },
+  { name: 'number typed on the drawing', open: (app) => app.hand.clickGrip('cell:gap:p1'), close: pressEscape },
   { name: 'ledger', open: tab('Ledger') },
   { name: 'trace sheet', open: tab('Trace sheet') },
   { name: 'spacing table', open: tab('Spacing table') },
-  { name: 'positions', open: press('Positions'), close: escape },
-  { name: 'hand-over', open: press('Hand over'), close: escape },
-  { name: 'help', open: press('Help'), close: escape },
+  { name: 'positions', open: press('Positions'), close: pressEscape },
+  { name: 'hand-over', open: press('Hand over'), close: pressEscape },
+  { name: 'help', open: press('Help'), close: pressEscape },
   { name: 'shelf', open: (app) => app.openShelf() },
   { name: 'empty sketch', open: press('New empty sketch') },
 ];
