@@ -1,5 +1,5 @@
 import type { Analysis, ParaxialRay, Part, PartId, Sketch, Train } from '../../engine/index.ts';
-import { heightInSpace } from '../../engine/index.ts';
+import { halfDiagonal, heightInSpace } from '../../engine/index.ts';
 import type { View } from '../store/viewStore.ts';
 import { type Stage, stageOf } from './stage.ts';
 
@@ -85,7 +85,7 @@ export function sceneOf(sketch: Sketch, analysis: Analysis, view: View): Scene {
   const parts = partsOf(sketch, analysis, view, stage, marginal, chief);
   const line = (share: number, pupil: number) => rayLine(train, stage, chief, share, marginal, pupil);
   const stop = stopOf(analysis, marginal);
-  const sensorSemiMm = semiOf(sketch);
+  const sensorSemiMm = sketch.sensor ? halfDiagonal(sketch.sensor) : null;
   const tallestMm = Math.max(
     ...parts.map((part) => part.semiMm),
     stop?.semiMm ?? 0,
@@ -126,14 +126,6 @@ export function tallestAt({ bundles, axial, tallestMm }: Scene, zMm: number): nu
 export function heightOnFirstStretch(line: RayLine, zMm: number): number {
   const [z0 = 0, y0 = 0, z1 = 0, y1 = 0] = line;
   return z1 === z0 ? y0 : y0 + ((y1 - y0) * (zMm - z0)) / (z1 - z0);
-}
-
-/** Half the largest extent of the sensor in mm, or null when none is given. */
-export function semiOf({ sensor }: Sketch): number | null {
-  if (!sensor) return null;
-  return 'diagonalMm' in sensor.size
-    ? sensor.size.diagonalMm / 2
-    : Math.hypot(sensor.size.widthMm, sensor.size.heightMm) / 2;
 }
 
 function partsOf(
