@@ -17,7 +17,11 @@ const ON_A_DESK: readonly Screen[] = [
   { name: 'first screen', open: async () => {} },
   { name: 'all readouts', open: (app) => app.showAllReadouts() },
   { name: 'part selected', open: (app) => app.hand.clickGrip('part:p2') },
-  { name: 'number typed on the drawing', open: (app) => app.hand.clickGrip('cell:gap:p1'), close: pressEscape },
+  {
+    name: 'number typed on the drawing',
+    open: (app) => app.hand.clickGrip('cell:gap:p1'),
+    close: pressEscape,
+  },
   { name: 'ledger', open: tab('Ledger') },
   { name: 'trace sheet', open: tab('Trace sheet') },
   { name: 'spacing table', open: tab('Spacing table') },
