@@ -59,6 +59,7 @@ export function NumberField(props: NumberFieldProps) {
   /** Where stepping by preview has got to; keys may come faster than the page renders. */
   const stepped = useRef<number | null>(null);
   const leaving = useRef(false);
+  const pressed = useRef(false);
 
   useLayoutEffect(() => {
     if (editing) input.current?.select();
@@ -167,6 +168,17 @@ export function NumberField(props: NumberFieldProps) {
         onFocus={() => {
           setEditing(true);
           setFault(null);
+        }}
+        onPointerDown={() => {
+          pressed.current = !editing;
+        }}
+        // The press that opens the field would set a caret and undo the selection when it is released.
+        onMouseUp={(event) => {
+          if (pressed.current) {
+            event.preventDefault();
+            event.currentTarget.select();
+          }
+          pressed.current = false;
         }}
         onBlur={onBlur}
         onChange={(event) => setDraft(event.target.value)}
