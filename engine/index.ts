@@ -11,7 +11,7 @@ export { conjugateChain, type LedgerRow } from './paraxial/ledger.ts';
 export { isZeroPower, systemMatrix } from './paraxial/matrix.ts';
 export { pupils } from './paraxial/pupils.ts';
 export { chiefRay, marginalRay, type RayOutcome } from './paraxial/rays.ts';
-export { halfDiagonal, halfDiagonal } from './paraxial/sensor.ts';
+export { halfDiagonal } from './paraxial/sensor.ts';
 export { heightInSpace, type ParaxialRay, paraxialRay, powerAt } from './paraxial/trace.ts';
 export { type Warning, type WarningKind, warningsOf } from './paraxial/warnings.ts';
 export { cautionOf } from './sheet/notes.ts';
