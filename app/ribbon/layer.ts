@@ -34,7 +34,7 @@ function drawCell(pen: Pen, cell: PlacedCell, view: Viewport, hovered: boolean):
     tick(pen, x, linePx, 'dimension tick');
   }
   segment(pen, fromPx, linePx, toPx, linePx, style);
-  if (cell.bad) hatch(pen, fromPx, toPx, linePx);
+  if (cell.bad) hatch(pen, cell, view);
   if (cell.onLeader) segment(pen, (fromPx + toPx) / 2, linePx, cell.textXPx, cell.textYPx - 8, 'leader');
   const value: TextStyle = cell.bad
     ? 'value bad'
@@ -65,11 +65,12 @@ function tick(pen: Pen, x: number, y: number, style: MarkStyle): void {
   segment(pen, x - TICK_PX, y + TICK_PX, x + TICK_PX, y - TICK_PX, style);
 }
 
-function hatch(pen: Pen, fromPx: number, toPx: number, y: number): void {
-  const left = Math.min(fromPx, toPx);
-  const right = Math.max(fromPx, toPx);
+/** Strokes along the piece of the dimension that is on the sheet: under deep zoom the whole would be millions. */
+function hatch(pen: Pen, { fromPx, toPx, linePx }: PlacedCell, view: Viewport): void {
+  const left = Math.max(-HATCH_PX, Math.min(fromPx, toPx));
+  const right = Math.min(view.widthPx + HATCH_PX, Math.max(fromPx, toPx));
   for (let x = left; x < right; x += HATCH_PX)
-    segment(pen, x, y + 8, Math.min(x + HATCH_PX, right), y + 2, 'hatch');
+    segment(pen, x, linePx + 8, Math.min(x + HATCH_PX, right), linePx + 2, 'hatch');
 }
 
 /** Hairlines from the parts down to the ribbon. */

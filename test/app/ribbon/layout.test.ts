@@ -161,6 +161,18 @@ describe('the ribbon’s words', () => {
   });
 });
 
+describe('the hatch of a gap that cannot be built', () => {
+  it('is drawn on the sheet only, however deep one looks into it', () => {
+    const { plan, view } = pictureFor(row(40, -30, 40, 0));
+    const cells = plan.cells.map((cell) => ({ ...cell, fromPx: 1e9, toPx: -1e9 }));
+    const pen = recorderPen();
+    ribbonLayer(pen, { ...plan, cells }, view, null);
+    const strokes = pen.marks.filter((mark) => mark.kind === 'lines' && mark.style === 'hatch');
+    expect(strokes.length).toBeGreaterThan(100);
+    expect(strokes.length).toBeLessThan(view.widthPx);
+  });
+});
+
 describe('extension lines', () => {
   it('come down once from every place that is dimensioned', () => {
     const { plan, view } = demoPicture();
