@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { partIn, type RayLine, sceneOf, semiOf } from '../../../app/drawing/scene.ts';
+import { partIn, type RayLine, sceneOf } from '../../../app/drawing/scene.ts';
 import { analysisOf } from '../../../app/live/analysis.ts';
 import { viewStore } from '../../../app/store/viewStore.ts';
 import type { PartId, Sketch } from '../../../engine/index.ts';
@@ -200,9 +200,8 @@ describe('the scene of a bare sketch', () => {
   });
 
   it('takes half the diagonal for the sensor’s reach', () => {
-    expect(semiOf(demo)).toBe(5.5);
-    expect(semiOf({ ...demo, sensor: { size: { diagonalMm: 9 }, pixelPitchMm: null } })).toBe(4.5);
-    expect(semiOf({ ...demo, sensor: null })).toBeNull();
+    expect(scene.sensorSemiMm).toBe(5.5);
+    expect(sceneFor({ ...demo, sensor: null }).sensorSemiMm).toBeNull();
   });
 });
 

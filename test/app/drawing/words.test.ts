@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { nameAt, nameOf, plain, plainLength } from '../../../app/drawing/words.ts';
-import { newPlate, newStop, newThin } from '../../../engine/index.ts';
+import { nameAt, plain, plainLength } from '../../../app/drawing/words.ts';
+import { newPlate, newStop, newThin, partName } from '../../../engine/index.ts';
 import { inspectionZoom } from '../../engine/demo.ts';
 
 describe('words of the drawing', () => {
@@ -22,8 +22,8 @@ describe('words of the drawing', () => {
   });
 
   it('calls a part by its name, else by its kind and its place in the row', () => {
-    expect(nameOf({ ...newThin(50), name: 'field lens' }, 3)).toBe('field lens');
-    expect([nameOf(newThin(50), 0), nameOf(newStop(), 1), nameOf(newPlate(), 2)]).toEqual([
+    expect(partName({ ...newThin(50), name: 'field lens' }, 3)).toBe('field lens');
+    expect([partName(newThin(50), 0), partName(newStop(), 1), partName(newPlate(), 2)]).toEqual([
       'element 1',
       'stop 2',
       'plate 3',
