@@ -198,6 +198,11 @@ describe('a broken rule', () => {
     ]);
   });
 
+  test('is told twice where a value stands under the wrong position', () => {
+    const sketch: Sketch = { ...row({ [at('wide')]: 1 }), positions: row(0).positions };
+    expect(pathsOf(sketch)).toEqual(['parts[0].space.lengthMm.only', 'parts[0].space.lengthMm.wide']);
+  });
+
   test('is an id given twice, of odd characters, or known to every object', () => {
     const two = row(1, 1);
     const same: Sketch = { ...two, parts: two.parts.map((part) => ({ ...part, id: id('p1') })) };

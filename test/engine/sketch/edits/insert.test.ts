@@ -50,6 +50,13 @@ describe('a part put on the axis', () => {
     expect(gapsOf(beyond)).toEqual([10, 20, 60, -10]);
   });
 
+  test('beyond a sensor at split distances stands as far beyond it at every position', () => {
+    const sketch: Sketch = { ...row({ [at('wide')]: 1e-7, [at('narrow')]: 50 }), image: 'fixed' };
+    const beyond = gapsOf(insertPart(sketch, newThin(50, NEW), 10, at('wide')));
+    expect(beyond[0]).toEqual({ wide: 10, narrow: 50 + (10 - 1e-7) });
+    expect(beyond[1]).toEqual({ wide: 1e-7 - 10, narrow: 50 - (50 + (10 - 1e-7)) });
+  });
+
   test('in front of the first divides a finite object distance, common or split', () => {
     const near = insertPart(withDistance(row(10), 100), thin, -30, ONLY);
     expect([near.object.distanceMm, ...gapsOf(near)]).toEqual([70, 30, 10]);
