@@ -1,5 +1,5 @@
 import type { Fault } from '../outcome.ts';
-import { LONGEST_TEXT, LIMITS, type Limit, MOST, SHORTEST_FOCAL_LENGTH_MM, keeps } from './limits.ts';
+import { keeps, LIMITS, type Limit, LONGEST_TEXT, MOST, SHORTEST_FOCAL_LENGTH_MM } from './limits.ts';
 import type { FixedMedium, Medium, ObjectDistance, Part, PerPosition, Sketch } from './types.ts';
 import { partLabel, quantityText, quoted, valueText } from './words.ts';
 

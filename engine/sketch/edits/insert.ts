@@ -1,6 +1,6 @@
 import { freshPartId } from '../create.ts';
 import type { Medium, Part, PerPosition, PositionId, Sketch } from '../types.ts';
-import { everyPosition, isCommon, combineValues, valueOn, withValue } from '../values.ts';
+import { combineValues, everyPosition, isCommon, valueOn, withValue } from '../values.ts';
 import { lengthOf, withGap } from './change.ts';
 
 /**

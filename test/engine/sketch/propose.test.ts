@@ -2,7 +2,7 @@ import { describe, expect, test } from 'vitest';
 import { emptySketch, freshGroupId, freshPartId, freshPositionId } from '../../../engine/sketch/create.ts';
 import { setFocalLength, setSemiDiameter } from '../../../engine/sketch/edits/parts.ts';
 import { setTitle } from '../../../engine/sketch/edits/text.ts';
-import { type Settling, propose, unsettled } from '../../../engine/sketch/propose.ts';
+import { propose, type Settling, unsettled } from '../../../engine/sketch/propose.ts';
 import type { Sketch } from '../../../engine/sketch/types.ts';
 import { id, row } from './layout.ts';
 

@@ -1,5 +1,4 @@
 import fc from 'fast-check';
-import type { Edit } from '../../../../engine/sketch/propose.ts';
 import { newPlate, newStop, newThin } from '../../../../engine/sketch/create.ts';
 import { withGroups } from '../../../../engine/sketch/edits/change.ts';
 import { copyParts, duplicateParts, pasteParts } from '../../../../engine/sketch/edits/copy.ts';
@@ -15,6 +14,7 @@ import { removeParts } from '../../../../engine/sketch/edits/remove.ts';
 import { scaleParts, scaleSketch, scaleToFocalLength } from '../../../../engine/sketch/edits/scale.ts';
 import { dropStop, releaseStop, rideStop, setStop } from '../../../../engine/sketch/edits/stop.ts';
 import { setNotes, setTitle } from '../../../../engine/sketch/edits/text.ts';
+import type { Edit } from '../../../../engine/sketch/propose.ts';
 import type { GroupId, PartId, PositionId, Setting, Sketch } from '../../../../engine/sketch/types.ts';
 
 /** What an edit is given: numbers, and choices that every sketch can answer. */

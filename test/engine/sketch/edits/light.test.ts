@@ -1,4 +1,5 @@
 import { describe, expect, test } from 'vitest';
+import { LINES } from '../../../../engine/sketch/create.ts';
 import {
   joinStopDiameter,
   setAperture,
@@ -12,7 +13,6 @@ import {
   splitStopDiameter,
 } from '../../../../engine/sketch/edits/light.ts';
 import { setNotes, setTitle } from '../../../../engine/sketch/edits/text.ts';
-import { LINES } from '../../../../engine/sketch/create.ts';
 import { propose, unsettled } from '../../../../engine/sketch/propose.ts';
 import { inspectionZoom, NARROW, WIDE } from '../../demo.ts';
 
