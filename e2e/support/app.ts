@@ -1,4 +1,4 @@
-import { test as base, type Locator, type Page } from '@playwright/test';
+import { test as base, expect, type Locator, type Page } from '@playwright/test';
 import type { TrayKind } from '../../app/store/viewStore.ts';
 import { drawn, grip, Hand, middleOf } from './hand.ts';
 
@@ -101,8 +101,14 @@ export class App {
 
 export const test = base.extend<{ app: App }>({
   app: async ({ page }, use) => {
+    const complaints: string[] = [];
+    page.on('pageerror', (error) => complaints.push(error.message));
+    page.on('console', (message) => {
+      if (message.type() === 'error' || message.type() === 'warning') complaints.push(message.text());
+    });
     await use(new App(page));
+    expect(complaints, 'what the browser complained of').toEqual([]);
   },
 });
 
-export { expect } from '@playwright/test';
+export { expect };
