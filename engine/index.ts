@@ -103,6 +103,7 @@ export type {
   ThinPart,
 } from './sketch/types.ts';
 export { isCommon, objectDistanceAt, settingAt, valueAt } from './sketch/values.ts';
+export { partName } from './sketch/words.ts';
 export { placesOf } from './train/places.ts';
 export { trainOf } from './train/train.ts';
 export type { Train } from './train/types.ts';

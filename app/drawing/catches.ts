@@ -1,7 +1,8 @@
 import type { PartId } from '../../engine/index.ts';
+import { partName } from '../../engine/index.ts';
 import type { Catch } from '../board/snap.ts';
 import type { Sight } from './sight.ts';
-import { nameAt, nameOf } from './words.ts';
+import { nameAt } from './words.ts';
 
 /**
  * Where a drag of `moving` may be caught: the focal points of the parts that stay, the images that they form in front of what
@@ -18,7 +19,7 @@ export function catchesFor(
   const firstMoving = sketch.parts.findIndex((part) => moving.includes(part.id));
   for (const { part, index, frontMm } of scene.parts) {
     if (part.kind !== 'thin' || moving.includes(part.id) || (carries && index > firstMoving)) continue;
-    const name = nameOf(part, index);
+    const name = partName(part, index);
     catches.push({ at: frontMm - part.focalLengthMm, name: `front focus of ${name}` });
     catches.push({ at: frontMm + part.focalLengthMm, name: `rear focus of ${name}` });
   }

@@ -1,4 +1,5 @@
-import type { Part, Sketch } from '../../engine/index.ts';
+import type { Sketch } from '../../engine/index.ts';
+import { partName } from '../../engine/index.ts';
 import type { LengthUnit } from '../store/viewStore.ts';
 import { formatLength, formatNumber } from '../ui/format.ts';
 
@@ -11,15 +12,8 @@ export const plainLength = (lengthMm: number, unit: LengthUnit, digits = 3): str
 
 const shortened = (text: string): string => (text.includes('.') ? text.replace(/\.?0+$/, '') : text);
 
-const KIND_NAMES = { thin: 'element', stop: 'stop', plate: 'plate' } as const;
-
-/** What a part is called: its name, or its kind and place among all parts. */
-export function nameOf(part: Part, index: number): string {
-  return part.name || `${KIND_NAMES[part.kind]} ${index + 1}`;
-}
-
 /** The name of the part at `index`, empty when there is none. */
 export function nameAt(sketch: Sketch, index: number): string {
   const part = sketch.parts[index];
-  return part ? nameOf(part, index) : '';
+  return part ? partName(part, index) : '';
 }

@@ -1,7 +1,6 @@
 import type { PartId } from '../../engine/index.ts';
-import { isCommon } from '../../engine/index.ts';
+import { isCommon, partName } from '../../engine/index.ts';
 import type { Sight } from '../drawing/sight.ts';
-import { nameOf } from '../drawing/words.ts';
 
 /** One dimension of the ribbon. */
 export interface Cell {
@@ -51,7 +50,7 @@ export function cellsOf({ reading, scene }: Sight): readonly Cell[] {
     });
   }
   for (const [i, { part, index, frontMm, rearMm }] of scene.parts.entries()) {
-    const name = nameOf(part, index);
+    const name = partName(part, index);
     if (part.kind === 'plate') {
       cells.push({
         id: `thickness:${part.id}`,

@@ -1,5 +1,6 @@
 import type { Edit } from '../../engine/index.ts';
 import {
+  partName,
   setGap,
   setObjectDistance,
   setThickness,
@@ -11,7 +12,7 @@ import type { Handle } from '../drawing/handle.ts';
 import { BETWEEN, plainMove } from '../drawing/handle.ts';
 import { placing } from '../drawing/handles/parts.ts';
 import type { Sight } from '../drawing/sight.ts';
-import { nameOf } from '../drawing/words.ts';
+
 import { markPlace, markText, type PlacedCell, type RibbonPlan } from './layout.ts';
 
 const LEAST_MM = 0.01;
@@ -140,7 +141,7 @@ function tickHandles(plan: RibbonPlan, sight: Sight): readonly Handle[] {
     yPx: linePx,
     line: null,
     cursor: 'ew-resize',
-    label: `${nameOf(part.part, part.index)}, position`,
+    label: `${partName(part.part, part.index)}, position`,
     slider: null,
     tabStop: false,
     selects: part.part.id,

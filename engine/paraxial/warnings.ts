@@ -1,5 +1,6 @@
 import type { Part, PartId, PositionId, Setting, Sketch } from '../sketch/types.ts';
 import { settingAt, valueAt } from '../sketch/values.ts';
+import { capitalised, partName } from '../sketch/words.ts';
 import { sentenceOf } from './absence.ts';
 import { type Analysis, analyse } from './analyse.ts';
 
@@ -50,6 +51,7 @@ type Found = Omit<Warning, 'positionId'>;
 const TOUCHING_MM = 1e-9;
 
 function mechanics(sketch: Sketch, setting: Setting, { conjugates, sensor }: Analysis): readonly Found[] {
+  const nameOf = namesIn(sketch);
   const found: Found[] = [];
   const cannot = (kind: WarningKind, partId: PartId | null, sentence: string) =>
     found.push({ kind, severity: 'cannot be built', partId, sentence });
@@ -71,13 +73,13 @@ function mechanics(sketch: Sketch, setting: Setting, { conjugates, sensor }: Ana
       cannot(
         'negative gap',
         part.id,
-        `${nameOf(next)} stands ${mm(-gapMm)} in front of ${nameOf(part)}: the gap must be 0 or more.`,
+        `${capitalised(nameOf(next))} stands ${mm(-gapMm)} in front of ${nameOf(part)}: the gap must be 0 or more.`,
       );
     } else if (clearMm < -TOUCHING_MM) {
       cannot(
         'rooms overlap',
         part.id,
-        `${nameOf(part)} and ${nameOf(next)} overlap by ${mm(-clearMm)}: the gap of ${mm(gapMm)} is smaller than their rooms.`,
+        `${capitalised(nameOf(part))} and ${nameOf(next)} overlap by ${mm(-clearMm)}: the gap of ${mm(gapMm)} is smaller than their rooms.`,
       );
     }
   }
@@ -96,6 +98,7 @@ function mechanics(sketch: Sketch, setting: Setting, { conjugates, sensor }: Ana
 }
 
 function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
+  const nameOf = namesIn(sketch);
   const { rays, light, sensor, conjugates, vignetting, depth } = analysis;
   const found: Found[] = [];
   const look = (kind: WarningKind, partId: PartId | null, sentence: string) =>
@@ -139,7 +142,7 @@ function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
     look(
       'behind the mount',
       last.id,
-      `${nameOf(last)} reaches ${mm(-sensor.mountClearanceMm.value)} behind the mount plane.`,
+      `${capitalised(nameOf(last))} reaches ${mm(-sensor.mountClearanceMm.value)} behind the mount plane.`,
     );
   }
   return found;
@@ -161,7 +164,10 @@ function axialCuts({ rays, train }: Analysis): ReadonlyMap<number, number> {
 const CUT = 1e-9;
 const UNCOVERED = 1e-6;
 
+const namesIn =
+  ({ parts }: Sketch) =>
+  (part: Part): string =>
+    partName(part, parts.indexOf(part));
 const roomFront = (part: Part): number => (part.kind === 'thin' ? part.roomFrontMm : 0);
 const roomBehind = (part: Part): number => (part.kind === 'thin' ? part.roomBehindMm : 0);
-const nameOf = (part: Part): string => part.name || part.id;
 const mm = (value: number): string => `${value.toFixed(3)} mm`;

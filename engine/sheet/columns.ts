@@ -1,6 +1,7 @@
 import type { Outcome } from '../outcome.ts';
 import { mapOutcome, some } from '../outcome.ts';
 import type { Sketch } from '../sketch/types.ts';
+import { capitalised } from '../sketch/words.ts';
 import { clearGapColumns } from './clearGaps.ts';
 import type { Grid } from './grid.ts';
 import { imageWord, labelOf, planeOf, positionLabel } from './labels.ts';
@@ -52,7 +53,7 @@ function distanceColumns(sketch: Sketch, datum: Datum, grid: Grid): ColumnSpec[]
   ): ColumnSpec => ({
     column: {
       id: `distance:${id}`,
-      title: what === from ? `${capital(what)} (datum)` : `${capital(what)} from ${from}`,
+      title: what === from ? `${capitalised(what)} (datum)` : `${capitalised(what)} from ${from}`,
       unit: grid.unit,
       kind: 'distance',
     },
@@ -71,8 +72,8 @@ function gapColumns(sketch: Sketch, grid: Grid): ColumnSpec[] {
     const next = sketch.parts[k + 1];
     const title =
       next === undefined
-        ? `${capital(labelOf(sketch, k))} to ${imageWord(sketch)} (from ${planeOf(part)})`
-        : `${capital(labelOf(sketch, k))} to ${labelOf(sketch, k + 1)} (${planeOf(part)} to ${planeOf(next)})`;
+        ? `${capitalised(labelOf(sketch, k))} to ${imageWord(sketch)} (from ${planeOf(part)})`
+        : `${capitalised(labelOf(sketch, k))} to ${labelOf(sketch, k + 1)} (${planeOf(part)} to ${planeOf(next)})`;
     return {
       column: { id: `gap:${part.id}`, title, unit: grid.unit, kind: 'gap' },
       cellOf: ({ printed }) => grid.cellOf(gapBehind(printed, k)),
@@ -150,5 +151,3 @@ function checkColumns(sketch: Sketch): ColumnSpec[] {
 
 const outcomeCell = (value: Outcome<number>, digits: number): Cell =>
   value.ok ? numberCell(value.value, digits) : absentCell(value.why);
-
-const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);

@@ -1,8 +1,11 @@
 import type { Part, Position, Sketch } from '../sketch/types.ts';
+import { partName } from '../sketch/words.ts';
 
-/** What a part is called in the table: its name, or its number along the axis. */
-export const labelOf = (sketch: Sketch, index: number): string =>
-  sketch.parts[index]?.name.trim() || `part ${index + 1}`;
+/** What the part at `index` is called in the table. */
+export function labelOf(sketch: Sketch, index: number): string {
+  const part = sketch.parts[index];
+  return part ? partName(part, index) : '';
+}
 
 /** What a position is called in the table. */
 export const positionLabel = (position: Position): string => position.name.trim() || position.id;

@@ -32,6 +32,15 @@ const LONGEST_QUOTE = 40;
 export const quoted = (text: string): string =>
   `“${text.length > LONGEST_QUOTE ? `${text.slice(0, LONGEST_QUOTE - 1)}…` : text}”`;
 
+const KIND_NAMES = { thin: 'element', stop: 'stop', plate: 'plate' } as const;
+
+/** What a part is called: its name, or its kind and number along the axis. */
+export const partName = (part: Pick<Part, 'name' | 'kind'>, index: number): string =>
+  part.name.trim() || `${KIND_NAMES[part.kind]} ${index + 1}`;
+
+/** The text with a capital at its beginning. */
+export const capitalised = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
+
 /** What a part is called in a sentence: its name in quotes, or its number along the axis. */
 export const partLabel = (part: Pick<Part, 'name'> | undefined, index: number): string =>
   part === undefined || part.name === '' ? `part ${index + 1}` : quoted(part.name);

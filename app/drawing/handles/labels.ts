@@ -1,7 +1,8 @@
+import { partName } from '../../../engine/index.ts';
 import type { LabelPlace } from '../../board/labels.ts';
 import type { Handle } from '../handle.ts';
 import type { Sight } from '../sight.ts';
-import { nameOf } from '../words.ts';
+
 import { placing } from './parts.ts';
 
 const PREFIX = 'label:';
@@ -22,7 +23,7 @@ export function labelHandles(sight: Sight, places: readonly LabelPlace[]): reado
         line: { topPx: middlePx - 4, bottomPx: middlePx + 4 },
         halfWidthPx: place.widthPx / 2,
         cursor: 'text',
-        label: `${nameOf(part.part, part.index)}, focal length`,
+        label: `${partName(part.part, part.index)}, focal length`,
         slider: null,
         tabStop: false,
         selects: part.part.id,

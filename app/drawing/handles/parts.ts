@@ -2,6 +2,7 @@ import type { Edit, PartId } from '../../../engine/index.ts';
 import {
   isCommon,
   moveParts,
+  partName,
   setFocalLength,
   setSemiDiameter,
   setThickness,
@@ -16,7 +17,6 @@ import { BETWEEN, plainMove } from '../handle.ts';
 import { FOCAL_STEM_PX } from '../layers/marks.ts';
 import type { ScenePart } from '../scene.ts';
 import type { Sight } from '../sight.ts';
-import { nameOf } from '../words.ts';
 
 /** Lengths that a drag may not shrink below, mm. */
 const LEAST_MM = 0.01;
@@ -48,7 +48,7 @@ export function placing(sight: Sight, part: ScenePart): Pick<Handle, 'drag' | 's
     const rule = other ? 'carry' : 'neighbours';
     return (before) => moveParts(before, ids, deltaMm, setting.at, rule);
   };
-  const label = `${nameOf(part.part, part.index)}, behind the first part`;
+  const label = `${partName(part.part, part.index)}, behind the first part`;
   if (isBetween(sight) && touchesSplitGap(sight, ids))
     return { drag: null, step: null, entry: null, why: BETWEEN };
   const movesFirst = ids.includes(sketch.parts[0]?.id as PartId);
@@ -89,7 +89,7 @@ function dragPart(
 
 function moveHandle(sight: Sight, part: ScenePart): Handle {
   const { view } = sight;
-  const name = nameOf(part.part, part.index);
+  const name = partName(part.part, part.index);
   const top = yOf(view, part.semiMm);
   const bottom = yOf(view, -part.semiMm);
   const middle = (part.frontMm + part.rearMm) / 2;
@@ -132,7 +132,7 @@ function focalHandles(sight: Sight, { part, index, frontMm }: ScenePart): readon
     yPx: yOf(view, 0) + FOCAL_STEM_PX,
     line: null,
     cursor: 'ew-resize',
-    label: `${nameOf(part, index)}, ${side < 0 ? 'front' : 'rear'} focal point`,
+    label: `${partName(part, index)}, ${side < 0 ? 'front' : 'rear'} focal point`,
     slider: { valueNow: f, valueText: `focal length ${plainFixed(sight, f)}`, orientation: 'horizontal' },
     tabStop: side > 0,
     selects: part.id,
@@ -173,7 +173,7 @@ function rimHandles(
     yPx: yOf(view, side * semiMm),
     line: null,
     cursor: 'ns-resize',
-    label: `${nameOf(part, index)}, ${side > 0 ? 'upper' : 'lower'} rim`,
+    label: `${partName(part, index)}, ${side > 0 ? 'upper' : 'lower'} rim`,
     slider: {
       valueNow: semiMm,
       valueText: `clear diameter ${plainFixed(sight, 2 * semiMm)}${part.semiDiameterMm === null ? ', open' : ''}`,
@@ -213,7 +213,7 @@ function thicknessHandle(sight: Sight, { part, index, rearMm }: ScenePart): read
       yPx: yOf(view, 0) - VERTEX_RISE_PX,
       line: null,
       cursor: 'ew-resize',
-      label: `${nameOf(part, index)}, thickness`,
+      label: `${partName(part, index)}, thickness`,
       slider: {
         valueNow: part.thicknessMm,
         valueText: `thickness ${plainFixed(sight, part.thicknessMm)}`,

@@ -1,3 +1,4 @@
+import { partName } from '../../../engine/index.ts';
 import type { LabelPlace, LabelWish, Side } from '../../board/labels.ts';
 import { placeLabels } from '../../board/labels.ts';
 import type { MeasureText } from '../../board/measure.ts';
@@ -7,7 +8,7 @@ import type { Viewport } from '../../board/viewport.ts';
 import { xOf, yOf } from '../../board/viewport.ts';
 import type { LengthUnit } from '../../store/viewStore.ts';
 import { heightOnFirstStretch, type Scene, type ScenePart } from '../scene.ts';
-import { nameOf, plainLength } from '../words.ts';
+import { plainLength } from '../words.ts';
 import { objectTipPx, SCALE_PX } from './ends.ts';
 
 /** A text on the drawing, before its place is found. */
@@ -111,7 +112,7 @@ export function labelsOf(
   for (const image of scene.images) {
     const part = scene.parts[image.objectOf ?? image.partIndex];
     if (!part) continue;
-    const name = nameOf(part.part, part.index);
+    const name = partName(part.part, part.index);
     const text = image.objectOf === null ? `image of ${name}` : `object for ${name}`;
     const x = xOf(view, image.zMm);
     const foot = yOf(view, Math.min(0, image.heightMm));
@@ -200,8 +201,8 @@ function partText({ part, index, carriesStop }: ScenePart, unit: LengthUnit): st
     const f = plainLength(part.focalLengthMm, unit).replace(` ${unit}`, '');
     return `f ${f}${stop}`;
   }
-  if (part.kind === 'stop') return carriesStop ? part.name || 'stop' : nameOf(part, index);
-  return `${nameOf(part, index)}${stop}`;
+  if (part.kind === 'stop') return carriesStop ? part.name || 'stop' : partName(part, index);
+  return `${partName(part, index)}${stop}`;
 }
 
 function objectText({ stage, objectHeightMm }: Scene, view: Viewport, unit: LengthUnit): string {

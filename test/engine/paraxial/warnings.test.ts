@@ -38,7 +38,7 @@ describe('the warnings', () => {
         kind: 'negative gap',
         severity: 'cannot be built',
         partId: 'p1',
-        sentence: 'p2 stands 2.500 mm in front of p1: the gap must be 0 or more.',
+        sentence: 'P2 stands 2.500 mm in front of p1: the gap must be 0 or more.',
       },
     ]);
   });
@@ -50,7 +50,7 @@ describe('the warnings', () => {
         kind: 'rooms overlap',
         severity: 'cannot be built',
         partId: 'p1',
-        sentence: 'p1 and p2 overlap by 0.500 mm: the gap of 3.000 mm is smaller than their rooms.',
+        sentence: 'P1 and p2 overlap by 0.500 mm: the gap of 3.000 mm is smaller than their rooms.',
       },
     ]);
   });
@@ -127,7 +127,7 @@ describe('the warnings', () => {
     const parts = [thin('p1', 50, 0, { roomBehindMm: 3 })];
     expect(warned(parts, { registerMm: 71 })).toEqual([]);
     expect(warned(parts, { registerMm: 73 })).toMatchObject([
-      { kind: 'behind the mount', partId: 'p1', sentence: 'p1 reaches 1.000 mm behind the mount plane.' },
+      { kind: 'behind the mount', partId: 'p1', sentence: 'P1 reaches 1.000 mm behind the mount plane.' },
     ]);
   });
 
@@ -146,9 +146,9 @@ describe('the warnings', () => {
     expect(warned(telecentric, { field }, 'p2').map(({ kind }) => kind)).toEqual(['no chief ray']);
   });
 
-  it('use the id of a part without a name', () => {
+  it('number a part without a name along the axis', () => {
     const parts = [thin('p1', 80, -1, { name: '' }), thin('p2', 80, 0, { name: 'field lens' })];
-    expect(warned(parts)[0]?.sentence).toMatch(/^field lens stands 1\.000 mm in front of p1/);
+    expect(warned(parts)[0]?.sentence).toMatch(/^Field lens stands 1\.000 mm in front of element 1/);
   });
 });
 
