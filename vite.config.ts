@@ -13,6 +13,8 @@ export default defineConfig({
   test: {
     root: repository,
     include: ['test/**/*.test.{ts,tsx}'],
+    // Case counts bound the property tests, not clocks: a loaded machine must not fail them.
+    testTimeout: 60_000,
     globalSetup: ['test/tools/seed.ts'],
     setupFiles: ['test/tools/seed.ts'],
     coverage: {
