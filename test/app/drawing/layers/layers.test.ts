@@ -4,7 +4,7 @@ import { type Mark, recorderPen } from '../../../../app/board/recorderPen.ts';
 import { type Viewport, xOf, yOf } from '../../../../app/board/viewport.ts';
 import { endsLayer, objectTipPx, scaleLayer } from '../../../../app/drawing/layers/ends.ts';
 import { FOCAL_STEM_PX, marksLayer } from '../../../../app/drawing/layers/marks.ts';
-import { partsLayer } from '../../../../app/drawing/layers/parts.ts';
+import { glassLayer, partsLayer } from '../../../../app/drawing/layers/parts.ts';
 import { raysLayer } from '../../../../app/drawing/layers/rays.ts';
 import type { Scene } from '../../../../app/drawing/scene.ts';
 import type { Picture } from '../../../../app/layout/picture.ts';
@@ -127,7 +127,7 @@ describe('parts', () => {
     };
     const mixed = pictureFor(sketch);
     const marks = drawn(mixed, parts);
-    const plate = marks.find((mark) => mark.kind === 'closed');
+    const plate = drawn(mixed, glassLayer).find((mark) => mark.kind === 'closed');
     expect(plate?.kind === 'closed' && [plate.points[0], plate.points[2]]).toEqual([
       near(xOf(mixed.view, 10)),
       near(xOf(mixed.view, 16)),
