@@ -17,6 +17,7 @@ import { EmptySheet } from './page/EmptySheet.tsx';
 import { Sheets } from './page/Sheets.tsx';
 import { SidePanel } from './page/SidePanel.tsx';
 import type { Commands } from './panels/CommandButton.tsx';
+import { SummaryStrip } from './panels/SummaryStrip.tsx';
 import './ui/theme.css';
 import './page/page.css';
 import './App.css';
@@ -40,6 +41,9 @@ export function App({ groups, commands, services, board, onBoard }: AppProps) {
   return (
     <div className="app">
       <Bar commands={commands} />
+      <div className="app-strip">
+        <SummaryStrip />
+      </div>
       <aside className="app-tray" aria-label="Tray">
         <Tray board={board} />
       </aside>
