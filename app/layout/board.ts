@@ -175,12 +175,16 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     if (camera !== viewStore.getState().camera) setView({ camera });
   };
 
-  /** While the drawing has the focus, the newly selected part's grip takes it, so that the arrow keys move it. */
+  /**
+   * While the drawing has the focus, the newly selected part's grip takes it, so that the arrow keys move it; unless another grip of
+   * that part has it already.
+   */
   const followSelection = (selection: readonly Selected[]) => {
     const changed = selection !== selected;
     selected = selection;
     const [only] = selection;
     if (!changed || only === undefined || !element.contains(document.activeElement)) return;
+    if (handleOf(mirror.focusedId())?.selects === only) return;
     mirror.focus(only === 'object' ? 'object:foot' : only === 'image' ? 'image' : `part:${only}`);
   };
 
