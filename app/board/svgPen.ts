@@ -1,5 +1,5 @@
 import type { ClipShape, Flat, Pen, TextPlace } from './pen.ts';
-import { FONT_FAMILY, type MarkStyle, markLook, type Palette, textLook, type TextStyle } from './styles.ts';
+import { FONT_FAMILY, type MarkStyle, markLook, type Palette, type TextStyle, textLook } from './styles.ts';
 import { isNear, tracePath } from './trim.ts';
 
 export interface SvgSheet {
