@@ -27,7 +27,7 @@ const KEPT_SHARE = 0.4;
 /** Heights are never drawn flatter than this by a fit; a taller layout is drawn smaller instead. */
 const LEAST_STRETCH = 0.25;
 /** Width of the break on screen, px. */
-export const FOLD_WIDTH_PX = 18;
+const FOLD_WIDTH_PX = 18;
 /** Steps of the height stretch within a decade, so that the shown figure is a plain one. */
 const STRETCH_STEPS = [1, 1.25, 1.5, 1.75, 2, 2.5, 3, 3.5, 4, 5, 6, 7, 8];
 

@@ -27,7 +27,7 @@ export function SidePanel({ commands }: SidePanelProps) {
 }
 
 /** What is selected, or the sketch as a whole. */
-export function Card({ commands }: SidePanelProps) {
+function Card({ commands }: SidePanelProps) {
   const something = useReading(({ view }) => view.selection.length > 0);
   return something ? <PartCard commands={commands} /> : <SketchCard />;
 }

@@ -75,7 +75,7 @@ export function analyse(sketch: Sketch, setting: Setting): Analysis {
 }
 
 /** The index of glass taken for the thin part at each surface: its own, else the sketch's assumed one. */
-export function glassIndices(sketch: Sketch, train: Train): Float64Array {
+function glassIndices(sketch: Sketch, train: Train): Float64Array {
   const indices = new Float64Array(train.count);
   for (let k = 0; k < train.count; k++) {
     const part = sketch.parts[train.partOf[k]!];

@@ -35,7 +35,7 @@ export const halfDiagonal = ({ size }: Sensor): number =>
   'diagonalMm' in size ? size.diagonalMm / 2 : Math.hypot(size.widthMm, size.heightMm) / 2;
 
 /** 2.44 λ N in mm: the diameter of the first dark ring (Airy; Born and Wolf, Principles of Optics, 8.5). */
-export const airyDiameter = (wavelengthNm: number, workingFNumber: number): number =>
+const airyDiameter = (wavelengthNm: number, workingFNumber: number): number =>
   2.44 * wavelengthNm * 1e-6 * workingFNumber;
 
 /**

@@ -19,7 +19,7 @@ export function changePart(sketch: Sketch, partId: PartId, change: (part: Part) 
 }
 
 /** As `changePart`, by the part's place in the list; a place that does not exist changes nothing. */
-export function changePartAt(sketch: Sketch, index: number, change: (part: Part) => Part): Sketch {
+function changePartAt(sketch: Sketch, index: number, change: (part: Part) => Part): Sketch {
   const part = sketch.parts[index];
   if (part === undefined) return sketch;
   const next = change(part);
