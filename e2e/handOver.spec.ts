@@ -73,7 +73,7 @@ test('the spacing table is copied and downloaded as the engine computes it', asy
 });
 
 test('a gap that cannot be built is marked, listed and refused by the hand-over', async ({ app, page }) => {
-  const sentence = 'third group stands 3.000 mm in front of second group: the gap must be 0 or more.';
+  const sentence = /third group stands 3\.000 mm in front of second group: the gap must be 0 or more\./i;
   await app.open();
   expect(linesIn(await recorded(page), 'dimension bad')).toEqual([]);
   await app.hand.clickGrip('cell:gap:p2');

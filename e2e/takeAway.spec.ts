@@ -1,5 +1,5 @@
 import { readFile } from 'node:fs/promises';
-import { expect, test } from './support/app.ts';
+import { App, expect, test } from './support/app.ts';
 import { sketchIn } from './support/engine.ts';
 
 test.use({ permissions: ['clipboard-read', 'clipboard-write'] });
@@ -42,7 +42,7 @@ test('a sketch is saved as a file and opened again, and a link carries it to ano
   const elsewhere = await browser.newContext();
   const other = await elsewhere.newPage();
   await other.goto(link);
-  await expect(other.getByText(f.replace('mm', ''), { exact: false }).first()).toBeVisible();
+  await expect(new App(other).readout('Focal length')).toHaveText(f);
   await elsewhere.close();
 });
 

@@ -78,6 +78,7 @@ export class App {
     const field = this.field(label);
     await field.fill(value);
     await field.press('Enter');
+    await drawn(this.page);
   }
 
   /** Types into the entry that stands open on the drawing. */
@@ -86,6 +87,7 @@ export class App {
     await entry.fill(value);
     await entry.press('Enter');
     await entry.waitFor({ state: 'detached' });
+    await drawn(this.page);
   }
 
   /** Takes a part from the tray to a place on the axis: so many px behind a part, or a third into an empty sheet. */
