@@ -16,7 +16,7 @@ export interface DecimalMatrix {
 }
 
 /** `left` after `right`. */
-const times = (left: DecimalMatrix, right: DecimalMatrix): DecimalMatrix => ({
+export const times = (left: DecimalMatrix, right: DecimalMatrix): DecimalMatrix => ({
   a: left.a.times(right.a).plus(left.b.times(right.c)),
   b: left.a.times(right.b).plus(left.b.times(right.d)),
   c: left.c.times(right.a).plus(left.d.times(right.c)),
