@@ -76,7 +76,6 @@ export type TextStyle =
   | 'value bad'
   | 'value quiet';
 
-
 export type ColourToken =
   | 'paper'
   | 'ink'
