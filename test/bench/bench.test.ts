@@ -1,13 +1,15 @@
 import { describe, expect, it } from 'vitest';
+import { roughMeasure } from '../../app/board/measure.ts';
 import { paraxialRay } from '../../engine/paraxial/trace.ts';
 import { faultsOf } from '../../engine/sketch/rules.ts';
-import type { Sketch } from '../../engine/sketch/types.ts';
 import { settingAt } from '../../engine/sketch/values.ts';
 import { trainOf } from '../../engine/train/train.ts';
+import { analyseAll } from './analyseAll.ts';
 import { bareRays, traceBareRays } from './bareRays.ts';
 import { type BenchRow, rowsJson, rowsTable } from './bench.ts';
 import { benchSketch } from './benchSketch.ts';
-import { analyseAll, liveUpdate } from './liveUpdate.ts';
+import { liveFrames, liveUpdate } from './liveUpdate.ts';
+import { ratioOf } from './measure.ts';
 
 describe('the bench', () => {
   it('measures on a sound sketch of the size asked for, the same at every call', () => {
@@ -31,21 +33,41 @@ describe('the bench', () => {
     }
   });
 
-  it('drags one part to and fro, and hands every frame its sketch and analysis', () => {
+  it('drags one part to and fro as the app does, each time to another place', () => {
     const pressed = benchSketch(12, 6);
-    const seen: Sketch[] = [];
-    const move = liveUpdate(pressed, [
-      (sketch, setting, analysis) => {
-        seen.push(sketch);
-        expect(setting).toEqual(settingAt(pressed.positions[0]?.id ?? setting.at));
-        expect(analysis.train.gap).toEqual(trainOf(sketch, setting).gap);
-        return 1;
-      },
-    ]);
+    const next = liveFrames(pressed, roughMeasure);
+    const frames = Array.from({ length: 5 }, next);
+    const gaps = frames.map(({ reading }) => reading.analysis.train.gap.join());
+    expect(new Set(gaps).size).toBe(5);
+    for (const { reading, picture } of frames) {
+      expect(reading.sketch.parts.map(({ id }) => id)).toEqual(pressed.parts.map(({ id }) => id));
+      expect(reading.sketch).not.toBe(pressed);
+      expect(picture.scene.parts).toHaveLength(12);
+      expect(picture.plan.cells).toHaveLength(13);
+      expect(picture.labels.length).toBeGreaterThan(12);
+      expect(picture.handles.length).toBeGreaterThan(30);
+    }
+  });
+
+  it('reads every text of the panels at each move', () => {
+    const next = liveFrames(benchSketch(12, 6), roughMeasure);
+    const [one, other] = [next().texts, next().texts];
+    expect(one.length).toBeGreaterThan(40);
+    expect(one.filter((text) => /NaN|undefined/.test(text) || text === '')).toEqual([]);
+    expect(one.filter((text, i) => text !== other[i]).length).toBeGreaterThan(10);
+  });
+
+  it('has a result that depends on every move', () => {
+    const move = liveUpdate(benchSketch(12, 6), roughMeasure);
     const sums = [move(), move(), move(), move(), move()];
     expect(new Set(sums).size).toBe(5);
-    expect(new Set(seen).size).toBe(5);
-    expect(seen).not.toContain(pressed);
+    expect(sums.every(Number.isFinite)).toBe(true);
+  });
+
+  it('compares samples that were taken next to each other', () => {
+    const timing = (...samplesMs: readonly number[]) => ({ minMs: 0, medianMs: 0, samplesMs });
+    expect(ratioOf(timing(2, 20, 2), timing(1, 10, 1))).toBe(2);
+    expect(ratioOf(timing(2, 2, 90), timing(1, 1, 1))).toBe(2);
   });
 
   it('has a result that depends on the analysis of every position', () => {

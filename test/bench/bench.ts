@@ -1,9 +1,11 @@
+import type { MeasureText } from '../../app/board/measure.ts';
 import { settingAt } from '../../engine/sketch/values.ts';
 import { trainOf } from '../../engine/train/train.ts';
+import { analyseAll } from './analyseAll.ts';
 import { bareRays, traceBareRays } from './bareRays.ts';
 import { benchSketch } from './benchSketch.ts';
-import { analyseAll, type FrameStep, liveUpdate } from './liveUpdate.ts';
-import { measure, sunk, type Timing } from './measure.ts';
+import { liveUpdate } from './liveUpdate.ts';
+import { measure, ratioOf, sunk, type Timing } from './measure.ts';
 
 /** One line of the result. */
 export interface BenchRow {
@@ -11,7 +13,7 @@ export interface BenchRow {
   readonly min: number;
   readonly median: number;
   readonly unit: 'µs';
-  /** Median over that of the row it is compared with, in the same run; 1 for the yardsticks themselves. */
+  /** How many times as long as what it is compared with, in the same run; 1 for the yardsticks themselves. */
   readonly ratio: number;
   /** What the ratio compares with. */
   readonly against: string;
@@ -25,12 +27,9 @@ const DRAWN_FIELDS = 3;
 const DRAWN_RAYS = 7;
 const REFERENCE_RAYS = 2;
 
-/**
- * Every row. `frame` adds what the app does after the analysis (scene, texts) to the live update. Throws when what was
- * measured did not give numbers.
- */
-export function runBench(frame: readonly FrameStep[] = []): readonly BenchRow[] {
-  const rows = [...analysisRows(), ...liveRows(frame), ...growthRows()];
+/** Every row; `measureText` is how labels are measured here. Throws when what was measured did not give numbers. */
+export function runBench(measureText: MeasureText): readonly BenchRow[] {
+  const rows = [...analysisRows(), ...liveRows(measureText), ...growthRows(measureText)];
   if (!Number.isFinite(sunk())) throw new Error(`runBench: the results add up to ${sunk()}`);
   return rows;
 }
@@ -49,36 +48,39 @@ function analysisRows(): BenchRow[] {
 }
 
 /** One move of a drag, against the rays that a drawing of one position shows. */
-function liveRows(frame: readonly FrameStep[]): BenchRow[] {
+function liveRows(measureText: MeasureText): BenchRow[] {
   const sketch = benchSketch(ELEMENTS, POSITIONS);
   const shown = sketch.positions.slice(0, 1).map(({ id }) => trainOf(sketch, settingAt(id)));
-  const count = REFERENCE_RAYS + DRAWN_FIELDS * DRAWN_RAYS;
-  const rays = bareRays(shown, count);
-  const { bare, whole } = measure({ bare: () => traceBareRays(rays), whole: liveUpdate(sketch, frame) });
+  const rays = bareRays(shown, REFERENCE_RAYS + DRAWN_FIELDS * DRAWN_RAYS);
+  const { bare, whole } = measure({
+    bare: () => traceBareRays(rays),
+    whole: liveUpdate(sketch, measureText),
+  });
+  const size = `${ELEMENTS} elements, ${POSITIONS} positions`;
   return [
-    row(`bare arithmetic: ${count} rays, ${ELEMENTS} elements, 1 position`, bare, bare, 'itself'),
-    row(
-      `live update without painting: ${ELEMENTS} elements, ${POSITIONS} positions`,
-      whole,
-      bare,
-      'bare arithmetic',
-    ),
+    row(`bare arithmetic: ${rays.raysPerTrain} rays, ${ELEMENTS} elements, 1 position`, bare, bare, 'itself'),
+    row(`live update without painting: ${size}`, whole, bare, 'bare arithmetic'),
   ];
 }
 
-/** The analysis of one position at growing numbers of elements, each against half as many. */
-function growthRows(): BenchRow[] {
-  const timings = measure(
-    Object.fromEntries(SIZES.map((elements) => [elements, analyseAll(benchSketch(elements, 1))])),
-  );
+/** The analysis and the whole live update of one position at growing numbers of elements, each against half as many. */
+function growthRows(measureText: MeasureText): BenchRow[] {
+  return [
+    ...doublings('analysis, 1 position', (elements) => analyseAll(benchSketch(elements, 1))),
+    ...doublings('live update, 1 position', (elements) => liveUpdate(benchSketch(elements, 1), measureText)),
+  ];
+}
+
+function doublings(name: string, taskOf: (elements: number) => () => number): BenchRow[] {
+  const timings = measure(Object.fromEntries(SIZES.map((elements) => [elements, taskOf(elements)])));
   return SIZES.flatMap((elements) => {
     const timing = timings[elements];
     const half = timings[elements / 2];
     if (timing === undefined) return [];
-    const name = `analysis, 1 position: ${elements} elements`;
+    const sized = `${name}: ${elements} elements`;
     return half === undefined
-      ? [row(name, timing, timing, 'itself')]
-      : [row(name, timing, half, `${elements / 2} elements; at most ${MOST_PER_DOUBLING}`)];
+      ? [row(sized, timing, timing, 'itself')]
+      : [row(sized, timing, half, `${elements / 2} elements; at most ${MOST_PER_DOUBLING}`)];
   });
 }
 
@@ -87,7 +89,7 @@ const row = (name: string, timing: Timing, yardstick: Timing, against: string): 
   min: 1000 * timing.minMs,
   median: 1000 * timing.medianMs,
   unit: 'µs',
-  ratio: timing.medianMs / yardstick.medianMs,
+  ratio: ratioOf(timing, yardstick),
   against,
 });
 

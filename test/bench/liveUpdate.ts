@@ -1,51 +1,70 @@
-import { type Analysis, analyse } from '../../engine/paraxial/analyse.ts';
-import { moveParts } from '../../engine/sketch/edits/gaps.ts';
-import { propose, unsettled } from '../../engine/sketch/propose.ts';
-import type { Setting, Sketch } from '../../engine/sketch/types.ts';
-import { settingAt } from '../../engine/sketch/values.ts';
+import type { MeasureText } from '../../app/board/measure.ts';
+import { fitCamera, foldIn, viewportOf } from '../../app/layout/camera.ts';
+import { type Picture, pictureOf, sceneOfReading } from '../../app/layout/picture.ts';
+import type { Reading } from '../../app/live/reading.ts';
+import { documentOf, preview } from '../../app/store/document.ts';
+import type { Sketch } from '../../engine/sketch/types.ts';
+import { readingOf } from '../app/reading.ts';
+import { panelTexts } from './panelTexts.ts';
 
-/** What a frame does with a new analysis: a scene, the texts of the panels. Returns a number that depends on its work. */
-export type FrameStep = (sketch: Sketch, setting: Setting, analysis: Analysis) => number;
+/** What one frame of a drag comes to. */
+export interface LiveFrame {
+  readonly reading: Reading;
+  readonly picture: Picture;
+  readonly texts: readonly string[];
+}
 
 const MOVES = 64;
 const REACH_MM = 1.5;
+/** The board of a desktop page, px. */
+const SIZE = { widthPx: 1080, heightPx: 720 };
 
 /**
- * A task that is one pointer move of a drag on the middle part: the edit made on the sketch at the press, the rules and the
- * settling, the whole analysis at the position in view, then every one of `frame`. Nothing is painted. Successive
- * runs move the part to and fro, each to a place of its own.
+ * Every call is one pointer move of a drag on the middle part, as the app does it: the grip's edit made on the sketch at the press
+ * and proposed, the analysis and the warnings, the scene with ribbon, labels and grips, and all texts of the panels. Nothing is
+ * painted. Successive calls move the part to and fro, each to a place of its own.
  */
-export function liveUpdate(pressed: Sketch, frame: readonly FrameStep[] = []): () => number {
+export function liveFrames(pressed: Sketch, measureText: MeasureText): () => LiveFrame {
   const part = pressed.parts[pressed.parts.length >> 1];
-  const position = pressed.positions[0];
-  if (part === undefined || position === undefined)
-    throw new Error('liveUpdate: the sketch has no part to drag');
-  const setting = settingAt(position.id);
-  let move = 0;
+  if (part === undefined) throw new Error('liveFrames: the sketch has no part to drag');
+  const shown = { selection: [part.id] };
+  const atPress = readingOf(pressed, shown);
+  const scene = sceneOfReading(atPress);
+  const camera = fitCamera(scene, SIZE, 'parts');
+  const view = viewportOf(camera, SIZE, foldIn(scene, camera));
+  const { handles } = pictureOf(atPress, view, measureText, scene);
+  const drag = handles.find(({ id }) => id === `part:${part.id}`)?.drag;
+  if (!drag) throw new Error('liveFrames: the part cannot be dragged');
+  let doc = documentOf(pressed);
+  let count = 0;
   return () => {
-    move = (move + 1) % MOVES;
-    const deltaMm = REACH_MM * Math.sin((2 * Math.PI * (move + 0.5)) / MOVES);
-    const edit = (sketch: Sketch): Sketch => moveParts(sketch, [part.id], deltaMm, position.id);
-    const { sketch } = propose(pressed, edit, unsettled);
-    const analysis = analyse(sketch, setting);
-    let sum = weigh(analysis);
-    for (const step of frame) sum += step(sketch, setting, analysis);
-    return sum;
+    count = (count + 1) % MOVES;
+    const dzMm = REACH_MM * Math.sin((2 * Math.PI * (count + 0.5)) / MOVES);
+    const move = drag({
+      dzMm,
+      dyMm: 0,
+      dxPx: dzMm * view.pxPerMm,
+      other: false,
+      // Everything that could catch it is looked at; nothing does, so that every place is another.
+      snap: true,
+      toleranceMm: 0,
+    });
+    doc = preview(doc, move.edit);
+    const reading = readingOf(doc.sketch, shown);
+    return { reading, picture: pictureOf(reading, view, measureText), texts: panelTexts(reading) };
   };
 }
 
-/** A task that analyses the sketch at all of its positions. */
-export function analyseAll(sketch: Sketch): () => number {
-  const settings = sketch.positions.map(({ id }) => settingAt(id));
+/** A task that is one such move; its number depends on all that came of it. */
+export function liveUpdate(pressed: Sketch, measureText: MeasureText): () => number {
+  const next = liveFrames(pressed, measureText);
   return () => {
-    let sum = 0;
-    for (const setting of settings) sum += weigh(analyse(sketch, setting));
+    const { picture, texts } = next();
+    const { scene, plan, labels, handles } = picture;
+    let sum = scene.bundles.length + labels.length + handles.length;
+    for (const cell of plan.cells) sum += cell.textXPx;
+    for (const line of scene.axial) sum += line.at(-1) ?? 0;
+    for (const text of texts) sum += text.length;
     return sum;
   };
 }
-
-/** A number that depends on what came last in an analysis. */
-const weigh = ({ firstOrder, conjugates, light }: Analysis): number =>
-  (firstOrder.focalLengthMm.ok ? firstOrder.focalLengthMm.value : 0) +
-  (conjugates.magnification.ok ? conjugates.magnification.value : 0) +
-  (light.imageHeightMm.ok ? light.imageHeightMm.value : 0);

@@ -1,10 +1,20 @@
 import { fileURLToPath } from 'node:url';
-import { runnerImport } from 'vite';
+import { loadTs } from '../tools/load-ts.mjs';
+import { benchInChromium, hasChromium } from './inChromium.mjs';
 
-/** @type {{ module: typeof import('./bench.ts') }} */
-const { module: bench } = await runnerImport(fileURLToPath(new URL('bench.ts', import.meta.url)), {
-  configFile: false,
-  logLevel: 'error',
-});
-const rows = bench.runBench();
-process.stdout.write(process.argv.includes('--json') ? bench.rowsJson(rows) : bench.rowsTable(rows));
+/** @type {typeof import('./inNode.ts')} */
+const bench = await loadTs(fileURLToPath(new URL('inNode.ts', import.meta.url)));
+const here = bench.benchInNode();
+const chromium = hasChromium() ? await benchInChromium() : null;
+
+if (process.argv.includes('--json')) {
+  const there = chromium?.rows.map((row) => ({ ...row, name: `Chromium, ${row.name}` })) ?? [];
+  process.stdout.write(bench.rowsJson([...here, ...there]));
+} else {
+  process.stdout.write(`Node ${process.version}\n\n${bench.rowsTable(here)}\n`);
+  process.stdout.write(
+    chromium
+      ? `Chromium ${chromium.version}\n\n${bench.rowsTable(chromium.rows)}`
+      : 'No Chromium found: nothing was measured in a browser.\n',
+  );
+}

@@ -7,7 +7,8 @@ import type { PartId, Sketch } from '../../../engine/index.ts';
 import { emptySketch, newPlate, newStop, newThin, settingAt } from '../../../engine/index.ts';
 import { inspectionZoom, MIDDLE } from '../../engine/demo.ts';
 import { anySketch } from '../../engine/sketch/arbitrary.ts';
-import { ALL_SHOWN, AT_MIDDLE, readingOf, sceneFor } from './seen.ts';
+import { readingOf } from '../reading.ts';
+import { ALL_SHOWN, AT_MIDDLE, sceneFor } from './seen.ts';
 
 /** Heights are copied from the engine or added up once more: a few units in the last place of what was added. */
 const SAME_HEIGHT = 1e-12;

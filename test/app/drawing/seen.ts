@@ -6,12 +6,12 @@ import type { Scene } from '../../../app/drawing/scene.ts';
 import { type Sight, sightOf } from '../../../app/drawing/sight.ts';
 import { fitCamera, foldIn, type Size, viewportOf } from '../../../app/layout/camera.ts';
 import { type Picture, pictureOf, sceneOfReading } from '../../../app/layout/picture.ts';
-import { analysisOf, warningsAt } from '../../../app/live/analysis.ts';
-import type { Reading } from '../../../app/live/reading.ts';
-import { settingIn, type View, viewStore } from '../../../app/store/viewStore.ts';
+import { analysisOf } from '../../../app/live/analysis.ts';
+import type { View } from '../../../app/store/viewStore.ts';
 import type { Edit, PartId, Setting, Sketch } from '../../../engine/index.ts';
 import { propose, settingAt, unsettled } from '../../../engine/index.ts';
 import { inspectionZoom, MIDDLE } from '../../engine/demo.ts';
+import { readingOf } from '../reading.ts';
 
 export const DESKTOP: Size = { widthPx: 1100, heightPx: 620 };
 export const PHONE: Size = { widthPx: 390, heightPx: 420 };
@@ -28,19 +28,6 @@ export const ALL_SHOWN: View['shown'] = {
   focalPoints: true,
   labels: true,
 };
-
-/** What the app reads from a sketch in a view that differs from the first one by `change`. */
-export function readingOf(sketch: Sketch, change: Partial<View> = {}): Reading {
-  const view = { ...viewStore.getInitialState(), ...change };
-  const setting = settingIn(sketch, view);
-  return {
-    sketch,
-    view,
-    setting,
-    analysis: analysisOf(sketch, setting),
-    warnings: warningsAt(sketch, setting),
-  };
-}
 
 export const sceneFor = (sketch: Sketch, change: Partial<View> = {}): Scene =>
   sceneOfReading(readingOf(sketch, change));

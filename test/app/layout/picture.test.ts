@@ -10,7 +10,8 @@ import { type Picture, pictureOf, sceneOfReading } from '../../../app/layout/pic
 import type { PartId, Setting, Sketch } from '../../../engine/index.ts';
 import { inspectionZoom } from '../../engine/demo.ts';
 import { anySetting, anySketch } from '../../engine/sketch/arbitrary.ts';
-import { ALL_SHOWN, AT_MIDDLE, demoPicture, readingOf } from '../drawing/seen.ts';
+import { ALL_SHOWN, AT_MIDDLE, demoPicture } from '../drawing/seen.ts';
+import { readingOf } from '../reading.ts';
 
 const NONE: ReadonlySet<string> = new Set();
 

@@ -6,7 +6,8 @@ import type { View } from '../../../app/store/viewStore.ts';
 import type { PartId, Sketch } from '../../../engine/index.ts';
 import { inspectionZoom } from '../../engine/demo.ts';
 import { anySketch } from '../../engine/sketch/arbitrary.ts';
-import { ALL_SHOWN, AT_MIDDLE, readingOf } from '../drawing/seen.ts';
+import { ALL_SHOWN, AT_MIDDLE } from '../drawing/seen.ts';
+import { readingOf } from '../reading.ts';
 
 const drawingOf = (sketch: Sketch, change: Partial<View> = {}) =>
   sheetDrawing(readingOf(sketch, change), roughMeasure);
