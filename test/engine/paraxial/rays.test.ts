@@ -152,6 +152,9 @@ describe('the chief ray', () => {
     expect(chief(telecentric, 'p2', { ...near, ...image })).toBe('found');
     expect(chief(telecentric, 'p2', image)).toBe('stop at a focus');
     expect(chief(lens, 'p1', object)).toBe('object at infinity');
+    // A sensor fixed in the exit pupil, 150 behind the lens, gets every chief ray on the axis.
+    const inPupil = [diaphragm('p1', 75), thin('p2', 50, 150)];
+    expect(chief(inPupil, 'p1', { ...near, ...image, image: 'fixed' })).toBe('stop at an image');
     const expander = [thin('p1', -50, 150), thin('p2', 200)];
     expect(chief(expander, 'p1', image)).toBe('image at infinity');
     expect(chief(expander, 'p1', angle)).toBe('found');
