@@ -67,6 +67,19 @@ describe('the vignetting of one rim behind the stop', () => {
     expect(behindStop(2, 30)).toEqual({ fraction: 1, areaShare: 0, meridian: null });
   });
 
+  it('is all or nothing for a rim that stands on an image', () => {
+    // The image is 2 mm high at full field and the rim 1.5.
+    const parts = [thin('p1', 50, 75), thin('p2', 40, 20, { semiDiameterMm: 1.5 }), thin('p3', 30)];
+    const sketch = sketchOf(parts, 'p1', {
+      object: { distanceMm: 150, medium: 'air' },
+      aperture: { kind: 'objectNA', na: 0.05 },
+      field: { size: { kind: 'objectHeight', heightMm: 4 }, fractions: [0.7, 1], vignetting: 0 },
+    });
+    const [inner, edge] = given(analyse(sketch, onFirst(sketch)).vignetting);
+    expect(inner?.areaShare).toBe(1);
+    expect(edge).toEqual({ fraction: 1, areaShare: 0, meridian: null });
+  });
+
   it('passes a share of (rim/bundle)² on the axis', () => {
     const { areaShare } = behindStop(2.5, 0);
     expect(areaShare).toBeCloseTo((2.5 / (5 * (1 - 40e-6))) ** 2, 9);
