@@ -16,7 +16,7 @@ export default defineConfig({
     viewport: { width: 1440, height: 900 },
     launchOptions: launchOptions(),
     actionTimeout: 10_000,
-    trace: 'retain-on-failure',
+    screenshot: 'only-on-failure',
   },
   webServer: {
     command: 'node ../app/serve.mjs --no-build',
