@@ -1,10 +1,10 @@
 import { spawnSync } from 'node:child_process';
-import { mkdtempSync, readFileSync, writeFileSync } from 'node:fs';
+import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { afterAll, describe, expect, it } from 'vitest';
 import { main, runCases } from './cases.ts';
 
 const FILE = fileURLToPath(new URL('./cases.json', import.meta.url));
@@ -17,9 +17,12 @@ function run(...paths: string[]): { code: number; lines: string[] } {
   return { code, lines };
 }
 
-/** A file that holds `content`, in a folder of its own. */
+const folder = mkdtempSync(join(tmpdir(), 'cases-'));
+afterAll(() => rmSync(folder, { recursive: true }));
+
+/** A file that holds `content`; the next one takes its place. */
 function fileWith(content: string): string {
-  const path = join(mkdtempSync(join(tmpdir(), 'cases-')), 'cases.json');
+  const path = join(folder, 'cases.json');
   writeFileSync(path, content);
   return path;
 }
