@@ -45,6 +45,9 @@ export function createHost(element: HTMLElement, client: HostClient): Host {
   const onPointer = (on: 'down' | 'move' | 'up') => (event: PointerEvent) => {
     const at = pointerAt(element, event);
     if (on === 'down') {
+      // A tap's belated mouse events would take the focus from what the tap opened; the focus is taken here instead.
+      event.preventDefault();
+      element.focus({ preventScroll: true });
       element.setPointerCapture(event.pointerId);
       feed({ on, ...at, button: event.button, timeMs: event.timeStamp });
     } else feed({ on, ...at });
