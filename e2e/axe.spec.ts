@@ -4,6 +4,8 @@ import { type App, expect, test } from './support/app.ts';
 interface Screen {
   readonly name: string;
   readonly open: (app: App) => Promise<unknown>;
+  /** What is new on this screen; left out, all of the page is looked through. */
+  readonly within?: string;
   /** Back to where the next screen begins. */
   readonly close?: (app: App) => Promise<unknown>;
 }
@@ -13,31 +15,35 @@ const press = (button: string) => (app: App) =>
 const tab = (name: string) => (app: App) => app.page.getByRole('tab', { name }).click();
 const pressEscape = (app: App) => app.page.keyboard.press('Escape');
 
+const DRAWER = '[role=tabpanel]';
+const DIALOG = 'dialog[open]';
+
 const ON_A_DESK: readonly Screen[] = [
   { name: 'first screen', open: async () => {} },
-  { name: 'all readouts', open: (app) => app.showAllReadouts() },
-  { name: 'part selected', open: (app) => app.hand.clickGrip('part:p2') },
+  { name: 'all readouts', open: (app) => app.showAllReadouts(), within: '.readouts' },
+  { name: 'part selected', open: (app) => app.hand.clickGrip('part:p2'), within: '[aria-label="Selected"]' },
   {
     name: 'number typed on the drawing',
     open: (app) => app.hand.clickGrip('cell:gap:p1'),
+    within: '.type-box',
     close: pressEscape,
   },
-  { name: 'ledger', open: tab('Ledger') },
-  { name: 'trace sheet', open: tab('Trace sheet') },
-  { name: 'spacing table', open: tab('Spacing table') },
-  { name: 'positions', open: press('Positions'), close: pressEscape },
-  { name: 'hand-over', open: press('Hand over'), close: pressEscape },
-  { name: 'help', open: press('Help'), close: pressEscape },
-  { name: 'shelf', open: (app) => app.openShelf() },
+  { name: 'ledger', open: tab('Ledger'), within: DRAWER },
+  { name: 'trace sheet', open: tab('Trace sheet'), within: DRAWER },
+  { name: 'spacing table', open: tab('Spacing table'), within: DRAWER },
+  { name: 'positions', open: press('Positions'), within: '.popover:popover-open', close: pressEscape },
+  { name: 'hand-over', open: press('Hand over'), within: DIALOG, close: pressEscape },
+  { name: 'help', open: press('Help'), within: DIALOG, close: pressEscape },
+  { name: 'shelf', open: (app) => app.openShelf(), within: DIALOG },
   { name: 'empty sketch', open: press('New empty sketch') },
 ];
 
 const ON_A_PHONE: readonly Screen[] = [
   { name: 'first screen', open: async () => {} },
   { name: 'part selected', open: (app) => app.hand.clickGrip('part:p2') },
-  { name: 'part from below', open: press('Part'), close: press('Close Selected part') },
-  { name: 'readouts from below', open: press('Readouts'), close: press('Close Readouts') },
-  { name: 'sketch from below', open: press('Sketch') },
+  { name: 'part from below', open: press('Part'), within: DIALOG, close: press('Close Selected part') },
+  { name: 'readouts from below', open: press('Readouts'), within: DIALOG, close: press('Close Readouts') },
+  { name: 'sketch from below', open: press('Sketch'), within: DIALOG },
 ];
 
 /** What axe finds serious or critical on the screens, one line each. Where only colours differ, only contrast is asked. */
@@ -48,9 +54,13 @@ async function seriousOn(
 ): Promise<readonly string[]> {
   const found: string[] = [];
   await app.open();
-  for (const { name, open, close } of screens) {
+  for (const { name, open, within, close } of screens) {
     await open(app);
     const axe = new AxeBuilder({ page: app.page }).setLegacyMode().options({ resultTypes: ['violations'] });
+    if (within !== undefined) {
+      await app.page.locator(within).first().waitFor();
+      axe.include(within);
+    }
     const { violations } = await (contrastOnly ? axe.withRules(['color-contrast']) : axe).analyze();
     for (const { id, impact, nodes } of violations) {
       if (impact !== 'serious' && impact !== 'critical') continue;

@@ -2,17 +2,15 @@ import { type App, expect, test } from './support/app.ts';
 import { drawn } from './support/hand.ts';
 
 /** Everything that the person sees of the sketch: the numbers of the drawing's grips and of the panel. */
-async function seen(app: App): Promise<string> {
-  await drawn(app.page);
-  const grips = await app.page
-    .locator('[data-grip]')
-    .evaluateAll((sliders) =>
-      sliders.map(
-        (slider) => `${slider.getAttribute('aria-label')}: ${slider.getAttribute('aria-valuetext')}`,
-      ),
+async function seen({ page }: App): Promise<string> {
+  await drawn(page);
+  return page.evaluate(() => {
+    const grips = [...document.querySelectorAll('[data-grip]')].map(
+      (slider) => `${slider.getAttribute('aria-label')}: ${slider.getAttribute('aria-valuetext')}`,
     );
-  const readouts = await app.panel.locator('.readout, .strip').allTextContents();
-  return [...grips, ...readouts].join('\n');
+    const readouts = [...document.querySelectorAll('.side .readout, .side .strip')];
+    return [...grips, ...readouts.map(({ textContent }) => textContent)].join('\n');
+  });
 }
 
 test('everything can be undone to the empty sheet and redone', async ({ app, page }) => {
@@ -22,8 +20,7 @@ test('everything can be undone to the empty sheet and redone', async ({ app, pag
   await expect(undo).toBeDisabled();
   // What is selected is no part of the history: between the looks nothing is.
   const look = async () => {
-    await app.board.focus();
-    await page.keyboard.press('Escape');
+    await app.board.press('Escape');
     return seen(app);
   };
   const looks = [await look()];

@@ -7,11 +7,7 @@ const MOST_STOPS = 60;
 
 async function tabTo(page: Page, target: Locator, key: 'Tab' | 'Shift+Tab' = 'Tab'): Promise<void> {
   for (let stops = 0; stops < MOST_STOPS; stops++) {
-    if (
-      (await target.count()) > 0 &&
-      (await target.evaluate((element) => element === document.activeElement))
-    )
-      return;
+    if (await target.evaluateAll((found) => found.includes(document.activeElement as never))) return;
     await page.keyboard.press(key);
   }
   throw new Error(`tabTo: ${target} is not within ${MOST_STOPS} tab stops`);
