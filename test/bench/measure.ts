@@ -8,8 +8,8 @@ export interface Timing {
 
 const WARM_UP_MS = 150;
 const SAMPLES = 41;
-/** Long against a clock's tick, short against the slices of a busy machine. */
-const SAMPLE_MS = 2;
+/** Long against a clock's tick and long enough to hold its share of collecting garbage, short against a busy machine's slices. */
+const SAMPLE_MS = 8;
 
 let sink = 0;
 
@@ -18,7 +18,7 @@ export const sunk = (): number => sink;
 
 /**
  * The time of one run of each task, which returns a number that depends on all its work. All are warmed up first; every
- * sample is as many runs as fill 2 ms. Samples of the tasks take turns, so that a busy machine slows all of them alike.
+ * sample is as many runs as fill 8 ms. Samples of the tasks take turns, so that a busy machine slows all of them alike.
  */
 export function measure<Name extends string>(
   tasks: Readonly<Record<Name, () => number>>,
