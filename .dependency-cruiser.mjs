@@ -2,7 +2,7 @@
 
 /** Rooms in order: a room may import rooms of earlier lines, never its neighbours on the same line nor what comes after. */
 const ENGINE_ROOMS = [
-  ['outcome.ts'],
+  ['outcome.ts', 'units.ts'],
   ['sketch/', 'media/'],
   ['train/'],
   ['paraxial/'],

@@ -107,3 +107,4 @@ export { partName } from './sketch/words.ts';
 export { placesOf } from './train/places.ts';
 export { trainOf } from './train/train.ts';
 export type { Train } from './train/types.ts';
+export { type LengthUnit, MM_PER_INCH } from './units.ts';

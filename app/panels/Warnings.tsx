@@ -1,4 +1,4 @@
-import type { Sketch, WarningKind } from '../../engine/index.ts';
+import type { LengthUnit, Sketch, WarningKind } from '../../engine/index.ts';
 import { settingAt } from '../../engine/index.ts';
 import { currentReading, useReading } from '../live/reading.ts';
 import { select, setView } from '../store/viewStore.ts';
@@ -8,12 +8,15 @@ import './warnings.css';
 
 /** What cannot be built and what should be looked at, over all positions; a press selects it and goes to its position. */
 export function Warnings() {
-  const key = useReading(({ sketch }) =>
+  const key = useReading(({ sketch, view }) =>
     listWarnings(sketch)
-      .map((listed) => textOf(sketch, listed))
+      .map((listed) => textOf(sketch, listed, view.unit))
       .join('\n'),
   );
-  const { sketch } = currentReading();
+  const {
+    sketch,
+    view: { unit },
+  } = currentReading();
   const list = key === '' ? [] : listWarnings(sketch);
   return (
     <section className="panel warnings" aria-labelledby="warnings-title">
@@ -25,14 +28,14 @@ export function Warnings() {
       ) : (
         <ul>
           {list.map((listed) => (
-            <li key={textOf(sketch, listed)}>
+            <li key={textOf(sketch, listed, unit)}>
               <button type="button" className="warnings-item" onClick={() => goTo(listed)}>
                 <span
                   className={listed.warning.severity === 'cannot be built' ? 'warnings-bad' : 'warnings-look'}
                 >
                   {listed.warning.severity === 'cannot be built' ? '✗ cannot be built' : 'look at this'}
                 </span>
-                <span>{listed.warning.sentence}</span>
+                <span>{listed.warning.sentence(unit)}</span>
                 <span className="warnings-where">{whereText(sketch, listed)}</span>
               </button>
             </li>
@@ -43,8 +46,8 @@ export function Warnings() {
   );
 }
 
-const textOf = (sketch: Sketch, listed: ListedWarning): string =>
-  `${listed.warning.severity} ${listed.warning.sentence} ${whereText(sketch, listed)}`;
+const textOf = (sketch: Sketch, listed: ListedWarning, unit: LengthUnit): string =>
+  `${listed.warning.severity} ${listed.warning.sentence(unit)} ${whereText(sketch, listed)}`;
 
 /** At which positions; nothing when it is all of them. */
 function whereText(sketch: Sketch, { positionIds }: ListedWarning): string {

@@ -26,7 +26,7 @@ export const countWarnings = (sketch: Sketch): number => listWarnings(sketch).le
 function merged(warnings: readonly Warning[]): readonly ListedWarning[] {
   const bySentence = new Map<string, ListedWarning>();
   for (const warning of warnings) {
-    const key = `${warning.kind} ${warning.sentence}`;
+    const key = `${warning.kind} ${warning.sentence('mm')}`;
     const listed = bySentence.get(key);
     bySentence.set(key, {
       warning: listed?.warning ?? warning,

@@ -1,6 +1,7 @@
 import type { Part, PartId, PositionId, Setting, Sketch } from '../sketch/types.ts';
 import { settingAt, valueAt } from '../sketch/values.ts';
 import { capitalised, partName } from '../sketch/words.ts';
+import { type LengthUnit, lengthText } from '../units.ts';
 import { sentenceOf } from './absence.ts';
 import { type Analysis, analyse } from './analyse.ts';
 
@@ -24,8 +25,8 @@ export interface Warning {
   /** The part to select; null when it is about an end or the whole. */
   readonly partId: PartId | null;
   readonly positionId: PositionId;
-  /** Plain, with the numbers in mm. */
-  readonly sentence: string;
+  /** Plain, with its lengths in `unit`. */
+  readonly sentence: (unit: LengthUnit) => string;
 }
 
 /** What is wrong at `setting`, what cannot be built first. Pass the analysis when it is at hand. */
@@ -47,13 +48,24 @@ export const unbuildable = (sketch: Sketch): readonly Warning[] =>
 
 type Found = Omit<Warning, 'positionId'>;
 
+type Sentence = Warning['sentence'];
+
+/** A sentence that waits for its unit: the numbers in it are lengths in mm. */
+const saying =
+  (texts: TemplateStringsArray, ...values: readonly (string | number)[]): Sentence =>
+  (unit) =>
+    String.raw(
+      { raw: texts },
+      ...values.map((value) => (typeof value === 'number' ? lengthText(value, unit) : value)),
+    );
+
 /** Rounding of gaps that were solved to touch must not count as an overlap (mm). */
 const TOUCHING_MM = 1e-9;
 
 function mechanics(sketch: Sketch, setting: Setting, { conjugates, sensor }: Analysis): readonly Found[] {
   const nameOf = namesIn(sketch);
   const found: Found[] = [];
-  const cannot = (kind: WarningKind, partId: PartId | null, sentence: string) =>
+  const cannot = (kind: WarningKind, partId: PartId | null, sentence: Sentence) =>
     found.push({ kind, severity: 'cannot be built', partId, sentence });
   const { parts } = sketch;
   const first = parts[0];
@@ -61,7 +73,7 @@ function mechanics(sketch: Sketch, setting: Setting, { conjugates, sensor }: Ana
     cannot(
       'object inside',
       first.id,
-      `The object stands ${mm(-sensor.workingDistanceMm.value)} inside the room of ${nameOf(first)}.`,
+      saying`The object stands ${-sensor.workingDistanceMm.value} inside the room of ${nameOf(first)}.`,
     );
   }
   for (const [i, part] of parts.entries()) {
@@ -73,25 +85,25 @@ function mechanics(sketch: Sketch, setting: Setting, { conjugates, sensor }: Ana
       cannot(
         'negative gap',
         part.id,
-        `${capitalised(nameOf(next))} stands ${mm(-gapMm)} in front of ${nameOf(part)}: the gap must be 0 or more.`,
+        saying`${capitalised(nameOf(next))} stands ${-gapMm} in front of ${nameOf(part)}: the gap must be 0 or more.`,
       );
     } else if (clearMm < -TOUCHING_MM) {
       cannot(
         'rooms overlap',
         part.id,
-        `${capitalised(nameOf(part))} and ${nameOf(next)} overlap by ${mm(-clearMm)}: the gap of ${mm(gapMm)} is smaller than their rooms.`,
+        saying`${capitalised(nameOf(part))} and ${nameOf(next)} overlap by ${-clearMm}: the gap of ${gapMm} is smaller than their rooms.`,
       );
     }
   }
   const last = parts.at(-1);
   if (last && conjugates.imagePlaneMm.ok && conjugates.imagePlaneMm.value - roomBehind(last) < -TOUCHING_MM) {
-    const inside = mm(roomBehind(last) - conjugates.imagePlaneMm.value);
+    const inside = roomBehind(last) - conjugates.imagePlaneMm.value;
     const what = sketch.image === 'fixed' ? 'The sensor' : 'The image';
     found.push({
       kind: 'image inside',
       severity: sketch.image === 'fixed' ? 'cannot be built' : 'look at this',
       partId: last.id,
-      sentence: `${what} stands ${inside} in front of where ${nameOf(last)} ends: no sensor can stand there.`,
+      sentence: saying`${what} stands ${inside} in front of where ${nameOf(last)} ends: no sensor can stand there.`,
     });
   }
   return found;
@@ -101,22 +113,22 @@ function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
   const nameOf = namesIn(sketch);
   const { rays, light, sensor, conjugates, vignetting, depth } = analysis;
   const found: Found[] = [];
-  const look = (kind: WarningKind, partId: PartId | null, sentence: string) =>
+  const look = (kind: WarningKind, partId: PartId | null, sentence: Sentence) =>
     found.push({ kind, severity: 'look at this', partId, sentence });
-  if (!rays.marginal.ok) look('no marginal ray', null, `No aperture: ${sentenceOf(rays.marginal.why)}`);
-  if (!rays.chief.ok) look('no chief ray', null, `No field: ${sentenceOf(rays.chief.why)}`);
+  if (!rays.marginal.ok) look('no marginal ray', null, saying`No aperture: ${sentenceOf(rays.marginal.why)}`);
+  if (!rays.chief.ok) look('no chief ray', null, saying`No field: ${sentenceOf(rays.chief.why)}`);
   for (const [part, y] of axialCuts(analysis)) {
     const drawn = sketch.parts[part];
     if (!drawn) continue;
     look(
       'axial bundle cut',
       drawn.id,
-      `The rim of ${nameOf(drawn)} cuts the axial bundle: it is ${mm(2 * (drawn.semiDiameterMm ?? 0))} wide, the aperture asks for ${mm(2 * y)}.`,
+      saying`The rim of ${nameOf(drawn)} cuts the axial bundle: it is ${2 * (drawn.semiDiameterMm ?? 0)} wide, the aperture asks for ${2 * y}.`,
     );
   }
   const edge = vignetting.ok ? vignetting.value.find(({ fraction }) => Math.abs(fraction) === 1) : undefined;
   if (edge && edge.meridian === null)
-    look('field edge dark', null, 'No light reaches the edge of the field.');
+    look('field edge dark', null, saying`No light reaches the edge of the field.`);
   if (sensor.halfDiagonalMm.ok && light.imageHeightMm.ok) {
     const reached = Math.abs(light.imageHeightMm.value);
     const wanted = sensor.halfDiagonalMm.value;
@@ -124,7 +136,7 @@ function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
       look(
         'sensor not covered',
         null,
-        `The field reaches ${mm(reached)} from the axis, the sensor’s corner stands at ${mm(wanted)}.`,
+        saying`The field reaches ${reached} from the axis, the sensor’s corner stands at ${wanted}.`,
       );
     }
   }
@@ -134,7 +146,7 @@ function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
     look(
       'out of focus',
       null,
-      `The image falls ${mm(Math.abs(conjugates.defocusMm.value))} ${side} the sensor; ${mm(allowed.value)} is allowed.`,
+      saying`The image falls ${Math.abs(conjugates.defocusMm.value)} ${side} the sensor; ${allowed.value} is allowed.`,
     );
   }
   const last = sketch.parts.at(-1);
@@ -142,7 +154,7 @@ function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
     look(
       'behind the mount',
       last.id,
-      `${capitalised(nameOf(last))} reaches ${mm(-sensor.mountClearanceMm.value)} behind the mount plane.`,
+      saying`${capitalised(nameOf(last))} reaches ${-sensor.mountClearanceMm.value} behind the mount plane.`,
     );
   }
   return found;
@@ -170,4 +182,3 @@ const namesIn =
     partName(part, parts.indexOf(part));
 const roomFront = (part: Part): number => (part.kind === 'thin' ? part.roomFrontMm : 0);
 const roomBehind = (part: Part): number => (part.kind === 'thin' ? part.roomBehindMm : 0);
-const mm = (value: number): string => `${value.toFixed(3)} mm`;

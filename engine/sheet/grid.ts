@@ -1,12 +1,9 @@
 import type { Outcome } from '../outcome.ts';
 import { none, some } from '../outcome.ts';
-import type { Cell, LengthUnit, SheetOptions } from './table.ts';
+import { EXTRA_INCH_DIGITS, type LengthUnit, MM_PER_INCH } from '../units.ts';
+import type { Cell, SheetOptions } from './table.ts';
 import { absentCell, numberCell } from './table.ts';
 
-/** Exact by definition of the inch. */
-const MM_PER_INCH = 25.4;
-/** An inch is shown to about the same length as a millimetre with two digits fewer. */
-const EXTRA_INCH_DIGITS = 2;
 const MOST_DIGITS = 6;
 
 /** Lengths as whole numbers of the last printed digit, so that sums and differences are exact. */

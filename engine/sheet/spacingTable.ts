@@ -8,7 +8,7 @@ import { gridOf } from './grid.ts';
 import { notesOf } from './notes.ts';
 import type { PositionSheet } from './positionSheet.ts';
 import { printedLayout } from './printed.ts';
-import type { Datum, SheetOptions, SpacingTable } from './table.ts';
+import type { SheetOptions, SpacingTable } from './table.ts';
 
 /** One reason why no table is given. */
 export interface Refusal {
@@ -31,7 +31,7 @@ export type Spacing =
 export function spacingTable(sketch: Sketch, options: SheetOptions): Spacing {
   const grid = gridOf(options);
   if (sketch.parts.length === 0) return { ok: false, why: 'cannot be built', refusals: [NO_PARTS] };
-  const refusals: Refusal[] = refusalsOf(sketch, options.datum);
+  const refusals: Refusal[] = refusalsOf(sketch, options);
   const sheets: PositionSheet[] = [];
   for (const position of sketch.positions) {
     const setting = settingAt(position.id);
@@ -71,11 +71,11 @@ const NO_MOUNT: Refusal = {
   sentence: 'There is no mount plane to count from: give a register distance or choose another datum.',
 };
 
-function refusalsOf(sketch: Sketch, datum: Datum): Refusal[] {
+function refusalsOf(sketch: Sketch, { datum, unit }: SheetOptions): Refusal[] {
   const faulty = unbuildable(sketch).map(({ partId, positionId, sentence }) => ({
     partId,
     positionId,
-    sentence,
+    sentence: sentence(unit),
   }));
   return datum === 'mount' && sketch.registerMm === null ? [NO_MOUNT, ...faulty] : faulty;
 }

@@ -1,9 +1,8 @@
 import type { PartId, PositionId } from '../sketch/types.ts';
+import type { LengthUnit } from '../units.ts';
 
 /** The plane that distances are counted from; positive to the right of it. */
 export type Datum = 'first part' | 'sensor' | 'mount';
-
-export type LengthUnit = 'mm' | 'in';
 
 export interface SheetOptions {
   readonly datum: Datum;

@@ -11,5 +11,5 @@ export function panelTexts({ sketch, analysis, view }: Reading): readonly string
     const outcome = read(analysis);
     return outcome.ok ? quantityText(outcome.value, kind, digits, view.unit) : outcome.why;
   });
-  return [...texts, ...listWarnings(sketch).map(({ warning }) => warning.sentence)];
+  return [...texts, ...listWarnings(sketch).map(({ warning }) => warning.sentence('mm'))];
 }

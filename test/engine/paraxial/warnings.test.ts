@@ -17,7 +17,7 @@ const warned = (parts: readonly Part[], more: Partial<Sketch> = {}, stop = 'p1')
     kind,
     severity,
     partId,
-    sentence,
+    sentence: sentence('mm'),
   }));
 };
 
@@ -30,6 +30,13 @@ describe('the warnings', () => {
       thin('p2', 80, 0, { roomFrontMm: 2.2 }),
     ];
     expect(warned(touching)).toEqual([]);
+  });
+
+  it('write their lengths in inches when asked', () => {
+    const sketch = sketchOf([thin('p1', 80, -2.54), thin('p2', 80)], 'p1', sound);
+    expect(warningsOf(sketch, onFirst(sketch))[0]?.sentence('in')).toBe(
+      'P2 stands 0.10000 in in front of p1: the gap must be 0 or more.',
+    );
   });
 
   it('refuse a negative gap', () => {

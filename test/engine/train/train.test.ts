@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { LINES } from '../../../engine/sketch/create.ts';
 import { settingAt } from '../../../engine/sketch/values.ts';
+import { buildTrain } from '../../../engine/train/build.ts';
 import { apertureAt, placesOf } from '../../../engine/train/places.ts';
 import { spreadShare, trainOf } from '../../../engine/train/train.ts';
 import { inspectionZoom, MIDDLE, NARROW } from '../demo.ts';
@@ -58,6 +59,31 @@ describe('the train of a sketch', () => {
       object: { distanceMm: 100, medium: GLASS },
     });
     expect([...trainOf(sketch, onFirst(sketch)).index]).toEqual([1.5, 1.333]);
+  });
+
+  it('knows how the media in front and behind disperse', () => {
+    const sketch = sketchOf([thin('p1', 50, 3, { space: { lengthMm: 3, medium: GLASS } })], null, {
+      object: { distanceMm: 100, medium: water },
+    });
+    const { indexSpread } = trainOf(sketch, onFirst(sketch));
+    expect(indexSpread[0]).toBeCloseTo(0.333 / 55.8, 16);
+    expect(indexSpread[1]).toBeCloseTo(0.5 / 60, 16);
+  });
+
+  it('lays curved surfaces out with their conics, open where no diameter is given', () => {
+    const train = buildTrain({
+      objectIndex: 1,
+      objectZ: null,
+      imageDistanceMm: 90,
+      surfaces: [
+        { part: 0, curvaturePerMm: 0.02, conic: -0.7, indexAfter: 1.5, gapMm: 4, semiDiameterMm: 11 },
+        { part: 0, curvaturePerMm: -0.01, indexAfter: 1, gapMm: 0 },
+      ],
+    });
+    expect([...train.curvature]).toEqual([0.02, -0.01]);
+    expect([...train.conic]).toEqual([-0.7, 0]);
+    expect([...train.semiDiameter]).toEqual([11, Number.POSITIVE_INFINITY]);
+    expect([train.imageZ, train.stopSurface]).toEqual([94, -1]);
   });
 
   it('is empty for an empty sketch', () => {
