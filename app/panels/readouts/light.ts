@@ -1,4 +1,5 @@
 import { none, some } from '../../../engine/index.ts';
+import { assumedIndex, leftOutOfColour, meridian } from './particulars.ts';
 import type { Readout } from './readout.ts';
 
 /** How fast the light is, how wide the field, and what blurs it. */
@@ -130,7 +131,17 @@ export const LIGHT_READOUTS: readonly Readout[] = [
     kind: 'length',
     digits: 2,
     read: ({ petzval }) => petzval.radiusMm,
-    formula: '−1 over the sum of power / index of the parts, with the assumed index where none is given',
+    formula: '−1 over the Petzval sum, negative for a field that curves towards the lens',
+    particulars: assumedIndex,
+  },
+  {
+    id: 'petzvalSum',
+    label: 'Petzval sum',
+    kind: 'power',
+    digits: 4,
+    read: ({ petzval }) => petzval.sumPerMm,
+    formula: 'sum of power / index over the thin parts, and of power / (n n′) over the surfaces',
+    particulars: assumedIndex,
   },
   {
     id: 'axialColour',
@@ -139,6 +150,7 @@ export const LIGHT_READOUTS: readonly Readout[] = [
     digits: 4,
     read: ({ colour }) => colour.axialMm,
     formula: 'image distance in the short line minus that in the long line, first-order sum over the parts',
+    particulars: leftOutOfColour,
   },
   {
     id: 'lateralColour',
@@ -148,6 +160,7 @@ export const LIGHT_READOUTS: readonly Readout[] = [
     read: ({ colour }) => colour.lateralMm,
     formula:
       'chief ray height in the image plane in the short line minus that in the long line, first-order sum',
+    particulars: leftOutOfColour,
   },
 ];
 
@@ -165,6 +178,7 @@ export const passingReadouts = (fractions: readonly number[]): readonly Readout[
     },
     formula:
       'area common to the stop and all clear diameters as seen from this field, over the area of the stop',
+    particulars: (reading) => meridian(reading, index),
   }));
 
 function passingLabel(fraction: number): string {

@@ -1,4 +1,5 @@
 import type { Analysis } from '../../../engine/index.ts';
+import { focalLengths } from './particulars.ts';
 import type { Readout } from './readout.ts';
 
 const mediaDiffer = ({ train }: Analysis): boolean => train.index[0] !== train.index[train.count];
@@ -14,6 +15,7 @@ export const POWER_READOUTS: readonly Readout[] = [
     read: ({ firstOrder }) => firstOrder.focalLengthMm,
     formula:
       '1 / power, the power being −nu behind the last surface over y at the first, of a ray that enters parallel',
+    particulars: focalLengths,
   },
   {
     id: 'afocalMagnification',
@@ -32,6 +34,7 @@ export const POWER_READOUTS: readonly Readout[] = [
     digits: 4,
     read: ({ firstOrder }) => firstOrder.powerPerMm,
     formula: '−nu behind the last surface over y at the first, of a ray that enters parallel',
+    particulars: focalLengths,
   },
   {
     id: 'backFocus',

@@ -1,4 +1,5 @@
 import type { Analysis } from '../../../engine/index.ts';
+import { fieldLimit, limitingRim } from './particulars.ts';
 import type { Readout } from './readout.ts';
 
 const fieldIsStopped = ({ windows }: Analysis): boolean => windows.fieldStop.ok;
@@ -13,6 +14,7 @@ export const PUPIL_READOUTS: readonly Readout[] = [
     digits: 3,
     read: ({ pupils }) => pupils.stopDiameterMm,
     formula: 'twice y of the marginal ray at the stop',
+    particulars: limitingRim,
   },
   {
     id: 'entrancePlace',
@@ -22,6 +24,7 @@ export const PUPIL_READOUTS: readonly Readout[] = [
     digits: 3,
     read: ({ pupils }) => pupils.entrance.zMm,
     formula: 'from the first vertex to where the chief ray in front of the layout crosses the axis: −nȳ / nū',
+    particulars: limitingRim,
   },
   {
     id: 'entranceDiameter',
@@ -31,6 +34,7 @@ export const PUPIL_READOUTS: readonly Readout[] = [
     digits: 3,
     read: ({ pupils }) => pupils.entrance.diameterMm,
     formula: 'stop diameter times the magnification of the stop into object space',
+    particulars: limitingRim,
   },
   {
     id: 'entranceMagnification',
@@ -47,6 +51,7 @@ export const PUPIL_READOUTS: readonly Readout[] = [
     digits: 3,
     read: ({ pupils }) => pupils.exit.zMm,
     formula: 'from the last vertex to where the chief ray behind the layout crosses the axis: −n′ȳ / nū',
+    particulars: limitingRim,
   },
   {
     id: 'exitDiameter',
@@ -55,6 +60,7 @@ export const PUPIL_READOUTS: readonly Readout[] = [
     digits: 3,
     read: ({ pupils }) => pupils.exit.diameterMm,
     formula: 'stop diameter times the magnification of the stop into image space',
+    particulars: limitingRim,
   },
   {
     id: 'exitMagnification',
@@ -71,6 +77,7 @@ export const PUPIL_READOUTS: readonly Readout[] = [
     digits: 3,
     read: ({ windows }) => windows.entrance.zMm,
     formula: 'from the first vertex to the image in object space of what limits the field',
+    particulars: fieldLimit,
     applies: fieldIsStopped,
   },
   {
@@ -80,6 +87,7 @@ export const PUPIL_READOUTS: readonly Readout[] = [
     digits: 3,
     read: ({ windows }) => windows.entrance.diameterMm,
     formula: 'diameter of the image in object space of what limits the field',
+    particulars: fieldLimit,
     applies: fieldIsStopped,
   },
   {
@@ -89,6 +97,7 @@ export const PUPIL_READOUTS: readonly Readout[] = [
     digits: 3,
     read: ({ windows }) => windows.exit.zMm,
     formula: 'from the last vertex to the image in image space of what limits the field',
+    particulars: fieldLimit,
     applies: fieldIsStopped,
   },
   {
@@ -98,6 +107,7 @@ export const PUPIL_READOUTS: readonly Readout[] = [
     digits: 3,
     read: ({ windows }) => windows.exit.diameterMm,
     formula: 'diameter of the image in image space of what limits the field',
+    particulars: fieldLimit,
     applies: fieldIsStopped,
   },
 ];

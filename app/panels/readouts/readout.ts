@@ -1,4 +1,5 @@
 import type { Analysis, Quantity } from '../../../engine/index.ts';
+import type { Reading } from '../../live/reading.ts';
 import type { QuantityKind } from '../quantity.ts';
 
 export const READOUT_GROUPS = ['Power', 'Conjugates', 'Light', 'Pupils', 'Sensor'] as const;
@@ -15,6 +16,8 @@ export interface Readout {
   readonly read: (analysis: Analysis) => Quantity;
   /** How it comes about, in words; the trace sheet shows it. */
   readonly formula: string;
+  /** What else the trace sheet says of it at present, in sentences; empty when there is nothing. */
+  readonly particulars?: (reading: Reading) => string;
   /** Whether it says anything about this layout at all; left out, it always does. */
   readonly applies?: (analysis: Analysis) => boolean;
 }
