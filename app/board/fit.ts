@@ -43,14 +43,26 @@ export function fitted(view: Viewport, range: FitRange, margins: Margins): Viewp
   const scaleMm = range.toMm - range.fromMm - folded.lengthMm;
   const hasRoom = scaleMm > 0 && roomPx > folded.widthPx;
   const filling = hasRoom ? limited((roomPx - folded.widthPx) / scaleMm) : view.pxPerMm;
-  const wanted = range.maxHeightMm > 0 && tallPx > 0 ? tallPx / 2 / (range.maxHeightMm * filling) : 1;
+  const wanted = wantedStretch(range.maxHeightMm, filling, tallPx);
   const pxPerMm = limited(filling * Math.min(1, wanted / LEAST_STRETCH));
-  const stretch = plainStretch(Math.min(STRETCH_LIMITS.most, Math.max(LEAST_STRETCH, wanted)));
+  const stretch = stretchFor(range.maxHeightMm, filling, tallPx);
   const axisYPx = tallPx > 0 ? margins.top + tallPx / 2 : view.heightPx / 2;
   const drawnPx = Math.max(0, scaleMm) * pxPerMm + folded.widthPx;
   const leftPx = margins.left + (roomPx - drawnPx) / 2;
   return withLengthAt({ ...view, pxPerMm, stretch, axisYPx }, range.fromMm, leftPx);
 }
+
+/**
+ * The plain stretch with which heights up to `maxHeightMm` on both sides of the axis fill `tallPx` at this scale, or the flattest that
+ * a fit allows when they do not fit; 1 without heights or room.
+ */
+export function stretchFor(maxHeightMm: number, pxPerMm: number, tallPx: number): number {
+  const wanted = wantedStretch(maxHeightMm, pxPerMm, tallPx);
+  return plainStretch(Math.min(STRETCH_LIMITS.most, Math.max(LEAST_STRETCH, wanted)));
+}
+
+const wantedStretch = (maxHeightMm: number, pxPerMm: number, tallPx: number): number =>
+  maxHeightMm > 0 && tallPx > 0 ? tallPx / 2 / (maxHeightMm * pxPerMm) : 1;
 
 /**
  * The fold of a space that is long against the rest of the layout (`restMm`), or null when it is short enough to

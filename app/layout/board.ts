@@ -10,15 +10,16 @@ import { createSliderMirror } from '../board/sliderMirror.ts';
 import { PALETTES, type ThemeName } from '../board/styles.ts';
 import { createSurface } from '../board/surface.ts';
 import type { Fold, Viewport } from '../board/viewport.ts';
-import { panBy, refolded, stretchBy, withLengthAt, xOf, zOf, zoomAbout } from '../board/viewport.ts';
+import { panBy, stretchBy, xOf, zOf, zoomAbout } from '../board/viewport.ts';
 import type { Handle } from '../drawing/handle.ts';
 import { labelHandles } from '../drawing/handles/labels.ts';
-import { partIn, type Scene } from '../drawing/scene.ts';
+import type { Scene } from '../drawing/scene.ts';
 import { frameLoop } from '../live/frame.ts';
 import { currentReading, onReading } from '../live/reading.ts';
+import type { Document } from '../store/document.ts';
 import { sketchStore } from '../store/sketchStore.ts';
 import { type Selected, setView, viewStore } from '../store/viewStore.ts';
-import { cameraAt, fitCamera, foldIn, followed, sameFold, viewportOf } from './camera.ts';
+import { cameraAt, fitLook, inPlace, type Look, type Size, settled, viewportOf } from './camera.ts';
 import { createHand, type Hand } from './hand.ts';
 import { type HandState, overlayLayer } from './overlay.ts';
 import { paintParts, paintRays } from './paint.ts';
@@ -83,13 +84,18 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
   let labelGrips: readonly Handle[] = [];
   let fold: Fold | null = null;
   let drawn: Sketch | null = null;
-  let resized = true;
+  /** The sketch and the board's size when the camera last came to rest. */
+  let rested: { readonly sketch: Sketch; readonly size: Size } | null = null;
   let selected: readonly Selected[] = viewStore.getState().selection;
   let state: HandState = { hover: null, focus: null, ring: false, dragging: null, dropXPx: null };
 
   const grips = (): readonly Handle[] => [...(picture?.handles ?? []), ...labelGrips];
   const handleOf = (id: string | null): Handle | null => grips().find((handle) => handle.id === id) ?? null;
   const view = (): Viewport => viewportOf(viewStore.getState().camera, surface.size(), fold);
+  const lookAt = (look: Look) => {
+    fold = look.fold;
+    if (look.camera !== viewStore.getState().camera) setView({ camera: look.camera });
+  };
   const show = (change: Partial<HandState>) => {
     state = { ...state, ...change };
     frameLoop.ask('draw', 'hand', drawParts);
@@ -109,6 +115,9 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
   const hand = createHand({
     handleOf,
     view,
+    refold: (next) => {
+      fold = next;
+    },
     show,
     focus: ({ id }) => mirror.focus(id),
     say: client.say,
@@ -116,10 +125,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     setDown: (xPx) => client.setDown(spotAt(xPx)),
   });
 
-  const surface = createSurface<Layer>(element, ['rays', 'parts', 'overlay'], () => {
-    resized = true;
-    draw();
-  });
+  const surface = createSurface<Layer>(element, ['rays', 'parts', 'overlay'], () => draw());
   const { measure, forget } = canvasMeasure(
     surface.canvas('parts').getContext('2d') as CanvasRenderingContext2D,
   );
@@ -137,8 +143,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     const size = surface.size();
     if (size.widthPx === 0 || size.heightPx === 0) return;
     const scene = sceneOfReading(currentReading());
-    if (picture) keepPlace(picture, scene);
-    if (!hand.busy() && !sketchStore.getState().running) settleCamera(scene);
+    if (!hand.busy() && !sketchStore.getState().running) settleCamera(scene, picture);
     const now = pictureOf(currentReading(), view(), measure, scene);
     picture = now;
     paint('rays', (pen) => paintRays(pen, now));
@@ -150,29 +155,16 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     client.onFrame();
   };
 
-  /** Lengths count from the first part: when another part has become the first, the sheet moves so that the rest stays. */
-  const keepPlace = (before: Picture, scene: Scene) => {
-    const first = scene.parts[0]?.part.id;
-    if (first === undefined || before.scene.parts[0]?.part.id === first) return;
-    const stayed = before.scene.parts.find(({ part }) => partIn(scene, part.id));
-    const now = stayed && partIn(scene, stayed.part.id);
-    if (!stayed || !now) return;
-    const place = withLengthAt(view(), now.frontMm, xOf(before.view, stayed.frontMm));
-    setView({ camera: cameraAt(place, viewStore.getState().camera.follow) });
-  };
-
-  /** Between gestures: folds a long space, and fits again when what the camera follows has left the sheet. */
-  const settleCamera = (scene: Scene) => {
+  /** Between gestures: what stays keeps its place, or the sheet is fitted when that is called for. */
+  const settleCamera = (scene: Scene, before: Picture | null) => {
     const size = surface.size();
-    let { camera } = viewStore.getState();
-    const before = view();
-    fold = foldIn(scene, camera);
-    if (!sameFold(before.fold, fold))
-      camera = cameraAt(refolded(before, fold, xOf(before, 0)), camera.follow);
-    if (resized && camera.follow) camera = fitCamera(scene, size, camera.follow);
-    else camera = followed(scene, camera, size, fold);
-    resized = false;
-    if (camera !== viewStore.getState().camera) setView({ camera });
+    const doc = sketchStore.getState();
+    const look = { camera: viewStore.getState().camera, fold };
+    const opened = rested !== null && !isInHistory(doc, rested.sketch);
+    const moved = before && before.view.originMm === look.camera.originMm;
+    const placed = moved && !opened ? inPlace(before, scene, look) : look;
+    lookAt(settled(scene, placed, size, opened, rested?.size ?? null));
+    rested = { sketch: doc.sketch, size };
   };
 
   /**
@@ -229,7 +221,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     jog: hand.jog,
     endJog: hand.endJog,
     type: hand.type,
-    fit: (what) => setView({ camera: fitCamera(sceneOfReading(currentReading()), surface.size(), what) }),
+    fit: (what) => lookAt(fitLook(sceneOfReading(currentReading()), surface.size(), what)),
     picture: () => picture,
     stretchBy: (factor) => changeView((now) => stretchBy(now, factor)),
     zoomBy: (factor) => changeView(zoomBy(factor)),
@@ -252,6 +244,10 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     },
   };
 }
+
+/** Whether a sketch is one that undo and redo lead to, so that the present one came of it by edits. */
+const isInHistory = ({ sketch, past, future }: Document, known: Sketch): boolean =>
+  sketch === known || past.includes(known) || future.includes(known);
 
 /** What is drawn, as plain data: browser tests read the drawing from `element.record()`. */
 function recorded(picture: Picture | null, state: HandState): readonly Mark[] {

@@ -1,18 +1,21 @@
 import type { Effect, PointerKind } from '../board/hand.ts';
-import type { Viewport } from '../board/viewport.ts';
+import type { Fold, Viewport } from '../board/viewport.ts';
 import { panBy, stretchBy, withLengthAt, xOf, zoomAbout } from '../board/viewport.ts';
 import type { Handle, Move } from '../drawing/handle.ts';
 import { typedByLabel } from '../drawing/handles/labels.ts';
 import { frameLoop } from '../live/frame.ts';
+import { currentReading } from '../live/reading.ts';
 import { applyEdit, cancelEdit, commitEdit, previewEdit, sketchStore } from '../store/sketchStore.ts';
 import { type Selected, setView, viewStore } from '../store/viewStore.ts';
-import { cameraAt } from './camera.ts';
+import { cameraAt, heldFold } from './camera.ts';
 import type { HandState } from './overlay.ts';
 
 /** What a hand needs of the board it works on. */
 export interface HandBoard {
   readonly handleOf: (id: string | null) => Handle | null;
   readonly view: () => Viewport;
+  /** Cuts the sheet by another fold from now on. */
+  readonly refold: (fold: Fold | null) => void;
   readonly show: (change: Partial<HandState>) => void;
   readonly focus: (handle: Handle) => void;
   readonly say: (sentence: string) => void;
@@ -69,7 +72,7 @@ export function createHand(board: HandBoard): Hand {
       return;
     }
     frameLoop.ask('settle', 'drag', () => {
-      previewMove(move, view);
+      previewMove(board, move, view);
       board.show({ dragging: { id: handle.id, xPx, yPx, move, fromPx: handle.xPx } });
     });
   };
@@ -84,6 +87,7 @@ export function createHand(board: HandBoard): Hand {
     frameLoop.flush();
     if (pressed && sketchStore.getState().running) {
       cancelEdit();
+      board.refold(pressed.view.fold);
       setView({ camera: cameraAt(pressed.view, viewStore.getState().camera.follow) });
     }
     release();
@@ -198,14 +202,18 @@ function moveOf(handle: Handle, view: Viewport, { dxPx, dyPx, other, snapPx }: P
   });
 }
 
-/** Makes the move on the sketch at the press, and lets the view at the press make up for a frame of reference that moved with it. */
-function previewMove(move: Move, view: Viewport): void {
+/**
+ * Makes the move on the sketch at the press, and lets the view and its fold at the press make up for a frame of reference that moved
+ * with it, so that only what the hand moves moves.
+ */
+function previewMove(board: HandBoard, move: Move, view: Viewport): void {
   previewEdit(move.edit);
   if (sketchStore.getState().note?.kind === 'refused') return;
   const { follow } = viewStore.getState().camera;
+  const fold = heldFold(view.fold, currentReading().analysis.places.objectMm, move.frameMm);
   const firstPx = xOf(view, 0) + move.frameMm * view.pxPerMm;
-  const shown = move.frameMm === 0 ? view : withLengthAt(view, 0, firstPx);
-  setView({ camera: cameraAt(shown, follow) });
+  board.refold(fold);
+  setView({ camera: cameraAt(withLengthAt({ ...view, fold }, 0, firstPx), follow) });
 }
 
 const otherRule = (shift: boolean): boolean => shift !== viewStore.getState().otherRule;

@@ -2,7 +2,7 @@ import type { PartId, PositionId, Sketch } from '../../engine/index.ts';
 import { dropStop, freshPartId, insertPart, newPlate, newThin, rideStop } from '../../engine/index.ts';
 import { currentReading } from '../live/reading.ts';
 import { applyEdit, sketchStore } from '../store/sketchStore.ts';
-import { setView, type TrayKind } from '../store/viewStore.ts';
+import { setView, type TrayKind, viewStore } from '../store/viewStore.ts';
 
 /** Where new parts come from, in the order of the tray. */
 export const TRAY: readonly { readonly kind: TrayKind; readonly label: string }[] = [
@@ -32,8 +32,12 @@ export function setDown(kind: TrayKind, { zMm, onto }: Spot): void {
   applyEdit((sketch) => (kind === 'stop' && onto ? rideStop(sketch, onto) : added(kind, sketch, zMm, at)));
   const made = sketchStore.getState().sketch.parts.find((part) => !known.has(part.id));
   const chosen = made?.id ?? (kind === 'stop' ? onto : null);
+  // Lengths count from the first part: the sheet moves with it, so that it stays where it was dropped.
+  const { camera } = viewStore.getState();
+  const isFirst = known.size === 0 && made !== undefined;
   setView({
     placing: null,
+    ...(isFirst && { camera: { ...camera, originMm: camera.originMm - zMm } }),
     ...(chosen && { selection: [chosen] }),
     typing: made?.kind === 'thin' ? `focal:${made.id}:rear` : null,
   });

@@ -5,18 +5,22 @@ import type { Scene } from '../../../app/drawing/scene.ts';
 import {
   cameraAt,
   fitCamera,
+  fitLook,
   foldIn,
   followed,
+  heldFold,
+  inPlace,
+  type Look,
   type Size,
-  sameFold,
+  settled,
   viewportOf,
 } from '../../../app/layout/camera.ts';
 import { RIBBON_PX } from '../../../app/ribbon/layout.ts';
 import type { PartId, Sketch } from '../../../engine/index.ts';
-import { emptySketch, newThin } from '../../../engine/index.ts';
+import { emptySketch, fixSensor, moveParts, newThin } from '../../../engine/index.ts';
 import { inspectionZoom, NARROW, WIDE } from '../../engine/demo.ts';
 import { anySketch } from '../../engine/sketch/arbitrary.ts';
-import { AT_MIDDLE, DESKTOP, fittedView, PHONE, sceneFor } from '../drawing/seen.ts';
+import { AT_MIDDLE, DESKTOP, edited, fittedView, PHONE, sceneFor } from '../drawing/seen.ts';
 
 const demo = inspectionZoom();
 const scene = sceneFor(demo, { setting: AT_MIDDLE });
@@ -91,45 +95,133 @@ describe('the fold', () => {
     expect(foldIn(scene, { ...camera, follow: 'everything' })).toBeNull();
   });
 
-  it('is compared by what it cuts', () => {
+  it('gives way to the first part and to the object while a hand moves them, and else stays', () => {
     const fold = { fromMm: -500, toMm: -40, widthPx: 18 };
-    expect(sameFold(fold, { ...fold })).toBe(true);
-    expect(sameFold(fold, { ...fold, fromMm: -501 })).toBe(false);
-    expect([sameFold(null, null), sameFold(fold, null), sameFold(null, fold)]).toEqual([true, false, false]);
+    expect(heldFold(fold, -500, 0)).toEqual(fold);
+    expect(heldFold(fold, -490, -10)).toEqual({ ...fold, fromMm: -490, toMm: -30 });
+    expect(heldFold(fold, -450, -50)).toEqual({ ...fold, fromMm: -450, toMm: 0 });
+    expect(heldFold(fold, -40, 0)).toBeNull();
+    expect([heldFold(null, -500, 0), heldFold(fold, null, 0)]).toEqual([null, null]);
   });
 });
 
 describe('following', () => {
-  const fit = fitCamera(scene, DESKTOP, 'parts');
-  const fold = foldIn(scene, fit);
+  const look = fitLook(scene, DESKTOP, 'parts');
+  const { camera: fit, fold } = look;
   const goOn = (change: Partial<typeof fit>, drawn = scene, cut = fold) =>
-    followed(drawn, { ...fit, ...change }, DESKTOP, cut);
+    followed(drawn, { camera: { ...fit, ...change }, fold: cut }, DESKTOP).camera;
 
   it('holds still while what it follows is well in view, and fits again when it has left', () => {
-    expect(followed(scene, fit, DESKTOP, fold)).toBe(fit);
+    expect(followed(scene, look, DESKTOP)).toBe(look);
     for (const change of [
       { originMm: fit.originMm + 60 },
-      { pxPerMm: fit.pxPerMm / 4 },
+      { pxPerMm: fit.pxPerMm / 12 },
       { stretch: fit.stretch * 30 },
+      { stretch: fit.stretch / 30 },
     ])
       expect(goOn(change)).toEqual(fit);
   });
 
   it('ends as soon as the user looks elsewhere', () => {
-    const elsewhere = { ...fit, follow: null, originMm: 1e4 };
-    expect(followed(scene, elsewhere, DESKTOP, fold)).toBe(elsewhere);
+    const elsewhere = { camera: { ...fit, follow: null, originMm: 1e4 }, fold };
+    expect(followed(scene, elsewhere, DESKTOP)).toBe(elsewhere);
   });
 
   it('does not jump from one position of the demo to another', () => {
     for (const at of [WIDE, NARROW])
-      expect(followed(sceneFor(demo, { setting: { at, toNext: 0 } }), fit, DESKTOP, fold)).toBe(fit);
+      expect(followed(sceneFor(demo, { setting: { at, toNext: 0 } }), look, DESKTOP)).toBe(look);
   });
 
   it('notices an object that has come into the parts’ own scale', () => {
     const near = sceneFor({ ...demo, object: { distanceMm: 120, medium: 'air' } }, { setting: AT_MIDDLE });
     const view = viewportOf(fit, DESKTOP, fold);
     const unfolded = cameraAt(refolded(view, null, xOf(view, 0)), 'parts');
-    expect(followed(near, unfolded, DESKTOP, null)).toEqual(fitCamera(near, DESKTOP, 'parts'));
+    expect(followed(near, { camera: unfolded, fold: null }, DESKTOP).camera).toEqual(
+      fitCamera(near, DESKTOP, 'parts'),
+    );
+  });
+});
+
+describe('between gestures', () => {
+  const empty = sceneFor(emptySketch());
+  const start = fitLook(empty, DESKTOP, 'parts');
+  const lens = (focalLengthMm: number, id: string, lengthMm = 0) => ({
+    ...newThin(focalLengthMm, id as PartId),
+    space: { lengthMm, medium: 'air' as const },
+  });
+  const withParts = (...parts: Sketch['parts']) => sceneFor({ ...emptySketch(), parts });
+  const goOn = (drawn: Scene, look: Look) => settled(drawn, look, DESKTOP, false, DESKTOP);
+  const lengthsOf = ({ camera: { originMm, pxPerMm } }: Look) => ({ originMm, pxPerMm });
+
+  it('parts dropped one after the other leave the axis where it is', () => {
+    const one = goOn(withParts(lens(50, 'p1')), start);
+    const two = goOn(withParts(lens(50, 'p1', 30), lens(-50, 'p2')), one);
+    expect([lengthsOf(one), lengthsOf(two)]).toEqual([lengthsOf(start), lengthsOf(start)]);
+  });
+
+  it('a part whose image leaves the sheet is fitted', () => {
+    const drawn = withParts(lens(400, 'p1'));
+    const look = goOn(drawn, start);
+    expect(look).toEqual(fitLook(drawn, DESKTOP, 'parts'));
+    expect(isInView(400, viewportOf(look.camera, DESKTOP, look.fold))).toBe(true);
+  });
+
+  it('a layout that has become too tall is drawn flatter, where it stands', () => {
+    const drawn = withParts({ ...lens(50, 'p1'), semiDiameterMm: 120 });
+    const look = goOn(drawn, start);
+    expect(lengthsOf(look)).toEqual(lengthsOf(start));
+    expect(yOf(viewportOf(look.camera, DESKTOP, look.fold), 120)).toBeGreaterThan(0);
+  });
+
+  it('a sketch just opened is fitted, unless the user looks elsewhere', () => {
+    const drawn = withParts(lens(50, 'p1'));
+    expect(settled(drawn, start, DESKTOP, true, DESKTOP)).toEqual(fitLook(drawn, DESKTOP, 'parts'));
+    const own = { ...start, camera: { ...start.camera, follow: null } };
+    expect(settled(drawn, own, DESKTOP, true, DESKTOP).camera).toEqual(own.camera);
+  });
+
+  it('a board of another width is fitted, one of another height keeps lengths', () => {
+    const look = fitLook(scene, DESKTOP, 'parts');
+    const at = (size: Size) => settled(scene, look, size, false, DESKTOP);
+    expect(at({ ...DESKTOP, widthPx: 700 })).toEqual(fitLook(scene, { ...DESKTOP, widthPx: 700 }, 'parts'));
+    const low = at({ ...DESKTOP, heightPx: 400 });
+    expect(lengthsOf(low)).toEqual(lengthsOf(look));
+    expect(low.camera.stretch).toBeLessThan(look.camera.stretch);
+    const back = settled(scene, low, DESKTOP, false, { ...DESKTOP, heightPx: 400 });
+    expect(back.camera).toEqual(look.camera);
+  });
+
+  it('the fold stays cut where it was while the layout changes a little', () => {
+    const look = fitLook(scene, DESKTOP, 'parts');
+    const longer = sceneFor(
+      edited(demo, (sketch) => fixSensor(sketch, 31, AT_MIDDLE.at)),
+      { setting: AT_MIDDLE },
+    );
+    expect(foldIn(longer, look.camera)?.toMm).not.toBe(look.fold?.toMm);
+    expect(goOn(longer, look)).toEqual(look);
+  });
+
+  it('the parts and the object stay where they are when only the first part has moved', () => {
+    const look = fitLook(scene, DESKTOP, 'parts');
+    const before = { scene, view: viewportOf(look.camera, DESKTOP, look.fold) };
+    const edit = (sketch: Sketch) => moveParts(sketch, ['p1' as PartId], -8, AT_MIDDLE.at, 'neighbours');
+    const drawn = sceneFor(edited(demo, edit), { setting: AT_MIDDLE });
+    const after = goOn(drawn, inPlace(before, drawn, look));
+    const view = viewportOf(after.camera, DESKTOP, after.fold);
+    const placesOf = ({ parts, stage }: Scene, seen: typeof view) =>
+      [stage.objectMm, ...parts.map(({ frontMm }) => frontMm), stage.imageMm].map((z) => xOf(seen, z ?? 0));
+    const [object, first = 0, ...others] = placesOf(drawn, view);
+    const [objectWas, firstWas = 0, ...othersWere] = placesOf(scene, before.view);
+    expect(object).toBeCloseTo(objectWas ?? 0, 6);
+    expect(first).toBeCloseTo(firstWas - 8 * view.pxPerMm, 6);
+    for (const [i, x] of others.entries()) expect(x).toBeCloseTo(othersWere[i] ?? 0, 6);
+  });
+
+  it('the others stay where they are when a part is put in front of the first', () => {
+    const before = { scene: withParts(lens(50, 'p1')), view: viewportOf(start.camera, DESKTOP, null) };
+    const after = inPlace(before, withParts(lens(80, 'p2', 12), lens(50, 'p1')), start);
+    const view = viewportOf(after.camera, DESKTOP, after.fold);
+    expect(xOf(view, 12)).toBeCloseTo(xOf(before.view, 0), 9);
   });
 });
 
@@ -163,7 +255,7 @@ describe('a fit of any sketch', () => {
       fc.property(anyBoard(), ({ sketch, size, what }) => {
         const drawn = sceneFor(sketch);
         const camera = fitCamera(drawn, size, what);
-        expect(followed(drawn, camera, size, foldIn(drawn, camera))).toBe(camera);
+        expect(followed(drawn, { camera, fold: foldIn(drawn, camera) }, size).camera).toBe(camera);
       }),
     );
   });
@@ -182,7 +274,7 @@ describe('a fit of any sketch', () => {
     const drawn = sceneFor(sketch);
     for (const what of BOTH) {
       const camera = fitCamera(drawn, DESKTOP, what);
-      expect(followed(drawn, camera, DESKTOP, foldIn(drawn, camera))).toBe(camera);
+      expect(followed(drawn, { camera, fold: foldIn(drawn, camera) }, DESKTOP).camera).toBe(camera);
     }
   });
 });

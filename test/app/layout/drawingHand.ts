@@ -31,7 +31,7 @@ export class DrawingHand {
   state: Partial<HandState> = {};
   private gesture: Gesture = IDLE;
   private modifiers: Modifiers = NO_MODIFIERS;
-  private readonly fold: Fold | null;
+  private fold: Fold | null;
   private xPx = 0;
   private yPx = 0;
   private timeMs = 0;
@@ -53,6 +53,9 @@ export class DrawingHand {
   readonly hand = createHand({
     handleOf: (id) => this.picture.handles.find((handle) => handle.id === id) ?? null,
     view: () => this.view,
+    refold: (fold) => {
+      this.fold = fold;
+    },
     show: (change) => {
       this.state = { ...this.state, ...change };
     },

@@ -117,6 +117,37 @@ describe('a drag', () => {
     expect(frontsOf(sketch())[2]).toBeCloseTo(wantedMm, 9);
   });
 
+  it.each([
+    ['left', -30],
+    ['far to the left, into the fold', -260],
+    ['right', 40],
+  ])('of the first part to the %s moves it alone: the folded object and all others stay', (_where, dxPx) => {
+    const hand = over();
+    const others = ['object:foot', 'part:p2', 'part:p3', 'part:p4', 'image'];
+    const before = others.map((id) => hand.grip(id).xPx);
+    const firstPx = hand.grip('part:p1').xPx;
+    expect(hand.view.fold).not.toBeNull();
+    hand.pressGrip('part:p1', CLEAR_PX).moveBy(dxPx / 2);
+    for (let move = 0; move < 2; move++) {
+      const stays = others.map((id, i) => Math.abs(hand.grip(id).xPx - (before[i] ?? 0)) < 10 ** -PX_DIGITS);
+      // The object gives way once the part has used up the piece in front of it.
+      expect(stays.slice(dxPx < -200 && move === 1 ? 1 : 0)).not.toContain(false);
+      hand.moveBy(dxPx / 2);
+      expect(hand.grip('part:p1').xPx).toBeCloseTo(firstPx + dxPx * (move === 0 ? 1 : 1.5), PX_DIGITS);
+    }
+  });
+
+  it('of the folded object changes its distance, not where it is drawn', () => {
+    const hand = over();
+    const placesOf = () => ['object:foot', 'part:p1', 'part:p4'].map((id) => hand.grip(id).xPx);
+    const before = placesOf();
+    hand.pressGrip('object:foot').moveBy(-50);
+    expect(sketch().object.distanceMm).toBeCloseTo(550, 9);
+    for (const [i, xPx] of placesOf().entries()) expect(xPx).toBeCloseTo(before[i] ?? 0, PX_DIGITS);
+    hand.escape();
+    expect(hand.view.fold?.fromMm).toBe(-500);
+  });
+
   it('ended by Escape leaves the very same sketch, no step and the view as it was', () => {
     const hand = over();
     const { camera } = viewStore.getState();

@@ -25,6 +25,15 @@ describe('setting a part down', () => {
     expect(sketch().stop).toBe(sketch().parts[0]?.id);
   });
 
+  it('leaves the first one under the pointer, and the sheet where it is for the next', () => {
+    const { originMm } = view().camera;
+    setDown('positive', onAxis(130));
+    expect(0 - view().camera.originMm).toBe(130 - originMm);
+    const { camera } = view();
+    setDown('positive', onAxis(40));
+    expect(view().camera).toBe(camera);
+  });
+
   it('selects it, opens its focal length and empties the hand, as one step', () => {
     setDown('negative', onAxis(0));
     const id = sketch().parts[0]?.id;
