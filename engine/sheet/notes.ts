@@ -7,7 +7,7 @@ import { imageWord, labelOf } from './labels.ts';
 import type { Datum, SheetOptions } from './table.ts';
 
 const LIGHT_CAUTION =
-  'Caution: this layout concentrates collimated light. Sunlight or a laser beam that enters it can burn eyes, skin and material. Assess the hazard by IEC 60825-1 and your local rules, with your laser safety officer.';
+  'Caution: this layout can concentrate collimated light. Sunlight or a laser beam that enters it can burn eyes, skin and material. Assess the hazard by IEC 60825-1 and your local rules, with your laser safety officer.';
 
 /**
  * The caution that every hand-over of a layout for collimated light carries: where the object is at infinity, or the
