@@ -77,7 +77,7 @@ describe('the figures of the walk in the README', () => {
     const moved = moveParts(demo, [second], 42 - (gap[wide] ?? Number.NaN), wide);
     const { f, backFocus, m, defocus } = at(moved);
     expect(prose).toContain(`f ${f}, back focus ${backFocus}, m ${m}, defocus ${defocus}, and one warning`);
-    const sentences = warningsOf(moved, settingAt(wide)).map(({ sentence }) => sentence);
+    const sentences = warningsOf(moved, settingAt(wide)).map(({ sentence }) => sentence('mm'));
     expect(sentences).toEqual(['The image falls 0.755 mm behind the sensor; 0.019 mm is allowed.']);
     expect(prose).toContain('falls 0.755 mm behind the sensor where 0.019 mm is allowed');
   });
