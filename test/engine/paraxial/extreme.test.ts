@@ -28,7 +28,9 @@ describe('the analysis', () => {
         anySketch().chain((sketch) => fc.tuple(fc.constant(sketch), anySetting(sketch.positions))),
         ([sketch, setting]) => {
           expect(unsound(analyse(sketch, setting))).toEqual([]);
-          for (const { sentence } of warningsOf(sketch, setting)) expect(sentence).toMatch(/\.$/);
+          for (const { sentence } of warningsOf(sketch, setting)) {
+            for (const unit of ['mm', 'in'] as const) expect(sentence(unit)).toMatch(/^(?!.*NaN).*\.$/);
+          }
         },
       ),
     );
