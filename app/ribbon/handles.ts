@@ -13,7 +13,7 @@ import { BETWEEN, plainMove } from '../drawing/handle.ts';
 import { placing } from '../drawing/handles/parts.ts';
 import type { Sight } from '../drawing/sight.ts';
 
-import { markPlace, markText, type PlacedCell, type RibbonPlan } from './layout.ts';
+import type { PlacedCell, RibbonPlan } from './layout.ts';
 
 const LEAST_MM = 0.01;
 const FOLDED_PER_PX = 0.002;
@@ -89,11 +89,11 @@ function setterOf(cell: PlacedCell, { reading }: Sight): (value: number, other: 
 
 /** The mark "= all": a click gives every position its own value. */
 function splitHandle(cell: PlacedCell): readonly Handle[] {
-  if (!cell.common || markText(cell) === null) return [];
-  const { after } = cell;
+  const { after, mark } = cell;
+  if (!cell.common || mark === null) return [];
   return [
     {
-      ...readOnly(`split:${cell.id}`, markPlace(cell)),
+      ...readOnly(`split:${cell.id}`, mark),
       cursor: 'pointer',
       label: `${cell.label}, the same at all positions`,
       why: 'Click the mark to give every position its own value.',
@@ -105,16 +105,17 @@ function splitHandle(cell: PlacedCell): readonly Handle[] {
 /** The overall dimension follows from the others and says so. */
 function trackHandle({ overall }: RibbonPlan): readonly Handle[] {
   if (!overall) return [];
-  const place = { xPx: (overall.fromPx + overall.toPx) / 2, yPx: overall.linePx - 12 };
+  const place = { xPx: overall.textXPx, yPx: overall.linePx - 12 };
   const why = 'The track follows from the gaps: it runs from the first part to the image plane.';
   return [{ ...readOnly('track', place), label: 'track', why }];
 }
 
-function readOnly(id: string, place: { readonly xPx: number; readonly yPx: number }): Handle {
+function readOnly(id: string, { xPx, yPx }: { readonly xPx: number; readonly yPx: number }): Handle {
   return {
     id,
     order: 9,
-    ...place,
+    xPx,
+    yPx,
     line: null,
     halfWidthPx: 14,
     cursor: 'default',

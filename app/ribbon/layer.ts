@@ -3,7 +3,7 @@ import { segment } from '../board/pen.ts';
 import type { MarkStyle, TextStyle } from '../board/styles.ts';
 import type { Viewport } from '../board/viewport.ts';
 import { yOf } from '../board/viewport.ts';
-import { CANNOT_BE_BUILT, markPlace, markText, type PlacedCell, type RibbonPlan } from './layout.ts';
+import type { PlacedCell, PlacedText, RibbonPlan } from './layout.ts';
 
 const TICK_PX = 5;
 const HATCH_PX = 6;
@@ -13,20 +13,18 @@ const HATCH_PX = 6;
  * is drawn reversed and hatched.
  */
 export function ribbonLayer(pen: Pen, plan: RibbonPlan, view: Viewport, hovered: string | null): void {
-  for (const cell of plan.cells)
-    drawCell(pen, cell, view, cell.id === hovered || `cell:${cell.id}` === hovered);
-  const { overall } = plan;
+  const { cells, overall } = plan;
+  const isHovered = ({ id }: PlacedCell) => id === hovered || `cell:${id}` === hovered;
+  for (const cell of cells) drawLine(pen, cell, view, isHovered(cell));
+  for (const cell of cells) drawTexts(pen, cell, isHovered(cell));
   if (!overall) return;
-  const { fromPx, toPx, linePx } = overall;
+  const { fromPx, toPx, linePx, textXPx } = overall;
   segment(pen, fromPx, linePx, toPx, linePx, 'dimension quiet');
   for (const x of [fromPx, toPx]) tick(pen, x, linePx, 'dimension quiet');
-  pen.text((fromPx + toPx) / 2, linePx - 4, overall.text, 'value quiet', {
-    align: 'centre',
-    baseline: 'bottom',
-  });
+  pen.text(textXPx, linePx - 4, overall.text, 'value quiet', { align: 'centre', baseline: 'bottom' });
 }
 
-function drawCell(pen: Pen, cell: PlacedCell, view: Viewport, hovered: boolean): void {
+function drawLine(pen: Pen, cell: PlacedCell, view: Viewport, hovered: boolean): void {
   const { fromPx, toPx, linePx } = cell;
   const style: MarkStyle = cell.bad ? 'dimension bad' : hovered ? 'dimension hover' : 'dimension';
   for (const x of [fromPx, toPx]) {
@@ -36,6 +34,10 @@ function drawCell(pen: Pen, cell: PlacedCell, view: Viewport, hovered: boolean):
   segment(pen, fromPx, linePx, toPx, linePx, style);
   if (cell.bad) hatch(pen, cell, view);
   if (cell.onLeader) segment(pen, (fromPx + toPx) / 2, linePx, cell.textXPx, cell.textYPx - 8, 'leader');
+}
+
+/** Texts come after all lines, so that a leader passes behind the values above it. */
+function drawTexts(pen: Pen, cell: PlacedCell, hovered: boolean): void {
   const value: TextStyle = cell.bad
     ? 'value bad'
     : cell.follows
@@ -44,21 +46,12 @@ function drawCell(pen: Pen, cell: PlacedCell, view: Viewport, hovered: boolean):
         ? 'value strong'
         : 'value';
   pen.text(cell.textXPx, cell.textYPx, cell.text, value, { align: 'centre', baseline: 'middle' });
-  if (cell.onLeader) return;
-  if (cell.bad)
-    pen.text(cell.textXPx, linePx + 18, CANNOT_BE_BUILT, 'label bad', {
-      align: 'centre',
-      baseline: 'middle',
-    });
-  else mark(pen, cell);
+  if (cell.words) drawText(pen, cell.words, 'label bad');
+  if (cell.mark) drawText(pen, cell.mark, 'label quiet');
 }
 
-/** What kind of value it is: shared by all positions, or following the focus. */
-function mark(pen: Pen, cell: PlacedCell): void {
-  const text = markText(cell);
-  if (text === null) return;
-  const { xPx, yPx } = markPlace(cell);
-  pen.text(xPx, yPx, text, 'label quiet', { align: 'centre', baseline: 'middle' });
+function drawText(pen: Pen, { text, xPx, yPx }: PlacedText, style: TextStyle): void {
+  pen.text(xPx, yPx, text, style, { align: 'centre', baseline: 'middle' });
 }
 
 function tick(pen: Pen, x: number, y: number, style: MarkStyle): void {

@@ -1,14 +1,18 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { overlaps } from '../../../app/board/labels.ts';
 import { roughMeasure } from '../../../app/board/measure.ts';
 import { recorderPen } from '../../../app/board/recorderPen.ts';
+import { textLook } from '../../../app/board/styles.ts';
 import { xOf } from '../../../app/board/viewport.ts';
+import { cellsOf } from '../../../app/ribbon/cells.ts';
 import { extensionLines, ribbonLayer } from '../../../app/ribbon/layer.ts';
-import { type PlacedCell, RIBBON_PX } from '../../../app/ribbon/layout.ts';
+import { type PlacedCell, RIBBON_PX, ribbonPlan } from '../../../app/ribbon/layout.ts';
 import type { PartId, Sketch } from '../../../engine/index.ts';
-import { emptySketch, newThin } from '../../../engine/index.ts';
+import { emptySketch, newThin, settingAt } from '../../../engine/index.ts';
 import { inspectionZoom } from '../../engine/demo.ts';
 import { anySketch } from '../../engine/sketch/arbitrary.ts';
+import { STARTING_SKETCHES } from '../../public/startingSketches.ts';
 import { AT_MIDDLE, DESKTOP, demoPicture, PHONE, pictureFor } from '../drawing/seen.ts';
 
 /** Height of a value's text, px. */
@@ -100,7 +104,7 @@ describe('the ribbon', () => {
     expect(covering(leaders, APART_PX)).toEqual([]);
   });
 
-  it('never lets a value cover another on any sketch whose parts stand in their order', () => {
+  it('never lets a value cover another on any sketch', () => {
     fc.assert(
       fc.property(
         anySketch({ leastParts: 1 }),
@@ -109,15 +113,89 @@ describe('the ribbon', () => {
         fc.constantFrom('mm' as const, 'in' as const),
         (sketch, size, what, unit) => {
           const { cells } = pictureFor(sketch, { unit }, size, what).plan;
-          const upright = cells.filter(({ fromMm, toMm, fromPx, toPx }) => toMm >= fromMm && toPx >= fromPx);
-          expect(covering(upright)).toEqual([]);
+          expect(covering(cells)).toEqual([]);
         },
       ),
     );
   });
 });
 
+/** Digits and small letters fill about this share of their type size; the rest is air above and below. */
+const INK_SHARE = 0.8;
+
+/** What a text of the ribbon covers, px. */
+function inkOf({ text, xPx, yPx, style, place }: ReturnType<typeof textsOf>[number]) {
+  const sizePx = textLook(style).sizePx;
+  const heightPx = INK_SHARE * sizePx;
+  const widthPx = roughMeasure(text, style);
+  const bottomPx = place.baseline === 'bottom' ? yPx - (sizePx - heightPx) : yPx + heightPx / 2;
+  return { text, xPx: xPx - widthPx / 2, yPx: bottomPx - heightPx, widthPx, heightPx };
+}
+
+/** Pairs of texts on the sheet that cover each other. */
+function coveringTexts(picture: ReturnType<typeof demoPicture>): readonly string[] {
+  const inks = textsOf(picture).map(inkOf);
+  return inks.flatMap((one, i) =>
+    inks.slice(i + 1).flatMap((other) => (overlaps(one, other) ? [`${one.text} on ${other.text}`] : [])),
+  );
+}
+
+describe('no two texts of the ribbon cover each other', () => {
+  const boards = [DESKTOP, PHONE].flatMap((size) =>
+    (['parts', 'everything'] as const).map((what) => ({ size, what })),
+  );
+
+  it.each(STARTING_SKETCHES)('on $sketch.title, at every position', ({ sketch }) => {
+    for (const { size, what } of boards)
+      for (const { id } of sketch.positions)
+        for (const digits of [1, 3, 6]) {
+          const picture = pictureFor(sketch, { setting: settingAt(id), digits }, size, what);
+          expect(coveringTexts(picture), `${id} on ${size.widthPx} px`).toEqual([]);
+        }
+  });
+
+  it.each([
+    ['a pair of narrow gaps', row(8.245, 60, 3, 0)],
+    ['many narrow gaps', row(1, 2, 1, 2, 1, 2, 150, 0)],
+    ['a narrow gap beside a wide one that cannot be built', row(40, 2, -30, 40, 0)],
+  ])('with %s', (_what, sketch) => {
+    for (const { size, what } of boards)
+      expect(coveringTexts(pictureFor({ ...sketch, image: 'focus' }, {}, size, what))).toEqual([]);
+  });
+
+  it('and those of narrow gaps stay on the sheet', () => {
+    for (const { size, what } of boards) {
+      const picture = pictureFor(row(1, 1, 1, 150, 1, 1, 0), {}, size, what);
+      for (const { xPx, widthPx } of textsOf(picture).map(inkOf)) {
+        expect(xPx).toBeGreaterThanOrEqual(0);
+        expect(xPx + widthPx).toBeLessThanOrEqual(size.widthPx);
+      }
+    }
+  });
+});
+
+describe('a dimension that runs off the sheet', () => {
+  it('shows its value on the piece that is in view', () => {
+    const { view, sight } = demoPicture();
+    const close = { ...view, originMm: 30, pxPerMm: 40 };
+    const { cells } = ribbonPlan(cellsOf({ ...sight, view: close }), { ...sight, view: close }, roughMeasure);
+    const value = cells.find(({ id }) => id === 'gap:p2');
+    expect(value?.toPx).toBeLessThan(close.widthPx);
+    expect(value?.textXPx).toBeCloseTo((value?.toPx ?? 0) / 2, 6);
+    const beside = cells.find(({ id }) => id === 'gap:p4');
+    expect((beside?.textXPx ?? 0) - (beside?.halfTextPx ?? 0)).toBeGreaterThanOrEqual(close.widthPx);
+  });
+});
+
 describe('the ribbon’s words', () => {
+  it('mark what is common on a narrow screen too, where there is room', () => {
+    const { cells } = demoPicture({ digits: 1 }, PHONE).plan;
+    expect(cells.filter(({ mark }) => mark?.text === '= all').map(({ id }) => id)).toEqual([
+      'object',
+      'gap:p4',
+    ]);
+  });
+
   it('are the values, then what is common or follows, and the whole length', () => {
     expect(textsOf(demoPicture()).map(({ text }) => text)).toEqual(
       expect.arrayContaining(['26.272', '= all', '110.000']),
