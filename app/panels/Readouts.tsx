@@ -1,7 +1,8 @@
 import type { KeyboardEvent } from 'react';
-import { memo } from 'react';
+import { memo, useId } from 'react';
 import { sentenceOf } from '../../engine/index.ts';
 import { useReading } from '../live/reading.ts';
+import { setView } from '../store/viewStore.ts';
 import { Group } from '../ui/Group.tsx';
 import { Icon } from '../ui/Icon.tsx';
 import { useFolding } from './folding.ts';
@@ -10,7 +11,6 @@ import { quantityText, quantityUnit } from './quantity.ts';
 import type { Readout, ReadoutGroup } from './readouts/readout.ts';
 import { READOUT_GROUPS } from './readouts/readout.ts';
 import { readoutById, readoutsIn } from './readouts/table.ts';
-import { showTheWorking } from './topic.ts';
 import { UnitToggle } from './UnitToggle.tsx';
 import './readouts.css';
 
@@ -18,10 +18,11 @@ import './readouts.css';
 export function Readouts() {
   const title = useReading(({ sketch, setting }) => settingName(sketch, setting));
   const isEmpty = useReading(({ sketch }) => sketch.parts.length === 0);
+  const id = useId();
   return (
-    <section className="panel" aria-labelledby="readouts-title">
+    <section className="panel" aria-labelledby={id}>
       <div className="panel-head">
-        <h2 className="panel-title" id="readouts-title">
+        <h2 className="panel-title" id={id}>
           {title}
         </h2>
         <UnitToggle />
@@ -115,7 +116,7 @@ const ReadoutRow = memo(function ReadoutRow({ readout, tabStop }: ReadoutRowProp
           tabIndex={tabStop ? 0 : -1}
           aria-label={`${readout.label}: show the working`}
           title="Show the working"
-          onClick={() => showTheWorking(readout.id)}
+          onClick={() => setView({ drawer: 'trace', topic: readout.id })}
         >
           <Icon name="working" size={13} />
         </button>

@@ -1,13 +1,10 @@
-import { useStore } from 'zustand';
 import { sentenceOf } from '../../engine/index.ts';
 import type { Reading } from '../live/reading.ts';
 import { currentReading, useReading } from '../live/reading.ts';
-import { formatLength } from '../ui/format.ts';
 import { Icon } from '../ui/Icon.tsx';
 import { quantityText, quantityUnit } from './quantity.ts';
 import type { Readout } from './readouts/readout.ts';
 import { readoutById } from './readouts/table.ts';
-import { topicStore } from './topic.ts';
 import type { Worksheet } from './worksheet.ts';
 import { cellText, rowUnit, worksheetOf, worksheetTsv } from './worksheet.ts';
 import './tables.css';
@@ -19,7 +16,7 @@ interface TraceSheetProps {
 
 /** The working of a readout: the y–nu worksheet of the marginal and the chief ray, quantities as rows, surfaces as columns. */
 export function TraceSheet({ onCopy }: TraceSheetProps) {
-  const id = useStore(topicStore, ({ readoutId }) => readoutId);
+  const id = useReading(({ view }) => view.topic);
   const fractions = useReading(({ sketch }) => sketch.field.fractions);
   const readout = readoutById(id, fractions);
   const copy = () => onCopy(worksheetTsv(sheetOf(currentReading())));
@@ -33,7 +30,7 @@ export function TraceSheet({ onCopy }: TraceSheetProps) {
         </button>
       </div>
       <p className="panel-table-note">
-        {readout.formula}. <FocalLengths />
+        {readout.formula}. <Particulars readout={readout} />
       </p>
       <Sheet />
     </section>
@@ -50,14 +47,8 @@ function ReadoutLine({ readout }: { readonly readout: Readout }) {
   return <span className="panel-table-value">{text}</span>;
 }
 
-function FocalLengths() {
-  const text = useReading(({ analysis: { firstOrder }, view }) => {
-    const { frontFocalLengthMm: front, rearFocalLengthMm: rear } = firstOrder;
-    if (!front.ok || !rear.ok) return '';
-    const length = (value: number) => `${formatLength(value, view.unit)} ${view.unit}`;
-    return `Front focal length −n/φ ${length(front.value)}, rear focal length n′/φ ${length(rear.value)}.`;
-  });
-  return text;
+function Particulars({ readout }: { readonly readout: Readout }) {
+  return useReading((reading) => readout.particulars?.(reading) ?? '');
 }
 
 function Sheet() {

@@ -41,6 +41,8 @@ export interface View {
   readonly theme: ThemeChoice;
   readonly unit: LengthUnit;
   readonly drawer: Drawer | null;
+  /** Which readout the trace sheet explains, by its id. */
+  readonly topic: string;
   readonly sheet: Sheet | null;
   readonly shown: Shown;
   readonly raysPerBundle: number;
@@ -68,6 +70,7 @@ const start: View = {
   theme: 'system',
   unit: 'mm',
   drawer: null,
+  topic: 'focalLength',
   sheet: null,
   shown: {
     bundles: true,

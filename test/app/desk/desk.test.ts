@@ -89,7 +89,14 @@ describe('the desk', () => {
     const { keyValues } = memory();
     const desk = await tab(keyValues);
     rename('changed');
-    setView({ unit: 'in', theme: 'night', digits: 4, selection: ['image'] });
+    setView({
+      unit: 'in',
+      theme: 'night',
+      digits: 4,
+      selection: ['image'],
+      drawer: 'trace',
+      topic: 'backFocus',
+    });
     expect(deskStore.getState().save).toBe('saving');
     await vi.advanceTimersByTimeAsync(QUIET_MS);
     expect(deskStore.getState().save).toBe('saved');
@@ -103,6 +110,8 @@ describe('the desk', () => {
       theme: 'night',
       digits: 4,
       selection: ['image'],
+      drawer: 'trace',
+      topic: 'backFocus',
     });
   });
 
