@@ -81,7 +81,7 @@ test('between two positions the screen says so, offers to add one, and stores no
   const f = (await app.readout('Focal length').textContent()) ?? '';
   await page.getByRole('button', { name: 'Add position here' }).click();
   await expect(page.getByText('between', { exact: true })).toBeHidden();
-  await expect(page.getByRole('heading', { name: 'Position 4 position' })).toBeVisible();
+  await expect(page.getByRole('heading', { name: 'Position 4' })).toBeVisible();
   await expect(app.readout('Focal length')).toHaveText(f);
   await expect(page.getByRole('button', { name: /^Go to/ })).toHaveCount(4);
   await page.getByRole('button', { name: 'Undo' }).click();

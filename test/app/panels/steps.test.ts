@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { settingName } from '../../../app/panels/names.ts';
 import { keyTarget } from '../../../app/panels/Scrubber.tsx';
 import { settingOf, standOf } from '../../../app/panels/steps.ts';
-import { settingAt } from '../../../engine/index.ts';
+import { renamePosition, settingAt } from '../../../engine/index.ts';
 import { inspectionZoom, MIDDLE, NARROW, WIDE } from '../../engine/demo.ts';
 import { single } from './sketches.ts';
 
@@ -53,6 +53,15 @@ describe('the scrubber', () => {
     expect(settingName(sketch, settingAt(MIDDLE))).toBe('Middle position');
     expect(settingName(sketch, { at: WIDE, toNext: 0.4 })).toBe('Between wide and middle');
     expect(settingName(single(), settingAt('only' as typeof WIDE))).toBe('First order');
+  });
+
+  it('names a position by a name that already says so, and leaves a symbol as it is', () => {
+    const named = (name: string) => settingName(renamePosition(sketch, WIDE, name), settingAt(WIDE));
+    expect(named('position 4')).toBe('Position 4');
+    expect(named('Parking position')).toBe('Parking position');
+    expect(named('f/4')).toBe('f/4 position');
+    expect(named('2×')).toBe('2× position');
+    expect(named('élevée')).toBe('Élevée position');
   });
 
   test.prop([fc.double({ min: 0, max: 2, noNaN: true })])('stands where it was put', (stand) => {
