@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { version } from '../../package.json';
 import { SheetDialog } from '../ui/SheetDialog.tsx';
 import { GESTURES } from './gestures.ts';
@@ -26,26 +27,13 @@ export function Help({ groups, apple, onClose }: HelpProps) {
           <h3 id="help-gestures" className="help-title">
             By hand and by keys
           </h3>
-          {GESTURES.map((group) => (
-            <table key={group.title} className="help-table">
-              <caption>{group.title}</caption>
-              <thead className="visually-hidden">
-                <tr>
-                  <th scope="col">What it does</th>
-                  <th scope="col">By hand</th>
-                  <th scope="col">By keys</th>
-                </tr>
-              </thead>
-              <tbody>
-                {group.gestures.map((gesture) => (
-                  <tr key={gesture.does}>
-                    <th scope="row">{gesture.does}</th>
-                    <td>{gesture.hand}</td>
-                    <td>{keyWords(gesture.keys, apple)}</td>
-                  </tr>
-                ))}
-              </tbody>
-            </table>
+          {GESTURES.map(({ title, gestures }) => (
+            <HelpTable
+              key={title}
+              title={title}
+              heads={['What it does', 'By hand', 'By keys']}
+              rows={gestures.map(({ does, hand, keys }) => [does, hand, keyWords(keys, apple)])}
+            />
           ))}
         </section>
         <section aria-labelledby="help-commands">
@@ -53,28 +41,16 @@ export function Help({ groups, apple, onClose }: HelpProps) {
             Commands
           </h3>
           <div className="help-columns">
-            {groups.map((group) => (
-              <table key={group.title} className="help-table help-commands">
-                <caption>{group.title}</caption>
-                <thead className="visually-hidden">
-                  <tr>
-                    <th scope="col">Command</th>
-                    <th scope="col">Keys</th>
-                  </tr>
-                </thead>
-                <tbody>
-                  {group.commands.map((command) => (
-                    <tr key={command.id}>
-                      <th scope="row">{command.label}</th>
-                      <td>
-                        {command.keys.map((key) => (
-                          <kbd key={key}>{keyWords(key, apple)}</kbd>
-                        ))}
-                      </td>
-                    </tr>
-                  ))}
-                </tbody>
-              </table>
+            {groups.map(({ title, commands }) => (
+              <HelpTable
+                key={title}
+                title={title}
+                heads={['Command', 'Keys']}
+                rows={commands.map(({ label, keys }) => [
+                  label,
+                  keys.map((key) => <kbd key={key}>{keyWords(key, apple)}</kbd>),
+                ])}
+              />
             ))}
           </div>
         </section>
@@ -93,5 +69,40 @@ export function Help({ groups, apple, onClose }: HelpProps) {
         </p>
       </section>
     </SheetDialog>
+  );
+}
+
+interface HelpTableProps {
+  readonly title: string;
+  /** For those who hear the table. */
+  readonly heads: readonly string[];
+  /** The first cell of a row says what the others do. */
+  readonly rows: readonly (readonly [does: string, ...ways: ReactNode[]])[];
+}
+
+function HelpTable({ title, heads, rows }: HelpTableProps) {
+  return (
+    <table className="help-table">
+      <caption>{title}</caption>
+      <thead className="visually-hidden">
+        <tr>
+          {heads.map((head) => (
+            <th key={head} scope="col">
+              {head}
+            </th>
+          ))}
+        </tr>
+      </thead>
+      <tbody>
+        {rows.map(([does, ...ways]) => (
+          <tr key={does}>
+            <th scope="row">{does}</th>
+            {ways.map((way, index) => (
+              <td key={heads[index + 1]}>{way}</td>
+            ))}
+          </tr>
+        ))}
+      </tbody>
+    </table>
   );
 }
