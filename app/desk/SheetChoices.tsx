@@ -1,5 +1,5 @@
 import type { Datum } from '../../engine/index.ts';
-import { useReading } from '../live/reading.ts';
+import { useReadingNow } from '../live/reading.ts';
 import { setView } from '../store/viewStore.ts';
 import { Segmented, Select } from '../ui/choices.tsx';
 
@@ -19,9 +19,9 @@ const UNITS = [
 
 /** What the table counts from, how finely it is rounded, and in which unit. */
 export function SheetChoices({ hasMount }: { readonly hasMount: boolean }) {
-  const datum = useReading((reading) => reading.view.datum);
-  const digits = useReading((reading) => String(reading.view.digits));
-  const unit = useReading((reading) => reading.view.unit);
+  const datum = useReadingNow((reading) => reading.view.datum);
+  const digits = useReadingNow((reading) => String(reading.view.digits));
+  const unit = useReadingNow((reading) => reading.view.unit);
   return (
     <div className="sheet-choices">
       <Select

@@ -56,5 +56,26 @@ export function onReading(reader: () => void): () => void {
  * text or an object that is kept by identity, never a fresh one.
  */
 export function useReading<T>(select: (reading: Reading) => T): T {
-  return useSyncExternalStore(onReading, () => select(currentReading()));
+  return useSnapshot(onReading, select);
+}
+
+/**
+ * As `useReading`, but in the very moment of the change. It is for what a control shows: React puts a changed control back to
+ * what was last rendered, so by the next frame it would be seen to go back and forth.
+ */
+export function useReadingNow<T>(select: (reading: Reading) => T): T {
+  return useSnapshot(onChange, select);
+}
+
+function useSnapshot<T>(subscribe: (reader: () => void) => () => void, select: (reading: Reading) => T): T {
+  const read = () => select(currentReading());
+  return useSyncExternalStore(subscribe, read, read);
+}
+
+/** Calls `reader` at every change of the sketch or the view; returns the way to stop. */
+function onChange(reader: () => void): () => void {
+  const stops = [sketchStore.subscribe(reader), viewStore.subscribe(reader)];
+  return () => {
+    for (const stop of stops) stop();
+  };
 }

@@ -1,6 +1,6 @@
 import type { LedgerRow, PartId, Quantity } from '../../engine/index.ts';
 import type { Reading } from '../live/reading.ts';
-import { useReading } from '../live/reading.ts';
+import { useReading, useReadingNow } from '../live/reading.ts';
 import { select, setView } from '../store/viewStore.ts';
 import { Checkbox } from '../ui/choices.tsx';
 import type { LengthUnit } from '../ui/format.ts';
@@ -56,7 +56,7 @@ const ledgerIds = ({ analysis, sketch }: Reading): string =>
   analysis.ledger.map(({ partIndex }) => sketch.parts[partIndex]?.id ?? '').join(SEPARATOR);
 
 function RealIsPositive() {
-  const checked = useReading(({ view }) => view.realIsPositive);
+  const checked = useReadingNow(({ view }) => view.realIsPositive);
   return (
     <Checkbox
       label="Distances positive when real"

@@ -1,6 +1,6 @@
 import type { PositionId } from '../../engine/index.ts';
 import { copyPosition, movePosition, removePosition, renamePosition } from '../../engine/index.ts';
-import { useReading } from '../live/reading.ts';
+import { useReadingNow } from '../live/reading.ts';
 import type { IconName } from '../ui/Icon.tsx';
 import { Icon } from '../ui/Icon.tsx';
 import { Popover } from '../ui/Popover.tsx';
@@ -20,7 +20,7 @@ export function PositionsButton() {
 
 /** The list of positions: go to, rename, copy, reorder, remove, add. */
 export function Positions() {
-  const positions = useReading(({ sketch }) => sketch.positions);
+  const positions = useReadingNow(({ sketch }) => sketch.positions);
   return (
     <section className="positions" aria-label="Positions">
       <ul>
@@ -43,7 +43,7 @@ interface PositionRowProps {
 }
 
 function PositionRow({ id, name, index, count }: PositionRowProps) {
-  const here = useReading(({ setting }) => setting.at === id && setting.toNext === 0);
+  const here = useReadingNow(({ setting }) => setting.at === id && setting.toNext === 0);
   const act = (verb: string, icon: IconName, disabled: boolean, run: () => void) => (
     <button
       type="button"

@@ -1,4 +1,4 @@
-import { currentReading, useReading } from '../live/reading.ts';
+import { currentReading, useReadingNow } from '../live/reading.ts';
 import { applyEdit } from '../store/sketchStore.ts';
 import type { PerPositionEdits } from './perPosition.ts';
 import './card.css';
@@ -10,10 +10,10 @@ interface SplitMarkProps extends PerPositionEdits {
 
 /** "= all" beside a value that is the same at all positions, "each" beside one that is not; a press changes it. */
 export function SplitMark({ label, isCommon, split, join }: SplitMarkProps) {
-  const state = useReading(({ sketch }) =>
+  const state = useReadingNow(({ sketch }) =>
     sketch.positions.length < 2 ? 'single' : isCommon(sketch) ? 'common' : 'each',
   );
-  const isBetween = useReading(({ setting }) => setting.toNext > 0);
+  const isBetween = useReadingNow(({ setting }) => setting.toNext > 0);
   if (state === 'single') return null;
   const common = state === 'common';
   return (

@@ -1,4 +1,4 @@
-import { useReading } from '../live/reading.ts';
+import { useReadingNow } from '../live/reading.ts';
 import { setView, viewStore } from '../store/viewStore.ts';
 
 /**
@@ -9,7 +9,7 @@ export function useFolding(
   name: string,
   startsFolded = false,
 ): readonly [boolean, (folded: boolean) => void] {
-  const folded = useReading(({ view }) => view.foldedGroups.includes(name) !== startsFolded);
+  const folded = useReadingNow(({ view }) => view.foldedGroups.includes(name) !== startsFolded);
   const fold = (folds: boolean) => {
     const others = viewStore.getState().foldedGroups.filter((other) => other !== name);
     setView({ foldedGroups: folds === startsFolded ? others : [...others, name] });

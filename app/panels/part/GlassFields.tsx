@@ -1,13 +1,13 @@
 import type { PartId } from '../../../engine/index.ts';
 import { setAbbeNumber, setIndex, setRoom } from '../../../engine/index.ts';
-import { useReading } from '../../live/reading.ts';
+import { useReadingNow } from '../../live/reading.ts';
 import { formatNumber } from '../../ui/format.ts';
 import { SketchNumber } from '../SketchNumber.tsx';
 import { readThin } from './partReading.ts';
 
 /** What is assumed of the glass that a thin part will become, and the room kept for it. */
 export function GlassFields({ id }: { readonly id: PartId }) {
-  const assumed = useReading(({ sketch }) => formatNumber(sketch.assumedIndex, 4));
+  const assumed = useReadingNow(({ sketch }) => formatNumber(sketch.assumedIndex, 4));
   return (
     <>
       <SketchNumber

@@ -1,6 +1,6 @@
 import type { Edit, FixedMedium, PartId } from '../../../engine/index.ts';
 import { setMaterial, setThickness } from '../../../engine/index.ts';
-import { useReading } from '../../live/reading.ts';
+import { useReadingNow } from '../../live/reading.ts';
 import { TextField } from '../../ui/TextField.tsx';
 import { tryEdit } from '../edit.ts';
 import { SketchNumber } from '../SketchNumber.tsx';
@@ -8,7 +8,7 @@ import { partIn, readPlate } from './partReading.ts';
 
 /** Thickness and material of a flat plate. */
 export function PlateFields({ id }: { readonly id: PartId }) {
-  const name = useReading((reading) => {
+  const name = useReadingNow((reading) => {
     const part = partIn(reading, id);
     return part?.kind === 'plate' ? part.material.name : '';
   });

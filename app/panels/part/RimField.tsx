@@ -1,7 +1,7 @@
 import type { PartId, Quantity } from '../../../engine/index.ts';
 import { setSemiDiameter } from '../../../engine/index.ts';
 import type { Reading } from '../../live/reading.ts';
-import { currentReading, useReading } from '../../live/reading.ts';
+import { currentReading, useReading, useReadingNow } from '../../live/reading.ts';
 import { formatLength } from '../../ui/format.ts';
 import { tryEdit } from '../edit.ts';
 import { SketchNumber } from '../SketchNumber.tsx';
@@ -9,7 +9,7 @@ import { partIn } from './partReading.ts';
 
 /** The clear diameter, open or given, and what the rays need. A free stop that is the aperture stop has none of its own. */
 export function RimField({ id }: { readonly id: PartId }) {
-  const isStopItself = useReading(
+  const isStopItself = useReadingNow(
     (reading) => reading.sketch.stop === id && partIn(reading, id)?.kind === 'stop',
   );
   if (isStopItself) return null;

@@ -1,6 +1,6 @@
 import type { Edit, PartId } from '../../../engine/index.ts';
 import { releaseStop, rideStop, setStop, setStopDiameter } from '../../../engine/index.ts';
-import { useReading } from '../../live/reading.ts';
+import { useReadingNow } from '../../live/reading.ts';
 import { applyEdit } from '../../store/sketchStore.ts';
 import { STOP_PER_POSITION } from '../perPosition.ts';
 import { orWhy, SketchNumber } from '../SketchNumber.tsx';
@@ -8,8 +8,8 @@ import { partIn } from './partReading.ts';
 
 /** The aperture stop as far as this part has to do with it. */
 export function StopFields({ id }: { readonly id: PartId }) {
-  const isCarrier = useReading(({ sketch }) => sketch.stop === id);
-  const isStopPart = useReading((reading) => partIn(reading, id)?.kind === 'stop');
+  const isCarrier = useReadingNow(({ sketch }) => sketch.stop === id);
+  const isStopPart = useReadingNow((reading) => partIn(reading, id)?.kind === 'stop');
   if (!isCarrier) {
     return (
       <Action
@@ -39,7 +39,7 @@ function Action({ words, edit }: { readonly words: string; readonly edit: Edit }
 }
 
 function StopDiameter() {
-  const follows = useReading(({ sketch }) => FOLLOWS[sketch.aperture.kind]);
+  const follows = useReadingNow(({ sketch }) => FOLLOWS[sketch.aperture.kind]);
   return (
     <SketchNumber
       label="Stop diameter"

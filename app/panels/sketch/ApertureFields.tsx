@@ -1,6 +1,6 @@
 import type { Aperture, Edit, Sketch } from '../../../engine/index.ts';
 import { setAperture, setStopDiameter } from '../../../engine/index.ts';
-import { currentReading, useReading } from '../../live/reading.ts';
+import { currentReading, useReading, useReadingNow } from '../../live/reading.ts';
 import { Select } from '../../ui/choices.tsx';
 import { tryEdit } from '../edit.ts';
 import { STOP_PER_POSITION } from '../perPosition.ts';
@@ -9,7 +9,7 @@ import { APERTURE_CHOICES, apertureOfKind } from './apertureKinds.ts';
 
 /** How much light: five kinds, one number. */
 export function ApertureFields() {
-  const kind = useReading(({ sketch }) => sketch.aperture.kind);
+  const kind = useReadingNow(({ sketch }) => sketch.aperture.kind);
   const trouble = useReading(({ analysis }) => (analysis.rays.marginal.ok ? '' : analysis.rays.marginal.why));
   return (
     <>

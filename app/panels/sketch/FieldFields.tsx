@@ -1,5 +1,5 @@
 import { setField, setFractions, setVignetting } from '../../../engine/index.ts';
-import { currentReading, useReading } from '../../live/reading.ts';
+import { currentReading, useReading, useReadingNow } from '../../live/reading.ts';
 import { Select } from '../../ui/choices.tsx';
 import { parseEntry } from '../../ui/entry.ts';
 import { TextField } from '../../ui/TextField.tsx';
@@ -9,7 +9,7 @@ import { FIELD_CHOICES, FIELD_VALUE, fieldOfKind, fieldValue, withFieldValue } f
 
 /** How large the field is, which fields are drawn, and what may be lost at its edge. */
 export function FieldFields() {
-  const kind = useReading(({ sketch }) => sketch.field.size.kind);
+  const kind = useReadingNow(({ sketch }) => sketch.field.size.kind);
   const trouble = useReading(({ analysis }) => (analysis.rays.chief.ok ? '' : analysis.rays.chief.why));
   return (
     <>
@@ -38,7 +38,7 @@ export function FieldFields() {
 }
 
 function FieldValue() {
-  const kind = useReading(({ sketch }) => sketch.field.size.kind);
+  const kind = useReadingNow(({ sketch }) => sketch.field.size.kind);
   return (
     <SketchNumber
       key={kind}
@@ -50,7 +50,7 @@ function FieldValue() {
 }
 
 function Fractions() {
-  const text = useReading(({ sketch }) => sketch.field.fractions.join(' '));
+  const text = useReadingNow(({ sketch }) => sketch.field.fractions.join(' '));
   const commit = (typed: string): string | null => {
     const entries = typed
       .split(/[\s;]+|,\s+/)

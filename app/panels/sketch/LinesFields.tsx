@@ -1,6 +1,6 @@
 import type { Lines } from '../../../engine/index.ts';
 import { LINES, setAssumedIndex, setBlur, setLines } from '../../../engine/index.ts';
-import { useReading } from '../../live/reading.ts';
+import { useReadingNow } from '../../live/reading.ts';
 import type { Choice } from '../../ui/choices.tsx';
 import { Select } from '../../ui/choices.tsx';
 import { tryEdit } from '../edit.ts';
@@ -16,7 +16,7 @@ const PRESETS: readonly Choice<Preset>[] = [
 
 /** The three wavelengths, and what is assumed where nothing is given. */
 export function LinesFields() {
-  const preset = useReading(({ sketch }) => presetOf(sketch.lines));
+  const preset = useReadingNow(({ sketch }) => presetOf(sketch.lines));
   return (
     <>
       <Select

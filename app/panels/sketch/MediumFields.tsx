@@ -1,7 +1,7 @@
 import type { Edit, FixedMedium, Medium, PartId, Sketch } from '../../../engine/index.ts';
 import { setMedium } from '../../../engine/index.ts';
 import type { Reading } from '../../live/reading.ts';
-import { useReading } from '../../live/reading.ts';
+import { useReadingNow } from '../../live/reading.ts';
 import { Select } from '../../ui/choices.tsx';
 import { TextField } from '../../ui/TextField.tsx';
 import { tryEdit } from '../edit.ts';
@@ -17,7 +17,7 @@ const WATER: FixedMedium = { name: 'water', index: 1.333, abbeNumber: 55.8 };
 
 /** Air, or a medium given by its index. */
 export function MediumFields({ label, where }: MediumFieldsProps) {
-  const medium = useReading((reading) => mediumOf(reading.sketch, where));
+  const medium = useReadingNow((reading) => mediumOf(reading.sketch, where));
   return (
     <>
       <Select

@@ -1,11 +1,11 @@
 import { scaleSketch, scaleToFocalLength } from '../../../engine/index.ts';
-import { useReading } from '../../live/reading.ts';
+import { useReadingNow } from '../../live/reading.ts';
 import { orWhy, SketchNumber } from '../SketchNumber.tsx';
 import { KEEPS_SIGN, ScaleFactorField } from './ScaleFactorField.tsx';
 
 /** The whole sketch by a factor, or to a focal length. */
 export function ScaleFields() {
-  const absence = useReading(({ analysis: { firstOrder } }) =>
+  const absence = useReadingNow(({ analysis: { firstOrder } }) =>
     firstOrder.focalLengthMm.ok ? '' : firstOrder.focalLengthMm.why,
   );
   return (

@@ -1,4 +1,4 @@
-import { useReading } from '../../live/reading.ts';
+import { useReadingNow } from '../../live/reading.ts';
 import type { Shown } from '../../store/viewStore.ts';
 import { setView, viewStore } from '../../store/viewStore.ts';
 import type { Choice } from '../../ui/choices.tsx';
@@ -20,7 +20,7 @@ const SHOWN: readonly (readonly [keyof Shown, string])[] = [
 
 /** What the drawing shows. It is a matter of the view: the sketch does not change. */
 export function ShownFields() {
-  const rays = useReading(({ view }) => String(view.raysPerBundle));
+  const rays = useReadingNow(({ view }) => String(view.raysPerBundle));
   const counts = RAY_COUNTS.some(({ value }) => value === rays)
     ? RAY_COUNTS
     : [...RAY_COUNTS, { value: rays, label: rays }];
@@ -40,7 +40,7 @@ export function ShownFields() {
 }
 
 function ShownCheckbox({ what, label }: { readonly what: keyof Shown; readonly label: string }) {
-  const checked = useReading(({ view }) => view.shown[what]);
+  const checked = useReadingNow(({ view }) => view.shown[what]);
   return (
     <Checkbox
       label={label}

@@ -1,12 +1,12 @@
 import { setNotes, setTitle } from '../../../engine/index.ts';
-import { useReading } from '../../live/reading.ts';
+import { useReadingNow } from '../../live/reading.ts';
 import { TextField } from '../../ui/TextField.tsx';
 import { tryEdit } from '../edit.ts';
 
 /** Title and notes of the sketch. */
 export function TextFields() {
-  const title = useReading(({ sketch }) => sketch.title);
-  const notes = useReading(({ sketch }) => sketch.notes);
+  const title = useReadingNow(({ sketch }) => sketch.title);
+  const notes = useReadingNow(({ sketch }) => sketch.notes);
   return (
     <>
       <TextField
