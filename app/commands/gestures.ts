@@ -111,7 +111,9 @@ export const GESTURES: readonly GestureGroup[] = [
     gestures: [
       { does: 'Calculate', hand: '41-1.2   3*25   1/3in', keys: '+1 adds, −5 is a value' },
       { does: 'Take it, or leave it', hand: 'Leave the field', keys: 'Enter; Escape restores' },
-      { does: 'Step', hand: '− and + beside it', keys: '↑ ↓, Shift ten times' },
+      { does: 'Step', hand: '− and + beside it', keys: '↑ ↓; Page ten times, Alt a tenth' },
+      { does: 'Swap what takes up the change', hand: 'Shift and − or +', keys: 'Shift and Enter, ↑ or ↓' },
+      { does: 'Step back through the sketch', hand: '', keys: 'Ctrl+Z, when nothing is typed' },
     ],
   },
 ];

@@ -22,13 +22,15 @@ export interface NumberFieldProps {
   readonly allowInfinity?: boolean;
   /** How far an arrow key or a button goes, in `unit`. */
   readonly step?: number;
-  /** Makes the change; answers with one sentence when it is refused. */
-  readonly onCommit: (value: number | null) => string | null;
+  /** Makes the change, with Shift by its other rule; answers with one sentence when it is refused. */
+  readonly onCommit: (value: number | null, shift: boolean) => string | null;
   /** Shows the change while the arrow keys step; without it every step is committed. */
-  readonly onPreview?: (value: number) => string | null;
+  readonly onPreview?: (value: number, shift: boolean) => string | null;
   /** Puts back what was there before the first preview. */
   readonly onCancel?: () => void;
   readonly hint?: ReactNode;
+  /** What the tooltip says. */
+  readonly title?: string | undefined;
   readonly aside?: ReactNode;
   readonly disabled?: boolean;
   readonly autoFocus?: boolean;
@@ -45,9 +47,23 @@ const STEPS: Readonly<Record<EntryUnit, number>> = {
   '': 0.1,
 };
 
+/** How many steps a key goes. */
+const KEY_STEPS: Readonly<Record<string, number>> = {
+  ArrowUp: 1,
+  ArrowDown: -1,
+  PageUp: 10,
+  PageDown: -10,
+};
+
+/** Goes so many steps from where the number stands. */
+type StepBy = (steps: number, shift: boolean) => void;
+
+const isUndo = (event: KeyboardEvent): boolean =>
+  (event.ctrlKey || event.metaKey) && !event.shiftKey && event.key.toLowerCase() === 'z';
+
 /**
- * One number: type freely, Enter or leaving commits, Escape restores, arrows step (Shift and Page × 10, Alt ÷ 10). It opens
- * with all stored digits, and a text left as it was changes nothing.
+ * One number: type freely, Enter or leaving commits, Escape restores, arrows step (Page × 10, Alt ÷ 10). Shift with Enter or a
+ * step is passed on. The field opens with all stored digits, and a text left as it was changes nothing.
  */
 export function NumberField(props: NumberFieldProps) {
   const { label, value, unit, digits, whenEmpty, onCommit, onPreview, onCancel } = props;
@@ -57,31 +73,35 @@ export function NumberField(props: NumberFieldProps) {
   const [draft, setDraft] = useState<string | null>(null);
   const [fault, setFault] = useState<string | null>(null);
   /** Where stepping by preview has got to; keys may come faster than the page renders. */
-  const stepped = useRef<number | null>(null);
+  const stepped = useRef<{ readonly value: number; readonly shift: boolean } | null>(null);
   const leaving = useRef(false);
   const pressed = useRef(false);
 
-  useLayoutEffect(() => {
-    if (editing) input.current?.select();
-  }, [editing]);
-
   const stored = value === null ? '' : formatEntry(value, unit);
+  const untouched = draft === null || draft === stored;
+
+  // What was not typed here is selected as a whole, so that typing replaces it.
+  // biome-ignore lint/correctness/useExhaustiveDependencies: also when another number comes to stand in the field
+  useLayoutEffect(() => {
+    if (editing && draft === null) input.current?.select();
+  }, [editing, draft, stored]);
+
   const quietText = value === null ? '' : formatNumber(fromBase(value, unit), digits);
   const text = editing ? (draft ?? stored) : quietText;
 
   /** Commits what stands in the field; false when it could not be. */
-  const settle = (): boolean => {
+  const settle = (shift = false): boolean => {
     const typed = draft?.trim() ?? stored;
     setFault(null);
     const reached = stepped.current;
     if (reached !== null && (draft === null || typed === stored)) {
       stepped.current = null;
-      return answered(onCommit(reached));
+      return answered(onCommit(reached.value, shift || reached.shift));
     }
     if (draft === null || typed === stored) return true;
-    if (typed === '' && whenEmpty !== undefined) return answered(onCommit(null));
+    if (typed === '' && whenEmpty !== undefined) return answered(onCommit(null, shift));
     const entry = parseEntry(typed, { unit, current: value, allowInfinity: props.allowInfinity ?? false });
-    return answered(entry.ok ? onCommit(entry.value) : entry.why);
+    return answered(entry.ok ? onCommit(entry.value, shift) : entry.why);
   };
 
   const answered = (sentence: string | null): boolean => {
@@ -90,14 +110,14 @@ export function NumberField(props: NumberFieldProps) {
     return sentence === null;
   };
 
-  const stepBy = (direction: 1 | -1, times: number) => {
-    const from = stepped.current ?? value;
+  const stepBy: StepBy = (steps, shift) => {
+    const from = stepped.current?.value ?? value;
     if (from === null || !Number.isFinite(from)) return;
     const step = toBase(props.step ?? STEPS[unit], unit);
-    const next = Number((from + direction * step * times).toPrecision(15));
+    const next = Number((from + step * steps).toPrecision(15));
     const previews = editing && onPreview !== undefined;
-    const refusal = previews ? onPreview(next) : onCommit(next);
-    if (previews && refusal === null) stepped.current = next;
+    const refusal = previews ? onPreview(next, shift) : onCommit(next, shift);
+    if (previews && refusal === null) stepped.current = { value: next, shift };
     setDraft(null);
     setFault(refusal);
   };
@@ -106,16 +126,16 @@ export function NumberField(props: NumberFieldProps) {
   latestStep.current = stepBy;
 
   const onKeyDown = (event: KeyboardEvent) => {
-    const up = event.key === 'ArrowUp' || event.key === 'PageUp';
-    const down = event.key === 'ArrowDown' || event.key === 'PageDown';
-    if (up || down) {
+    const steps = KEY_STEPS[event.key];
+    const undoesSteps = isUndo(event) && untouched && stepped.current !== null;
+    const restores = event.key === 'Escape' && (draft !== null || stepped.current !== null || fault !== null);
+    if (steps !== undefined) {
       event.preventDefault();
-      const tenfold = event.shiftKey || event.key.startsWith('Page');
-      stepBy(up ? 1 : -1, tenfold ? 10 : event.altKey ? 0.1 : 1);
+      stepBy(event.altKey ? steps / 10 : steps, event.shiftKey);
     } else if (event.key === 'Enter') {
       event.preventDefault();
-      if (settle()) requestAnimationFrame(() => input.current?.select());
-    } else if (event.key === 'Escape' && (draft !== null || stepped.current !== null || fault !== null)) {
+      if (settle(event.shiftKey)) input.current?.select();
+    } else if (restores || undoesSteps) {
       event.preventDefault();
       event.stopPropagation();
       if (stepped.current !== null) onCancel?.();
@@ -130,7 +150,8 @@ export function NumberField(props: NumberFieldProps) {
 
   const onBlur = () => {
     // A bad entry typed over a stepped value leaves the step as the last good one.
-    if (!leaving.current && !settle() && stepped.current !== null) onCommit(stepped.current);
+    if (!leaving.current && !settle() && stepped.current !== null)
+      onCommit(stepped.current.value, stepped.current.shift);
     leaving.current = false;
     stepped.current = null;
     setDraft(null);
@@ -159,6 +180,8 @@ export function NumberField(props: NumberFieldProps) {
         autoComplete="off"
         spellCheck={false}
         value={text}
+        title={props.title}
+        data-untouched={untouched || undefined}
         placeholder={whenEmpty ?? props.absence}
         disabled={props.disabled}
         aria-invalid={fault !== null}
@@ -194,7 +217,7 @@ export function NumberField(props: NumberFieldProps) {
 interface StepButtonsProps {
   readonly labelId: string;
   /** By reference, so that the buttons stay as they are while the number beside them changes. */
-  readonly stepBy: RefObject<(direction: 1 | -1, times: number) => void>;
+  readonly stepBy: RefObject<StepBy>;
 }
 
 /** The way to step without a keyboard; the arrow keys do the same, so the buttons are no tab stops. */
@@ -207,7 +230,7 @@ const StepButtons = memo(function StepButtons({ labelId, stepBy }: StepButtonsPr
       aria-label={name}
       aria-describedby={labelId}
       onPointerDown={(event) => event.preventDefault()}
-      onClick={(event) => stepBy.current(direction, event.shiftKey ? 10 : event.altKey ? 0.1 : 1)}
+      onClick={(event) => stepBy.current(event.altKey ? direction / 10 : direction, event.shiftKey)}
     >
       <Icon name={icon} />
     </button>

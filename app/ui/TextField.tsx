@@ -42,6 +42,7 @@ export function TextField(props: TextFieldProps) {
     value: draft ?? value,
     placeholder,
     autoComplete: 'off',
+    'data-untouched': draft === null || draft === value || undefined,
     'aria-describedby': fault ? `${id}-fault` : undefined,
     onChange: (event: { readonly target: { readonly value: string } }) => setDraft(event.target.value),
     onBlur: settle,

@@ -1,12 +1,12 @@
 import type { Edit, Sensor } from '../../../engine/index.ts';
 import { fixSensor, setImagePlane, setRegister, setSensor } from '../../../engine/index.ts';
-import { currentReading, useReading } from '../../live/reading.ts';
+import { currentReading, useReadingNow } from '../../live/reading.ts';
 import { applyEdit } from '../../store/sketchStore.ts';
 import type { Choice } from '../../ui/choices.tsx';
 import { Select } from '../../ui/choices.tsx';
 import { tryEdit } from '../edit.ts';
-import { gapPerPosition } from '../perPosition.ts';
-import { orWhy, SketchNumber } from '../SketchNumber.tsx';
+import { SketchNumber } from '../SketchNumber.tsx';
+import { ImageDistanceField } from './ImageDistanceField.tsx';
 
 type SensorForm = 'none' | 'sides' | 'diagonal';
 
@@ -21,7 +21,7 @@ const START = { widthMm: 8.8, heightMm: 6.6 } as const;
 
 /** Where the image is taken, how large the sensor is, and the mount in front of it. */
 export function SensorFields() {
-  const form = useReading(({ sketch }) => formOf(sketch.sensor));
+  const form = useReadingNow(({ sketch }) => formOf(sketch.sensor));
   return (
     <>
       <ImagePlaneFields />
@@ -70,9 +70,9 @@ export function SensorFields() {
 
 /** The image plane: behind the last part at the focus, or fixed. */
 function ImagePlaneFields() {
-  const last = useReading(({ sketch }) => sketch.parts.at(-1)?.id ?? null);
-  const follows = useReading(({ sketch }) => sketch.image === 'focus');
-  const canFix = useReading(({ analysis }) => analysis.conjugates.imageDistanceMm.ok);
+  const last = useReadingNow(({ sketch }) => sketch.parts.at(-1)?.id ?? null);
+  const follows = useReadingNow(({ sketch }) => sketch.image === 'focus');
+  const canFix = useReadingNow(({ analysis }) => analysis.conjugates.imageDistanceMm.ok);
   if (last === null) return null;
   const fixHere = () => {
     const { analysis } = currentReading();
@@ -81,18 +81,8 @@ function ImagePlaneFields() {
   };
   return (
     <>
-      <SketchNumber
-        label={follows ? 'Image behind' : 'Sensor behind'}
-        unit="length"
-        read={({ analysis }) => orWhy(analysis.conjugates.imagePlaneMm)}
-        edit={(value, { setting }) =>
-          (sketch) =>
-            fixSensor(sketch, value, setting.at)
-          }
-        {...(!follows && { perPosition: gapPerPosition(last) })}
-      />
+      <ImageDistanceField behind={last} />
       <p className="card-line">
-        {follows ? 'Follows the focus. ' : 'Fixed. '}
         {follows ? (
           <button type="button" className="card-link" disabled={!canFix} onClick={fixHere}>
             Fix here

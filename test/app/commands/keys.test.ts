@@ -67,13 +67,20 @@ describe('keys', () => {
     expect(means(press('z', ctrl), 'page')).toBe('Ctrl+Z');
   });
 
+  test('a field without typing leaves undo to the sketch, and nothing else', () => {
+    expect(means(press('z', ctrl), 'field')).toBe('Ctrl+Z');
+    expect(means(press('Z', { ...ctrl, shiftKey: true }), 'field')).toBe('Ctrl+Shift+Z');
+    expect(means(press('c', ctrl), 'field')).toBeNull();
+    for (const key of ['p', '.', '1', 'Escape', 'Delete']) expect(means(press(key), 'field')).toBeNull();
+  });
+
   test('copying text on the page stays the browser’s', () => {
     expect(means(press('c', ctrl), 'page')).toBeNull();
     expect(means(press('c', ctrl), 'drawing')).toBe('Ctrl+C');
   });
 
   test('saving works wherever the focus is', () => {
-    for (const place of ['drawing', 'page', 'text', 'sheet'] as const)
+    for (const place of ['drawing', 'page', 'text', 'field', 'sheet'] as const)
       expect(means(press('s', ctrl), place)).toBe('Ctrl+S');
   });
 
