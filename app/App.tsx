@@ -16,8 +16,8 @@ import { Drawers } from './page/Drawers.tsx';
 import { EmptySheet } from './page/EmptySheet.tsx';
 import { Sheets } from './page/Sheets.tsx';
 import { SidePanel } from './page/SidePanel.tsx';
-import type { Commands } from './panels/CommandButton.tsx';
 import { SummaryStrip } from './panels/SummaryStrip.tsx';
+import type { Commands } from './panels/useCommand.ts';
 import './ui/theme.css';
 import './page/page.css';
 import './App.css';
@@ -62,7 +62,7 @@ export function App({ groups, commands, services, board, onBoard }: AppProps) {
       <Drawers clipboard={services.clipboard} />
       <SidePanel commands={commands} />
       <BottomBar commands={commands} />
-      <Sheets groups={groups} services={services} />
+      <Sheets groups={groups} commands={commands} services={services} />
       <div id="voice" className="visually-hidden" aria-live="polite" />
     </div>
   );

@@ -41,14 +41,14 @@ export function partCommands(): CommandGroup {
         'Put the selected part one place to the left',
         ['['],
         reorder(-1),
-        () => oneSelected() !== null,
+        () => placeFor(-1) !== null,
       ),
       command(
         'later',
         'Put the selected part one place to the right',
         [']'],
         reorder(1),
-        () => oneSelected() !== null,
+        () => placeFor(1) !== null,
       ),
       command('tie', 'Tie the selected parts into a group', [], tie, () => selectedNow().length > 1),
       command(
@@ -100,16 +100,19 @@ function duplicateSelected(): void {
   addAndSelect((sketch) => duplicateParts(sketch, ids));
 }
 
-const oneSelected = (): PartId | null => {
+/** The one selected part and the place beside it, when there is one. */
+function placeFor(by: 1 | -1): { readonly id: PartId; readonly place: number } | null {
   const [id, another] = selectedNow();
-  return id !== undefined && another === undefined ? id : null;
-};
+  if (id === undefined || another !== undefined) return null;
+  const { parts } = sketchNow();
+  const place = parts.findIndex((part) => part.id === id) + by;
+  return parts[place] ? { id, place } : null;
+}
 
 /** The gaps stay where they are; the part changes places with its neighbour. */
 const reorder = (by: 1 | -1) => () => {
-  const id = oneSelected();
-  const index = sketchNow().parts.findIndex((part) => part.id === id);
-  if (id !== null) applyEdit((sketch) => reorderPart(sketch, id, index + by));
+  const to = placeFor(by);
+  if (to) applyEdit((sketch) => reorderPart(sketch, to.id, to.place));
 };
 
 function flip(): void {

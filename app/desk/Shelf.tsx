@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { useEffect, useRef, useState } from 'react';
 import { useStore } from 'zustand';
 import { sketchStore } from '../store/sketchStore.ts';
@@ -13,11 +14,13 @@ import './desk.css';
 
 interface ShelfProps {
   readonly desk: Desk;
+  /** The ways of the open sketch out of the browser. */
+  readonly ways: ReactNode;
   readonly onClose: () => void;
 }
 
 /** The sketches kept in this browser, the starting sketches, and the other ways to begin. */
-export function Shelf({ desk, onClose }: ShelfProps) {
+export function Shelf({ desk, ways, onClose }: ShelfProps) {
   useEffect(() => {
     void desk.shelf.look();
   }, [desk]);
@@ -35,6 +38,7 @@ export function Shelf({ desk, onClose }: ShelfProps) {
             The open sketch
           </h3>
           <Present desk={desk} />
+          <p className="shelf-ways">{ways}</p>
         </section>
         <section aria-labelledby="shelf-kept">
           <h3 id="shelf-kept" className="desk-head">

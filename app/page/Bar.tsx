@@ -1,9 +1,10 @@
 import { SaveMark } from '../desk/SaveMark.tsx';
 import { useReading } from '../live/reading.ts';
-import type { Commands } from '../panels/CommandButton.tsx';
+import { CommandButton } from '../panels/CommandButton.tsx';
 import { Scrubber } from '../panels/Scrubber.tsx';
+import type { Commands } from '../panels/useCommand.ts';
 import { setView } from '../store/viewStore.ts';
-import { CommandIcon, CommandWord } from './CommandIcon.tsx';
+import { CommandIcon } from './CommandIcon.tsx';
 
 interface BarProps {
   readonly commands: Commands;
@@ -33,10 +34,10 @@ export function Bar({ commands }: BarProps) {
         <Scrubber />
       </div>
       <span className="bar-end">
-        <CommandWord commands={commands} id="open" word="Open" />
-        <CommandWord commands={commands} id="save" word="Save" />
-        <CommandWord commands={commands} id="copyLink" word="Share" />
-        <CommandWord commands={commands} id="handOver" word="Hand over" strong />
+        <CommandButton commands={commands} id="open" word="Open" />
+        <CommandButton commands={commands} id="save" word="Save" />
+        <CommandButton commands={commands} id="copyLink" word="Share" />
+        <CommandButton commands={commands} id="handOver" word="Hand over" className="main-button" />
         <CommandIcon commands={commands} id="theme" icon="theme" />
         <CommandIcon commands={commands} id="help" icon="help" />
       </span>

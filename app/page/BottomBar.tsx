@@ -1,8 +1,8 @@
 import { useStore } from 'zustand';
-import type { Commands } from '../panels/CommandButton.tsx';
 import { PartCard } from '../panels/PartCard.tsx';
 import { Readouts } from '../panels/Readouts.tsx';
 import { SketchCard } from '../panels/SketchCard.tsx';
+import type { Commands } from '../panels/useCommand.ts';
 import { Warnings } from '../panels/Warnings.tsx';
 import { setView, type View, viewStore } from '../store/viewStore.ts';
 import { SheetDialog } from '../ui/SheetDialog.tsx';
@@ -47,8 +47,8 @@ export function BottomBar({ commands }: BottomBarProps) {
           <SheetDialog key={open.id} title={open.title} place="below" onClose={close}>
             {panel === 'readouts' && <Readouts />}
             {panel === 'part' && <PartCard commands={commands} />}
-            {panel === 'sketch' && <SketchCard />}
-            {panel === 'warnings' && <Warnings />}
+            {panel === 'sketch' && <SketchCard titled={false} />}
+            {panel === 'warnings' && <Warnings titled={false} />}
           </SheetDialog>
         </div>
       )}

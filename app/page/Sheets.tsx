@@ -6,24 +6,38 @@ import { RefusedFile } from '../desk/RefusedFile.tsx';
 import { Shelf } from '../desk/Shelf.tsx';
 import { sheetScale } from '../layout/sheetDrawing.ts';
 import { currentReading } from '../live/reading.ts';
+import { CommandButton } from '../panels/CommandButton.tsx';
+import type { Commands } from '../panels/useCommand.ts';
 import { setView, viewStore } from '../store/viewStore.ts';
 
 interface SheetsProps {
   readonly groups: readonly CommandGroup[];
+  readonly commands: Commands;
   readonly services: Services;
 }
 
 const close = () => setView({ sheet: null });
 
 /** The sheets that lie over the page, one at a time, and above them what a refused file is told. */
-export function Sheets({ groups, services }: SheetsProps) {
+export function Sheets({ groups, commands, services }: SheetsProps) {
   const sheet = useStore(viewStore, (view) => view.sheet);
   return (
     <>
       {sheet === 'help' && (
         <Help groups={groups} apple={/Mac|iPhone|iPad/.test(navigator.platform)} onClose={close} />
       )}
-      {sheet === 'shelf' && <Shelf desk={services.desk} onClose={close} />}
+      {sheet === 'shelf' && (
+        <Shelf
+          desk={services.desk}
+          ways={
+            <>
+              <CommandButton commands={commands} id="save" word="Save as a file" />
+              <CommandButton commands={commands} id="copyLink" word="Copy a link" />
+            </>
+          }
+          onClose={close}
+        />
+      )}
       {sheet === 'handOver' && (
         <HandOver
           drawSheet={services.drawSheet}

@@ -1,13 +1,13 @@
 import type { PartId } from '../../engine/index.ts';
-import { useReading } from '../live/reading.ts';
+import { useReadingNow } from '../live/reading.ts';
 import { selectedParts } from '../store/viewStore.ts';
-import type { Commands } from './CommandButton.tsx';
 import { OnePart } from './part/OnePart.tsx';
 import { SeveralParts } from './part/SeveralParts.tsx';
 import { FieldFields } from './sketch/FieldFields.tsx';
 import { MediumFields } from './sketch/MediumFields.tsx';
 import { ObjectDistanceField } from './sketch/ObjectDistanceField.tsx';
 import { SensorFields } from './sketch/SensorFields.tsx';
+import type { Commands } from './useCommand.ts';
 import './card.css';
 import './readouts.css';
 
@@ -20,8 +20,8 @@ interface PartCardProps {
 
 /** What is selected: one part, several, the object or the image; nothing when nothing is. */
 export function PartCard({ commands }: PartCardProps) {
-  const ids = useReading(({ sketch, view }) => selectedParts(sketch, view).join(SEPARATOR));
-  const end = useReading(({ view }) =>
+  const ids = useReadingNow(({ sketch, view }) => selectedParts(sketch, view).join(SEPARATOR));
+  const end = useReadingNow(({ view }) =>
     view.selection.find((selected) => selected === 'object' || selected === 'image'),
   );
   const parts = ids === '' ? [] : (ids.split(SEPARATOR) as PartId[]);

@@ -6,8 +6,13 @@ import type { ListedWarning } from './warningList.ts';
 import { listWarnings } from './warningList.ts';
 import './warnings.css';
 
+interface WarningsProps {
+  /** Whether they have a heading; where they stand in a sheet, that has one. */
+  readonly titled?: boolean;
+}
+
 /** What cannot be built and what should be looked at, over all positions; a press selects it and goes to its position. */
-export function Warnings() {
+export function Warnings({ titled = true }: WarningsProps) {
   const key = useReading(({ sketch, view }) =>
     listWarnings(sketch)
       .map((listed) => textOf(sketch, listed, view.unit))
@@ -19,10 +24,8 @@ export function Warnings() {
   } = currentReading();
   const list = key === '' ? [] : listWarnings(sketch);
   return (
-    <section className="panel warnings" aria-labelledby="warnings-title">
-      <h2 className="panel-title" id="warnings-title">
-        Warnings
-      </h2>
+    <section className="panel warnings" aria-label="Warnings">
+      {titled && <h2 className="panel-title">Warnings</h2>}
       {list.length === 0 ? (
         <p className="warnings-none">none</p>
       ) : (

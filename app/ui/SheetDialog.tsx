@@ -51,7 +51,7 @@ export function SheetDialog({ title, onClose, place = 'page', aside, children }:
       onClick={onPress}
     >
       <div className="sheet-dialog-body">
-        <header className="sheet-dialog-head">
+        <div className="sheet-dialog-head">
           <h2 id={id} className="sheet-dialog-title">
             {title}
           </h2>
@@ -59,7 +59,7 @@ export function SheetDialog({ title, onClose, place = 'page', aside, children }:
           <button type="button" className="icon-button" aria-label={`Close ${title}`} onClick={onClose}>
             <Icon name="close" />
           </button>
-        </header>
+        </div>
         <div className="sheet-dialog-content">{children}</div>
       </div>
     </dialog>

@@ -1,12 +1,12 @@
 import type { PartId } from '../../../engine/index.ts';
 import { renamePart, setNote, untie } from '../../../engine/index.ts';
-import { useReading } from '../../live/reading.ts';
+import { useReadingNow } from '../../live/reading.ts';
 import { applyEdit } from '../../store/sketchStore.ts';
 import { TextField } from '../../ui/TextField.tsx';
-import type { Commands } from '../CommandButton.tsx';
 import { CommandRow } from '../CommandButton.tsx';
 import { tryEdit } from '../edit.ts';
 import { partName } from '../names.ts';
+import type { Commands } from '../useCommand.ts';
 import { GlassFields } from './GlassFields.tsx';
 import { LightThrough } from './LightThrough.tsx';
 import { PlaceFields } from './PlaceFields.tsx';
@@ -23,7 +23,7 @@ interface OnePartProps {
 
 /** Everything about one selected part. */
 export function OnePart({ id, commands }: OnePartProps) {
-  const kind = useReading((reading) => partIn(reading, id)?.kind);
+  const kind = useReadingNow((reading) => partIn(reading, id)?.kind);
   return (
     <>
       <PartHead id={id} />
@@ -37,6 +37,7 @@ export function OnePart({ id, commands }: OnePartProps) {
       <PartTexts id={id} />
       <TiedIn id={id} />
       <CommandRow commands={commands} row={kind === 'thin' ? [FLIP_SIGN, ...ACTIONS] : ACTIONS} />
+      <CommandRow commands={commands} row={ORDER} />
     </>
   );
 }
@@ -46,12 +47,16 @@ const ACTIONS = [
   ['duplicate', 'Duplicate'],
   ['delete', 'Delete'],
 ] as const;
+const ORDER = [
+  ['earlier', 'One place left'],
+  ['later', 'One place right'],
+] as const;
 
 const KIND_WORDS = { thin: 'thin element', stop: 'stop', plate: 'flat plate' } as const;
 
 function PartHead({ id }: { readonly id: PartId }) {
-  const name = useReading(({ sketch }) => partName(sketch, id));
-  const kind = useReading((reading) => {
+  const name = useReadingNow(({ sketch }) => partName(sketch, id));
+  const kind = useReadingNow((reading) => {
     const part = partIn(reading, id);
     if (part?.kind !== 'thin') return part ? KIND_WORDS[part.kind] : '';
     return part.focalLengthMm > 0 ? 'positive, thin' : 'negative, thin';
@@ -67,8 +72,8 @@ function PartHead({ id }: { readonly id: PartId }) {
 }
 
 function PartTexts({ id }: { readonly id: PartId }) {
-  const name = useReading((reading) => partIn(reading, id)?.name ?? '');
-  const note = useReading((reading) => partIn(reading, id)?.note ?? '');
+  const name = useReadingNow((reading) => partIn(reading, id)?.name ?? '');
+  const note = useReadingNow((reading) => partIn(reading, id)?.note ?? '');
   return (
     <>
       <TextField
@@ -87,7 +92,7 @@ function PartTexts({ id }: { readonly id: PartId }) {
 }
 
 function TiedIn({ id }: { readonly id: PartId }) {
-  const group = useReading(({ sketch }) => sketch.groups.find(({ partIds }) => partIds.includes(id)));
+  const group = useReadingNow(({ sketch }) => sketch.groups.find(({ partIds }) => partIds.includes(id)));
   if (!group) return null;
   return (
     <p className="card-line">

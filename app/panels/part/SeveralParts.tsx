@@ -2,14 +2,14 @@ import { useState } from 'react';
 import type { PartId, Quantity } from '../../../engine/index.ts';
 import { isZeroPower, none, scaleParts, some, systemMatrix, tieParts } from '../../../engine/index.ts';
 import type { Reading } from '../../live/reading.ts';
-import { useReading } from '../../live/reading.ts';
+import { useReadingNow } from '../../live/reading.ts';
 import { TextField } from '../../ui/TextField.tsx';
-import type { Commands } from '../CommandButton.tsx';
 import { CommandRow } from '../CommandButton.tsx';
 import { tryEdit } from '../edit.ts';
 import { partName } from '../names.ts';
 import { orWhy, SketchNumber } from '../SketchNumber.tsx';
 import { KEEPS_SIGN, ScaleFactorField } from '../sketch/ScaleFactorField.tsx';
+import type { Commands } from '../useCommand.ts';
 
 const ACTIONS = [
   ['untie', 'Untie'],
@@ -25,7 +25,7 @@ interface SeveralPartsProps {
 
 /** What can be done to several selected parts at once. */
 export function SeveralParts({ ids, commands }: SeveralPartsProps) {
-  const names = useReading(({ sketch }) => ids.map((id) => partName(sketch, id)).join(', '));
+  const names = useReadingNow(({ sketch }) => ids.map((id) => partName(sketch, id)).join(', '));
   return (
     <>
       <h2 className="panel-title">{ids.length} parts</h2>
@@ -62,7 +62,7 @@ function focalLengthTogether({ analysis: { train }, sketch }: Reading, ids: read
 }
 
 function TieField({ ids }: { readonly ids: readonly PartId[] }) {
-  const group = useReading(({ sketch }) =>
+  const group = useReadingNow(({ sketch }) =>
     sketch.groups.find(({ partIds }) => ids.every((id) => partIds.includes(id))),
   );
   const [name, setName] = useState('group');

@@ -174,6 +174,20 @@ describe('commands', () => {
     expect(selection()).toEqual([]);
   });
 
+  test('a part changes places with its neighbour, and stops at the ends', async () => {
+    const [a, b, c] = await threeElements();
+    select(a);
+    expect(await run('earlier')).toBe(false);
+    expect(await run('later')).toBe(true);
+    expect(ids()).toEqual([b, a, c]);
+    expect(gaps()).toEqual([10, 20, 30]);
+    expect(await run('later')).toBe(true);
+    expect(await run('later')).toBe(false);
+    expect(ids()).toEqual([b, c, a]);
+    select(a, b);
+    expect(await run('earlier')).toBe(false);
+  });
+
   test('duplicating selects the copies, undo takes them away in one step', async () => {
     const [a, b] = await threeElements();
     const before = sketch();

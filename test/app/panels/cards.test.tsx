@@ -1,7 +1,6 @@
 import type { ReactElement } from 'react';
 import { renderToString } from 'react-dom/server';
 import { beforeEach, describe, expect, it, vi } from 'vitest';
-import type * as reading from '../../../app/live/reading.ts';
 import { Ledger } from '../../../app/panels/Ledger.tsx';
 import { PartCard } from '../../../app/panels/PartCard.tsx';
 import { Positions } from '../../../app/panels/Positions.tsx';
@@ -19,11 +18,6 @@ import { insertPart, newPlate, newStop, setSemiDiameter, settingAt } from '../..
 import { inspectionZoom, MIDDLE, WIDE } from '../../engine/demo.ts';
 import { afocal, empty, single } from './sketches.ts';
 
-// A server has no frames to wait for: what is read is what stands now.
-vi.mock('../../../app/live/reading.ts', async (load) => {
-  const real = await load<typeof reading>();
-  return { ...real, useReading: <T,>(read: (now: reading.Reading) => T) => read(real.currentReading()) };
-});
 vi.stubGlobal('requestAnimationFrame', () => 0);
 
 const NO_COMMANDS = new Map();
@@ -158,7 +152,18 @@ describe('the selected part', () => {
 });
 
 describe('the card of the sketch', () => {
-  const OPEN = ['Title and notes', 'Lines and allowances', 'Drawn', 'Scale the sketch'];
+  const OPEN = [
+    'Zoom and focus positions',
+    'Title and notes',
+    'Lines and allowances',
+    'Drawn',
+    'Scale the sketch',
+  ];
+
+  it('adds a position to a sketch with one', () => {
+    setView({ foldedGroups: ['sketch: Zoom and focus positions'] });
+    expect(textOf(show(single(), <SketchCard />))).toContain('Add position');
+  });
 
   it.each([
     ['the inspection zoom', inspectionZoom()],
@@ -185,6 +190,12 @@ describe('the other panels', () => {
 
   it('offer a first position to a sketch with one', () => {
     expect(textOf(show(single(), <Scrubber />)).trim()).toBe('+ position');
+  });
+
+  it('leave their heading to a sheet that has one', () => {
+    expect(textOf(show(inspectionZoom(), <Warnings titled={false} />)).trim()).toBe('none');
+    expect(show(single(), <SketchCard titled={false} />)).not.toContain('<h2');
+    expect(show(single(), <SketchCard />)).toMatch(/<h2[^>]*>Sketch<\/h2>/);
   });
 
   it('list the positions with their names', () => {
