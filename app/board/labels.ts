@@ -16,6 +16,11 @@ export interface Box {
   readonly heightPx: number;
 }
 
+interface Point {
+  readonly xPx: number;
+  readonly yPx: number;
+}
+
 export interface LabelWish {
   readonly id: string;
   /** The point that the label names. */
@@ -27,6 +32,8 @@ export interface LabelWish {
   readonly priority: number;
   /** Sides in the order they are liked; at least one. */
   readonly sides: readonly Side[];
+  /** Further points that name the same thing as well, in the order they are liked, with sides of their own where they differ. */
+  readonly otherwise?: readonly (Point & { readonly sides?: readonly Side[] })[];
   /** Px between the point and the label. Default 4. */
   readonly distancePx?: number;
 }
@@ -34,9 +41,11 @@ export interface LabelWish {
 export interface LabelPlace extends Box {
   readonly id: string;
   readonly side: Side;
-  /** How many label heights further out than wished: 0 beside the point, more needs a leader. */
+  /** How many rows of labels further out than wished: 0 beside the point, more needs a leader. */
   readonly step: number;
-  /** No free place was found; the label stands where it covers least. */
+  /** Which of the wish's points it stands at: 0 its own, then the others. */
+  readonly point: number;
+  /** No free place was found: it would cover another label, so it is better left out. */
   readonly crowded: boolean;
 }
 
@@ -45,6 +54,8 @@ export interface LabelRoom {
   readonly bounds: Box;
   /** Boxes that labels keep clear of. */
   readonly obstacles?: readonly Box[];
+  /** Boxes that labels would rather not cover. */
+  readonly lines?: readonly Box[];
   /** Places of the last time, needed for `frozen`. */
   readonly former?: readonly LabelPlace[];
   /** Ids that keep their side and step of the last time: hovered, pressed or focused. */
@@ -53,12 +64,14 @@ export interface LabelRoom {
   readonly apartPx?: number;
 }
 
-/** How far out a label may be moved, in label heights. */
-const STEPS = [0, 1, 2];
+/** How far out a label may be moved, in rows of labels. */
+const STEPS = [0, 1, 2, 3];
+/** What a place costs: each side and point down the list, each step out, and each line covered. */
+const COST = { side: 1, point: 5, line: 8, step: 20 };
 
 /**
- * A place for every wish, in the order of the wishes: by falling priority each label takes the first of its sides,
- * then of its further steps, that is free. Frozen labels keep their side and are placed before all others.
+ * A place for every wish, in the order of the wishes: by falling priority each label takes the place that it likes best among those
+ * that are free. Frozen labels come before all others and keep their side while it is free; labels without a free place take none.
  */
 export function placeLabels(wishes: readonly LabelWish[], room: LabelRoom): readonly LabelPlace[] {
   const former = new Map((room.former ?? []).map((place) => [place.id, place]));
@@ -70,10 +83,11 @@ export function placeLabels(wishes: readonly LabelWish[], room: LabelRoom): read
   const taken: Box[] = [...(room.obstacles ?? [])];
   const placed = new Map<string, LabelPlace>();
   for (const wish of order) {
-    const kept = frozen(wish);
-    const place = kept ? placeAt(wish, kept.side, kept.step) : freePlace(wish, taken, room);
+    const before = frozen(wish);
+    const kept = before && placeAt(wish, before, apartOf(room));
+    const place = kept && isFree(kept, taken, room) ? kept : freePlace(wish, taken, room);
     placed.set(wish.id, place);
-    taken.push(place);
+    if (!place.crowded) taken.push(place);
   }
   return wishes.map((wish) => placed.get(wish.id) as LabelPlace);
 }
@@ -84,42 +98,61 @@ export function overlaps(a: Box, b: Box, apartPx = 0): boolean {
 }
 
 function freePlace(wish: LabelWish, taken: readonly Box[], room: LabelRoom): LabelPlace {
-  const apart = room.apartPx ?? 2;
   let best: LabelPlace | null = null;
   let least = Number.POSITIVE_INFINITY;
   for (const step of STEPS) {
-    for (const side of wish.sides) {
-      const place = placeAt(wish, side, step);
-      let cost = outsideArea(place, room.bounds);
-      for (const box of taken) cost += sharedArea(place, box, apart);
-      if (cost <= DUST) return place;
-      if (cost < least) {
+    for (let point = 0; point <= (wish.otherwise?.length ?? 0); point++) {
+      for (const [rank, side] of sidesAt(wish, point).entries()) {
+        const base = step * COST.step + point * COST.point + rank * COST.side;
+        if (base >= least) continue;
+        const place = placeAt(wish, { side, step, point }, apartOf(room));
+        const lines = (room.lines ?? []).filter((line) => overlaps(place, line, LINE_APART_PX)).length;
+        const cost = base + lines * COST.line;
+        if (cost >= least || !isFree(place, taken, room)) continue;
         best = place;
         least = cost;
       }
     }
   }
-  return { ...(best ?? placeAt(wish, 'above', 0)), crowded: true };
+  return (
+    best ?? { ...placeAt(wish, { side: wish.sides[0] ?? 'above', step: 0, point: 0 }, 0), crowded: true }
+  );
+}
+
+const apartOf = (room: LabelRoom): number => room.apartPx ?? 2;
+
+const sidesAt = ({ sides, otherwise }: LabelWish, point: number): readonly Side[] =>
+  (point > 0 ? otherwise?.[point - 1]?.sides : undefined) ?? sides;
+
+function isFree(place: Box, taken: readonly Box[], room: LabelRoom): boolean {
+  const apartPx = room.apartPx ?? 2;
+  return (
+    outsideArea(place, room.bounds) <= DUST && !taken.some((box) => sharedArea(place, box, apartPx) > DUST)
+  );
 }
 
 /** Area (px²) below which rounding, not a label, is what overlaps. */
 const DUST = 1e-6;
+const LINE_APART_PX = 4;
 
-function placeAt(wish: LabelWish, side: Side, step: number): LabelPlace {
+type Stand = Pick<LabelPlace, 'side' | 'step' | 'point'>;
+
+function placeAt(wish: LabelWish, { side, step, point }: Stand, apartPx: number): LabelPlace {
   const { widthPx, heightPx } = wish;
-  const out = (wish.distancePx ?? 4) + step * heightPx;
+  const from = (point > 0 ? wish.otherwise?.[point - 1] : undefined) ?? wish;
+  const out = (wish.distancePx ?? 4) + step * (heightPx + apartPx);
   const level = side === 'left' || side === 'right';
   const xPx = side.endsWith('left')
-    ? wish.xPx - widthPx - (level ? out : 0)
+    ? from.xPx - widthPx - (level ? out : 0)
     : side.endsWith('right')
-      ? wish.xPx + (level ? out : 0)
-      : wish.xPx - widthPx / 2;
+      ? from.xPx + (level ? out : 0)
+      : from.xPx - widthPx / 2;
   const yPx = level
-    ? wish.yPx - heightPx / 2
+    ? from.yPx - heightPx / 2
     : side.startsWith('above')
-      ? wish.yPx - out - heightPx
-      : wish.yPx + out;
-  return { id: wish.id, xPx, yPx, widthPx, heightPx, side, step, crowded: false };
+      ? from.yPx - out - heightPx
+      : from.yPx + out;
+  return { id: wish.id, xPx, yPx, widthPx, heightPx, side, step, point, crowded: false };
 }
 
 function sharedArea(a: Box, b: Box, apartPx: number): number {

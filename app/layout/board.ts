@@ -12,7 +12,7 @@ import { createSurface } from '../board/surface.ts';
 import type { Fold, Viewport } from '../board/viewport.ts';
 import { panBy, stretchBy, xOf, zOf, zoomAbout } from '../board/viewport.ts';
 import type { Handle } from '../drawing/handle.ts';
-import { labelHandles } from '../drawing/handles/labels.ts';
+import { labelHandles, labelOf } from '../drawing/handles/labels.ts';
 import type { Scene } from '../drawing/scene.ts';
 import { frameLoop } from '../live/frame.ts';
 import { currentReading, onReading } from '../live/reading.ts';
@@ -184,9 +184,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     const now = picture;
     if (!now) return;
     paint('parts', (pen) => {
-      const still = state.dragging || state.hover || state.focus;
-      const frozen = still ? new Set(labelPlaces.map(({ id }) => id)) : NONE;
-      labelPlaces = paintParts(pen, now, state.hover, labelPlaces, frozen);
+      labelPlaces = paintParts(pen, now, state.hover, labelPlaces, frozenLabels(state, labelPlaces));
     });
     labelGrips = labelHandles(now.sight, labelPlaces);
     paint('overlay', (pen) => overlayLayer(pen, now.handles, now.view, now.plan.topPx, state));
@@ -243,6 +241,16 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
       surface.destroy();
     },
   };
+}
+
+/** Under a drag all labels keep their sides; else the one that is pointed at, and the one whose grip has the focus. */
+function frozenLabels(
+  { dragging, hover, focus }: HandState,
+  places: readonly LabelPlace[],
+): ReadonlySet<string> {
+  if (dragging) return new Set(places.map(({ id }) => id));
+  const held = [hover, focus].flatMap((id) => (id === null ? [] : (labelOf(id) ?? [])));
+  return held.length === 0 ? NONE : new Set(held);
 }
 
 /** Whether a sketch is one that undo and redo lead to, so that the present one came of it by edits. */

@@ -1,12 +1,15 @@
 import type { LabelPlace } from '../board/labels.ts';
 import type { Pen } from '../board/pen.ts';
-import { endsLayer, scaleLayer } from '../drawing/layers/ends.ts';
+import { endsLayer, scaleBox, scaleLayer } from '../drawing/layers/ends.ts';
 import { labelsLayer } from '../drawing/layers/labels.ts';
 import { marksLayer } from '../drawing/layers/marks.ts';
 import { glassLayer, partsLayer } from '../drawing/layers/parts.ts';
 import { raysLayer } from '../drawing/layers/rays.ts';
 import { extensionLines, ribbonLayer } from '../ribbon/layer.ts';
 import type { Picture } from './picture.ts';
+
+/** The scale bar stands this far above the ribbon, px. */
+const SCALE_ABOVE_PX = 26;
 
 /** Draws glass, rays and marks, the part of the picture that changes with every move. */
 export function paintRays(pen: Pen, { scene, view, plan }: Picture): void {
@@ -29,7 +32,9 @@ export function paintParts(
   const hoveredPart = hovered?.startsWith('part:') ? hovered.slice('part:'.length) : null;
   endsLayer(pen, scene, view);
   partsLayer(pen, scene, view, hoveredPart);
-  scaleLayer(pen, view, reading.view.unit, view.heightPx - 26);
+  const { unit } = reading.view;
+  const scaleBottomPx = view.heightPx - SCALE_ABOVE_PX;
+  scaleLayer(pen, view, unit, scaleBottomPx);
   ribbonLayer(pen, plan, view, hovered);
-  return labelsLayer(pen, labels, view, former, frozen);
+  return labelsLayer(pen, labels, scene, view, [scaleBox(view, unit, scaleBottomPx)], former, frozen);
 }

@@ -37,3 +37,13 @@ export function labelHandles(sight: Sight, places: readonly LabelPlace[]): reado
 /** The grip that types what a label says; null when the grip is no label. */
 export const typedByLabel = (handleId: string): string | null =>
   handleId.startsWith(PREFIX) ? `focal:${handleId.slice(PREFIX.length)}:rear` : null;
+
+/** The label of what a grip belongs to: it stays where it is while the grip is pointed at or has the focus; null without. */
+export function labelOf(handleId: string): string | null {
+  const [kind, of] = handleId.split(':');
+  if (kind === 'object' || kind === 'image') return kind;
+  if (kind === 'field') return 'image';
+  return of !== undefined && PART_GRIPS.has(kind ?? '') ? `part:${of}` : null;
+}
+
+const PART_GRIPS: ReadonlySet<string> = new Set(['part', 'label', 'focal', 'rim', 'thickness', 'tick']);

@@ -1,4 +1,5 @@
 import { scaleBar } from '../../board/fit.ts';
+import type { Box } from '../../board/labels.ts';
 import type { Pen } from '../../board/pen.ts';
 import { segment } from '../../board/pen.ts';
 import type { Viewport } from '../../board/viewport.ts';
@@ -78,16 +79,31 @@ function image(pen: Pen, scene: Scene, view: Viewport): void {
   segment(pen, x, yOf(view, 0) - 6, x, yOf(view, 0) + 6, 'object');
 }
 
-/** The room that the scale bar and the heights' factor take at the lower right. */
-export const SCALE_PX = { width: 262, height: 62 } as const;
+/** Room for the words about the heights, and for the bar's length above it, px. */
+const HEIGHTS_PX = 118;
+const BAR_LABEL_PX = 28;
+const SCALE_RIGHT_PX = 24;
+
+const barOf = (view: Viewport, unit: LengthUnit) => scaleBar(view, 110, unit === 'in' ? MM_PER_INCH : 1);
+
+/** What the scale bar and the words beside it cover. */
+export function scaleBox(view: Viewport, unit: LengthUnit, bottomPx: number): Box {
+  const widthPx = barOf(view, unit).widthPx + HEIGHTS_PX + 8;
+  return {
+    xPx: view.widthPx - SCALE_RIGHT_PX - widthPx,
+    yPx: bottomPx - BAR_LABEL_PX,
+    widthPx: widthPx + SCALE_RIGHT_PX,
+    heightPx: BAR_LABEL_PX,
+  };
+}
 
 /** The scale bar with its unit, and how much taller heights are drawn, at the lower right. */
 export function scaleLayer(pen: Pen, view: Viewport, unit: LengthUnit, bottomPx: number): void {
-  const bar = scaleBar(view, 110, unit === 'in' ? MM_PER_INCH : 1);
-  const right = view.widthPx - 24;
+  const bar = barOf(view, unit);
+  const right = view.widthPx - SCALE_RIGHT_PX;
   const heights = Math.abs(view.stretch - 1) > 1e-9 ? `heights ×${plain(view.stretch)}` : 'heights to scale';
   pen.text(right, bottomPx, heights, 'label quiet', { align: 'right', baseline: 'bottom' });
-  const barRight = right - 118;
+  const barRight = right - HEIGHTS_PX;
   segment(pen, barRight - bar.widthPx, bottomPx - 4, barRight, bottomPx - 4, 'scale bar');
   for (const x of [barRight - bar.widthPx, barRight]) segment(pen, x, bottomPx - 8, x, bottomPx, 'scale bar');
   pen.text(barRight - bar.widthPx / 2, bottomPx - 10, `${plain(bar.length)} ${unit}`, 'label quiet', {

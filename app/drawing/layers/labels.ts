@@ -1,5 +1,5 @@
 import { partName } from '../../../engine/index.ts';
-import type { LabelPlace, LabelWish, Side } from '../../board/labels.ts';
+import type { Box, LabelPlace, LabelWish } from '../../board/labels.ts';
 import { placeLabels } from '../../board/labels.ts';
 import type { MeasureText } from '../../board/measure.ts';
 import { type Pen, segment } from '../../board/pen.ts';
@@ -9,19 +9,30 @@ import { xOf, yOf } from '../../board/viewport.ts';
 import type { LengthUnit } from '../../store/viewStore.ts';
 import { heightOnFirstStretch, type Scene, type ScenePart } from '../scene.ts';
 import { plainLength } from '../words.ts';
-import { objectTipPx, SCALE_PX } from './ends.ts';
+import { objectTipPx } from './ends.ts';
 
 /** A text on the drawing, before its place is found. */
 export interface Label extends LabelWish {
   readonly text: string;
   readonly style: TextStyle;
-  /** Screen y that a hairline runs down from to the label; null for none. */
-  readonly leaderFromYPx: number | null;
+  /** The hairline to the label: always, from either end of what is named; only to a label that had to move away; or never. */
+  readonly leader: { readonly topPx: number; readonly bottomPx: number } | 'when far' | null;
 }
+
+type Draft = Omit<Label, 'widthPx' | 'heightPx'>;
 
 const LINE_PX = 16;
 /** How far in from the left edge rays are named when they come from beyond it. */
 const NAME_AT_PX = 84;
+/** Where along a ray's first stretch its name may stand, in the order they are liked. */
+const NAMED_AT = [0, 0.2, 0.4, 0.6];
+/** Labels stay this far from the upper and lower edge, px. */
+const HIGHEST_PX = 32;
+const BESIDE_LINE_PX = 8;
+/** A leader begins this far from what is named, px. */
+const NEAR_PX = 4;
+/** Least distance between two labels, px. */
+const APART_PX = 4;
 
 /** Every text the drawing wants to show, the most needed first. */
 export function labelsOf(
@@ -30,169 +41,227 @@ export function labelsOf(
   unit: LengthUnit,
   measure: MeasureText,
 ): readonly Label[] {
-  const labels: Label[] = [];
-  const add = (
-    id: string,
-    text: string,
-    style: TextStyle,
-    xPx: number,
-    yPx: number,
-    sides: readonly Side[],
-    priority: number,
-    distancePx = 4,
-    leaderFromYPx: number | null = null,
-  ) =>
-    labels.push({
-      id,
-      text,
-      style,
-      xPx,
-      yPx,
-      sides,
-      priority,
-      distancePx,
-      leaderFromYPx,
-      widthPx: measure(text, style),
-      heightPx: LINE_PX,
-    });
+  return [
+    ...scene.parts.map((part) => partLabel(scene, part, view, unit)),
+    ...endLabels(scene, view, unit),
+    ...imageLabels(scene, view),
+    ...planeLabels(scene, view),
+    ...rayLabels(scene, view),
+  ].map((draft) => ({ ...draft, widthPx: measure(draft.text, draft.style), heightPx: LINE_PX }));
+}
 
-  for (const part of scene.parts) {
-    const x = xOf(view, (part.frontMm + part.rearMm) / 2);
-    const style = part.selected ? 'label strong' : 'label';
-    const top = yOf(view, Math.max(part.semiMm, part.carriesStop ? (scene.stop?.semiMm ?? 0) : 0));
-    add(
-      `part:${part.part.id}`,
-      partText(part, unit),
-      style,
-      x,
-      top,
-      ['above', 'above right', 'above left'],
-      9,
-      10,
-    );
-  }
+function partLabel(scene: Scene, part: ScenePart, view: Viewport, unit: LengthUnit): Draft {
+  const topMm = Math.max(part.semiMm, part.carriesStop ? (scene.stop?.semiMm ?? 0) : 0);
+  return {
+    id: `part:${part.part.id}`,
+    text: partText(part, unit),
+    style: part.selected ? 'label strong' : 'label',
+    xPx: xOf(view, (part.frontMm + part.rearMm) / 2),
+    yPx: Math.max(HIGHEST_PX, yOf(view, topMm)),
+    sides: ['above', 'above right', 'above left'],
+    priority: part.selected ? 10 : 9,
+    distancePx: 10,
+    leader: 'when far',
+  };
+}
+
+function endLabels(scene: Scene, view: Viewport, unit: LengthUnit): readonly Draft[] {
   const { stage } = scene;
-  if (stage.objectMm !== null) {
-    const x = xOf(view, stage.objectMm);
-    const tip = objectTipPx(view, scene.objectHeightMm ?? 0);
-    add(
-      'object',
-      objectText(scene, view, unit),
-      'label quiet',
-      x,
-      tip,
-      ['below right', 'right', 'above right'],
-      8,
-      10,
-    );
-  }
-  if (stage.objectMm === null)
-    add('object', 'object at infinity', 'label quiet', 8, yOf(view, 0), ['above right', 'below right'], 2);
+  const axisPx = yOf(view, 0);
+  const drafts: Draft[] = [];
+  if (stage.objectMm !== null)
+    drafts.push({
+      id: 'object',
+      text: objectText(scene, view, unit),
+      style: 'label quiet',
+      xPx: xOf(view, stage.objectMm) + BESIDE_LINE_PX,
+      yPx: objectTipPx(view, scene.objectHeightMm ?? 0),
+      sides: ['below right', 'right', 'above right'],
+      priority: 8,
+      leader: null,
+    });
+  else
+    drafts.push({
+      id: 'object',
+      text: 'object at infinity',
+      style: 'label quiet',
+      xPx: 8,
+      yPx: axisPx,
+      sides: ['above right', 'below right'],
+      priority: 2,
+      leader: null,
+    });
   if (scene.parts.length === 0)
-    add('image', 'image', 'label quiet', view.widthPx - 8, yOf(view, 0), ['above left'], 2);
+    drafts.push({
+      id: 'image',
+      text: 'image',
+      style: 'label quiet',
+      xPx: view.widthPx - 8,
+      yPx: axisPx,
+      sides: ['above left'],
+      priority: 2,
+      leader: null,
+    });
   if (stage.imageMm !== null) {
-    const x = xOf(view, stage.imageMm);
-    const bottom = Math.max(
-      yOf(view, -(scene.sensorSemiMm ?? 0)),
-      yOf(view, scene.imageHeightMm ?? 0),
-      yOf(view, 0) + 8,
-    );
-    add('image', scene.sensorFixed ? 'sensor' : 'image', 'label', x, bottom, ['below', 'below left'], 8, 6);
+    const semiMm = scene.sensorSemiMm ?? 0;
+    const bottomPx = Math.max(yOf(view, -semiMm), yOf(view, scene.imageHeightMm ?? 0), axisPx + 8);
+    drafts.push({
+      id: 'image',
+      text: scene.sensorFixed ? 'sensor' : 'image',
+      style: 'label',
+      xPx: xOf(view, stage.imageMm),
+      yPx: Math.min(view.heightPx - HIGHEST_PX, bottomPx),
+      sides: ['below', 'below left', 'below right'],
+      priority: 8,
+      distancePx: 6,
+      leader: 'when far',
+    });
   }
   if (scene.mountMm !== null)
-    add(
-      'mount',
-      'mount',
-      'label quiet',
-      xOf(view, scene.mountMm),
-      yOf(view, -scene.tallestMm),
-      ['below', 'above'],
-      4,
-    );
-  for (const image of scene.images) {
+    drafts.push({
+      id: 'mount',
+      text: 'mount',
+      style: 'label quiet',
+      xPx: xOf(view, scene.mountMm),
+      yPx: yOf(view, -scene.tallestMm),
+      sides: ['below', 'above'],
+      priority: 4,
+      leader: 'when far',
+    });
+  return drafts;
+}
+
+function imageLabels(scene: Scene, view: Viewport): readonly Draft[] {
+  return scene.images.flatMap((image): Draft[] => {
     const part = scene.parts[image.objectOf ?? image.partIndex];
-    if (!part) continue;
+    if (!part) return [];
     const name = partName(part.part, part.index);
-    const text = image.objectOf === null ? `image of ${name}` : `object for ${name}`;
-    const x = xOf(view, image.zMm);
-    const foot = yOf(view, Math.min(0, image.heightMm));
-    const y = Math.max(foot, yOf(view, -scene.tallestMm));
-    add(
-      `image:${image.partIndex}`,
-      text,
-      'label quiet',
-      x,
-      y,
-      ['below', 'below right', 'below left'],
-      5,
-      4,
-      foot,
-    );
-  }
-  for (const plane of scene.planes) {
-    const focus = plane.name.endsWith('focus');
-    const y = focus ? yOf(view, 0) + 4 : yOf(view, -(plane.semiMm ?? scene.tallestMm));
-    add(
-      plane.name,
-      plane.name,
-      'label quiet',
-      xOf(view, plane.zMm),
-      y,
-      ['below', 'below right', 'below left'],
-      3,
-      10,
-    );
-  }
-  const rayNames = [
-    ['marginal ray', 'label marginal ray', scene.marginal[0]],
-    ['chief ray', 'label chief ray', scene.chief],
+    const bottomPx = yOf(view, Math.min(0, image.heightMm));
+    const topPx = yOf(view, Math.max(0, image.heightMm));
+    const xPx = xOf(view, image.zMm);
+    const above = Math.min(topPx, yOf(view, scene.tallestMm));
+    return [
+      {
+        id: `image:${image.partIndex}`,
+        text: image.objectOf === null ? `image of ${name}` : `object for ${name}`,
+        style: 'label quiet',
+        xPx,
+        yPx: Math.max(bottomPx, yOf(view, -scene.tallestMm)),
+        sides: ['below', 'below right', 'below left'],
+        otherwise: [{ xPx, yPx: above, sides: ['above', 'above right', 'above left'] }],
+        priority: 5,
+        leader: { topPx, bottomPx },
+      },
+    ];
+  });
+}
+
+function planeLabels(scene: Scene, view: Viewport): readonly Draft[] {
+  return scene.planes.map((plane): Draft => {
+    const isFocus = plane.name.endsWith('focus');
+    const xPx = xOf(view, plane.zMm);
+    const semiMm = plane.semiMm ?? scene.tallestMm;
+    return {
+      id: plane.name,
+      text: plane.name,
+      style: 'label quiet',
+      xPx,
+      yPx: isFocus ? yOf(view, 0) + 4 : yOf(view, -semiMm),
+      sides: ['below', 'below right', 'below left'],
+      otherwise: [
+        {
+          xPx,
+          yPx: isFocus ? yOf(view, 0) - 4 : yOf(view, semiMm),
+          sides: ['above', 'above right', 'above left'],
+        },
+      ],
+      priority: 3,
+      distancePx: 10,
+      leader: 'when far',
+    };
+  });
+}
+
+/** The two rays that have names, named where they come into the sheet or further along in front of the first part. */
+function rayLabels(scene: Scene, view: Viewport): readonly Draft[] {
+  const rays = [
+    ['marginal ray', 'label marginal ray', scene.marginal[0], ['above right', 'below right']],
+    ['chief ray', 'label chief ray', scene.chief, ['below right', 'above right']],
   ] as const;
-  for (const [text, style, line] of rayNames) {
-    if (!line) continue;
-    const z = Math.max(line[0] ?? 0, view.fold?.toMm ?? Number.NEGATIVE_INFINITY, leftOf(view));
-    const y = heightOnFirstStretch(line, z);
-    const upward = text === 'marginal ray';
-    add(
-      text,
-      text,
-      style,
-      xOf(view, z) + 4,
-      yOf(view, y),
-      upward ? ['above right'] : ['below right', 'above right'],
-      6,
-    );
-  }
-  return labels;
+  return rays.flatMap(([text, style, line, sides]): Draft[] => {
+    if (!line) return [];
+    const startMm = Math.max(line[0] ?? 0, view.fold?.toMm ?? Number.NEGATIVE_INFINITY, leftOf(view));
+    const endMm = Math.max(startMm, line[2] ?? startMm);
+    const pointAt = (share: number) => {
+      const zMm = startMm + share * (endMm - startMm);
+      return { xPx: xOf(view, zMm) + 4, yPx: yOf(view, heightOnFirstStretch(line, zMm)) };
+    };
+    const [first = 0, ...further] = NAMED_AT;
+    const otherwise = further.map(pointAt);
+    return [{ id: text, text, style, ...pointAt(first), otherwise, sides, priority: 6, leader: null }];
+  });
 }
 
 /** Puts every label where it is free and writes it; returns the places, which the next frame may keep. */
 export function labelsLayer(
   pen: Pen,
   labels: readonly Label[],
+  scene: Scene,
   view: Viewport,
+  obstacles: readonly Box[],
   former: readonly LabelPlace[],
   frozen: ReadonlySet<string>,
 ): readonly LabelPlace[] {
   const bounds = { xPx: 4, yPx: 4, widthPx: view.widthPx - 8, heightPx: view.heightPx - 8 };
-  const inside = labels.filter(({ xPx }) => xPx >= 0 && xPx <= view.widthPx);
-  const scale = {
-    xPx: view.widthPx - SCALE_PX.width,
-    yPx: view.heightPx - SCALE_PX.height,
-    widthPx: SCALE_PX.width,
-    heightPx: SCALE_PX.height,
+  const inside = new Map(
+    labels.filter(({ xPx }) => xPx >= 0 && xPx <= view.widthPx).map((label) => [label.id, label]),
+  );
+  const room = {
+    bounds,
+    obstacles,
+    lines: uprights(scene, view),
+    apartPx: APART_PX,
+    former,
+    frozen,
   };
-  const places = placeLabels(inside, { bounds, obstacles: [scale], former, frozen });
-  for (const [i, place] of places.entries()) {
-    const label = inside[i];
+  const places = placeLabels([...inside.values()], room).filter(({ crowded }) => !crowded);
+  for (const place of places) {
+    const label = inside.get(place.id);
     if (!label) continue;
-    if (label.leaderFromYPx !== null)
-      segment(pen, label.xPx, label.leaderFromYPx, label.xPx, place.yPx, 'leader');
+    drawLeader(pen, label, place);
     pen.text(place.xPx, place.yPx + place.heightPx / 2, label.text, label.style, {
       align: 'left',
       baseline: 'middle',
     });
   }
   return places;
+}
+
+/** A hairline from what is named to a label that stands away from it. */
+function drawLeader(pen: Pen, label: Label, place: LabelPlace): void {
+  const { leader, xPx, otherwise } = label;
+  if (leader === null || (leader === 'when far' && place.step === 0)) return;
+  const isBelow = place.side.startsWith('below');
+  const pointPx = otherwise?.[place.point - 1]?.yPx ?? label.yPx;
+  const ends = leader === 'when far' ? { topPx: pointPx - NEAR_PX, bottomPx: pointPx + NEAR_PX } : leader;
+  const fromPx = isBelow ? ends.bottomPx : ends.topPx;
+  segment(pen, xPx, fromPx, xPx, isBelow ? place.yPx : place.yPx + place.heightPx, 'leader');
+}
+
+/** The upright lines of the drawing, which labels would rather not cross. */
+function uprights({ parts, stage, sensorSemiMm, objectHeightMm }: Scene, view: Viewport): readonly Box[] {
+  const upright = (zMm: number, oneYPx: number, otherYPx: number): Box => ({
+    xPx: xOf(view, zMm) - 1,
+    yPx: Math.min(oneYPx, otherYPx),
+    widthPx: 2,
+    heightPx: Math.abs(otherYPx - oneYPx),
+  });
+  const lines = parts.map(({ frontMm, semiMm }) => upright(frontMm, yOf(view, semiMm), yOf(view, -semiMm)));
+  if (stage.objectMm !== null)
+    lines.push(upright(stage.objectMm, yOf(view, 0), objectTipPx(view, objectHeightMm ?? 0)));
+  if (stage.imageMm !== null && sensorSemiMm !== null)
+    lines.push(upright(stage.imageMm, yOf(view, sensorSemiMm), yOf(view, -sensorSemiMm)));
+  return lines;
 }
 
 function partText({ part, index, carriesStop }: ScenePart, unit: LengthUnit): string {

@@ -73,6 +73,41 @@ describe('placing labels', () => {
     expect([before[0]?.side, alone[0]?.side]).toEqual(['below', 'below']);
   });
 
+  it('rather takes another side than cover a line, but stays beside its point', () => {
+    const line = { xPx: 99, yPx: 200, widthPx: 2, heightPx: 90 };
+    expect(placeLabels([wish('a', 100)], { bounds, lines: [line] })[0]).toMatchObject({
+      side: 'below',
+      step: 0,
+    });
+    const only = wish('a', 100, { sides: ['above'] });
+    expect(placeLabels([only], { bounds, lines: [line] })[0]).toMatchObject({ side: 'above', step: 0 });
+  });
+
+  it('goes to a further point where the first has no room', () => {
+    const obstacles = [{ xPx: 0, yPx: 200, widthPx: 300, heightPx: 300 }];
+    const spread = wish('a', 100, { otherwise: [{ xPx: 400, yPx: 100, sides: ['right'] }] });
+    expect(placeLabels([spread], { bounds, obstacles })[0]).toMatchObject({
+      point: 1,
+      side: 'right',
+      xPx: 404,
+    });
+  });
+
+  it('lets a frozen label dodge when it would cover another', () => {
+    const before = placeLabels([wish('a', 100), wish('b', 300)], { bounds });
+    const frozen = new Set(['a', 'b']);
+    const [one, other] = placeLabels([wish('a', 100), wish('b', 110)], { bounds, former: before, frozen });
+    expect([one?.side, other?.side]).toEqual(['above', 'below']);
+  });
+
+  it('gives what finds no room no room of others', () => {
+    const crowd = Array.from({ length: 30 }, (_, i) => wish(`${i}`, 100));
+    const placed = placeLabels(crowd, { bounds }).filter(({ crowded }) => !crowded);
+    expect(placed.length).toBeLessThan(crowd.length);
+    for (const [i, one] of placed.entries())
+      for (const other of placed.slice(i + 1)) expect(overlaps(one, other)).toBe(false);
+  });
+
   it('answers in the order of the wishes and never covers a label while there is room', () => {
     const spots = fc.uniqueArray(fc.integer({ min: 1, max: 12 }), { minLength: 1, maxLength: 12 });
     fc.assert(
