@@ -19,8 +19,7 @@ export function Hints() {
   const wanted = useReading((reading) => reading.view.hints);
   const empty = useReading(({ sketch }) => sketch.parts.length === 0);
   const [seen, setSeen] = useState<readonly HintId[]>([]);
-  // Whoever has changed something needs no hint any more.
-  useEffect(() => sketchStore.subscribe(endWithFirstEdit), []);
+  useEffect(() => sketchStore.subscribe(endWithFirstChange), []);
   if (!wanted || empty) return null;
 
   const dismiss = (id: HintId) => {
@@ -48,6 +47,8 @@ export function Hints() {
   );
 }
 
-function endWithFirstEdit({ past }: Document): void {
-  if (past.length > 0 && viewStore.getState().hints) setView({ hints: false });
+/** Whoever has changed something, or opened another sketch, needs no hint any more. */
+function endWithFirstChange({ sketch }: Document, before: Document): void {
+  const changed = sketch !== before.sketch && before.sketch.parts.length > 0;
+  if (changed && viewStore.getState().hints) setView({ hints: false });
 }
