@@ -1,4 +1,4 @@
-import type { LengthUnit } from '../store/viewStore.ts';
+import type { LengthUnit } from '../../engine/index.ts';
 
 interface TitleBlockProps {
   readonly title: string;

@@ -1,6 +1,5 @@
-import type { Sketch } from '../../engine/index.ts';
+import type { LengthUnit, Sketch } from '../../engine/index.ts';
 import { partName } from '../../engine/index.ts';
-import type { LengthUnit } from '../store/viewStore.ts';
 import { formatLength, formatNumber } from '../ui/format.ts';
 
 /** At most `digits` decimals, without trailing zeros. */

@@ -1,9 +1,8 @@
-import type { LedgerRow, PartId, Quantity } from '../../engine/index.ts';
+import type { LedgerRow, LengthUnit, PartId, Quantity } from '../../engine/index.ts';
 import type { Reading } from '../live/reading.ts';
 import { useReading, useReadingNow } from '../live/reading.ts';
 import { select, setView } from '../store/viewStore.ts';
 import { Checkbox } from '../ui/choices.tsx';
-import type { LengthUnit } from '../ui/format.ts';
 import { formatLength, formatNumber, formatOutcome } from '../ui/format.ts';
 import { partName } from './names.ts';
 import './tables.css';

@@ -1,5 +1,4 @@
-import type { LedgerRow, Quantity } from '../../engine/index.ts';
-import type { LengthUnit } from '../ui/format.ts';
+import type { LedgerRow, LengthUnit, Quantity } from '../../engine/index.ts';
 import { formatLength, formatNumber } from '../ui/format.ts';
 
 /** One part's ledger line in words: where its object and its image stand, real or virtual, and its magnification. */

@@ -1,4 +1,4 @@
-import type { LengthUnit } from '../ui/format.ts';
+import type { LengthUnit } from '../../engine/index.ts';
 import { formatLength, formatNumber } from '../ui/format.ts';
 
 /**

@@ -1,8 +1,7 @@
-import type { Analysis, RayOutcome, Sketch } from '../../engine/index.ts';
-import { heightInSpace, powerAt } from '../../engine/index.ts';
+import type { Analysis, LengthUnit, RayOutcome, Sketch } from '../../engine/index.ts';
+import { heightInSpace, MM_PER_INCH, powerAt } from '../../engine/index.ts';
 import { nameAt } from '../drawing/words.ts';
-import type { LengthUnit } from '../ui/format.ts';
-import { formatLength, formatNumber, MM_PER_INCH } from '../ui/format.ts';
+import { formatLength, formatNumber } from '../ui/format.ts';
 
 /** The trace sheet: quantities as rows, surfaces as columns between object and image. Cells are null where there is none. */
 export interface Worksheet {

@@ -1,11 +1,10 @@
 import { createStore } from 'zustand/vanilla';
-import type { Datum, PartId, PartKind, Setting, Sketch } from '../../engine/index.ts';
+import type { Datum, LengthUnit, PartId, PartKind, Setting, Sketch } from '../../engine/index.ts';
 
 /** What can be selected: parts by id, and the two ends of the axis. */
 export type Selected = PartId | 'object' | 'image';
 
 export type ThemeChoice = 'system' | 'paper' | 'night';
-export type LengthUnit = 'mm' | 'in';
 export type Drawer = 'ledger' | 'table' | 'trace';
 /** The sheets that lie over the page, one at a time. */
 export type Sheet = 'help' | 'handOver' | 'shelf' | 'starters';

@@ -1,5 +1,5 @@
 import type { Outcome } from '../../engine/index.ts';
-import { none, some } from '../../engine/index.ts';
+import { MM_PER_INCH, none, some } from '../../engine/index.ts';
 
 /** What a number field holds; the empty unit is a bare number. Values are stored in the base of each unit's family. */
 export type EntryUnit = 'mm' | 'in' | 'µm' | 'nm' | '°' | '%' | '1/m' | '';
@@ -26,10 +26,10 @@ const LENGTH: Family = {
     µm: 1e-3,
     um: 1e-3,
     nm: 1e-6,
-    in: 25.4,
-    inch: 25.4,
-    '"': 25.4,
-    '″': 25.4,
+    in: MM_PER_INCH,
+    inch: MM_PER_INCH,
+    '"': MM_PER_INCH,
+    '″': MM_PER_INCH,
   },
   example: '41.2, 41-1.2, 3/8 in or +0.5',
 };

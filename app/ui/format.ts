@@ -1,9 +1,6 @@
-import type { Outcome } from '../../engine/index.ts';
+import type { LengthUnit, Outcome } from '../../engine/index.ts';
+import { MM_PER_INCH } from '../../engine/index.ts';
 
-/** The units a length can be shown in. */
-export type LengthUnit = 'mm' | 'in';
-
-export const MM_PER_INCH = 25.4;
 const MINUS = '\u2212';
 /** From here on a fixed number of decimals only widens the column. */
 const POWER_OF_TEN_FROM = 1e7;

@@ -1,11 +1,11 @@
+import type { LengthUnit } from '../../../engine/index.ts';
+import { MM_PER_INCH } from '../../../engine/index.ts';
 import { scaleBar } from '../../board/fit.ts';
 import type { Box } from '../../board/labels.ts';
 import type { Pen } from '../../board/pen.ts';
 import { segment } from '../../board/pen.ts';
 import type { Viewport } from '../../board/viewport.ts';
 import { xOf, yOf } from '../../board/viewport.ts';
-import type { LengthUnit } from '../../store/viewStore.ts';
-import { MM_PER_INCH } from '../../ui/format.ts';
 import type { Scene } from '../scene.ts';
 import { plain } from '../words.ts';
 

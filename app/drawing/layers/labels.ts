@@ -1,3 +1,4 @@
+import type { LengthUnit } from '../../../engine/index.ts';
 import { partName } from '../../../engine/index.ts';
 import type { Box, LabelPlace, LabelWish } from '../../board/labels.ts';
 import { placeLabels } from '../../board/labels.ts';
@@ -6,10 +7,11 @@ import { type Pen, segment } from '../../board/pen.ts';
 import type { TextStyle } from '../../board/styles.ts';
 import type { Viewport } from '../../board/viewport.ts';
 import { xOf, yOf } from '../../board/viewport.ts';
-import type { LengthUnit } from '../../store/viewStore.ts';
+import { nameOf } from '../handles/marks.ts';
 import { heightOnFirstStretch, type Scene, type ScenePart } from '../scene.ts';
 import { plainLength } from '../words.ts';
 import { objectTipPx } from './ends.ts';
+import { FOCAL_STEM_PX, ownFocalPoints } from './marks.ts';
 
 /** A text on the drawing, before its place is found. */
 export interface Label extends LabelWish {
@@ -46,6 +48,7 @@ export function labelsOf(
     ...endLabels(scene, view, unit),
     ...imageLabels(scene, view),
     ...planeLabels(scene, view),
+    ...focalLabels(scene, view, unit),
     ...rayLabels(scene, view),
   ].map((draft) => ({ ...draft, widthPx: measure(draft.text, draft.style), heightPx: LINE_PX }));
 }
@@ -76,7 +79,7 @@ function endLabels(scene: Scene, view: Viewport, unit: LengthUnit): readonly Dra
       style: 'label quiet',
       xPx: xOf(view, stage.objectMm) + BESIDE_LINE_PX,
       yPx: objectTipPx(view, scene.objectHeightMm ?? 0),
-      sides: ['below right', 'right', 'above right'],
+      sides: ['right', 'above right', 'below right'],
       priority: 8,
       leader: null,
     });
@@ -133,9 +136,8 @@ function endLabels(scene: Scene, view: Viewport, unit: LengthUnit): readonly Dra
 
 function imageLabels(scene: Scene, view: Viewport): readonly Draft[] {
   return scene.images.flatMap((image): Draft[] => {
-    const part = scene.parts[image.objectOf ?? image.partIndex];
-    if (!part) return [];
-    const name = partName(part.part, part.index);
+    const text = nameOf(image, scene);
+    if (text === '') return [];
     const bottomPx = yOf(view, Math.min(0, image.heightMm));
     const topPx = yOf(view, Math.max(0, image.heightMm));
     const xPx = xOf(view, image.zMm);
@@ -143,7 +145,7 @@ function imageLabels(scene: Scene, view: Viewport): readonly Draft[] {
     return [
       {
         id: `image:${image.partIndex}`,
-        text: image.objectOf === null ? `image of ${name}` : `object for ${name}`,
+        text,
         style: 'label quiet',
         xPx,
         yPx: Math.max(bottomPx, yOf(view, -scene.tallestMm)),
@@ -180,6 +182,30 @@ function planeLabels(scene: Scene, view: Viewport): readonly Draft[] {
       leader: 'when far',
     };
   });
+}
+
+/** A focal point of a selected part that lies off the sheet is told at the edge. */
+function focalLabels(scene: Scene, view: Viewport, unit: LengthUnit): readonly Draft[] {
+  return scene.parts.flatMap((part) =>
+    ownFocalPoints(part, view)
+      .filter(({ isOff }) => isOff)
+      .map(
+        ({ end, xPx, focalLengthMm }): Draft => ({
+          id: `focal:${part.part.id}:${end}`,
+          text: `f ${plainLength(focalLengthMm, unit)}`,
+          style: 'label strong',
+          xPx,
+          yPx: yOf(view, 0) + FOCAL_STEM_PX,
+          sides:
+            xPx < view.widthPx / 2
+              ? ['right', 'below right', 'above right']
+              : ['left', 'below left', 'above left'],
+          priority: 7,
+          distancePx: 10,
+          leader: null,
+        }),
+      ),
+  );
 }
 
 /** The two rays that have names, named where they come into the sheet or further along in front of the first part. */
