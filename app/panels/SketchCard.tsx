@@ -3,6 +3,7 @@ import { Group } from '../ui/Group.tsx';
 import { useFolding } from './folding.ts';
 import { Positions } from './Positions.tsx';
 import { ApertureFields } from './sketch/ApertureFields.tsx';
+import { Caution } from './sketch/Caution.tsx';
 import { FieldFields } from './sketch/FieldFields.tsx';
 import { LinesFields } from './sketch/LinesFields.tsx';
 import { MediumFields } from './sketch/MediumFields.tsx';
@@ -27,6 +28,7 @@ const SECTIONS: readonly Section[] = [
       <>
         <ObjectDistanceField />
         <MediumFields label="Medium" where="object" />
+        <Caution />
       </>
     ),
   },

@@ -11,9 +11,10 @@ const LIGHT_CAUTION =
 
 /**
  * The caution that every hand-over of a layout for collimated light carries: where the object is at infinity, or the
- * layout afocal, at one of its positions. Null for all others.
+ * layout afocal, at one of its positions. Null for all others, and while there is no part.
  */
 export const cautionOf = (sketch: Sketch): string | null =>
+  sketch.parts.length > 0 &&
   sketch.positions.some((position) => {
     const setting = settingAt(position.id);
     return (

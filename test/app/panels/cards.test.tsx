@@ -174,6 +174,12 @@ describe('the card of the sketch', () => {
     expectSound(show(sketch, <SketchCard />));
   });
 
+  it('cautions where collimated light is taken in, and nowhere else', () => {
+    expect(textOf(show(afocal(), <SketchCard />))).toContain('laser safety officer');
+    expect(textOf(show(inspectionZoom(), <SketchCard />))).not.toContain('laser');
+    expect(textOf(show(empty(), <SketchCard />))).not.toContain('laser');
+  });
+
   it('says why there is no chief ray', () => {
     expect(textOf(show(single(), <SketchCard />))).toContain('no chief ray: no stop');
   });
