@@ -8,6 +8,8 @@ import { pictureOf, sceneOfReading } from './picture.ts';
 
 /** The size of the exported drawing, px. */
 const SIZE = { widthPx: 1180, heightPx: 520 };
+/** Where the position is named, from both edges, px. */
+const CORNER_PX = 20;
 
 /**
  * The dimensioned drawing of a reading on paper as an SVG text: the same layers as on screen, fitted to the parts, nothing selected.
@@ -22,6 +24,8 @@ export function sheetDrawing(reading: Reading, measure: MeasureText): string {
   const pen = svgPen({ ...SIZE, palette: PALETTES.paper, title, description: summaryOf(reading) });
   pen.group('rays', () => paintRays(pen, picture));
   pen.group('parts', () => paintParts(pen, picture, null, [], new Set()));
+  const where = positionWords(reading);
+  if (where !== '') pen.text(CORNER_PX, CORNER_PX, where, 'label', { baseline: 'top' });
   return pen.document();
 }
 
@@ -43,7 +47,13 @@ const withoutHand = ({ sketch, setting, view, analysis, warnings }: Reading): Re
   warnings,
 });
 
-function summaryOf({ sketch, setting }: Reading): string {
-  const position = sketch.positions.find(({ id }) => id === setting.at)?.name ?? '';
-  return `Layout of ${sketch.parts.length} parts${sketch.positions.length > 1 ? `, position ${position}` : ''}`;
+const summaryOf = (reading: Reading): string =>
+  [`Layout of ${reading.sketch.parts.length} parts`, positionWords(reading)].filter(Boolean).join(', ');
+
+/** At which of several positions the layout is drawn; empty when there is but one. */
+function positionWords({ sketch: { positions }, setting }: Reading): string {
+  if (positions.length === 1) return '';
+  const index = positions.findIndex(({ id }) => id === setting.at);
+  const [at, next] = [positions[index], positions[index + 1]];
+  return setting.toNext > 0 && next ? `between ${at?.name} and ${next.name}` : `drawn at ${at?.name}`;
 }

@@ -4,7 +4,8 @@ import { roughMeasure } from '../../../app/board/measure.ts';
 import { sheetDrawing, sheetScale } from '../../../app/layout/sheetDrawing.ts';
 import type { View } from '../../../app/store/viewStore.ts';
 import type { PartId, Sketch } from '../../../engine/index.ts';
-import { inspectionZoom } from '../../engine/demo.ts';
+import { emptySketch } from '../../../engine/index.ts';
+import { inspectionZoom, WIDE } from '../../engine/demo.ts';
 import { anySketch } from '../../engine/sketch/arbitrary.ts';
 import { ALL_SHOWN, AT_MIDDLE } from '../drawing/seen.ts';
 import { readingOf } from '../reading.ts';
@@ -45,7 +46,13 @@ describe('the drawing as a file', () => {
 
   it('has the title, and says which position it shows', () => {
     expect(demo).toContain('<title>Inspection zoom</title>');
-    expect(demo).toContain('<desc>Layout of 4 parts, position middle</desc>');
+    expect(demo).toContain('<desc>Layout of 4 parts, drawn at middle</desc>');
+    expect(demo).toContain('>drawn at middle</text>');
+    const between = drawingOf(inspectionZoom(), { setting: { at: WIDE, toNext: 0.5 } });
+    expect(between).toContain('>between wide and middle</text>');
+    const [first] = inspectionZoom().positions;
+    if (!first) throw new Error('the inspection zoom has positions');
+    expect(drawingOf({ ...emptySketch(), positions: [first] })).not.toContain('drawn at');
   });
 
   it('shows the dimensions and focal lengths that the screen shows', () => {
