@@ -187,7 +187,10 @@ function leftThePress(gesture: Pointing & Memory, input: Extract<Input, { on: 'm
   const { grip } = gesture;
   const press = pressOf({ ...gesture, xPx: gesture.pressXPx, yPx: gesture.pressYPx });
   const memory = { ...memoryOf(gesture), lastClick: null };
-  if (grip === null) return panned({ ...memory, ...press, at: 'panning' }, input);
+  if (grip === null || grip.fixed) {
+    const [next, effects] = panned({ ...memory, ...press, at: 'panning' }, input);
+    return [next, grip === null ? effects : [{ do: 'cancel', grip: grip.id }, ...effects]];
+  }
   const start: Dragging & Memory = {
     ...memory,
     ...press,

@@ -19,6 +19,8 @@ export interface Grip {
   readonly line: { readonly topPx: number; readonly bottomPx: number } | null;
   /** Half the width over which it can be taken, for a grip that is a text. Default 0. */
   readonly halfWidthPx?: number;
+  /** It can be pointed at and clicked, but a drag from it pans. */
+  readonly fixed?: true;
   /** CSS cursor over the grip. */
   readonly cursor: string;
   /** The grip's name for people, "second group, position". */

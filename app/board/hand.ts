@@ -44,6 +44,8 @@ export interface Wheel {
 export interface GripRef {
   readonly id: string;
   readonly cursor: string;
+  /** A drag from it pans. */
+  readonly fixed?: true;
 }
 
 /** What the hand acts on, at this moment. */

@@ -72,13 +72,17 @@ export function createHost(element: HTMLElement, client: HostClient): Host {
     { signal, passive: false },
   );
 
+  /** Space is the sheet's while the focus is on the sheet, on a grip of it, or nowhere. */
+  const isOurs = (target: EventTarget | null): boolean =>
+    target === element.ownerDocument.body || element.contains(target as Node | null);
+
   const onKey = (event: KeyboardEvent) => {
     if (givesUp(event) && gesture.at !== 'idle') {
       event.preventDefault();
       event.stopPropagation();
       feed({ on: 'escape' });
-    } else if (event.key === ' ' && (event.type === 'keyup' || event.target === element)) {
-      if (event.target === element) event.preventDefault();
+    } else if (event.key === ' ' && (event.type === 'keyup' || isOurs(event.target))) {
+      if (isOurs(event.target)) event.preventDefault();
       feed({ on: 'space', held: event.type === 'keydown' });
     } else feed({ on: 'modifiers', modifiers: modifiersOf(event) });
   };

@@ -59,3 +59,26 @@ export const plainMove = (edit: Edit, says: string): Move => ({ edit, says, caug
 
 /** What the drawing says instead of dragging when the scrubber stands between positions. */
 export const BETWEEN = 'Between positions nothing is stored here: add a position, or go to one.';
+
+/** A grip that says what something follows from when it is clicked, and does nothing else. */
+export const readOnly = (
+  id: string,
+  label: string,
+  why: string,
+  place: Pick<Handle, 'xPx' | 'yPx' | 'line'> & Pick<Grip, 'halfWidthPx'>,
+): Handle => ({
+  id,
+  order: 9,
+  fixed: true,
+  cursor: 'default',
+  label,
+  slider: null,
+  tabStop: false,
+  selects: null,
+  look: 'none',
+  drag: null,
+  step: null,
+  entry: null,
+  why,
+  ...place,
+});

@@ -1,6 +1,7 @@
 import type { LengthUnit, Sketch } from '../../engine/index.ts';
 import { partName } from '../../engine/index.ts';
 import { formatLength, formatNumber } from '../ui/format.ts';
+import type { Scene, SceneImage } from './scene.ts';
 
 /** At most `digits` decimals, without trailing zeros. */
 export const plain = (value: number, digits = 3): string => shortened(formatNumber(value, digits));
@@ -15,4 +16,12 @@ const shortened = (text: string): string => (text.includes('.') ? text.replace(/
 export function nameAt(sketch: Sketch, index: number): string {
   const part = sketch.parts[index];
   return part ? partName(part, index) : '';
+}
+
+/** What an image between the parts is called: by the part that forms it, or as the object of the part it lies behind. */
+export function imageName(image: SceneImage, { parts }: Scene): string {
+  const part = parts[image.objectOf ?? image.partIndex];
+  if (!part) return '';
+  const name = partName(part.part, part.index);
+  return image.objectOf === null ? `image of ${name}` : `object for ${name}`;
 }

@@ -3,7 +3,7 @@ import { canvasPen } from '../board/canvasPen.ts';
 import { keyStepMm } from '../board/fit.ts';
 import { createHost } from '../board/host.ts';
 import type { LabelPlace } from '../board/labels.ts';
-import { canvasMeasure } from '../board/measure.ts';
+import { canvasMeasure, roughMeasure } from '../board/measure.ts';
 import type { Pen } from '../board/pen.ts';
 import { type Mark, recorderPen } from '../board/recorderPen.ts';
 import { createSliderMirror } from '../board/sliderMirror.ts';
@@ -14,6 +14,7 @@ import { panBy, stretchBy, xOf, zOf, zoomAbout } from '../board/viewport.ts';
 import type { Handle } from '../drawing/handle.ts';
 import { labelHandles, labelOf } from '../drawing/handles/labels.ts';
 import type { Scene } from '../drawing/scene.ts';
+import { plainLength } from '../drawing/words.ts';
 import { frameLoop } from '../live/frame.ts';
 import { currentReading, onReading } from '../live/reading.ts';
 import type { Document } from '../store/document.ts';
@@ -21,7 +22,7 @@ import { sketchStore } from '../store/sketchStore.ts';
 import { type Selected, setView, viewStore } from '../store/viewStore.ts';
 import { cameraAt, fitLook, inPlace, type Look, type Size, settled, viewportOf } from './camera.ts';
 import { createHand, type Hand } from './hand.ts';
-import { type HandState, overlayLayer } from './overlay.ts';
+import { type HandState, IDLE_HAND, overlayLayer } from './overlay.ts';
 import { paintParts, paintRays } from './paint.ts';
 import { type Picture, pictureOf, sceneOfReading } from './picture.ts';
 import type { Spot } from './tray.ts';
@@ -87,7 +88,8 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
   /** The sketch and the board's size when the camera last came to rest. */
   let rested: { readonly sketch: Sketch; readonly size: Size } | null = null;
   let selected: readonly Selected[] = viewStore.getState().selection;
-  let state: HandState = { hover: null, focus: null, ring: false, dragging: null, dropXPx: null };
+  let words: readonly LabelPlace[] = [];
+  let state: HandState = IDLE_HAND;
 
   const grips = (): readonly Handle[] => [...(picture?.handles ?? []), ...labelGrips];
   const handleOf = (id: string | null): Handle | null => grips().find((handle) => handle.id === id) ?? null;
@@ -187,7 +189,12 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
       labelPlaces = paintParts(pen, now, state.hover, labelPlaces, frozenLabels(state, labelPlaces));
     });
     labelGrips = labelHandles(now.sight, labelPlaces);
-    paint('overlay', (pen) => overlayLayer(pen, now.handles, now.view, now.plan.topPx, state));
+    const step = plainLength(keyStepMm(now.view), 'mm');
+    if (step !== state.step) state = { ...state, step };
+    const room = { measure, labels: labelPlaces, former: words };
+    paint('overlay', (pen) => {
+      words = overlayLayer(pen, now.handles, now.view, now.plan.topPx, state, room);
+    });
   };
 
   const host = createHost(element, {
@@ -264,6 +271,7 @@ function recorded(picture: Picture | null, state: HandState): readonly Mark[] {
   pen.group('rays', () => paintRays(pen, picture));
   pen.group('parts', () => paintParts(pen, picture, null, [], NONE));
   const { handles, view, plan } = picture;
-  pen.group('overlay', () => overlayLayer(pen, handles, view, plan.topPx, state));
+  const room = { measure: roughMeasure, labels: [], former: [] };
+  pen.group('overlay', () => overlayLayer(pen, handles, view, plan.topPx, state, room));
   return pen.marks;
 }

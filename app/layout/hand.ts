@@ -65,7 +65,7 @@ export function createHand(board: HandBoard): Hand {
     pressed = handle ? { handle, view: board.view() } : null;
   };
 
-  const drag = ({ handle, view }: Pressed, pull: Pull, xPx: number, yPx: number) => {
+  const drag = ({ handle, view }: Pressed, pull: Pull, xPx: number, yPx: number, byFinger: boolean) => {
     const move = moveOf(handle, view, pull);
     if (!move) {
       if (handle.why) board.say(handle.why);
@@ -73,7 +73,8 @@ export function createHand(board: HandBoard): Hand {
     }
     frameLoop.ask('settle', 'drag', () => {
       previewMove(board, move, view);
-      board.show({ dragging: { id: handle.id, xPx, yPx, move, fromPx: handle.xPx } });
+      const from = { xPx: handle.xPx, yPx: handle.yPx };
+      board.show({ dragging: { id: handle.id, xPx, yPx, move, from, byFinger } });
     });
   };
 
@@ -135,7 +136,8 @@ export function createHand(board: HandBoard): Hand {
         if (pressed?.handle.id !== effect.grip) return;
         const { dxPx, dyPx, modifiers, snap, kind, xPx, yPx } = effect;
         const snapPx = snap ? SNAP_PX[kind] : 0;
-        return drag(pressed, { dxPx, dyPx, other: otherRule(modifiers.shift), snapPx }, xPx, yPx);
+        const pull = { dxPx, dyPx, other: otherRule(modifiers.shift), snapPx };
+        return drag(pressed, pull, xPx, yPx, kind === 'touch');
       }
       case 'commit':
         release();
@@ -179,7 +181,7 @@ export function createHand(board: HandBoard): Hand {
       if (!pressed) return;
       const { xPx, yPx } = pressed.handle;
       const pull = { dxPx, dyPx, other: otherRule(false), snapPx: snap ? SNAP_PX.touch : 0 };
-      drag(pressed, pull, xPx + dxPx, yPx + dyPx);
+      drag(pressed, pull, xPx + dxPx, yPx + dyPx, false);
     },
     endJog(keep) {
       if (!keep) return giveUp();

@@ -2,6 +2,7 @@ import type { MeasureText } from '../board/measure.ts';
 import type { Viewport } from '../board/viewport.ts';
 import type { Handle } from '../drawing/handle.ts';
 import { endHandles } from '../drawing/handles/ends.ts';
+import { markHandles } from '../drawing/handles/marks.ts';
 import { partHandles } from '../drawing/handles/parts.ts';
 import { type Label, labelsOf } from '../drawing/layers/labels.ts';
 import type { Scene } from '../drawing/scene.ts';
@@ -42,6 +43,11 @@ export function pictureOf(
     scene,
     plan,
     labels: reading.view.shown.labels ? labelsOf(scene, view, reading.view.unit, measure) : [],
-    handles: [...partHandles(sight), ...endHandles(sight), ...ribbonHandles(plan, sight)],
+    handles: [
+      ...partHandles(sight),
+      ...endHandles(sight),
+      ...ribbonHandles(plan, sight),
+      ...markHandles(sight),
+    ],
   };
 }

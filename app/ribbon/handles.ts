@@ -9,7 +9,7 @@ import {
 } from '../../engine/index.ts';
 import { xOf } from '../board/viewport.ts';
 import type { Handle } from '../drawing/handle.ts';
-import { BETWEEN, plainMove } from '../drawing/handle.ts';
+import { BETWEEN, plainMove, readOnly } from '../drawing/handle.ts';
 import { placing } from '../drawing/handles/parts.ts';
 import type { Sight } from '../drawing/sight.ts';
 
@@ -91,12 +91,12 @@ function setterOf(cell: PlacedCell, { reading }: Sight): (value: number, other: 
 function splitHandle(cell: PlacedCell): readonly Handle[] {
   const { after, mark } = cell;
   if (!cell.common || mark === null) return [];
+  const label = `${cell.label}, the same at all positions`;
+  const why = 'Click the mark to give every position its own value.';
   return [
     {
-      ...readOnly(`split:${cell.id}`, mark),
+      ...readOnly(`split:${cell.id}`, label, why, onText(mark)),
       cursor: 'pointer',
-      label: `${cell.label}, the same at all positions`,
-      why: 'Click the mark to give every position its own value.',
       press: (sketch) => (after === null ? splitObjectDistance(sketch) : splitGap(sketch, after)),
     },
   ];
@@ -105,31 +105,16 @@ function splitHandle(cell: PlacedCell): readonly Handle[] {
 /** The overall dimension follows from the others and says so. */
 function trackHandle({ overall }: RibbonPlan): readonly Handle[] {
   if (!overall) return [];
-  const place = { xPx: overall.textXPx, yPx: overall.linePx - 12 };
   const why = 'The track follows from the gaps: it runs from the first part to the image plane.';
-  return [{ ...readOnly('track', place), label: 'track', why }];
+  return [readOnly('track', 'track', why, onText({ xPx: overall.textXPx, yPx: overall.linePx - 12 }))];
 }
 
-function readOnly(id: string, { xPx, yPx }: { readonly xPx: number; readonly yPx: number }): Handle {
-  return {
-    id,
-    order: 9,
-    xPx,
-    yPx,
-    line: null,
-    halfWidthPx: 14,
-    cursor: 'default',
-    label: '',
-    slider: null,
-    tabStop: false,
-    selects: null,
-    look: 'none',
-    drag: null,
-    step: null,
-    entry: null,
-    why: null,
-  };
-}
+const onText = ({ xPx, yPx }: { readonly xPx: number; readonly yPx: number }) => ({
+  xPx,
+  yPx,
+  line: null,
+  halfWidthPx: 14,
+});
 
 function tickHandles(plan: RibbonPlan, sight: Sight): readonly Handle[] {
   const { scene, view } = sight;

@@ -14,7 +14,8 @@ const HATCH_PX = 6;
  */
 export function ribbonLayer(pen: Pen, plan: RibbonPlan, view: Viewport, hovered: string | null): void {
   const { cells, overall } = plan;
-  const isHovered = ({ id }: PlacedCell) => id === hovered || `cell:${id}` === hovered;
+  const strong = dimensionsOf(hovered, cells);
+  const isHovered = ({ id }: PlacedCell) => strong.includes(id);
   for (const cell of cells) drawLine(pen, cell, view, isHovered(cell));
   for (const cell of cells) drawTexts(pen, cell, isHovered(cell));
   if (!overall) return;
@@ -23,6 +24,21 @@ export function ribbonLayer(pen: Pen, plan: RibbonPlan, view: Viewport, hovered:
   for (const x of [fromPx, toPx]) tick(pen, x, linePx, 'dimension quiet');
   pen.text(textXPx, linePx - 4, overall.text, 'value quiet', { align: 'centre', baseline: 'bottom' });
 }
+
+/** The dimensions that a grip has to do with: its own value, or the two beside what it moves. */
+function dimensionsOf(grip: string | null, cells: readonly PlacedCell[]): readonly string[] {
+  const [kind = '', of = ''] = grip?.split(':') ?? [];
+  if (kind === 'cell') return [(grip ?? '').slice('cell:'.length)];
+  if (kind === 'thickness') return [`thickness:${of}`];
+  if (kind === 'object') return ['object'];
+  if (kind === 'image') return cells.slice(-1).map(({ id }) => id);
+  if (!MOVES_PART.has(kind)) return [];
+  const behind = cells.findIndex(({ id }) => id === `gap:${of}`);
+  const first = cells.findIndex(({ after }) => after === of);
+  return [cells[first - 1], cells[behind]].flatMap((cell) => cell?.id ?? []);
+}
+
+const MOVES_PART: ReadonlySet<string> = new Set(['part', 'tick', 'label']);
 
 function drawLine(pen: Pen, cell: PlacedCell, view: Viewport, hovered: boolean): void {
   const { fromPx, toPx, linePx } = cell;

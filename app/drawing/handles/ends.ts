@@ -113,12 +113,14 @@ function objectHandles(sight: Sight): readonly Handle[] {
     (value: number): Edit =>
     (before) =>
       setObjectDistance(before, value, setting.at);
+  const footPx = yOf(view, 0);
+  const tipPx = objectTipPx(view, scene.objectHeightMm ?? 0);
   const foot: Handle = {
     id: 'object:foot',
     order: 7,
     xPx: xOf(view, objectMm),
-    yPx: yOf(view, 0),
-    line: null,
+    yPx: footPx,
+    line: { topPx: Math.min(footPx, tipPx), bottomPx: Math.max(footPx, tipPx) },
     cursor: 'ew-resize',
     label: 'object, distance',
     slider: {
@@ -151,17 +153,7 @@ function objectHandles(sight: Sight): readonly Handle[] {
   };
   const heightMm = scene.objectHeightMm;
   if (heightMm === null || Math.abs(heightMm) < LEAST_MM) return [foot];
-  return [
-    foot,
-    fieldHandle(
-      sight,
-      'object:tip',
-      'object, height',
-      xOf(view, objectMm),
-      objectTipPx(view, heightMm),
-      heightMm,
-    ),
-  ];
+  return [foot, fieldHandle(sight, 'object:tip', 'object, height', xOf(view, objectMm), tipPx, heightMm)];
 }
 
 function fieldEnd(sight: Sight): readonly Handle[] {

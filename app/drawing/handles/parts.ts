@@ -14,7 +14,7 @@ import { selectedParts } from '../../store/viewStore.ts';
 import { catchesFor } from '../catches.ts';
 import type { Handle, LayoutDrag, Move } from '../handle.ts';
 import { BETWEEN, plainMove } from '../handle.ts';
-import { FOCAL_STEM_PX } from '../layers/marks.ts';
+import { FOCAL_STEM_PX, ownFocalPoints } from '../layers/marks.ts';
 import type { ScenePart } from '../scene.ts';
 import type { Sight } from '../sight.ts';
 
@@ -116,9 +116,11 @@ function moveHandle(sight: Sight, part: ScenePart): Handle {
   };
 }
 
-function focalHandles(sight: Sight, { part, index, frontMm }: ScenePart): readonly Handle[] {
+function focalHandles(sight: Sight, drawn: ScenePart): readonly Handle[] {
+  const { part, index, frontMm } = drawn;
   if (part.kind !== 'thin') return [];
   const { view } = sight;
+  const points = ownFocalPoints(drawn, view);
   const f = part.focalLengthMm;
   const set =
     (focalLengthMm: number): Edit =>
@@ -128,7 +130,7 @@ function focalHandles(sight: Sight, { part, index, frontMm }: ScenePart): readon
   return ([-1, 1] as const).map((side) => ({
     id: `focal:${part.id}:${side < 0 ? 'front' : 'rear'}`,
     order: 2,
-    xPx: Math.min(view.widthPx - 10, Math.max(10, xOf(view, frontMm + side * f))),
+    xPx: points[side < 0 ? 0 : 1]?.xPx ?? xOf(view, frontMm + side * f),
     yPx: yOf(view, 0) + FOCAL_STEM_PX,
     line: null,
     cursor: 'ew-resize',

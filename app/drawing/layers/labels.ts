@@ -7,9 +7,8 @@ import { type Pen, segment } from '../../board/pen.ts';
 import type { TextStyle } from '../../board/styles.ts';
 import type { Viewport } from '../../board/viewport.ts';
 import { xOf, yOf } from '../../board/viewport.ts';
-import { nameOf } from '../handles/marks.ts';
 import { heightOnFirstStretch, type Scene, type ScenePart } from '../scene.ts';
-import { plainLength } from '../words.ts';
+import { imageName, plainLength } from '../words.ts';
 import { objectTipPx } from './ends.ts';
 import { FOCAL_STEM_PX, ownFocalPoints } from './marks.ts';
 
@@ -136,7 +135,7 @@ function endLabels(scene: Scene, view: Viewport, unit: LengthUnit): readonly Dra
 
 function imageLabels(scene: Scene, view: Viewport): readonly Draft[] {
   return scene.images.flatMap((image): Draft[] => {
-    const text = nameOf(image, scene);
+    const text = imageName(image, scene);
     if (text === '') return [];
     const bottomPx = yOf(view, Math.min(0, image.heightMm));
     const topPx = yOf(view, Math.max(0, image.heightMm));

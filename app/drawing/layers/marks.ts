@@ -8,6 +8,8 @@ import type { Scene, ScenePart, ScenePlane } from '../scene.ts';
 const ARROW_PX = 4;
 const FOCUS_PX = 3.5;
 const PUPIL_BAR_PX = 6;
+/** Focal points off the sheet stand this far from its edge, px. */
+const EDGE_PX = 12;
 /** How far below the axis a selected part's own focal points stand on their stems. */
 export const FOCAL_STEM_PX = 14;
 
@@ -27,7 +29,7 @@ export function marksLayer(pen: Pen, scene: Scene, view: Viewport): void {
     pen.polyline([x - ARROW_PX, tip + back, x, tip, x + ARROW_PX, tip + back], 'image');
   }
   for (const plane of scene.planes) drawPlane(pen, plane, scene.tallestMm, view);
-  for (const part of scene.parts) if (part.selected) ownFocalPoints(pen, part, view);
+  for (const part of scene.parts) drawOwnFocalPoints(pen, part, view);
 }
 
 function mirrored(line: Float64Array): Float64Array {
@@ -51,13 +53,42 @@ function drawPlane(pen: Pen, plane: ScenePlane, tallestMm: number, view: Viewpor
   }
 }
 
-/** The selected part's own focal points, on stems below the axis. */
-function ownFocalPoints(pen: Pen, { part, frontMm }: ScenePart, view: Viewport): void {
-  if (part.kind !== 'thin') return;
+/** A focal point of a selected part: where it stands, or where the sheet ends towards it. */
+export interface OwnFocalPoint {
+  readonly end: 'front' | 'rear';
+  readonly xPx: number;
+  readonly isOff: boolean;
+  readonly focalLengthMm: number;
+}
+
+/** The focal points of a selected thin part; none of any other. */
+export function ownFocalPoints(
+  { part, frontMm, selected }: ScenePart,
+  view: Viewport,
+): readonly OwnFocalPoint[] {
+  if (part.kind !== 'thin' || !selected) return [];
+  const { focalLengthMm } = part;
+  return (['front', 'rear'] as const).map((end) => {
+    const atPx = xOf(view, frontMm + (end === 'front' ? -focalLengthMm : focalLengthMm));
+    const xPx = Math.min(view.widthPx - EDGE_PX, Math.max(EDGE_PX, atPx));
+    return { end, xPx, isOff: atPx < 0 || atPx > view.widthPx, focalLengthMm };
+  });
+}
+
+/** On stems below the axis; an arrow at the edge for those off the sheet. */
+function drawOwnFocalPoints(pen: Pen, part: ScenePart, view: Viewport): void {
   const y = yOf(view, 0);
-  for (const side of [-1, 1]) {
-    const x = xOf(view, frontMm + side * part.focalLengthMm);
-    segment(pen, x, y, x, y + FOCAL_STEM_PX, 'leader');
-    pen.circle(x, y, 2, 'ink');
+  for (const { xPx, isOff } of ownFocalPoints(part, view)) {
+    if (isOff) {
+      const outward = xPx < view.widthPx / 2 ? -1 : 1;
+      const tip = xPx + outward * (EDGE_PX - 2);
+      const back = tip - outward * ARROW_PX;
+      const stem = y + FOCAL_STEM_PX;
+      segment(pen, xPx - outward * EDGE_PX, stem, tip, stem, 'dimension');
+      pen.polyline([back, stem - ARROW_PX, tip, stem, back, stem + ARROW_PX], 'dimension');
+      continue;
+    }
+    segment(pen, xPx, y, xPx, y + FOCAL_STEM_PX, 'leader');
+    pen.circle(xPx, y, 2, 'ink');
   }
 }

@@ -4,11 +4,12 @@ import { gripsAt } from '../../../app/board/grips.ts';
 import type { Effect, Input, Modifiers, PointerKind } from '../../../app/board/hand.ts';
 import { NO_MODIFIERS } from '../../../app/board/hand.ts';
 
-/** Grips on an otherwise empty sheet: two parts 8 px apart, and one well away. */
+/** Grips on an otherwise empty sheet: two parts 8 px apart, one well away, and a mark to be clicked only. */
 const GRIPS = [
   { id: 'first', order: 6, xPx: 100, yPx: 100, line: { topPx: 50, bottomPx: 150 }, cursor: 'ew-resize' },
   { id: 'second', order: 6, xPx: 108, yPx: 100, line: { topPx: 50, bottomPx: 150 }, cursor: 'ew-resize' },
   { id: 'field', order: 5, xPx: 300, yPx: 60, line: null, cursor: 'ns-resize' },
+  { id: 'mark', order: 9, xPx: 400, yPx: 100, line: null, cursor: 'default', fixed: true as const },
 ];
 
 type Finger = 1 | 2 | 3;

@@ -209,6 +209,17 @@ describe('panning', () => {
       .expectDone();
   });
 
+  it('follows a drag from a mark that can only be clicked, whose press then is over', () => {
+    new FakeHand()
+      .press(400, 100)
+      .moveTo(410, 105)
+      .expectAt('panning')
+      .expectDone({ do: 'cancel', grip: 'mark' }, { do: 'pan', dxPx: 10, dyPx: 5 })
+      .release()
+      .expectAt('idle');
+    expect(new FakeHand().click(400, 100).last('click')?.grip).toBe('mark');
+  });
+
   it('goes over anything with Space or the middle button', () => {
     const hand = new FakeHand().hover(300, 60).space(true);
     expect(hand.last('cursor')?.cursor).toBe('grab');

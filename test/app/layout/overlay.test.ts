@@ -1,17 +1,19 @@
 import { describe, expect, it } from 'vitest';
+import { type LabelPlace, overlaps } from '../../../app/board/labels.ts';
+import { roughMeasure } from '../../../app/board/measure.ts';
 import { type Mark, recorderPen } from '../../../app/board/recorderPen.ts';
 import { xOf } from '../../../app/board/viewport.ts';
 import type { Move } from '../../../app/drawing/handle.ts';
-import { type HandState, overlayLayer } from '../../../app/layout/overlay.ts';
+import { type HandState, IDLE_HAND, type OverlayRoom, overlayLayer } from '../../../app/layout/overlay.ts';
 import type { PartId } from '../../../engine/index.ts';
 import { BETWEEN_MIDDLE_AND_NARROW, demoPicture, grip } from '../drawing/seen.ts';
 
-const IDLE: HandState = { hover: null, focus: null, ring: false, dragging: null, dropXPx: null };
+const ROOM: OverlayRoom = { measure: roughMeasure, labels: [], former: [] };
 const picture = demoPicture({ selection: ['p2' as PartId] });
 
 function drawn(hand: Partial<HandState>, { handles, view, plan } = picture): readonly Mark[] {
   const pen = recorderPen(3);
-  overlayLayer(pen, handles, view, plan.topPx, { ...IDLE, ...hand });
+  overlayLayer(pen, handles, view, plan.topPx, { ...IDLE_HAND, ...hand }, ROOM);
   return pen.marks;
 }
 
@@ -50,7 +52,14 @@ describe('the overlay', () => {
 
   describe('during a drag', () => {
     const move: Move = { edit: (sketch) => sketch, says: '28.000 mm', caught: null, frameMm: 0 };
-    const dragging = { id: 'part:p2', xPx: 300, yPx: 200, move, fromPx: 250 };
+    const dragging = {
+      id: 'part:p2',
+      xPx: 300,
+      yPx: 200,
+      move,
+      from: { xPx: 250, yPx: 200 },
+      byFinger: false,
+    };
 
     it('says the value at the pointer and shows the old place', () => {
       const marks = drawn({ dragging });
@@ -68,12 +77,41 @@ describe('the overlay', () => {
       expect(mark?.kind === 'lines' && mark.lines[0]?.[0]).toBeCloseTo(xOf(picture.view, 50), 2);
     });
 
-    it('writes to the left of a pointer near the right edge, and never above the sheet', () => {
-      const at = (xPx: number, yPx: number) =>
-        drawn({ dragging: { ...dragging, xPx, yPx } }).find((mark) => mark.kind === 'text');
-      expect(at(picture.view.widthPx - 20, 200)).toMatchObject({ place: { align: 'right' } });
-      expect(at(300, 200)).toMatchObject({ place: { align: 'left' } });
-      expect(at(300, 2)).toMatchObject({ yPx: 20 });
+    const wordsAt = (xPx: number, yPx: number, change = {}, room = ROOM) => {
+      const pen = recorderPen(3);
+      const hand = { ...IDLE_HAND, dragging: { ...dragging, xPx, yPx, ...change } };
+      const { handles, view, plan } = picture;
+      const [place] = overlayLayer(pen, handles, view, plan.topPx, hand, room);
+      return place as LabelPlace;
+    };
+
+    it('writes beside the pointer, to its left near the right edge, and never off the sheet', () => {
+      expect(wordsAt(300, 200).xPx).toBeGreaterThan(300);
+      const { xPx, widthPx } = wordsAt(picture.view.widthPx - 20, 200);
+      expect(xPx + widthPx).toBeLessThan(picture.view.widthPx - 20);
+      expect(wordsAt(300, 2).yPx).toBeGreaterThan(2);
     });
+
+    it('writes where neither a label nor a finger hides it, and does not jump from side to side', () => {
+      const free = wordsAt(300, 200);
+      const dodged = wordsAt(300, 200, {}, { ...ROOM, labels: [free] });
+      expect(overlaps(free, dodged)).toBe(false);
+      expect(wordsAt(304, 200, {}, { ...ROOM, former: [dodged] }).side).toBe(dodged.side);
+      expect(200 - wordsAt(300, 200, { byFinger: true }).yPx).toBeGreaterThan(200 - free.yPx);
+    });
+
+    it('marks the old height of what is dragged up or down', () => {
+      const upper = grip(picture, 'stop:upper');
+      const from = { xPx: upper.xPx, yPx: upper.yPx + 30 };
+      const marks = drawn({ dragging: { ...dragging, id: 'stop:upper', from } });
+      const [mark] = withStyle(marks, 'former place');
+      const [line] = mark?.kind === 'lines' ? mark.lines : [];
+      expect([line?.[1], line?.[3]]).toEqual([expect.closeTo(from.yPx, 3), expect.closeTo(from.yPx, 3)]);
+    });
+  });
+
+  it('says at the focus ring how far an arrow key goes', () => {
+    expect(texts(drawn({ focus: 'part:p2', ring: true, step: '0.1 mm' }))).toEqual(['step 0.1 mm']);
+    expect(texts(drawn({ focus: 'part:p2', ring: false, step: '0.1 mm' }))).toEqual([]);
   });
 });

@@ -4,7 +4,7 @@ import { roughMeasure } from '../../../app/board/measure.ts';
 import { recorderPen } from '../../../app/board/recorderPen.ts';
 import { newViewport, type Viewport } from '../../../app/board/viewport.ts';
 import { fitCamera, foldIn, type Size, viewportOf } from '../../../app/layout/camera.ts';
-import { overlayLayer } from '../../../app/layout/overlay.ts';
+import { IDLE_HAND, overlayLayer } from '../../../app/layout/overlay.ts';
 import { paintParts, paintRays } from '../../../app/layout/paint.ts';
 import { type Picture, pictureOf, sceneOfReading } from '../../../app/layout/picture.ts';
 import type { PartId, Setting, Sketch } from '../../../engine/index.ts';
@@ -21,8 +21,9 @@ function painted(picture: Picture, decimals: number, held: string | null = null)
   pen.group('rays', () => paintRays(pen, picture));
   pen.group('parts', () => paintParts(pen, picture, held, [], NONE));
   pen.group('overlay', () => {
-    const hand = { hover: held, focus: held, ring: true, dragging: null, dropXPx: 40 };
-    overlayLayer(pen, picture.handles, picture.view, picture.plan.topPx, hand);
+    const hand = { ...IDLE_HAND, hover: held, focus: held, ring: true, dropXPx: 40, step: '1 mm' };
+    const room = { measure: roughMeasure, labels: [], former: [] };
+    overlayLayer(pen, picture.handles, picture.view, picture.plan.topPx, hand, room);
   });
   return pen;
 }

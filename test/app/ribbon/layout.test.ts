@@ -214,6 +214,21 @@ describe('the ribbon’s words', () => {
   });
 
   it.each([
+    ['part:p2', ['gap:p1', 'gap:p2']],
+    ['tick:p1', ['object', 'gap:p1']],
+    ['cell:gap:p2', ['gap:p2']],
+    ['object:foot', ['object']],
+    ['image', ['gap:p4']],
+    ['rim:p2:upper', []],
+  ])('are strong for what %s changes', (hovered, ids) => {
+    const { cells } = demoPicture().plan;
+    const strong = textsOf(demoPicture(), hovered).filter(({ style }) => style === 'value strong');
+    expect(strong.map(({ text }) => text)).toEqual(
+      ids.map((id) => cells.find((cell) => cell.id === id)?.text),
+    );
+  });
+
+  it.each([
     ['wide', -30],
     ['narrow', -2],
   ])('say once that a %s gap cannot be built, clear of its value', (_which, gapMm) => {

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { gripsAt, MOUSE_RADIUS_PX } from '../../../../app/board/grips.ts';
 import { xOf, yOf } from '../../../../app/board/viewport.ts';
 import { BETWEEN } from '../../../../app/drawing/handle.ts';
 import { analysisOf } from '../../../../app/live/analysis.ts';
@@ -99,6 +100,14 @@ describe('an edge of the stop', () => {
 describe('the object’s foot', () => {
   const near: Sketch = { ...demo, object: { distanceMm: 120, medium: 'air' } };
   const toScale = pictureFor(near, { setting: AT_MIDDLE });
+
+  it('is taken anywhere on the object’s line, except at its tip', () => {
+    const foot = grip(picture, 'object:foot');
+    const tip = grip(picture, 'object:tip');
+    const takenAt = (yPx: number) => gripsAt(picture.handles, foot.xPx, yPx, MOUSE_RADIUS_PX)[0]?.id;
+    expect(takenAt((foot.yPx + tip.yPx) / 2)).toBe('object:foot');
+    expect(takenAt(tip.yPx)).toBe('object:tip');
+  });
 
   it('drawn to scale follows the pointer', () => {
     expect(toScale.view.fold).toBeNull();

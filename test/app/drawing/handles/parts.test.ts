@@ -1,6 +1,8 @@
 import { describe, expect, it } from 'vitest';
+import { recorderPen } from '../../../../app/board/recorderPen.ts';
 import { xOf, yOf } from '../../../../app/board/viewport.ts';
 import { BETWEEN } from '../../../../app/drawing/handle.ts';
+import { paintParts } from '../../../../app/layout/paint.ts';
 import type { PartId, Sketch } from '../../../../engine/index.ts';
 import { emptySketch, newPlate, newThin, settingAt, tieParts } from '../../../../engine/index.ts';
 import { inspectionZoom, MIDDLE, NARROW, WIDE } from '../../../engine/demo.ts';
@@ -215,8 +217,12 @@ describe('dragging a focal point', () => {
       parts: demo.parts.with(1, { ...demo.parts[1]!, kind: 'thin', focalLengthMm: 4000 } as never),
     };
     const drawn = pictureFor(weak, { setting: AT_MIDDLE, selection: ['p2' as PartId] });
-    expect(grip(drawn, 'focal:p2:rear').xPx).toBe(drawn.view.widthPx - 10);
-    expect(grip(drawn, 'focal:p2:front').xPx).toBe(10);
+    expect(grip(drawn, 'focal:p2:rear').xPx).toBe(drawn.view.widthPx - 12);
+    expect(grip(drawn, 'focal:p2:front').xPx).toBe(12);
+    const told = drawn.labels.filter(({ id }) => id.startsWith('focal:p2'));
+    expect(told.map(({ text }) => text)).toEqual(['f 4000 mm', 'f 4000 mm']);
+    const seen = paintParts(recorderPen(), drawn, null, [], new Set()).map(({ id }) => id);
+    expect(seen).toEqual(expect.arrayContaining(['focal:p2:front', 'focal:p2:rear']));
   });
 });
 
