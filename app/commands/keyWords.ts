@@ -4,7 +4,8 @@ const APPLE: readonly (readonly [RegExp, string])[] = [
   [/Shift\+/g, '⇧'],
 ];
 
-/** Keys as the keyboard in front of the user has them. */
+/** Keys as the keyboard in front of the user has them; arrows beside each other stay on one line. */
 export function keyWords(keys: string, apple: boolean): string {
-  return apple ? APPLE.reduce((text, [from, to]) => text.replace(from, to), keys) : keys;
+  const together = keys.replaceAll(/(?<=[←→↑↓]) (?=[←→↑↓])/g, '\u00a0');
+  return apple ? APPLE.reduce((text, [from, to]) => text.replace(from, to), together) : together;
 }

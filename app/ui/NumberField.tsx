@@ -4,6 +4,7 @@ import type { EntryUnit } from './entry.ts';
 import { formatEntry, fromBase, parseEntry, toBase } from './entry.ts';
 import { Field } from './Field.tsx';
 import { formatNumber } from './format.ts';
+import { isHistoryKey } from './historyKey.ts';
 import { Icon } from './Icon.tsx';
 
 export interface NumberFieldProps {
@@ -57,9 +58,6 @@ const KEY_STEPS: Readonly<Record<string, number>> = {
 
 /** Goes so many steps from where the number stands. */
 type StepBy = (steps: number, shift: boolean) => void;
-
-const isUndo = (event: KeyboardEvent): boolean =>
-  (event.ctrlKey || event.metaKey) && !event.shiftKey && event.key.toLowerCase() === 'z';
 
 /**
  * One number: type freely, Enter or leaving commits, Escape restores, arrows step (Page × 10, Alt ÷ 10). Shift with Enter or a
@@ -127,7 +125,7 @@ export function NumberField(props: NumberFieldProps) {
 
   const onKeyDown = (event: KeyboardEvent) => {
     const steps = KEY_STEPS[event.key];
-    const undoesSteps = isUndo(event) && untouched && stepped.current !== null;
+    const goesBack = untouched && isHistoryKey(event);
     const restores = event.key === 'Escape' && (draft !== null || stepped.current !== null || fault !== null);
     if (steps !== undefined) {
       event.preventDefault();
@@ -135,13 +133,15 @@ export function NumberField(props: NumberFieldProps) {
     } else if (event.key === 'Enter') {
       event.preventDefault();
       if (settle(event.shiftKey)) input.current?.select();
-    } else if (restores || undoesSteps) {
+    } else if (restores || (goesBack && stepped.current !== null)) {
       event.preventDefault();
       event.stopPropagation();
       if (stepped.current !== null) onCancel?.();
       stepped.current = null;
       setDraft(null);
       setFault(null);
+    } else if (goesBack) {
+      setDraft(null);
     } else if (event.key === 'Escape') {
       leaving.current = true;
       input.current?.blur();

@@ -1,6 +1,7 @@
 import type { KeyboardEvent } from 'react';
 import { useId, useState } from 'react';
 import { Field } from './Field.tsx';
+import { isHistoryKey } from './historyKey.ts';
 
 interface TextFieldProps {
   readonly label: string;
@@ -20,8 +21,10 @@ export function TextField(props: TextFieldProps) {
   const [draft, setDraft] = useState<string | null>(null);
   const [fault, setFault] = useState<string | null>(null);
 
+  const untouched = draft === null || draft === value;
+
   const settle = () => {
-    const refused = draft === null || draft === value ? null : onCommit(draft);
+    const refused = untouched ? null : onCommit(draft);
     setFault(refused);
     setDraft(null);
   };
@@ -33,6 +36,8 @@ export function TextField(props: TextFieldProps) {
     } else if (event.key === 'Escape' && draft !== null) {
       event.stopPropagation();
       setDraft(null);
+    } else if (untouched && isHistoryKey(event)) {
+      setDraft(null);
     }
   };
 
@@ -42,7 +47,7 @@ export function TextField(props: TextFieldProps) {
     value: draft ?? value,
     placeholder,
     autoComplete: 'off',
-    'data-untouched': draft === null || draft === value || undefined,
+    'data-untouched': untouched || undefined,
     'aria-describedby': fault ? `${id}-fault` : undefined,
     onChange: (event: { readonly target: { readonly value: string } }) => setDraft(event.target.value),
     onBlur: settle,

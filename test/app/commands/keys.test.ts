@@ -96,6 +96,7 @@ describe('keys', () => {
   test('help shows the keys that are there', () => {
     expect(keyWords('Ctrl+Shift+Z', true)).toBe('⌘⇧Z');
     expect(keyWords('Ctrl+Shift+Z', false)).toBe('Ctrl+Shift+Z');
+    expect(keyWords('to the rim, ↑ ↓', false)).toBe('to the rim, ↑\u00a0↓');
   });
 
   test('keys go on being heard, and what is not available is left alone', () => {
