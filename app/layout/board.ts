@@ -12,7 +12,7 @@ import { createSurface } from '../board/surface.ts';
 import type { Fold, Viewport } from '../board/viewport.ts';
 import { panBy, stretchBy, xOf, zOf, zoomAbout } from '../board/viewport.ts';
 import type { Handle } from '../drawing/handle.ts';
-import { labelHandles, labelOf } from '../drawing/handles/labels.ts';
+import { labelHandles } from '../drawing/handles/labels.ts';
 import type { Scene } from '../drawing/scene.ts';
 import { plainLength } from '../drawing/words.ts';
 import { frameLoop } from '../live/frame.ts';
@@ -21,6 +21,7 @@ import type { Document } from '../store/document.ts';
 import { sketchStore } from '../store/sketchStore.ts';
 import { type Selected, setView, viewStore } from '../store/viewStore.ts';
 import { cameraAt, fitLook, inPlace, type Look, type Size, settled, viewportOf } from './camera.ts';
+import { frozenLabels } from './frozen.ts';
 import { createHand, type Hand } from './hand.ts';
 import { type HandState, IDLE_HAND, overlayLayer } from './overlay.ts';
 import { paintParts, paintRays } from './paint.ts';
@@ -248,16 +249,6 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
       surface.destroy();
     },
   };
-}
-
-/** Under a drag all labels keep their sides; else the one that is pointed at, and the one whose grip has the focus. */
-function frozenLabels(
-  { dragging, hover, focus }: HandState,
-  places: readonly LabelPlace[],
-): ReadonlySet<string> {
-  if (dragging) return new Set(places.map(({ id }) => id));
-  const held = [hover, focus].flatMap((id) => (id === null ? [] : (labelOf(id) ?? [])));
-  return held.length === 0 ? NONE : new Set(held);
 }
 
 /** Whether a sketch is one that undo and redo lead to, so that the present one came of it by edits. */
