@@ -34,6 +34,8 @@ export interface LabelWish {
   readonly sides: readonly Side[];
   /** Further points that name the same thing as well, in the order they are liked, with sides of their own where they differ. */
   readonly otherwise?: readonly (Point & { readonly sides?: readonly Side[] })[];
+  /** How many rows further out it may go; for a label that has no leader to tell what it names. Default 3. */
+  readonly mostSteps?: number;
   /** Px between the point and the label. Default 4. */
   readonly distancePx?: number;
 }
@@ -100,7 +102,7 @@ export function overlaps(a: Box, b: Box, apartPx = 0): boolean {
 function freePlace(wish: LabelWish, taken: readonly Box[], room: LabelRoom): LabelPlace {
   let best: LabelPlace | null = null;
   let least = Number.POSITIVE_INFINITY;
-  for (const step of STEPS) {
+  for (const step of STEPS.slice(0, 1 + (wish.mostSteps ?? STEPS.length))) {
     for (let point = 0; point <= (wish.otherwise?.length ?? 0); point++) {
       for (const [rank, side] of sidesAt(wish, point).entries()) {
         const base = step * COST.step + point * COST.point + rank * COST.side;

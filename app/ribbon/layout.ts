@@ -20,7 +20,7 @@ const ASIDE_PX = 10;
 /** Least distance of texts from the sheet's edge. */
 const EDGE_PX = 4;
 /** Said of a dimension that parts cannot have. */
-export const CANNOT_BE_BUILT = 'cannot be built';
+const CANNOT_BE_BUILT = 'cannot be built';
 
 /** A text by its middle. */
 export interface PlacedText {

@@ -1,6 +1,6 @@
 import type { LengthUnit } from '../../../engine/index.ts';
 import { partName } from '../../../engine/index.ts';
-import type { Box, LabelPlace, LabelWish } from '../../board/labels.ts';
+import type { Box, LabelPlace, LabelWish, Side } from '../../board/labels.ts';
 import { placeLabels } from '../../board/labels.ts';
 import type { MeasureText } from '../../board/measure.ts';
 import { type Pen, segment } from '../../board/pen.ts';
@@ -26,7 +26,10 @@ const LINE_PX = 16;
 /** How far in from the left edge rays are named when they come from beyond it. */
 const NAME_AT_PX = 84;
 /** Where along a ray's first stretch its name may stand, in the order they are liked. */
-const NAMED_AT = [0, 0.2, 0.4, 0.6];
+const NAMED_AT = [0, 0.25, 0.5, 0.75];
+const ANY_SIDE: readonly Side[] = ['above right', 'below right', 'above left', 'below left'];
+/** Steeper rays would run through a name on the side they climb to. */
+const STEEP = 0.1;
 /** Labels stay this far from the upper and lower edge, px. */
 const HIGHEST_PX = 32;
 const BESIDE_LINE_PX = 8;
@@ -78,8 +81,10 @@ function endLabels(scene: Scene, view: Viewport, unit: LengthUnit): readonly Dra
       style: 'label quiet',
       xPx: xOf(view, stage.objectMm) + BESIDE_LINE_PX,
       yPx: objectTipPx(view, scene.objectHeightMm ?? 0),
-      sides: ['right', 'above right', 'below right'],
+      // Beyond a fold no rays start at the tip.
+      sides: view.fold ? ['right', 'above right', 'below right'] : ['below right', 'right', 'above right'],
       priority: 8,
+      distancePx: view.fold ? 4 : 8,
       leader: null,
     });
   else
@@ -210,21 +215,46 @@ function focalLabels(scene: Scene, view: Viewport, unit: LengthUnit): readonly D
 /** The two rays that have names, named where they come into the sheet or further along in front of the first part. */
 function rayLabels(scene: Scene, view: Viewport): readonly Draft[] {
   const rays = [
-    ['marginal ray', 'label marginal ray', scene.marginal[0], ['above right', 'below right']],
-    ['chief ray', 'label chief ray', scene.chief, ['below right', 'above right']],
+    ['marginal ray', 'label marginal ray', scene.marginal[0], 'above'],
+    ['chief ray', 'label chief ray', scene.chief, 'below'],
   ] as const;
-  return rays.flatMap(([text, style, line, sides]): Draft[] => {
+  return rays.flatMap(([text, style, line, liked]): Draft[] => {
     if (!line) return [];
-    const startMm = Math.max(line[0] ?? 0, view.fold?.toMm ?? Number.NEGATIVE_INFINITY, leftOf(view));
-    const endMm = Math.max(startMm, line[2] ?? startMm);
+    const startMm = Math.max(line[0] ?? 0, view.fold?.toMm ?? Number.NEGATIVE_INFINITY);
+    const seenMm = xOf(view, startMm) < 0 ? leftOf(view) : startMm;
+    const endMm = Math.max(seenMm, line[2] ?? seenMm);
     const pointAt = (share: number) => {
-      const zMm = startMm + share * (endMm - startMm);
+      const zMm = seenMm + share * (endMm - seenMm);
       return { xPx: xOf(view, zMm) + 4, yPx: yOf(view, heightOnFirstStretch(line, zMm)) };
     };
-    const [first = 0, ...further] = NAMED_AT;
-    const otherwise = further.map(pointAt);
-    return [{ id: text, text, style, ...pointAt(first), otherwise, sides, priority: 6, leader: null }];
+    const [start, end] = [pointAt(0), pointAt(1)];
+    const slope = (start.yPx - end.yPx) / Math.max(1, end.xPx - start.xPx);
+    const sides = sidesOfRay(slope, liked);
+    const shares = sides[0]?.endsWith('left') ? [...NAMED_AT].reverse() : NAMED_AT;
+    const [first = 0, ...further] = shares;
+    return [
+      {
+        id: text,
+        text,
+        style,
+        ...pointAt(first),
+        otherwise: further.map(pointAt),
+        sides,
+        priority: 6,
+        mostSteps: 1,
+        leader: null,
+      },
+    ];
   });
+}
+
+/** The sides on which a ray of this slope, positive upward, does not run through its own name. */
+function sidesOfRay(slope: number, liked: 'above' | 'below'): readonly Side[] {
+  const steep = Math.abs(slope) > STEEP;
+  const above: Side = steep && slope > 0 ? 'above left' : 'above right';
+  const below: Side = steep && slope < 0 ? 'below left' : 'below right';
+  const clear: readonly Side[] = liked === 'above' ? [above, below] : [below, above];
+  return [...clear, ...ANY_SIDE.filter((side) => !clear.includes(side))];
 }
 
 /** Puts every label where it is free and writes it; returns the places, which the next frame may keep. */
