@@ -62,8 +62,10 @@ export interface LabelRoom {
   readonly former?: readonly LabelPlace[];
   /** Ids that keep their side and step of the last time: hovered, pressed or focused. */
   readonly frozen?: ReadonlySet<string>;
-  /** Least distance between two labels, px. Default 2. */
+  /** Least distance between two labels one above the other, px. Default 2. */
   readonly apartPx?: number;
+  /** Least distance between two labels side by side, px, so that they do not read as one; `apartPx` when left out. */
+  readonly asidePx?: number;
 }
 
 /** How far out a label may be moved, in rows of labels. */
@@ -127,10 +129,10 @@ const sidesAt = ({ sides, otherwise }: LabelWish, point: number): readonly Side[
   (point > 0 ? otherwise?.[point - 1]?.sides : undefined) ?? sides;
 
 function isFree(place: Box, taken: readonly Box[], room: LabelRoom): boolean {
-  const apartPx = room.apartPx ?? 2;
-  return (
-    outsideArea(place, room.bounds) <= DUST && !taken.some((box) => sharedArea(place, box, apartPx) > DUST)
-  );
+  const apartPx = apartOf(room);
+  const asidePx = room.asidePx ?? apartPx;
+  const isClear = taken.every((box) => sharedArea(place, box, apartPx, asidePx) <= DUST);
+  return isClear && outsideArea(place, room.bounds) <= DUST;
 }
 
 /** Area (px²) below which rounding, not a label, is what overlaps. */
@@ -157,8 +159,8 @@ function placeAt(wish: LabelWish, { side, step, point }: Stand, apartPx: number)
   return { id: wish.id, xPx, yPx, widthPx, heightPx, side, step, point, crowded: false };
 }
 
-function sharedArea(a: Box, b: Box, apartPx: number): number {
-  const width = Math.min(a.xPx + a.widthPx, b.xPx + b.widthPx) - Math.max(a.xPx, b.xPx) + apartPx;
+function sharedArea(a: Box, b: Box, apartPx: number, asidePx = apartPx): number {
+  const width = Math.min(a.xPx + a.widthPx, b.xPx + b.widthPx) - Math.max(a.xPx, b.xPx) + asidePx;
   const height = Math.min(a.yPx + a.heightPx, b.yPx + b.heightPx) - Math.max(a.yPx, b.yPx) + apartPx;
   return width > 0 && height > 0 ? width * height : 0;
 }

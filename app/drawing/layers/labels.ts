@@ -35,8 +35,9 @@ const HIGHEST_PX = 32;
 const BESIDE_LINE_PX = 8;
 /** A leader begins this far from what is named, px. */
 const NEAR_PX = 4;
-/** Least distance between two labels, px. */
+/** Least distance between two labels, one above the other and side by side, px. */
 const APART_PX = 4;
+const ASIDE_PX = 12;
 
 /** Every text the drawing wants to show, the most needed first. */
 export function labelsOf(
@@ -276,6 +277,7 @@ export function labelsLayer(
     obstacles,
     lines: uprights(scene, view),
     apartPx: APART_PX,
+    asidePx: ASIDE_PX,
     former,
     frozen,
   };

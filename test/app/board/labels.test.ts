@@ -83,6 +83,12 @@ describe('placing labels', () => {
     expect(placeLabels([only], { bounds, lines: [line] })[0]).toMatchObject({ side: 'above', step: 0 });
   });
 
+  it('keeps labels side by side so far apart that they do not read as one', () => {
+    const pair = [wish('a', 100, { sides: ['right'] }), wish('b', 170, { sides: ['right'] })];
+    const stepOf = (asidePx: number) => placeLabels(pair, { bounds, asidePx })[1]?.step;
+    expect([stepOf(8), stepOf(12)]).toEqual([0, 1]);
+  });
+
   it('goes to a further point where the first has no room', () => {
     const obstacles = [{ xPx: 0, yPx: 200, widthPx: 300, heightPx: 300 }];
     const spread = wish('a', 100, { otherwise: [{ xPx: 400, yPx: 100, sides: ['right'] }] });
