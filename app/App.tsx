@@ -10,12 +10,14 @@ import { Layout } from './layout/Layout.tsx';
 import { Tray } from './layout/Tray.tsx';
 import { useThemeName } from './layout/theme.ts';
 import { ViewTools } from './layout/ViewTools.tsx';
+import { currentReading } from './live/reading.ts';
 import { Bar } from './page/Bar.tsx';
 import { BottomBar } from './page/BottomBar.tsx';
 import { Drawers } from './page/Drawers.tsx';
 import { EmptySheet } from './page/EmptySheet.tsx';
 import { Sheets } from './page/Sheets.tsx';
 import { SidePanel } from './page/SidePanel.tsx';
+import { chosenReadout } from './panels/readouts/words.ts';
 import { SummaryStrip } from './panels/SummaryStrip.tsx';
 import type { Commands } from './panels/useCommand.ts';
 import './ui/theme.css';
@@ -48,7 +50,12 @@ export function App({ groups, commands, services, board, onBoard }: AppProps) {
         <Tray board={board} />
       </aside>
       <main className="app-sheet">
-        <Layout theme={theme} onBoard={onBoard} say={say} speak={(text) => text && announce(text)} />
+        <Layout
+          theme={theme}
+          onBoard={onBoard}
+          say={say}
+          speak={(text) => text && announce(`${text}. ${chosenReadout(currentReading())}`)}
+        />
         <ViewTools board={board} />
         <EmptySheet />
         <Hints />

@@ -73,6 +73,10 @@ test('a layout is made, changed and taken away by the keyboard alone', async ({ 
   // 1/f = 1/28 − 1/46 + 20.25/(28 · 46)
   await expect(app.readout('Focal length')).toHaveText(`${((28 * 46) / (46 - 28 + 20.25)).toFixed(3)}mm`);
 
+  await expect(page.locator('[aria-live="polite"]#voice')).toHaveText(
+    /: 20\.250 mm.*\. Focal length 33\.673 mm$/,
+  );
+
   await page.keyboard.press('?');
   const help = page.getByRole('dialog', { name: 'Help' });
   await expect(help.getByRole('rowheader', { name: 'Delete the selected parts' })).toBeVisible();

@@ -2,8 +2,8 @@ import type { Reading } from '../live/reading.ts';
 import { useReading } from '../live/reading.ts';
 import { setView } from '../store/viewStore.ts';
 import { Icon } from '../ui/Icon.tsx';
-import { quantityText, quantityUnit } from './quantity.ts';
 import { readoutById } from './readouts/table.ts';
+import { readoutText } from './readouts/words.ts';
 import { countWarnings } from './warningList.ts';
 import './summaryStrip.css';
 
@@ -53,13 +53,9 @@ function StripItem({ label, id }: StripItemProps) {
   );
 }
 
-function stripText(id: string, { analysis, view }: Reading): string {
-  const { read, kind, digits } = readoutById(id, []);
-  const outcome = read(analysis);
-  if (!outcome.ok) return outcome.why;
-  const unit = quantityUnit(kind, view.unit);
-  return `${quantityText(outcome.value, kind, digits, view.unit)}${unit === '×' ? '' : ` ${unit}`}`;
-}
+/** The sign of a ratio goes without saying beside "m". */
+const stripText = (id: string, reading: Reading): string =>
+  readoutText(readoutById(id, []), reading).replace(/ ×$/, '');
 
 function WarningCount({ onPress }: { readonly onPress: () => void }) {
   const count = useReading(({ sketch }) => countWarnings(sketch));

@@ -2,9 +2,9 @@ import { sentenceOf } from '../../engine/index.ts';
 import type { Reading } from '../live/reading.ts';
 import { currentReading, useReading } from '../live/reading.ts';
 import { Icon } from '../ui/Icon.tsx';
-import { quantityText, quantityUnit } from './quantity.ts';
 import type { Readout } from './readouts/readout.ts';
 import { readoutById } from './readouts/table.ts';
+import { readoutText } from './readouts/words.ts';
 import type { Worksheet } from './worksheet.ts';
 import { cellText, rowUnit, worksheetOf, worksheetTsv } from './worksheet.ts';
 import './tables.css';
@@ -38,11 +38,10 @@ export function TraceSheet({ onCopy }: TraceSheetProps) {
 }
 
 function ReadoutLine({ readout }: { readonly readout: Readout }) {
-  const text = useReading(({ analysis, view }) => {
-    const outcome = readout.read(analysis);
-    if (!outcome.ok) return `${outcome.why}. ${sentenceOf(outcome.why)}`;
-    const number = quantityText(outcome.value, readout.kind, readout.digits, view.unit);
-    return `${number} ${quantityUnit(readout.kind, view.unit)}`;
+  const text = useReading((reading) => {
+    const outcome = readout.read(reading.analysis);
+    const words = readoutText(readout, reading);
+    return outcome.ok ? words : `${words}. ${sentenceOf(outcome.why)}`;
   });
   return <span className="panel-table-value">{text}</span>;
 }
