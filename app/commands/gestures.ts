@@ -53,6 +53,11 @@ export const GESTURES: readonly GestureGroup[] = [
         hand: 'Double-click',
         keys: 'Enter, F2',
       },
+      {
+        does: 'Ask what an image, a pupil or a plane follows from',
+        hand: 'Point at it and click',
+        keys: 'More in the readouts',
+      },
       { does: 'Take the next grip in the same place', hand: 'Press again', keys: 'Tab' },
     ],
   },
