@@ -8,7 +8,8 @@ export default defineConfig({
   base: './',
   publicDir: `${repository}/public`,
   plugins: [react()],
-  build: { outDir: `${repository}/dist`, emptyOutDir: true, target: 'es2023' },
+  // What the build weighs is judged by size-limit.
+  build: { outDir: `${repository}/dist`, emptyOutDir: true, target: 'es2023', chunkSizeWarningLimit: 1000 },
   server: { fs: { allow: [repository] } },
   test: {
     root: repository,
