@@ -27,6 +27,7 @@ import { type HandState, IDLE_HAND, overlayLayer } from './overlay.ts';
 import { paintParts, paintRays } from './paint.ts';
 import { type Picture, pictureOf, sceneOfReading } from './picture.ts';
 import type { Spot } from './tray.ts';
+import { viewToolsBox } from './viewToolsBox.ts';
 
 /** What the board asks of the app around it. */
 export interface BoardClient {
@@ -60,8 +61,6 @@ export interface Board extends Pick<Hand, 'jog' | 'endJog' | 'type'> {
 }
 
 type Layer = 'rays' | 'parts' | 'overlay';
-
-const NONE: ReadonlySet<string> = new Set();
 
 /** How near a part something is set down on it, px. */
 const ONTO_PX = 9;
@@ -187,7 +186,11 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     const now = picture;
     if (!now) return;
     paint('parts', (pen) => {
-      labelPlaces = paintParts(pen, now, state.hover, labelPlaces, frozenLabels(state, labelPlaces));
+      labelPlaces = paintParts(pen, now, state.hover, {
+        former: labelPlaces,
+        frozen: frozenLabels(state, labelPlaces),
+        covered: [viewToolsBox(now.view.widthPx)],
+      });
     });
     labelGrips = labelHandles(now.sight, labelPlaces);
     const step = plainLength(keyStepMm(now.view), 'mm');
@@ -260,7 +263,7 @@ function recorded(picture: Picture | null, state: HandState): readonly Mark[] {
   if (!picture) return [];
   const pen = recorderPen(3);
   pen.group('rays', () => paintRays(pen, picture));
-  pen.group('parts', () => paintParts(pen, picture, null, [], NONE));
+  pen.group('parts', () => paintParts(pen, picture));
   const { handles, view, plan } = picture;
   const room = { measure: roughMeasure, labels: [], former: [] };
   pen.group('overlay', () => overlayLayer(pen, handles, view, plan.topPx, state, room));

@@ -1,4 +1,4 @@
-import type { LabelPlace } from '../board/labels.ts';
+import type { Box, LabelPlace } from '../board/labels.ts';
 import type { Pen } from '../board/pen.ts';
 import { endsLayer, scaleBox, scaleLayer } from '../drawing/layers/ends.ts';
 import { labelsLayer } from '../drawing/layers/labels.ts';
@@ -21,13 +21,24 @@ export function paintRays(pen: Pen, { scene, view, plan }: Picture): void {
   });
 }
 
+/** What places labels besides the picture. */
+export interface LabelKeep {
+  /** Where they stood in the last frame. */
+  readonly former: readonly LabelPlace[];
+  /** Those that stay there. */
+  readonly frozen: ReadonlySet<string>;
+  /** What lies over the drawing. */
+  readonly covered: readonly Box[];
+}
+
+const AFRESH: LabelKeep = { former: [], frozen: new Set(), covered: [] };
+
 /** Draws parts, ends, ribbon and labels; returns where the labels stand, which the next frame may keep. */
 export function paintParts(
   pen: Pen,
   { reading, scene, view, plan, labels }: Picture,
-  hovered: string | null,
-  former: readonly LabelPlace[],
-  frozen: ReadonlySet<string>,
+  hovered: string | null = null,
+  { former, frozen, covered }: LabelKeep = AFRESH,
 ): readonly LabelPlace[] {
   const hoveredPart = hovered?.startsWith('part:') ? hovered.slice('part:'.length) : null;
   endsLayer(pen, scene, view);
@@ -36,5 +47,6 @@ export function paintParts(
   const scaleBottomPx = view.heightPx - SCALE_ABOVE_PX;
   scaleLayer(pen, view, unit, scaleBottomPx);
   ribbonLayer(pen, plan, view, hovered);
-  return labelsLayer(pen, labels, scene, view, [scaleBox(view, unit, scaleBottomPx)], former, frozen);
+  const obstacles = [scaleBox(view, unit, scaleBottomPx), ...covered];
+  return labelsLayer(pen, labels, scene, view, obstacles, former, frozen);
 }

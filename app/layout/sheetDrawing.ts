@@ -23,7 +23,7 @@ export function sheetDrawing(reading: Reading, measure: MeasureText): string {
   const { title } = reading.sketch;
   const pen = svgPen({ ...SIZE, palette: PALETTES.paper, title, description: summaryOf(reading) });
   pen.group('rays', () => paintRays(pen, picture));
-  pen.group('parts', () => paintParts(pen, picture, null, [], new Set()));
+  pen.group('parts', () => paintParts(pen, picture));
   const where = positionWords(reading);
   if (where !== '') pen.text(CORNER_PX, CORNER_PX, where, 'label', { baseline: 'top' });
   return pen.document();

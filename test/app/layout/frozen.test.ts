@@ -6,7 +6,7 @@ import { paintParts } from '../../../app/layout/paint.ts';
 import { demoPicture } from '../drawing/seen.ts';
 
 const picture = demoPicture();
-const places = paintParts(recorderPen(), picture, null, [], new Set());
+const places = paintParts(recorderPen(), picture);
 const move = { edit: <T>(sketch: T) => sketch, says: '', caught: null, frameMm: 0 };
 const dragging = { id: 'part:p3', xPx: 0, yPx: 0, move, from: { xPx: 0, yPx: 0 }, byFinger: false };
 const frozen = (change: object) => [...frozenLabels({ ...IDLE_HAND, ...change }, places)];

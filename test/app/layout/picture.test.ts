@@ -13,13 +13,11 @@ import { anySetting, anySketch } from '../../engine/sketch/arbitrary.ts';
 import { ALL_SHOWN, AT_MIDDLE, demoPicture } from '../drawing/seen.ts';
 import { readingOf } from '../reading.ts';
 
-const NONE: ReadonlySet<string> = new Set();
-
 /** Every paint of a picture, with the grip `held` hovered, focused and dragged. */
 function painted(picture: Picture, decimals: number, held: string | null = null) {
   const pen = recorderPen(decimals);
   pen.group('rays', () => paintRays(pen, picture));
-  pen.group('parts', () => paintParts(pen, picture, held, [], NONE));
+  pen.group('parts', () => paintParts(pen, picture, held));
   pen.group('overlay', () => {
     const hand = { ...IDLE_HAND, hover: held, focus: held, ring: true, dropXPx: 40, step: '1 mm' };
     const room = { measure: roughMeasure, labels: [], former: [] };

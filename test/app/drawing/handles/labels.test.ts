@@ -7,7 +7,7 @@ import type { PartId } from '../../../../engine/index.ts';
 import { AT_MIDDLE, demoPicture, edited, frontsOf, grip, moveOf } from '../seen.ts';
 
 const picture = demoPicture({ selection: ['p3' as PartId] });
-const places = paintParts(recorderPen(), picture, null, [], new Set());
+const places = paintParts(recorderPen(), picture);
 const handles = labelHandles(picture.sight, places);
 
 describe('the label of a thin part', () => {

@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import type { Box } from '../../../../app/board/labels.ts';
 import { overlaps } from '../../../../app/board/labels.ts';
 import { roughMeasure } from '../../../../app/board/measure.ts';
 import { recorderPen } from '../../../../app/board/recorderPen.ts';
@@ -7,14 +8,15 @@ import { newViewport } from '../../../../app/board/viewport.ts';
 import { labelsLayer, labelsOf } from '../../../../app/drawing/layers/labels.ts';
 import { paintParts } from '../../../../app/layout/paint.ts';
 import type { Picture } from '../../../../app/layout/picture.ts';
-import type { PartId } from '../../../../engine/index.ts';
+import { viewToolsBox } from '../../../../app/layout/viewToolsBox.ts';
+import type { Part, PartId, Sketch } from '../../../../engine/index.ts';
 import { emptySketch, newPlate, newStop, settingAt } from '../../../../engine/index.ts';
 import { inspectionZoom } from '../../../engine/demo.ts';
 import { anySketch } from '../../../engine/sketch/arbitrary.ts';
 import { STARTING_SKETCHES } from '../../../public/startingSketches.ts';
 import { ALL_SHOWN, AT_MIDDLE, DESKTOP, demoPicture, PHONE, pictureFor, sceneFor } from '../seen.ts';
 
-const placesOf = (picture: Picture) => paintParts(recorderPen(), picture, null, [], new Set());
+const placesOf = (picture: Picture) => paintParts(recorderPen(), picture);
 /** The labels of what is in view. */
 const inView = ({ labels, view }: Picture) => labels.filter(({ xPx }) => xPx >= 0 && xPx <= view.widthPx);
 
@@ -26,7 +28,37 @@ function covering(picture: Picture): readonly string[] {
   );
 }
 
+/** A long train, whose many images are named far above and below it. */
+const crowd = (): Sketch => {
+  const [first] = inspectionZoom().parts;
+  if (first?.kind !== 'thin') throw new Error('the inspection zoom begins with a thin part');
+  const parts = Array.from(
+    { length: 12 },
+    (_, i): Part => ({
+      ...first,
+      id: `p${i + 1}` as PartId,
+      name: '',
+      focalLengthMm: [60, -120, 90, 200][i % 4] ?? 1,
+      space: { lengthMm: 4 + (i % 5), medium: 'air' },
+    }),
+  );
+  return { ...inspectionZoom(), parts, stop: 'p2' as PartId };
+};
+
 const textsOf = ({ labels }: Picture) => Object.fromEntries(labels.map(({ id, text }) => [id, text]));
+
+describe('the labels', () => {
+  it('keep clear of what lies over the drawing', () => {
+    const picture = pictureFor(crowd(), { setting: AT_MIDDLE });
+    const tools = viewToolsBox(picture.view.widthPx);
+    const over = (covered: readonly Box[]) =>
+      paintParts(recorderPen(), picture, null, { former: [], frozen: new Set(), covered }).filter((place) =>
+        overlaps(place, tools),
+      );
+    expect(over([])).not.toEqual([]);
+    expect(over([tools])).toEqual([]);
+  });
+});
 
 describe('the labels of the demo', () => {
   it('say the focal lengths, and which part carries the stop', () => {
