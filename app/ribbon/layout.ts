@@ -106,15 +106,21 @@ export function ribbonPlan(cells: readonly Cell[], sight: Sight, measure: Measur
     const { cell, fromPx, toPx, text, halfPx, onLeader } = draft;
     const below = hung.find((one) => one.cell === cell);
     const belowPx = linePx + (LEADER_ROWS_PX[below?.row ?? 0] ?? 0);
-    const base = { ...cell, fromPx, toPx, linePx, text, halfTextPx: halfPx, onLeader };
-    if (onLeader) return { ...base, textXPx: below?.xPx ?? 0, textYPx: belowPx, mark: null, words: null };
-    const words = below && { text: CANNOT_BE_BUILT, xPx: below.xPx, yPx: belowPx, halfPx: wordsHalfPx };
+    const isSaidBelow = !onLeader && below !== undefined;
     return {
-      ...base,
-      textXPx: insideOf(draft, halfPx),
-      textYPx: linePx - VALUE_ABOVE_PX,
-      mark: words ? null : markOf(draft, hung, linePx, measure),
-      words: words ?? null,
+      ...cell,
+      fromPx,
+      toPx,
+      linePx,
+      text,
+      halfTextPx: halfPx,
+      onLeader,
+      textXPx: onLeader ? (below?.xPx ?? 0) : insideOf(draft, halfPx),
+      textYPx: onLeader ? belowPx : linePx - VALUE_ABOVE_PX,
+      mark: onLeader || isSaidBelow ? null : markOf(draft, hung, linePx, measure),
+      words: isSaidBelow
+        ? { text: CANNOT_BE_BUILT, xPx: below.xPx, yPx: belowPx, halfPx: wordsHalfPx }
+        : null,
     };
   });
   const { imageMm } = scene.stage;
