@@ -35,6 +35,8 @@ const HIGHEST_PX = 32;
 const BESIDE_LINE_PX = 8;
 /** A leader begins this far from what is named, px. */
 const NEAR_PX = 4;
+/** Among many images those without a near place for their name go without; pointing at them tells it. */
+const MOST_IMAGE_STEPS = 2;
 /** Least distance between two labels, one above the other and side by side, px. */
 const APART_PX = 4;
 const ASIDE_PX = 12;
@@ -157,6 +159,7 @@ function imageLabels(scene: Scene, view: Viewport): readonly Draft[] {
         sides: ['below', 'below right', 'below left'],
         otherwise: [{ xPx, yPx: above, sides: ['above', 'above right', 'above left'] }],
         priority: 5,
+        mostSteps: MOST_IMAGE_STEPS,
         leader: { topPx, bottomPx },
       },
     ];
