@@ -124,11 +124,11 @@ function drawWords(
     distancePx: distancePx / 2,
   };
   const bounds = { xPx: 4, yPx: 4, widthPx: view.widthPx - 8, heightPx: bottomPx - 8 };
-  const [place = null] = placeLabels([wish], { bounds, obstacles: labels, former, frozen: new Set([WORDS]) });
-  const { xPx: leftPx, yPx: topPx } = place as LabelPlace;
+  const places = placeLabels([wish], { bounds, obstacles: labels, former, frozen: new Set([WORDS]) });
+  const place = places[0] as LabelPlace;
   for (const [i, { text, style }] of lines.entries())
-    pen.text(leftPx, topPx + (i + 0.5) * LINE_PX, text, style, { align: 'left', baseline: 'middle' });
-  return place as LabelPlace;
+    pen.text(place.xPx, place.yPx + (i + 0.5) * LINE_PX, text, style, { align: 'left', baseline: 'middle' });
+  return place;
 }
 
 const WORDS = 'words';

@@ -12,7 +12,6 @@ import type { Handle } from '../drawing/handle.ts';
 import { BETWEEN, plainMove, readOnly } from '../drawing/handle.ts';
 import { placing } from '../drawing/handles/parts.ts';
 import type { Sight } from '../drawing/sight.ts';
-
 import type { PlacedCell, RibbonPlan } from './layout.ts';
 
 const LEAST_MM = 0.01;

@@ -2,7 +2,6 @@ import { partName } from '../../../engine/index.ts';
 import type { LabelPlace } from '../../board/labels.ts';
 import type { Handle } from '../handle.ts';
 import type { Sight } from '../sight.ts';
-
 import { placing } from './parts.ts';
 
 const PREFIX = 'label:';

@@ -9,20 +9,20 @@ export function focalLengths({ analysis: { firstOrder }, view: { unit } }: Readi
 }
 
 /** What limits the axial bundle when no stop is given; empty otherwise. */
-export function limitingRim({ sketch, analysis }: Reading): string {
-  const { limitedBy, stopSurface } = analysis.pupils;
+export function limitingRim(reading: Reading): string {
+  const { limitedBy, stopSurface } = reading.analysis.pupils;
   return limitedBy === 'rim' && stopSurface.ok
-    ? `No stop is given: the rim of ${partAt({ sketch, analysis }, stopSurface.value)} limits the axial bundle.`
+    ? `No stop is given: the rim of ${partAt(reading, stopSurface.value)} limits the axial bundle.`
     : '';
 }
 
 /** What limits the field; empty when nothing does. */
-export function fieldLimit({ sketch, analysis }: Reading): string {
-  const { fieldStop } = analysis.windows;
+export function fieldLimit(reading: Reading): string {
+  const { fieldStop } = reading.analysis.windows;
   if (!fieldStop.ok) return '';
   return fieldStop.value.kind === 'sensor'
     ? 'The sensor limits the field.'
-    : `The rim of ${partAt({ sketch, analysis }, fieldStop.value.surface)} limits the field.`;
+    : `The rim of ${partAt(reading, fieldStop.value.surface)} limits the field.`;
 }
 
 /** The index assumed of thin parts that give none; empty when all give theirs. */
@@ -40,14 +40,14 @@ export function leftOutOfColour({ sketch, analysis: { colour } }: Reading): stri
 }
 
 /** Between which heights in the stop, as shares of its radius, the bundle of the field at `index` passes, and what cuts it. */
-export function meridian({ sketch, analysis }: Reading, index: number): string {
-  const field = analysis.vignetting.ok ? analysis.vignetting.value[index] : undefined;
+export function meridian(reading: Reading, index: number): string {
+  const { vignetting } = reading.analysis;
+  const field = vignetting.ok ? vignetting.value[index] : undefined;
   if (!field?.meridian) return '';
   const { lower, upper, lowerSurface, upperSurface } = field.meridian;
-  const cut = (surface: number | null): string =>
-    surface === null ? 'the stop' : partAt({ sketch, analysis }, surface);
+  const cut = (surface: number | null): string => (surface === null ? 'the stop' : partAt(reading, surface));
   return `In the meridian it passes from ${plain(lower)} (${cut(lowerSurface)}) to ${plain(upper)} (${cut(upperSurface)}) of the stop’s radius.`;
 }
 
-const partAt = ({ sketch, analysis }: Pick<Reading, 'sketch' | 'analysis'>, surface: number): string =>
+const partAt = ({ sketch, analysis }: Reading, surface: number): string =>
   nameAt(sketch, analysis.train.partOf[surface] ?? -1);

@@ -14,7 +14,7 @@ import {
   sketchStore,
   undo,
 } from '../../../app/store/sketchStore.ts';
-import { setView, viewStore } from '../../../app/store/viewStore.ts';
+import { setView, type View, viewStore } from '../../../app/store/viewStore.ts';
 import { emptySketch, newThin, setTitle, writeSketch } from '../../../engine/index.ts';
 import { diskFile, failure, inputsAndDownloads, memory } from './fakes.ts';
 
@@ -89,14 +89,15 @@ describe('the desk', () => {
     const { keyValues } = memory();
     const desk = await tab(keyValues);
     rename('changed');
-    setView({
+    const view: Partial<View> = {
       unit: 'in',
       theme: 'night',
       digits: 4,
       selection: ['image'],
       drawer: 'trace',
       topic: 'backFocus',
-    });
+    };
+    setView(view);
     expect(deskStore.getState().save).toBe('saving');
     await vi.advanceTimersByTimeAsync(QUIET_MS);
     expect(deskStore.getState().save).toBe('saved');
@@ -105,14 +106,7 @@ describe('the desk', () => {
     viewStore.setState(startView, true);
     await tab(keyValues);
     expect(title()).toBe('changed');
-    expect(viewStore.getState()).toMatchObject({
-      unit: 'in',
-      theme: 'night',
-      digits: 4,
-      selection: ['image'],
-      drawer: 'trace',
-      topic: 'backFocus',
-    });
+    expect(viewStore.getState()).toMatchObject(view);
   });
 
   test('a drag is not saved before it is released', async () => {

@@ -260,10 +260,10 @@ describe('bundles', () => {
   it('are sums of the chief and the marginal ray on any sketch', () => {
     fc.assert(
       fc.property(anySketch({ leastParts: 1 }), (sketch) => {
-        const { analysis: any } = readingOf(sketch);
-        const { bundles, marginal, chief, stage } = sceneOf(sketch, any, viewStore.getInitialState());
-        if (!any.vignetting.ok) return;
-        const passing = any.vignetting.value.filter(({ fraction }) => fraction !== 0);
+        const { analysis: ofSketch } = readingOf(sketch);
+        const { bundles, marginal, chief, stage } = sceneOf(sketch, ofSketch, viewStore.getInitialState());
+        if (!ofSketch.vignetting.ok) return;
+        const passing = ofSketch.vignetting.value.filter(({ fraction }) => fraction !== 0);
         for (const { share, rays } of bundles) {
           const limits = passing.filter(({ fraction }) => fraction === share).map(({ meridian }) => meridian);
           const first = rays[0];

@@ -9,7 +9,7 @@ import { type Picture, pictureOf, sceneOfReading } from '../../../app/layout/pic
 import { analysisOf } from '../../../app/live/analysis.ts';
 import type { View } from '../../../app/store/viewStore.ts';
 import type { Edit, PartId, Setting, Sketch } from '../../../engine/index.ts';
-import { propose, settingAt, unsettled } from '../../../engine/index.ts';
+import { emptySketch, newPlate, newThin, propose, settingAt, unsettled } from '../../../engine/index.ts';
 import { inspectionZoom, MIDDLE } from '../../engine/demo.ts';
 import { readingOf } from '../reading.ts';
 
@@ -28,6 +28,16 @@ export const ALL_SHOWN: View['shown'] = {
   focalPoints: true,
   labels: true,
 };
+
+/** A plate of 6 mm between two thin elements, 10 mm behind the first and 5 mm in front of the second. */
+export const withPlate = (): Sketch => ({
+  ...emptySketch(),
+  parts: [
+    { ...newThin(50, 'p1' as PartId), space: { lengthMm: 10, medium: 'air' } },
+    { ...newPlate(6, 'p2' as PartId), space: { lengthMm: 5, medium: 'air' } },
+    newThin(80, 'p3' as PartId),
+  ],
+});
 
 export const sceneFor = (sketch: Sketch, change: Partial<View> = {}): Scene =>
   sceneOfReading(readingOf(sketch, change));

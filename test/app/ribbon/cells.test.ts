@@ -2,9 +2,9 @@ import { describe, expect, it } from 'vitest';
 import { cellsOf } from '../../../app/ribbon/cells.ts';
 import type { View } from '../../../app/store/viewStore.ts';
 import type { PartId, Sketch } from '../../../engine/index.ts';
-import { emptySketch, newPlate, newThin } from '../../../engine/index.ts';
+import { emptySketch, newThin } from '../../../engine/index.ts';
 import { inspectionZoom } from '../../engine/demo.ts';
-import { AT_MIDDLE, BETWEEN_MIDDLE_AND_NARROW, frontsOf, sightFor } from '../drawing/seen.ts';
+import { AT_MIDDLE, BETWEEN_MIDDLE_AND_NARROW, frontsOf, sightFor, withPlate } from '../drawing/seen.ts';
 
 const demo = inspectionZoom();
 const cells = (sketch: Sketch = demo, change: Partial<View> = {}) =>
@@ -72,15 +72,7 @@ describe('the ribbon’s dimensions', () => {
   });
 
   it('count a plate’s thickness on its own, gaps from face to face', () => {
-    const sketch: Sketch = {
-      ...emptySketch(),
-      parts: [
-        { ...newThin(50, 'p1' as PartId), space: { lengthMm: 10, medium: 'air' } },
-        { ...newPlate(6, 'p2' as PartId), space: { lengthMm: 5, medium: 'air' } },
-        newThin(80, 'p3' as PartId),
-      ],
-    };
-    expect(cells(sketch).slice(0, 3)).toMatchObject([
+    expect(cells(withPlate()).slice(0, 3)).toMatchObject([
       { id: 'gap:p1', fromMm: 0, toMm: 10 },
       { id: 'thickness:p2', fromMm: 10, toMm: 16, valueMm: 6, label: 'thickness of plate 2' },
       { id: 'gap:p2', fromMm: 16, toMm: 21, valueMm: 5, label: 'gap behind plate 2' },

@@ -4,7 +4,7 @@ import { xOf, yOf } from '../../../../app/board/viewport.ts';
 import { BETWEEN } from '../../../../app/drawing/handle.ts';
 import { paintParts } from '../../../../app/layout/paint.ts';
 import type { PartId, Sketch } from '../../../../engine/index.ts';
-import { emptySketch, newPlate, newThin, settingAt, tieParts } from '../../../../engine/index.ts';
+import { settingAt, tieParts } from '../../../../engine/index.ts';
 import { inspectionZoom, MIDDLE, NARROW, WIDE } from '../../../engine/demo.ts';
 import {
   AT_MIDDLE,
@@ -16,6 +16,7 @@ import {
   moveOf,
   partOf,
   pictureFor,
+  withPlate,
 } from '../seen.ts';
 
 const demo = inspectionZoom();
@@ -266,14 +267,7 @@ describe('dragging a rim', () => {
 });
 
 describe('dragging the rear face of a plate', () => {
-  const sketch: Sketch = {
-    ...emptySketch(),
-    parts: [
-      { ...newThin(50, 'p1' as PartId), space: { lengthMm: 10, medium: 'air' } },
-      { ...newPlate(6, 'p2' as PartId), space: { lengthMm: 5, medium: 'air' } },
-      newThin(80, 'p3' as PartId),
-    ],
-  };
+  const sketch = withPlate();
   const drawn = pictureFor(sketch, { selection: ['p2' as PartId] });
 
   it('changes its thickness; what is behind moves along', () => {
