@@ -107,4 +107,4 @@ export { partName } from './sketch/words.ts';
 export { placesOf } from './train/places.ts';
 export { trainOf } from './train/train.ts';
 export type { Train } from './train/types.ts';
-export { EXTRA_INCH_DIGITS, type LengthUnit, MM_PER_INCH } from './units.ts';
+export { digitsIn, type LengthUnit, MM_PER_INCH, mmPer } from './units.ts';

@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react';
 import { useMemo } from 'react';
 import type { Edit, Quantity } from '../../engine/index.ts';
-import { EXTRA_INCH_DIGITS } from '../../engine/index.ts';
+import { digitsIn } from '../../engine/index.ts';
 import type { Reading } from '../live/reading.ts';
 import { currentReading, useReadingNow } from '../live/reading.ts';
 import { cancelEdit } from '../store/sketchStore.ts';
@@ -43,7 +43,7 @@ export function SketchNumber(props: SketchNumberProps) {
     ({ sketch, setting }) => setting.toNext > 0 && perPosition !== undefined && !perPosition.isCommon(sketch),
   );
   const unit = props.unit === 'length' ? lengthUnit : props.unit;
-  const digits = (props.digits ?? 3) + (props.unit === 'length' && unit === 'in' ? EXTRA_INCH_DIGITS : 0);
+  const digits = props.unit === 'length' ? digitsIn(lengthUnit, props.digits ?? 3) : (props.digits ?? 3);
   const change = (
     next: number | null,
     shift: boolean,

@@ -1,5 +1,5 @@
 import type { Analysis, LengthUnit, RayOutcome, Sketch } from '../../engine/index.ts';
-import { heightInSpace, MM_PER_INCH, powerAt } from '../../engine/index.ts';
+import { heightInSpace, mmPer, powerAt } from '../../engine/index.ts';
 import { nameAt } from '../drawing/words.ts';
 import { formatLength, formatNumber } from '../ui/format.ts';
 
@@ -79,7 +79,7 @@ function surfaceName(sketch: Sketch, { train }: Analysis, surface: number): stri
 export function cellText(value: number | null, { kind, digits }: WorksheetRow, unit: LengthUnit): string {
   if (value === null) return '';
   if (kind === 'length') return formatLength(value, unit, digits);
-  const perUnit = kind === 'perLength' && unit === 'in' ? MM_PER_INCH : 1;
+  const perUnit = kind === 'perLength' ? mmPer(unit) : 1;
   return formatNumber(value * perUnit, digits);
 }
 

@@ -1,5 +1,5 @@
 import type { LengthUnit, Outcome } from '../../engine/index.ts';
-import { EXTRA_INCH_DIGITS, MM_PER_INCH } from '../../engine/index.ts';
+import { digitsIn, mmPer } from '../../engine/index.ts';
 
 const MINUS = '\u2212';
 /** From here on a fixed number of decimals only widens the column. */
@@ -29,9 +29,7 @@ function asPowerOfTen(value: number, digits: number): string {
  * inches get two more, which is the same fineness.
  */
 export function formatLength(lengthMm: number, unit: LengthUnit, digits = 3): string {
-  return unit === 'mm'
-    ? formatNumber(lengthMm, digits)
-    : formatNumber(lengthMm / MM_PER_INCH, digits + EXTRA_INCH_DIGITS);
+  return formatNumber(lengthMm / mmPer(unit), digitsIn(unit, digits));
 }
 
 /** The outcome's value as `format` writes it, or the reason why there is none. */

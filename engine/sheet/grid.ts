@@ -1,6 +1,6 @@
 import type { Outcome } from '../outcome.ts';
 import { none, some } from '../outcome.ts';
-import { EXTRA_INCH_DIGITS, type LengthUnit, MM_PER_INCH } from '../units.ts';
+import { digitsIn, type LengthUnit, mmPer } from '../units.ts';
 import type { Cell, SheetOptions } from './table.ts';
 import { absentCell, numberCell } from './table.ts';
 
@@ -28,8 +28,8 @@ export function gridOf(options: SheetOptions): Grid {
       `gridOf: digits must be a whole number from 0 to ${MOST_DIGITS}, not ${options.digits}`,
     );
   }
-  const unitMm = options.unit === 'in' ? MM_PER_INCH : 1;
-  const digits = options.unit === 'in' ? options.digits + EXTRA_INCH_DIGITS : options.digits;
+  const unitMm = mmPer(options.unit);
+  const digits = digitsIn(options.unit, options.digits);
   const stepsPerUnit = 10 ** digits;
   const stepsOf: Grid['stepsOf'] = (mm) => {
     const steps = Math.sign(mm) * Math.round((Math.abs(mm) / unitMm) * stepsPerUnit);

@@ -1,5 +1,5 @@
 import type { LengthUnit } from '../../../engine/index.ts';
-import { MM_PER_INCH } from '../../../engine/index.ts';
+import { mmPer } from '../../../engine/index.ts';
 import { scaleBar } from '../../board/fit.ts';
 import type { Box } from '../../board/labels.ts';
 import type { Pen } from '../../board/pen.ts';
@@ -84,7 +84,7 @@ const HEIGHTS_PX = 118;
 const BAR_LABEL_PX = 28;
 const SCALE_RIGHT_PX = 24;
 
-const barOf = (view: Viewport, unit: LengthUnit) => scaleBar(view, 110, unit === 'in' ? MM_PER_INCH : 1);
+const barOf = (view: Viewport, unit: LengthUnit) => scaleBar(view, 110, mmPer(unit));
 
 /** What the scale bar and the words beside it cover. */
 export function scaleBox(view: Viewport, unit: LengthUnit, bottomPx: number): Box {
