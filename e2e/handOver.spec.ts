@@ -47,7 +47,7 @@ test('the spacing table is copied and downloaded as the engine computes it', asy
   await sheet.getByRole('button', { name: 'Copy as JSON' }).click();
   await expect.poll(copied).toBe(expected('json', { datum: 'sensor', digits: 2, unit: 'in' }));
   await sheet.getByLabel('Distances from').selectOption('first part');
-  await sheet.getByLabel('Rounded to').selectOption('0.001 mm');
+  await sheet.getByLabel('Rounded to').selectOption('0.00001 in');
   await sheet.getByRole('radio', { name: 'mm', exact: true }).click();
 
   const [download] = await Promise.all([

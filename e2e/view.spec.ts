@@ -119,6 +119,21 @@ test('a stop dropped on a part rides on it and is freed again', async ({ app, pa
   await expect(app.panel.getByText('The stop rides on it, in front of its refraction.')).toBeVisible();
 });
 
+test('in inches the keys step by round inches, and the hand-over rounds to inches', async ({ app, page }) => {
+  await app.open();
+  await app.panel.getByRole('button', { name: 'Lengths in mm. Change to in' }).click();
+  await expect(app.readout('Focal length')).toHaveText('1.01371in');
+  await grip(page, 'part:p2').focus();
+  const before = Number(await grip(page, 'part:p2').getAttribute('aria-valuenow'));
+  await page.keyboard.press('ArrowRight');
+  await expect
+    .poll(async () => Number(await grip(page, 'part:p2').getAttribute('aria-valuenow')) - before)
+    .toBeCloseTo(0.01 * 25.4, 9);
+  await page.getByRole('button', { name: 'Hand over', exact: true }).click();
+  const rounding = page.getByRole('dialog', { name: 'Hand over' }).getByLabel('Rounded to');
+  await expect(rounding.locator('option:checked')).toHaveText('0.00001 in');
+});
+
 test('the ledger and the trace sheet tell how the light gets through', async ({ app, page }) => {
   await page.getByRole('tab', { name: 'Ledger' }).click();
   const ledger = page.getByRole('region', { name: 'Ledger' });

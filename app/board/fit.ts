@@ -28,6 +28,10 @@ const KEPT_SHARE = 0.4;
 const LEAST_STRETCH = 0.25;
 /** Width of the break on screen, px. */
 const FOLD_WIDTH_PX = 18;
+/** An arrow key moves at most so far on screen, px, */
+const MOST_KEY_STEP_PX = 10;
+/** unless its step is below this, mm: fine enough however close one looks. */
+const FINE_STEP_MM = 0.005;
 /** Steps of the height stretch within a decade, so that the shown figure is a plain one. */
 const STRETCH_STEPS = [1, 1.25, 1.5, 1.75, 2, 2.5, 3, 3.5, 4, 5, 6, 7, 8];
 
@@ -98,9 +102,13 @@ export function scaleBar(view: Viewport, maxPx = 110, mmPerUnit = 1): ScaleBar {
   return { length, widthPx: length * pxPerUnit };
 }
 
-/** The step (mm) of one arrow key: the greatest of 1, 0.1, 0.01, 0.001 that moves at most `mostPx` on screen. */
-export function keyStepMm(view: Viewport, mostPx = 10): number {
-  return [1, 0.1, 0.01].find((step) => step * view.pxPerMm <= mostPx) ?? 0.001;
+/**
+ * The step (mm) of one arrow key: the greatest of 1, 0.1, 0.01 … display units (`mmPerUnit` each) that moves at most 10 px on screen,
+ * however small once it is some thousandths of a mm.
+ */
+export function keyStepMm(view: Viewport, mmPerUnit = 1): number {
+  const steps = [1, 0.1, 0.01, 0.001, 0.0001].map((step) => step * mmPerUnit);
+  return steps.find((mm) => mm * view.pxPerMm <= MOST_KEY_STEP_PX || mm < FINE_STEP_MM) ?? FINE_STEP_MM;
 }
 
 /** Round lengths (mm) in view, about one in `everyPx`, none of them inside the fold. */

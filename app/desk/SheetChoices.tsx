@@ -1,4 +1,5 @@
-import type { Datum } from '../../engine/index.ts';
+import type { Datum, LengthUnit } from '../../engine/index.ts';
+import { digitsIn } from '../../engine/index.ts';
 import { useReadingNow } from '../live/reading.ts';
 import { setView } from '../store/viewStore.ts';
 import { Segmented, Select } from '../ui/choices.tsx';
@@ -8,10 +9,7 @@ const DATUMS: readonly { readonly value: Datum; readonly label: string }[] = [
   { value: 'sensor', label: 'sensor' },
   { value: 'mount', label: 'mount plane' },
 ];
-const DIGITS = ['0', '1', '2', '3', '4', '5', '6'].map((value) => ({
-  value,
-  label: value === '0' ? '1 mm' : `${(10 ** -Number(value)).toFixed(Number(value))} mm`,
-}));
+const DIGITS = [0, 1, 2, 3, 4, 5, 6];
 const UNITS = [
   { value: 'mm', label: 'mm' },
   { value: 'in', label: 'in' },
@@ -33,10 +31,16 @@ export function SheetChoices({ hasMount }: { readonly hasMount: boolean }) {
       <Select
         label="Rounded to"
         value={digits}
-        choices={DIGITS}
+        choices={DIGITS.map((each) => ({ value: String(each), label: finest(each, unit) }))}
         onChoose={(next) => setView({ digits: Number(next) })}
       />
       <Segmented label="Unit" value={unit} choices={UNITS} onChoose={(next) => setView({ unit: next })} />
     </div>
   );
+}
+
+/** The last decimal that is kept, in words: "0.001 mm". */
+function finest(digits: number, unit: LengthUnit): string {
+  const decimals = digitsIn(unit, digits);
+  return `${(10 ** -decimals).toFixed(decimals)} ${unit}`;
 }

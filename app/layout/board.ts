@@ -1,4 +1,5 @@
 import type { Sketch } from '../../engine/index.ts';
+import { mmPer } from '../../engine/index.ts';
 import { canvasPen } from '../board/canvasPen.ts';
 import { keyStepMm } from '../board/fit.ts';
 import { createHost } from '../board/host.ts';
@@ -93,6 +94,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
 
   const grips = (): readonly Handle[] => [...(picture?.handles ?? []), ...labelGrips];
   const handleOf = (id: string | null): Handle | null => grips().find((handle) => handle.id === id) ?? null;
+  const stepMm = (now: Viewport): number => keyStepMm(now, mmPer(viewStore.getState().unit));
   const view = (): Viewport => viewportOf(viewStore.getState().camera, surface.size(), fold);
   const lookAt = (look: Look) => {
     fold = look.fold;
@@ -193,7 +195,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
       });
     });
     labelGrips = labelHandles(now.sight, labelPlaces);
-    const step = plainLength(keyStepMm(now.view), 'mm');
+    const step = plainLength(stepMm(now.view), now.reading.view.unit);
     if (step !== state.step) state = { ...state, step };
     const room = { measure, labels: labelPlaces, former: words };
     paint('overlay', (pen) => {
@@ -207,7 +209,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     onEffect: hand.onEffect,
   });
   const mirror = createSliderMirror(element, {
-    onStep: (id, steps, { shift }) => hand.step(id, steps * keyStepMm(view()), shift),
+    onStep: (id, steps, { shift }) => hand.step(id, steps * stepMm(view()), shift),
     onFocus: (focus) => {
       show({ focus, ring: document.activeElement?.matches(':focus-visible') ?? false });
       speak();

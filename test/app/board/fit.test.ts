@@ -127,6 +127,15 @@ describe('round lengths', () => {
     expect(keyStepMm({ ...sheet, pxPerMm })).toBe(stepMm);
   });
 
+  it.each([
+    [5, 0.01],
+    [50, 0.001],
+    [2000, 0.0001],
+    [0.001, 1],
+  ])('steps in inches at %s px/mm in steps of %s in', (pxPerMm, stepInch) => {
+    expect(keyStepMm({ ...sheet, pxPerMm }, 25.4)).toBeCloseTo(25.4 * stepInch, 12);
+  });
+
   it('rules the sheet at round lengths outside the fold', () => {
     const view = { ...sheet, pxPerMm: 5, fold: { fromMm: -90, toMm: -30, widthPx: 20 } };
     expect(gridLengths(view, { fromMm: -105, toMm: 45 }, 100)).toEqual([-100, -20, 0, 20, 40]);
