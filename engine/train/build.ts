@@ -7,6 +7,8 @@ export interface SurfaceSpec {
   /** 1/radius, positive when the centre lies to the right; 0 (the default) is a plane. */
   readonly curvaturePerMm?: number;
   readonly conic?: number;
+  /** Coefficients of r⁴, r⁶, … added to the conic's sag, in mm⁻³, mm⁻⁵, … */
+  readonly asphere?: readonly number[];
   /** Power of an ideal thin part standing here. */
   readonly thinPowerPerMm?: number;
   /** Thin power short − long. */
@@ -47,6 +49,10 @@ export function buildTrain(spec: TrainSpec): Train {
   const index = block.subarray(7 * count, 8 * count + 1);
   const indexSpread = block.subarray(8 * count + 1);
   const partOf = new Int32Array(count);
+  const asphereFrom = new Int32Array(count + 1);
+  for (const [k, surface] of spec.surfaces.entries())
+    asphereFrom[k + 1] = asphereFrom[k]! + (surface.asphere?.length ?? 0);
+  const asphere = new Float64Array(asphereFrom[count]!);
   index[0] = spec.objectIndex;
   indexSpread[0] = spec.objectSpread ?? 0;
   let at = 0;
@@ -57,6 +63,7 @@ export function buildTrain(spec: TrainSpec): Train {
     if (!last) at += surface.gapMm;
     curvature[k] = surface.curvaturePerMm ?? 0;
     conic[k] = surface.conic ?? 0;
+    if (surface.asphere !== undefined) asphere.set(surface.asphere, asphereFrom[k]!);
     thinPower[k] = surface.thinPowerPerMm ?? 0;
     powerSpread[k] = surface.powerSpreadPerMm ?? 0;
     index[k + 1] = surface.indexAfter;
@@ -70,6 +77,8 @@ export function buildTrain(spec: TrainSpec): Train {
     z,
     curvature,
     conic,
+    asphere,
+    asphereFrom,
     thinPower,
     index,
     indexSpread,

@@ -1,7 +1,7 @@
 /**
  * What rays run through: one sketch at one setting in one line, flattened. Arrays of length `count` are indexed by surface;
  * `index` and `indexSpread` have one more entry, `index[k]` being the medium in front of surface k. A thin part or a stop is one
- * surface, a plate two. Lengths in mm, powers in 1/mm, positive to the right.
+ * surface, a plate two, glass of n surfaces n. Behind an odd number of mirrors index and gap are negative. Lengths in mm, powers in 1/mm, positive to the right.
  */
 export interface Train {
   readonly count: number;
@@ -9,9 +9,14 @@ export interface Train {
   readonly gap: Float64Array;
   /** Vertex position from the first surface. */
   readonly z: Float64Array;
-  /** 1/radius, positive when the centre lies to the right. All 0 until parts have curved surfaces. */
+  /** 1/radius, positive when the centre lies to the right. */
   readonly curvature: Float64Array;
+  /** Conic constant: 0 a sphere, −1 a paraboloid. */
   readonly conic: Float64Array;
+  /** Coefficients of r⁴, r⁶, … added to the conic's sag, in mm⁻³, mm⁻⁵, …: those of all surfaces in a row. */
+  readonly asphere: Float64Array;
+  /** Surface k has the coefficients from `asphereFrom[k]` up to, not including, `asphereFrom[k + 1]`; count + 1 entries. */
+  readonly asphereFrom: Int32Array;
   /** Power of an ideal thin part standing here; adds to (n′ − n)·curvature. */
   readonly thinPower: Float64Array;
   readonly index: Float64Array;
