@@ -29,6 +29,8 @@ const SENTENCES = {
   'reaches the first part': 'Everything up to the first part is sharp.',
   'no real object': 'No object in front of the first part is sharp on this image plane.',
   'no bundle': 'The bundle has no width here.',
+  'ray lost': 'The exact ray does not get through: the drawing shows where it ends, and why.',
+  'no ray through': 'No exact ray of this bundle reaches the image: the drawing shows where they end, and why.',
   'out of range': 'The numbers grow too large to compute: check for extreme powers and gaps.',
 } as const;
 
