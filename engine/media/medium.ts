@@ -57,7 +57,7 @@ export interface MainLines {
  * air is multiplied by it, so that it counts once: at the surface to air nothing changes. Every index relative to air is taken as relative
  * to the same standard air.
  *
- * A fixed index follows a two-term Cauchy law through its Abbe number V: n(λ) = n + (n − 1)/V · s(λ), with s from `spreadShare`.
+ * A fixed index follows a two-term Cauchy law through its Abbe number V: n(λ) = n + (n − 1)/V · s(λ), with s from `cauchyShare`.
  */
 export function indexOf(
   medium: Medium,
@@ -90,7 +90,7 @@ export function indexOf(
  * How far a wavelength lies from the main line, as a share of the spread short − long in a two-term Cauchy law n = a + b/λ²:
  * (λ⁻² − λm⁻²)/(λs⁻² − λl⁻²). 0 for the main line; short minus long is 1.
  */
-export function spreadShare({ mainNm, shortNm, longNm }: MainLines, wavelengthNm: number): number {
+export function cauchyShare(wavelengthNm: number, { mainNm, shortNm, longNm }: MainLines): number {
   if (wavelengthNm === mainNm) return 0;
   return (wavelengthNm ** -2 - mainNm ** -2) / (shortNm ** -2 - longNm ** -2);
 }
@@ -121,7 +121,7 @@ const within = ([low, high]: readonly [number, number], wavelengthNm: number): b
   wavelengthNm >= low && wavelengthNm <= high;
 
 const fixedIndex = ({ index, abbeNumber }: FixedMedium, wavelengthNm: number, lines: MainLines): number =>
-  index + (abbeNumber === null ? 0 : ((index - 1) / abbeNumber) * spreadShare(lines, wavelengthNm));
+  index + (abbeNumber === null ? 0 : ((index - 1) / abbeNumber) * cauchyShare(wavelengthNm, lines));
 
 const published = (index: number | null): Outcome<number, NoIndex> =>
   index === null ? OUTSIDE : some(index);
