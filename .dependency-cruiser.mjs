@@ -3,7 +3,8 @@
 /** Rooms in order: a room may import rooms of earlier lines, never its neighbours on the same line nor what comes after. */
 const ENGINE_ROOMS = [
   ['outcome.ts', 'units.ts'],
-  ['sketch/', 'media/'],
+  ['media/'],
+  ['sketch/'],
   ['train/'],
   ['paraxial/'],
   ['exact/'],

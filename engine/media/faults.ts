@@ -22,7 +22,7 @@ export const codeFault = (code: string): string | null =>
     : null;
 
 /** What is wrong with a formula and the range in which it shall hold, in one sentence; null when it gives an index all over the range. */
-export function formulaFault(formula: DispersionFormula, rangeNm: readonly [number, number]): string | null {
+export function formulaFaults(formula: DispersionFormula, rangeNm: readonly [number, number]): string | null {
   return shapeFault(formula) ?? rangeFault(rangeNm) ?? indexFault(formula, rangeNm);
 }
 

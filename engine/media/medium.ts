@@ -4,8 +4,6 @@ import { CODE_RANGE_NM, codeIndex, parseCode } from './code.ts';
 import { type DispersionFormula, indexFrom } from './dispersion.ts';
 import { materialOf } from './materials.ts';
 
-export { codeFault, formulaFault, materialFault } from './faults.ts';
-
 /** `'air'` is the surrounding air, see `Air`. */
 export type Medium = 'air' | SolidMedium;
 
