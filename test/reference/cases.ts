@@ -3,40 +3,23 @@ import { finite } from '../../engine/paraxial/absence.ts';
 import { heightInSpace, paraxialRay } from '../../engine/paraxial/trace.ts';
 import { readClosedForm } from './closedForms.ts';
 import { isRecord, numberIn } from './json.ts';
-import { type Measured, type Reader, readTrain } from './measure.ts';
+import { type Reader, readTrain } from './measure.ts';
 import { type Laid, layOut } from './prescription.ts';
+import { type CaseReport, COMPUTED_RELATIVE, compare, type Miss, missLine, reportOf } from './report.ts';
+import { runSeidel } from './seidelSums.ts';
 
-/** One quantity that came out wrong. `wanted` is null when it should not exist. */
-export interface Miss {
-  readonly quantity: string;
-  readonly got: string;
-  readonly wanted: string;
-  readonly tolerance: number;
-}
+export type { CaseReport, Miss } from './report.ts';
 
-/** What became of one case. */
-export interface CaseReport {
-  readonly id: string;
-  readonly outcome: 'passed' | 'failed' | 'skipped';
-  /** Quantities that were compared, against the printed figure or the independent computation or both. */
-  readonly covered: readonly string[];
-  /** Quantities that the first order cannot express. */
-  readonly left: readonly string[];
-  readonly misses: readonly Miss[];
-}
-
-/** Relative agreement with the independent computation: a trace of thirty surfaces in double precision keeps it. */
-const COMPUTED_RELATIVE = 1e-12;
 /** Printed tolerances end on a digit; this keeps the conversion to binary from counting as a miss. */
 const PRINTED_SLACK = 1e-12;
 
-/** Runs every case of a parsed case file. Entries that are no case, or that cannot be expressed, are skipped with their id. */
+/** Runs every case of a list of cases. Entries that are no case, or that cannot be expressed, are skipped with their id. */
 export function runCases(list: unknown): readonly CaseReport[] {
   const entries: readonly unknown[] = Array.isArray(list) ? list : [];
   return entries.map((entry, place) => {
     const id =
       isRecord(entry) && typeof entry.id === 'string' ? entry.id : `entry ${place + 1} without an id`;
-    return isRecord(entry) ? runCase(id, entry) : skipped(id, []);
+    return isRecord(entry) ? runCase(id, entry) : reportOf(id, [], [], []);
   });
 }
 
@@ -52,12 +35,12 @@ export function main(paths: readonly string[], print: (line: string) => void): n
   const reports: CaseReport[] = [];
   let unreadable = 0;
   for (const path of paths) {
-    const list = readList(path);
-    if (typeof list === 'string') {
-      print(list);
+    const found = runFile(path);
+    if (typeof found === 'string') {
+      print(found);
       unreadable++;
     } else {
-      reports.push(...runCases(list));
+      reports.push(...found);
     }
   }
   for (const { id, misses } of reports) for (const miss of misses) print(missLine(id, miss));
@@ -68,11 +51,8 @@ export function main(paths: readonly string[], print: (line: string) => void): n
   return count('failed') + unreadable > 0 ? 1 : 0;
 }
 
-const missLine = (id: string, { quantity, got, wanted, tolerance }: Miss): string =>
-  `miss: ${id}, ${quantity}: got ${got}, wanted ${wanted}, tolerance ${tolerance}`;
-
-/** The parsed list, or the sentence that says why there is none. */
-function readList(path: string): readonly unknown[] | string {
+/** The reports of one file, or the sentence that says why there are none. */
+function runFile(path: string): readonly CaseReport[] | string {
   let text: string;
   try {
     text = readFileSync(path, 'utf8');
@@ -80,20 +60,20 @@ function readList(path: string): readonly unknown[] | string {
     return `${path} cannot be read: no such file, or no permission.`;
   }
   try {
-    const list: unknown = JSON.parse(text);
-    return Array.isArray(list) ? list : `${path} holds no list of cases.`;
-  } catch {
-    return `${path} is not JSON.`;
+    return runParsed(JSON.parse(text)) ?? `${path} holds no list of cases and no systems with rays or sums.`;
+  } catch (error) {
+    if (error instanceof SyntaxError) return `${path} is not JSON.`;
+    throw error;
   }
 }
 
-const skipped = (id: string, left: readonly string[]): CaseReport => ({
-  id,
-  outcome: 'skipped',
-  covered: [],
-  left,
-  misses: [],
-});
+/** A list of cases, or systems with Seidel sums; null when it is neither. */
+function runParsed(file: unknown): readonly CaseReport[] | null {
+  if (Array.isArray(file)) return runCases(file);
+  const systems: readonly unknown[] = isRecord(file) && Array.isArray(file.systems) ? file.systems : [];
+  if (systems.some((system) => isRecord(system) && isRecord(system.sums))) return runSeidel(file);
+  return null;
+}
 
 function runCase(id: string, entry: Record<string, unknown>): CaseReport {
   const input = isRecord(entry.input) ? entry.input : {};
@@ -114,16 +94,13 @@ function runCase(id: string, entry: Record<string, unknown>): CaseReport {
       continue;
     }
     covered.push(quantity);
-    if (claim) misses.push(...compare(quantity, measured, claim.value, claim.tolerance + slack(claim.value)));
+    const { value, floor } = measured;
+    if (claim) misses.push(...compare(quantity, value, claim.value, claim.tolerance + slack(claim.value)));
     const exact = numberIn(computed, quantity);
-    if (exact !== null) {
-      misses.push(
-        ...compare(quantity, measured, exact, COMPUTED_RELATIVE * Math.abs(exact) + measured.floor),
-      );
-    }
+    if (exact !== null)
+      misses.push(...compare(quantity, value, exact, COMPUTED_RELATIVE * Math.abs(exact) + floor));
   }
-  if (covered.length === 0) return skipped(id, left);
-  return { id, outcome: misses.length > 0 ? 'failed' : 'passed', covered, left, misses };
+  return reportOf(id, covered, left, misses);
 }
 
 const slack = (value: number | null): number => PRINTED_SLACK * Math.abs(value ?? 0);
@@ -135,12 +112,6 @@ function claimOf(entry: unknown): { value: number | null; tolerance: number } | 
   const tolerance = numberIn(entry, 'tolerance') ?? (entry.tolerance === undefined ? 0 : null);
   if (tolerance === null || (value === null && entry.value !== null)) return null;
   return { value, tolerance };
-}
-
-function compare(quantity: string, { value }: Measured, wanted: number | null, tolerance: number): Miss[] {
-  const got = value.ok ? value.value : value.why;
-  const agrees = wanted === null ? !value.ok : value.ok && Math.abs(value.value - wanted) <= tolerance;
-  return agrees ? [] : [{ quantity, got: String(got), wanted: String(wanted ?? 'none'), tolerance }];
 }
 
 function readerOf(id: string, input: Record<string, unknown>): Reader | null {

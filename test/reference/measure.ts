@@ -12,8 +12,9 @@ import { referenceRays } from '../../engine/paraxial/rays.ts';
 import type { FieldSize } from '../../engine/sketch/types.ts';
 import type { ApertureAt } from '../../engine/train/places.ts';
 import { absoluteMatrix, absoluteRay } from '../engine/absolute.ts';
-import { isRecord, numberIn } from './json.ts';
+import { apertureOf, fieldOf } from './light.ts';
 import type { Laid } from './prescription.ts';
+import { sumRows } from './sums.ts';
 
 /** What the engine gives for a quantity, and the absolute floor below which two computations of it cannot differ. */
 export interface Measured {
@@ -34,6 +35,7 @@ export function readTrain(laid: Laid, input: Record<string, unknown>): Reader {
     ...cardinals(laid),
     ...ends(laid),
     ...elements(laid),
+    ...sumRows(laid, input),
     ...stopImages(laid, input),
   ]);
   return (quantity) => table.get(quantity)?.() ?? null;
@@ -243,32 +245,3 @@ function stopImages(laid: Laid, input: Record<string, unknown>): Rows {
 
 const ANY_APERTURE: ApertureAt = { kind: 'stopDiameter', diameterMm: 1 };
 const ANY_FIELD: FieldSize = { kind: 'angle', angleDeg: 1 };
-
-function apertureOf(aperture: unknown): ApertureAt | null {
-  if (!isRecord(aperture)) return null;
-  const entrancePupilDiameter = numberIn(aperture, 'entrancePupilDiameter');
-  if (entrancePupilDiameter !== null)
-    return { kind: 'entrancePupilDiameter', diameterMm: entrancePupilDiameter };
-  const stopDiameter = numberIn(aperture, 'stopDiameter');
-  if (stopDiameter !== null) return { kind: 'stopDiameter', diameterMm: stopDiameter };
-  const fNumber = numberIn(aperture, 'fNumber');
-  if (fNumber !== null) return { kind: 'infinityFNumber', fNumber };
-  const na = numberIn(aperture, 'objectNA');
-  return na === null ? null : { kind: 'objectNA', na };
-}
-
-/** The field as the engine takes it, by magnitude, and the sign that the file's own field has against the engine's. */
-function fieldOf(field: unknown): { size: FieldSize; sideOf: (chiefSlope: number) => number } | null {
-  if (!isRecord(field)) return null;
-  const angleDeg = numberIn(field, 'angleDeg');
-  if (angleDeg !== null) {
-    const sideOf = (slope: number) => (slope < 0 === angleDeg < 0 ? 1 : -1);
-    return { size: { kind: 'angle', angleDeg: Math.abs(angleDeg) }, sideOf };
-  }
-  const height = numberIn(field, 'objectHeight');
-  if (height === null) return null;
-  return {
-    size: { kind: 'objectHeight', heightMm: Math.abs(height) },
-    sideOf: () => (height > 0 ? -1 : 1),
-  };
-}

@@ -86,8 +86,28 @@ function surfaceOf(
   if (indexAfter === null || indexAfter === 0 || spreadAfter === null) return null;
   if (radius !== null && (typeof radius !== 'number' || radius === 0)) return null;
   const conic = numberIn(entry, 'conic') ?? 0;
-  return { part, curvaturePerMm: radius === null ? 0 : 1 / radius, conic, indexAfter, spreadAfter, gapMm };
+  const asphere = asphereOf(entry.asphere);
+  if (asphere === null) return null;
+  const curvaturePerMm = radius === null ? 0 : 1 / radius;
+  return { part, curvaturePerMm, conic, asphere, indexAfter, spreadAfter, gapMm };
 }
+
+/** Coefficients of r⁴, r⁶, … from `{ "4": A4, "6": A6 }`; null when some power is odd, below four or no number. */
+function asphereOf(asphere: unknown): readonly number[] | null {
+  if (asphere === undefined || asphere === null) return [];
+  if (!isRecord(asphere)) return null;
+  const coefficients: number[] = [];
+  for (const power of Object.keys(asphere)) {
+    const place = Number(power) / 2 - 2;
+    const value = numberIn(asphere, power);
+    if (value === null || !Number.isInteger(place) || place < 0 || place > MOST_POWERS) return null;
+    coefficients[place] = value;
+  }
+  return Array.from(coefficients, (value) => value ?? 0);
+}
+
+/** No written surface goes beyond r⁴⁰. */
+const MOST_POWERS = 18;
 
 function thinLensOf(entry: Record<string, unknown>, part: number, gapMm: number): SurfaceSpec | null {
   const focalLength = numberIn(entry, 'focalLength');
