@@ -32,11 +32,11 @@ export function coddington(train: Train, path: RayPath, objectZ: number | null):
     const hit = path.hits[k];
     if (hit?.direction == null || hit.cosRefraction === null) break;
     const at = train.z[k]! + hit.point[2];
-    // Lengths along the ray count as the axis does: to the left, behind a mirror, they are negative.
-    const length = (at - z) / Math.abs(directionZ);
+    const [n, nRear] = [train.index[k]!, train.index[k + 1]!];
+    // Behind a mirror, where the index is negative, lengths along the ray are negative too.
+    const length = (at - z) / (directionZ * Math.sign(n));
     offsetT += length * slopeT;
     offsetS += length * slopeS;
-    const [n, nRear] = [train.index[k]!, train.index[k + 1]!];
     const power = train.thinPower[k] === 0 ? 0 : powerAt(train, k);
     if (power === 0) {
       const [cosI, cosR] = [hit.cosIncidence, hit.cosRefraction];
@@ -52,7 +52,8 @@ export function coddington(train: Train, path: RayPath, objectZ: number | null):
       offsetT = arc * cosR;
     } else {
       // The collinear map acts on depths along the axis, n′/z′ = n/z + φ, in both directions alike.
-      const [cosZ, cosRearZ] = [Math.abs(directionZ), Math.abs(hit.direction[2])];
+      const cosZ = directionZ * Math.sign(n);
+      const cosRearZ = hit.direction[2] * Math.sign(nRear);
       const [cameT, bentT] = [(n * slopeT) / cosZ, power * offsetT];
       const [cameS, bentS] = [(n * slopeS) / cosZ, power * offsetS];
       slopeT = (cosRearZ / nRear) * (cosRearZ / cosZ) * (cameT - bentT);
@@ -64,7 +65,7 @@ export function coddington(train: Train, path: RayPath, objectZ: number | null):
     z = at;
     directionZ = hit.direction[2];
   }
-  const way = Math.sign(directionZ);
+  const way = Math.sign(train.index[count]!);
   return {
     tangential: axisCrossing(way, offsetT, slopeT, scaleT, 'image at infinity'),
     sagittal: axisCrossing(way, offsetS, slopeS, scaleS, 'image at infinity'),
