@@ -2,6 +2,7 @@
  * The engine's only door: what the app uses, by name. Everything it offers is a pure function over readonly data; units, signs,
  * absence and sources stand in the docstrings of the rooms.
  */
+export { indexOf, type MainLines, mediumName } from './media/medium.ts';
 export { type Fault, none, type Outcome, some } from './outcome.ts';
 export { type Quantity, sentenceOf } from './paraxial/absence.ts';
 export { type Analysis, analyse } from './paraxial/analyse.ts';
@@ -28,7 +29,7 @@ export {
   type SpacingTable,
 } from './sheet/table.ts';
 export { parseClip, writeClip } from './sketch/clip.ts';
-export { emptySketch, freshPartId, LINES, newPlate, newStop, newThin } from './sketch/create.ts';
+export { emptySketch, freshPartId, LINES, newGlass, newPlate, newStop, newThin } from './sketch/create.ts';
 export { withGroups } from './sketch/edits/change.ts';
 export { copyParts, duplicateParts, pasteParts } from './sketch/edits/copy.ts';
 export {
@@ -46,6 +47,7 @@ export { tieParts, untie } from './sketch/edits/groups.ts';
 export { insertPart } from './sketch/edits/insert.ts';
 export {
   joinStopDiameter,
+  setAir,
   setAperture,
   setAssumedIndex,
   setBlur,
@@ -62,11 +64,14 @@ export {
   renamePart,
   setAbbeNumber,
   setFocalLength,
+  setGlass,
   setIndex,
   setMaterial,
   setNote,
   setRoom,
   setSemiDiameter,
+  setShapeFactor,
+  setSurface,
   setThickness,
 } from './sketch/edits/parts.ts';
 export {
@@ -88,7 +93,10 @@ export type {
   Aperture,
   Field,
   FieldSize,
+  Filling,
   FixedMedium,
+  GlassPart,
+  GlassSurface,
   Lines,
   Medium,
   Part,
@@ -100,6 +108,7 @@ export type {
   Sensor,
   Setting,
   Sketch,
+  SolidMedium,
   ThinPart,
 } from './sketch/types.ts';
 export { isCommon, objectDistanceAt, settingAt, valueAt } from './sketch/values.ts';

@@ -26,6 +26,7 @@ export function partCommands(): CommandGroup {
       command('addNegative', 'Add a negative element behind the selection', ['N'], add('negative')),
       command('addStop', 'Add a stop behind the selection', ['S'], add('stop')),
       command('addPlate', 'Add a plate behind the selection', ['L'], add('plate')),
+      command('addGlass', 'Add a glass lens behind the selection', ['G'], add('glass')),
       command('delete', 'Delete the selected parts', ['Delete', 'Backspace'], removeSelected, hasSelected),
       command('duplicate', 'Duplicate the selected parts', ['D'], duplicateSelected, hasSelected),
       command('flip', 'Flip: reverse the order of the selected parts, or of all', ['V'], flip, hasParts),

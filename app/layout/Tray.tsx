@@ -76,6 +76,7 @@ const MARKS: Readonly<Record<TrayKind, string>> = {
   negative: 'M12 6v16M8 2l4 4 4-4M8 26l4-4 4 4',
   stop: 'M12 3v7M12 18v7M7 10h10M7 18h10',
   plate: 'M9 4h6v20H9z',
+  glass: 'M8 4h8q4 10 0 20H8q-4-10 0-20z',
 };
 
 function TrayMark({ kind }: { readonly kind: TrayKind }) {

@@ -1,5 +1,13 @@
 import type { PartId, PositionId, Sketch } from '../../engine/index.ts';
-import { dropStop, freshPartId, insertPart, newPlate, newThin, rideStop } from '../../engine/index.ts';
+import {
+  dropStop,
+  freshPartId,
+  insertPart,
+  newGlass,
+  newPlate,
+  newThin,
+  rideStop,
+} from '../../engine/index.ts';
 import { currentReading } from '../live/reading.ts';
 import { applyEdit, sketchStore } from '../store/sketchStore.ts';
 import { setView, type TrayKind, viewStore } from '../store/viewStore.ts';
@@ -10,11 +18,15 @@ export const TRAY: readonly { readonly kind: TrayKind; readonly label: string }[
   { kind: 'negative', label: 'negative' },
   { kind: 'stop', label: 'stop' },
   { kind: 'plate', label: 'plate' },
+  { kind: 'glass', label: 'glass' },
 ];
 
 /** What a new thin part starts with; its entry is opened at once. */
 const FIRST_FOCAL_LENGTH_MM = 50;
 const FIRST_THICKNESS_MM = 1;
+/** A new singlet has about the focal length of a new thin part. */
+const FIRST_RADIUS_MM = 50;
+const FIRST_GLASS_MM = 4;
 
 /** A place on the axis, in mm from the first part, and the part that stands there. */
 export interface Spot {
@@ -47,6 +59,8 @@ function added(kind: TrayKind, sketch: Sketch, atMm: number, position: PositionI
   if (kind === 'stop') return dropStop(sketch, atMm, position);
   const id = freshPartId(sketch);
   if (kind === 'plate') return insertPart(sketch, newPlate(FIRST_THICKNESS_MM, id), atMm, position);
+  if (kind === 'glass')
+    return insertPart(sketch, newGlass(FIRST_RADIUS_MM, FIRST_GLASS_MM, id), atMm, position);
   const focalLengthMm = kind === 'positive' ? FIRST_FOCAL_LENGTH_MM : -FIRST_FOCAL_LENGTH_MM;
   const placed = insertPart(sketch, newThin(focalLengthMm, id), atMm, position);
   return sketch.parts.length === 0 ? rideStop(placed, id) : placed;

@@ -1,5 +1,6 @@
 import type { Outcome } from '../outcome.ts';
 import type { Setting, Sketch } from '../sketch/types.ts';
+import { indicesIn } from '../train/indices.ts';
 import { type ApertureAt, apertureAt, type Places, placesOf } from '../train/places.ts';
 import { trainOf } from '../train/train.ts';
 import type { Train } from '../train/types.ts';
@@ -74,12 +75,14 @@ export function analyse(sketch: Sketch, setting: Setting): Analysis {
   };
 }
 
-/** The index of glass taken for the thin part at each surface: its own, else the sketch's assumed one. */
+/** The index of glass taken for the thin part at each surface: its glass's, its own, else the sketch's assumed one. */
 function glassIndices(sketch: Sketch, train: Train): Float64Array {
+  const { glassOf } = indicesIn(sketch, 'main');
   const indices = new Float64Array(train.count);
   for (let k = 0; k < train.count; k++) {
     const part = sketch.parts[train.partOf[k]!];
-    indices[k] = (part?.kind === 'thin' ? part.index : null) ?? sketch.assumedIndex;
+    const own = part?.kind === 'thin' ? (glassOf(part) ?? part.index) : null;
+    indices[k] = own ?? sketch.assumedIndex;
   }
   return indices;
 }

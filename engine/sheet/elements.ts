@@ -1,9 +1,13 @@
 import type { Outcome } from '../outcome.ts';
 import { none, some } from '../outcome.ts';
+import { firstOrder } from '../paraxial/firstOrder.ts';
+import { givenSemiDiameter, lengthOf } from '../sketch/part.ts';
 import type { Part, PartId, Sketch } from '../sketch/types.ts';
+import { partTrain } from '../train/slice.ts';
 import type { Grid } from './grid.ts';
 import { labelOf, positionLabel } from './labels.ts';
 import type { PositionSheet } from './positionSheet.ts';
+import { onGridInside } from './printed.ts';
 import type { Block, Cell, Column } from './table.ts';
 import { absentCell, textCell } from './table.ts';
 
@@ -42,28 +46,29 @@ function elementColumns(sketch: Sketch, sheets: readonly PositionSheet[], grid: 
     cellOf: (part, index) => grid.lengthCellOf(read(part, index)),
   });
   const needs = sketch.parts.map((_, index) => clearNeed(index, sheets));
-  const hasPlate = sketch.parts.some((part) => part.kind === 'plate');
+  const hasThickness = sketch.parts.some((part) => lengthOf(part) > 0);
   const hasRoom = sketch.parts.some(
     (part) => part.kind === 'thin' && (part.roomFrontMm !== 0 || part.roomBehindMm !== 0),
   );
   return [
     name('element', 'Element', (_, index) => textCell(labelOf(sketch, index))),
-    length('focalLength', 'Focal length', (part) =>
-      part.kind === 'thin' ? some(part.focalLengthMm) : none(kindWord(part)),
-    ),
+    length('focalLength', 'Focal length', (part, index) => focalLengthOf(part, index, sheets)),
     length(
       'clearNeeded',
       'Clear diameter needed',
       (_, index) => needs[index]?.diameterMm ?? none('no parts'),
     ),
     name('neededAt', 'Needed at', (_, index) => needs[index]?.at ?? absentCell('no parts')),
-    length('clearGiven', 'Clear diameter given', (part) =>
-      part.semiDiameterMm === null ? none('open') : some(2 * part.semiDiameterMm),
-    ),
-    ...(hasPlate
+    length('clearGiven', 'Clear diameter given', (part) => {
+      const semiDiameterMm = givenSemiDiameter(part);
+      return semiDiameterMm === null ? none('open') : some(2 * semiDiameterMm);
+    }),
+    ...(hasThickness
       ? [
           length('thickness', 'Thickness', (part) =>
-            part.kind === 'plate' ? some(part.thicknessMm) : none(kindWord(part)),
+            part.kind === 'plate' || part.kind === 'glass'
+              ? some(lengthOf(onGridInside(part, grid)))
+              : none(kindWord(part)),
           ),
         ]
       : []),
@@ -97,6 +102,13 @@ function clearNeed(
     }
   }
   return { diameterMm: largestMm < 0 ? none('no parts') : some(largestMm), at };
+}
+
+/** Of a thin part what is given, of glass 1/power in the main line; a plate and a stop have none. */
+function focalLengthOf(part: Part, index: number, sheets: readonly PositionSheet[]): Outcome<number> {
+  if (part.kind === 'thin') return some(part.focalLengthMm);
+  const train = sheets[0] && part.kind === 'glass' ? partTrain(sheets[0].analysis.train, index) : null;
+  return train === null ? none(kindWord(part)) : firstOrder(train).focalLengthMm;
 }
 
 const kindWord = (part: Part): string => (part.kind === 'thin' ? 'thin element' : part.kind);

@@ -10,9 +10,10 @@ export function labelOf(sketch: Sketch, index: number): string {
 /** What a position is called in the table. */
 export const positionLabel = (position: Position): string => position.name.trim() || position.id;
 
-/** What a part offers to measure from: a thin part its principal plane, a plate a face, a stop its plane. */
+/** What a part offers to measure from: a thin part its principal plane, a plate a face, glass a vertex, a stop its plane. */
 export function planeOf(part: Part | undefined): string {
   if (part?.kind === 'thin') return 'principal plane';
+  if (part?.kind === 'glass') return 'vertex';
   return part?.kind === 'plate' ? 'face' : 'stop plane';
 }
 

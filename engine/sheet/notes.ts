@@ -32,7 +32,7 @@ export function notesOf(sketch: Sketch, options: SheetOptions, grid: Grid): read
     ...(caution === null ? [] : [caution]),
     `Spacing table of ${sketch.title}, from paraxial rays in the main line, ${sketch.lines.mainNm} nm.`,
     `Distances are counted from ${datumWords(sketch, options.datum)}, positive to the right, the way the light runs.`,
-    ...thinNotes(sketch),
+    ...gapNotes(sketch),
     roundingNote(grid),
     imageNote(sketch),
     ...stopNotes(sketch),
@@ -48,7 +48,7 @@ function datumWords(sketch: Sketch, datum: Datum): string {
     : `the mount plane, ${sketch.registerMm} mm in front of the ${imageWord(sketch)}`;
 }
 
-function thinNotes(sketch: Sketch): readonly string[] {
+function gapNotes(sketch: Sketch): readonly string[] {
   const thin = sketch.parts.filter((part) => part.kind === 'thin');
   const reserved = thin.some((part) => part.roomFrontMm !== 0 || part.roomBehindMm !== 0);
   return [
@@ -56,6 +56,9 @@ function thinNotes(sketch: Sketch): readonly string[] {
       ? [
           'Elements are thin: gaps run from principal plane to principal plane. The vertices of real glass stand elsewhere.',
         ]
+      : []),
+    ...(sketch.parts.some((part) => part.kind === 'glass')
+      ? ['Gaps in front of and behind glass run to its vertices on the axis.']
       : []),
     ...(reserved ? ['A clear gap is the gap less the room reserved for glass on both of its sides.'] : []),
   ];

@@ -1,8 +1,9 @@
 import type { Outcome } from '../outcome.ts';
 import { mapOutcome, none, some } from '../outcome.ts';
 import { conjugates } from '../paraxial/conjugates.ts';
+import { lengthOf } from '../sketch/part.ts';
 import type { Part, Setting, Sketch } from '../sketch/types.ts';
-import { placesOf, thicknessOf } from '../train/places.ts';
+import { placesOf } from '../train/places.ts';
 import { trainOf } from '../train/train.ts';
 import type { Grid } from './grid.ts';
 import type { Datum } from './table.ts';
@@ -23,8 +24,8 @@ export interface PrintedLayout {
 }
 
 /**
- * `sketch` at `setting` on the grid. Distances from the datum are rounded; a plate keeps its own rounded thickness, so it
- * has the same one at every position. Absent, with a sentence, when the datum plane does not exist.
+ * `sketch` at `setting` on the grid. Distances from the datum are rounded; a plate and each piece of glass keep their own rounded
+ * thickness, so it is the same at every position. Absent, with a sentence, when the datum plane does not exist.
  */
 export function printedLayout(
   sketch: Sketch,
@@ -43,7 +44,7 @@ export function printedLayout(
   const parts: { front: number; rear: number }[] = [];
   for (const [k, place] of places.parts.entries()) {
     const front = onGrid(place.frontMm);
-    const thickness = grid.stepsOf(thicknessOf(sketch.parts[k] as Part));
+    const thickness = grid.stepsOf(lengthOf(onGridInside(sketch.parts[k] as Part, grid)));
     if (!front.ok || !thickness.ok)
       return none('The image plane lies too far away to be the datum: choose the first part as the datum.');
     parts.push({ front: front.value, rear: front.value + thickness.value });
@@ -53,6 +54,21 @@ export function printedLayout(
     places.objectMm === null ? none('object at infinity') : grid.stepsOf(-places.objectMm);
   const printed = { parts, image, objectDistance };
   return some({ ...printed, imageMissMm: imageMiss(sketch, setting, printed, defocusMm, grid) });
+}
+
+/** The part with every thickness inside it rounded to the grid; one too large to round stays as it is. */
+export function onGridInside(part: Part, grid: Grid): Part {
+  const rounded = (mm: number): number => {
+    const steps = grid.stepsOf(mm);
+    return steps.ok ? grid.mmOf(steps.value) : mm;
+  };
+  if (part.kind === 'plate') return { ...part, thicknessMm: rounded(part.thicknessMm) };
+  if (part.kind !== 'glass') return part;
+  const fillings = part.fillings.map((filling) => ({
+    ...filling,
+    thicknessMm: rounded(filling.thicknessMm),
+  }));
+  return { ...part, fillings };
 }
 
 function datumPlane(sketch: Sketch, datum: Datum, imageMm: Outcome<number>): Outcome<number> {
@@ -85,9 +101,7 @@ function imageMiss(
       const here = parts[k] ?? { front: 0, rear: 0 };
       const next = parts[k + 1]?.front ?? image.value;
       const space = { ...part.space, lengthMm: grid.mmOf(next - here.rear) };
-      return part.kind === 'plate'
-        ? { ...part, space, thicknessMm: grid.mmOf(here.rear - here.front) }
-        : { ...part, space };
+      return { ...onGridInside(part, grid), space };
     }),
   };
   const lastRear = parts.at(-1)?.rear ?? 0;

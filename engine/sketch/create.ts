@@ -1,17 +1,20 @@
 import type {
   FixedMedium,
+  GlassPart,
+  GlassSurface,
   GroupId,
   Lines,
   PartId,
   PlatePart,
   PositionId,
   Sketch,
+  SolidMedium,
   StopPart,
   ThinPart,
 } from './types.ts';
 
 /** Reference lines in nm after ISO 7944: the mercury green e with F′ and C′, the helium yellow d with F and C. */
-export const LINES: { readonly e: Lines; readonly d: Lines } = {
+export const LINES: Readonly<Record<'e' | 'd', Pick<Lines, 'mainNm' | 'shortNm' | 'longNm'>>> = {
   e: { mainNm: 546.074, shortNm: 479.9914, longNm: 643.8469 },
   d: { mainNm: 587.5618, shortNm: 486.1327, longNm: 656.2725 },
 };
@@ -32,7 +35,8 @@ export function emptySketch(title = 'Untitled'): Sketch {
     stop: null,
     aperture: { kind: 'infinityFNumber', fNumber: 4 },
     field: { size: { kind: 'angle', angleDeg: 10 }, fractions: [0, 0.7, 1], vignetting: 0 },
-    lines: LINES.d,
+    lines: { ...LINES.d, weights: { main: 1, short: 1, long: 1 }, more: [] },
+    air: 'unity',
     positions: [{ id: 'only' as PositionId, name: 'only' }],
     groups: [],
     assumedIndex: 1.5,
@@ -50,6 +54,8 @@ export function newThin(focalLengthMm: number, id: PartId = FIRST_ID): ThinPart 
     focalLengthMm,
     abbeNumber: null,
     index: null,
+    material: null,
+    shapeFactor: null,
     roomFrontMm: 0,
     roomBehindMm: 0,
   };
@@ -61,8 +67,26 @@ export function newStop(id: PartId = FIRST_ID): StopPart {
 }
 
 /** An open flat plate of crown glass, or of the given material. */
-export function newPlate(thicknessMm = 1, id: PartId = FIRST_ID, material: FixedMedium = CROWN): PlatePart {
+export function newPlate(thicknessMm = 1, id: PartId = FIRST_ID, material: SolidMedium = CROWN): PlatePart {
   return { kind: 'plate', ...plainPart(id), thicknessMm, material };
+}
+
+/** A surface without rim of its own; the radius null is flat. */
+export const newSurface = (radiusMm: number | null): GlassSurface => ({
+  radiusMm,
+  conic: 0,
+  asphere: [],
+  semiDiameterMm: null,
+});
+
+/** An open singlet of the catalogue's borosilicate crown with equal radii of opposite sign. */
+export function newGlass(radiusMm: number, thicknessMm: number, id: PartId = FIRST_ID): GlassPart {
+  return {
+    kind: 'glass',
+    ...plainPart(id),
+    surfaces: [newSurface(radiusMm), newSurface(-radiusMm)],
+    fillings: [{ thicknessMm, material: { material: 'n-bk7' } }],
+  };
 }
 
 function plainPart(id: PartId) {

@@ -51,7 +51,8 @@ const WORDS: Readonly<Record<string, string>> = {
 };
 
 const ALLOWED: Readonly<Record<string, string>> = {
-  medium: '“air”, or an object with name, index and abbeNumber',
+  medium:
+    '“air”, or an object with material, with code, with name, formula and rangeNm, or with name, index and abbeNumber',
   fractions: LIMITS.fraction.allowed,
   fNumber: LIMITS.workingFNumber.allowed,
   diameterMm: LIMITS.stopDiameterMm.allowed,

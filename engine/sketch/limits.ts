@@ -7,17 +7,27 @@ export interface Limit {
   readonly high: number;
   /** Whether `low` itself is excluded. */
   readonly above: boolean;
+  /** What is smaller in size counts as zero, which is not allowed. */
+  readonly leastSize?: number;
   /** What is allowed, to follow "it must be". */
   readonly allowed: string;
 }
 
 /** No length in a sketch is larger, in mm: one kilometre. */
 export const LONGEST_MM = 1e6;
-/** No focal length is shorter in size, in mm. */
-export const SHORTEST_FOCAL_LENGTH_MM = 1e-3;
+/** No focal length and no radius is shorter in size, in mm. */
+const SHORTEST_MM = 1e-3;
 
 /** How many entries a list may hold, and how many characters a text. */
-export const MOST = { parts: 200, positions: 60, groups: 100, fractions: 9 } as const;
+export const MOST = {
+  parts: 200,
+  positions: 60,
+  groups: 100,
+  fractions: 9,
+  surfaces: 20,
+  coefficients: 14,
+  moreLines: 2,
+} as const;
 export const LONGEST_TEXT = { title: 200, name: 100, note: 5000, notes: 50_000, id: 40 } as const;
 
 const above = (words: string, low: number, high: number, unit: Limit['unit']): Limit => ({
@@ -49,6 +59,7 @@ export const LIMITS = {
     low: -LONGEST_MM,
     high: LONGEST_MM,
     above: false,
+    leastSize: SHORTEST_MM,
     allowed: 'a number other than zero, between 0.001 and 1,000,000 mm in size',
   },
   lengthMm: from('gap', -LONGEST_MM, LONGEST_MM, 'mm'),
@@ -60,6 +71,23 @@ export const LIMITS = {
   thicknessMm: above('thickness', 0, LONGEST_MM, 'mm'),
   roomFrontMm: from('room in front', 0, LONGEST_MM, 'mm'),
   roomBehindMm: from('room behind', 0, LONGEST_MM, 'mm'),
+  radiusMm: {
+    words: 'radius',
+    unit: 'mm',
+    low: -1e12,
+    high: 1e12,
+    above: false,
+    leastSize: SHORTEST_MM,
+    allowed: 'a number other than zero, between 0.001 and 1,000,000,000,000 mm in size, or flat',
+  },
+  conic: from('conic constant', -1e6, 1e6, ''),
+  coefficient: {
+    ...from('coefficient', -1e30, 1e30, ''),
+    allowed: 'a finite number, at most 1e30 in size',
+  },
+  fillingMm: from('thickness', 0, LONGEST_MM, 'mm'),
+  shapeFactor: from('shape factor', -1e6, 1e6, ''),
+  weight: from('weight', 0, 1e6, ''),
   abbeNumber: above('Abbe number', 0, 1000, ''),
   index: from('index', 1, 5, ''),
   assumedIndex: from('assumed index', 1, 5, ''),
@@ -91,4 +119,6 @@ export const LIMITS = {
 
 /** Whether the number keeps to its limit; what is not a number, or not finite, does not. */
 export const keeps = (limit: Limit, value: number): boolean =>
-  value <= limit.high && (limit.above ? value > limit.low : value >= limit.low);
+  value <= limit.high &&
+  (limit.above ? value > limit.low : value >= limit.low) &&
+  (limit.leastSize === undefined || Math.abs(value) >= limit.leastSize);

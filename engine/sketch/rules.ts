@@ -1,7 +1,11 @@
+import { indexOf } from '../media/medium.ts';
 import type { Fault } from '../outcome.ts';
-import { keeps, LIMITS, type Limit, LONGEST_TEXT, MOST, SHORTEST_FOCAL_LENGTH_MM } from './limits.ts';
-import type { FixedMedium, Medium, ObjectDistance, Part, PerPosition, Sketch } from './types.ts';
-import { partLabel, quantityText, quoted, valueText } from './words.ts';
+import { countFault, idFaults, numberFault, textFault, valueFaults } from './faults.ts';
+import { keeps, LIMITS, LONGEST_TEXT, MOST } from './limits.ts';
+import { mediumFaults } from './mediumRules.ts';
+import { partFaults } from './partRules.ts';
+import type { Part, Sketch } from './types.ts';
+import { quantityText, quoted } from './words.ts';
 
 /**
  * Every rule on the values of a sketch, in one place: all that are broken, each with its path and a sentence; an empty
@@ -61,58 +65,7 @@ function objectFaults(faults: Fault[], sketch: Sketch): void {
     subject: 'The object distance',
   }));
   if (sketch.object.medium !== 'air')
-    mediumFaults(faults, sketch.object.medium, 'object.medium', 'the object space');
-}
-
-function partFaults(faults: Fault[], sketch: Sketch, part: Part, index: number): void {
-  const number = (limit: Limit, value: number, key: string): void => {
-    if (!keeps(limit, value))
-      numberFault(faults, limit, value, `parts[${index}].${key}`, partLabel(part, index));
-  };
-  if (part.name.length > LONGEST_TEXT.name)
-    textFault(faults, `parts[${index}].name`, `The name of part ${index + 1}`, part.name, LONGEST_TEXT.name);
-  if (part.note.length > LONGEST_TEXT.note)
-    textFault(
-      faults,
-      `parts[${index}].note`,
-      `The note of ${partLabel(part, index)}`,
-      part.note,
-      LONGEST_TEXT.note,
-    );
-  if (part.semiDiameterMm !== null) number(LIMITS.semiDiameterMm, part.semiDiameterMm, 'semiDiameterMm');
-  if (part.kind === 'thin') {
-    const limit = LIMITS.focalLengthMm;
-    if (!(keeps(limit, part.focalLengthMm) && Math.abs(part.focalLengthMm) >= SHORTEST_FOCAL_LENGTH_MM))
-      numberFault(
-        faults,
-        limit,
-        part.focalLengthMm,
-        `parts[${index}].focalLengthMm`,
-        partLabel(part, index),
-        true,
-      );
-    if (part.abbeNumber !== null) number(LIMITS.abbeNumber, part.abbeNumber, 'abbeNumber');
-    if (part.index !== null) number(LIMITS.index, part.index, 'index');
-    number(LIMITS.roomFrontMm, part.roomFrontMm, 'roomFrontMm');
-    number(LIMITS.roomBehindMm, part.roomBehindMm, 'roomBehindMm');
-  } else if (part.kind === 'plate') {
-    number(LIMITS.thicknessMm, part.thicknessMm, 'thicknessMm');
-    mediumFaults(faults, part.material, `parts[${index}].material`, partLabel(part, index));
-  }
-  const last = index === sketch.parts.length - 1;
-  valueFaults(faults, sketch, LIMITS.lengthMm, part.space.lengthMm, () => ({
-    path: `parts[${index}].space.lengthMm`,
-    subject: last
-      ? `The distance from ${partLabel(part, index)} to the sensor`
-      : `The gap behind ${partLabel(part, index)}`,
-  }));
-  if (part.space.medium !== 'air')
-    mediumFaults(
-      faults,
-      part.space.medium,
-      `parts[${index}].space.medium`,
-      `the space behind ${partLabel(part, index)}`,
-    );
+    mediumFaults(faults, sketch, sketch.object.medium, 'object.medium', 'the object space');
 }
 
 function sensorFaults(faults: Fault[], { sensor, registerMm }: Sketch): void {
@@ -138,9 +91,13 @@ function apertureFaults(faults: Fault[], sketch: Sketch): void {
   } else if (aperture.kind === 'entrancePupilDiameter') {
     numberFault(faults, LIMITS.pupilDiameterMm, aperture.diameterMm, 'aperture.diameterMm');
   } else if (aperture.kind === 'objectNA') {
-    const index = indexIn(sketch.object.medium);
+    const { object, lines, air } = sketch;
+    const known = indexOf(object.medium, lines.mainNm, lines, air);
+    // Without an index the medium's own rule speaks.
+    if (!known.ok) return;
+    const index = known.value;
     if (keeps(LIMITS.na, aperture.na) && aperture.na < index) return;
-    const medium = index === 1 ? 'air' : 'the object space';
+    const medium = object.medium === 'air' ? 'air' : 'the object space';
     faults.push({
       path: 'aperture.na',
       sentence: `The numerical aperture at the object is ${quantityText(aperture.na, '')}; it must be above 0 and below ${quantityText(index, '')}, the index of ${medium}.`,
@@ -171,6 +128,23 @@ function lineFaults(faults: Fault[], { lines }: Sketch): void {
   numberFault(faults, LIMITS.wavelengthNm, lines.mainNm, 'lines.mainNm', 'the main line');
   numberFault(faults, LIMITS.wavelengthNm, lines.shortNm, 'lines.shortNm', 'the short line');
   numberFault(faults, LIMITS.wavelengthNm, lines.longNm, 'lines.longNm', 'the long line');
+  numberFault(faults, LIMITS.weight, lines.weights.main, 'lines.weights.main', 'the main line');
+  numberFault(faults, LIMITS.weight, lines.weights.short, 'lines.weights.short', 'the short line');
+  numberFault(faults, LIMITS.weight, lines.weights.long, 'lines.weights.long', 'the long line');
+  countFault(faults, 'lines.more', 'further lines', lines.more.length, 0, MOST.moreLines);
+  for (let index = 0; index < lines.more.length; index++) {
+    const extra = lines.more[index];
+    if (extra === undefined) continue;
+    const path = `lines.more[${index}]`;
+    const owner = `further line ${index + 1}`;
+    numberFault(faults, LIMITS.wavelengthNm, extra.wavelengthNm, `${path}.wavelengthNm`, owner);
+    numberFault(faults, LIMITS.weight, extra.weight, `${path}.weight`, owner);
+  }
+  if (faults.length === before && lines.weights.main === 0)
+    faults.push({
+      path: 'lines.weights.main',
+      sentence: 'The weight of the main line is 0; it must be above 0, as the main line always counts.',
+    });
   if (faults.length > before || (lines.shortNm < lines.mainNm && lines.mainNm < lines.longNm)) return;
   const nm = (value: number): string => quantityText(value, 'nm');
   faults.push({
@@ -206,128 +180,3 @@ function groupFaults(faults: Fault[], { groups, parts }: Sketch): void {
     }
   }
 }
-
-function mediumFaults(faults: Fault[], medium: FixedMedium, path: string, owner: string): void {
-  if (!keeps(LIMITS.index, medium.index))
-    numberFault(faults, LIMITS.index, medium.index, `${path}.index`, owner);
-  if (medium.abbeNumber !== null && !keeps(LIMITS.abbeNumber, medium.abbeNumber))
-    numberFault(faults, LIMITS.abbeNumber, medium.abbeNumber, `${path}.abbeNumber`, owner);
-  if (medium.name.length > LONGEST_TEXT.name)
-    textFault(faults, `${path}.name`, `The name of the medium of ${owner}`, medium.name, LONGEST_TEXT.name);
-}
-
-type Owner = () => { readonly path: string; readonly subject: string };
-
-/** A value for all positions or one for each: every one within its limit, none missing, none for an unknown position. */
-function valueFaults(
-  faults: Fault[],
-  { positions }: Sketch,
-  limit: Limit,
-  value: PerPosition<ObjectDistance>,
-  owner: Owner,
-): void {
-  if (typeof value !== 'object') {
-    if (soundAt(limit, value)) return;
-    const { path, subject } = owner();
-    faults.push({ path, sentence: outside(subject, limit, value) });
-    return;
-  }
-  for (let index = 0; index < positions.length; index++) {
-    const position = positions[index];
-    if (position === undefined || soundAt(limit, value[position.id])) continue;
-    const own = value[position.id];
-    const { path, subject } = owner();
-    const at = `${subject} at position ${quoted(position.name || position.id)}`;
-    const missing = `${at} is missing; it must be ${limit.allowed}.`;
-    faults.push({
-      path: `${path}.${position.id}`,
-      sentence: own === undefined ? missing : outside(at, limit, own),
-    });
-  }
-  const keys = Object.keys(value);
-  if (keys.length <= positions.length && faults.length === 0) return;
-  for (const key of keys) {
-    if (positions.some((position) => position.id === key)) continue;
-    const { path, subject } = owner();
-    faults.push({
-      path: `${path}.${key}`,
-      sentence: `${subject} has a value for ${quoted(key)}; it must have one for each position of the sketch and no other.`,
-    });
-  }
-}
-
-function soundAt(limit: Limit, value: ObjectDistance | undefined): boolean {
-  return typeof value === 'number'
-    ? keeps(limit, value)
-    : value === 'infinity' && limit === LIMITS.distanceMm;
-}
-
-function outside(subject: string, limit: Limit, value: ObjectDistance): string {
-  const text = typeof value === 'number' ? quantityText(value, limit.unit) : valueText(value);
-  return `${subject} is ${text}; it must be ${limit.allowed}.`;
-}
-
-function numberFault(
-  faults: Fault[],
-  limit: Limit,
-  value: number,
-  path: string,
-  owner?: string,
-  broken = false,
-): void {
-  if (!broken && keeps(limit, value)) return;
-  const subject = owner === undefined ? `The ${limit.words}` : `The ${limit.words} of ${owner}`;
-  faults.push({ path, sentence: outside(subject, limit, value) });
-}
-
-function textFault(faults: Fault[], path: string, subject: string, text: string, longest: number): void {
-  if (text.length <= longest) return;
-  faults.push({
-    path,
-    sentence: `${subject} has ${quantityText(text.length, '')} characters; it must have at most ${quantityText(longest, '')}.`,
-  });
-}
-
-function countFault(
-  faults: Fault[],
-  path: string,
-  what: string,
-  count: number,
-  least: number,
-  most: number,
-): void {
-  if (count >= least && count <= most) return;
-  const allowed = least === 0 ? `at most ${most}` : `between ${least} and ${most}`;
-  faults.push({
-    path,
-    sentence: `The number of ${what} is ${quantityText(count, '')}; it must be ${allowed}.`,
-  });
-}
-
-const ID = /^[A-Za-z][A-Za-z0-9_-]*$/;
-
-function idFaults(
-  faults: Fault[],
-  path: string,
-  what: string,
-  items: readonly { readonly id: string }[],
-): void {
-  const seen = new Set<string>();
-  for (let index = 0; index < items.length; index++) {
-    const id = items[index]?.id ?? '';
-    if (seen.has(id))
-      faults.push({
-        path: `${path}[${index}].id`,
-        sentence: `The id ${quoted(id)} of ${what} ${index + 1} is taken; each ${what} must have an id of its own.`,
-      });
-    seen.add(id);
-    // Names that every object has would be found where no value was given.
-    if (ID.test(id) && id.length <= LONGEST_TEXT.id && !(id in {})) continue;
-    faults.push({
-      path: `${path}[${index}].id`,
-      sentence: `The id ${quoted(id)} of ${what} ${index + 1} is not usable; it must be a letter followed by letters, digits, “-” or “_”, at most ${LONGEST_TEXT.id} in all.`,
-    });
-  }
-}
-
-const indexIn = (medium: Medium): number => (medium === 'air' ? 1 : medium.index);

@@ -1,4 +1,5 @@
 import * as v from 'valibot';
+import { FORMULA_KINDS } from '../media/dispersion.ts';
 import type { Sketch } from './types.ts';
 
 /*
@@ -24,7 +25,21 @@ const oneDistance = v.lazy((input) => (typeof input === 'string' ? v.literal('in
 const objectDistance = v.lazy((input) => (isObject(input) ? v.record(v.string(), oneDistance) : oneDistance));
 
 const fixedMedium = v.strictObject({ name: v.string(), index: number, abbeNumber: orNull(number) });
-const medium = v.lazy((input) => (typeof input === 'string' ? v.literal('air') : fixedMedium));
+const catalogueMedium = v.strictObject({ material: v.string() });
+const codeMedium = v.strictObject({ code: v.string() });
+const ownMedium = v.strictObject({
+  name: v.string(),
+  formula: v.strictObject({ kind: v.picklist(FORMULA_KINDS), coefficients: v.array(number) }),
+  rangeNm: v.strictTuple([number, number]),
+});
+/** The kind of a solid medium is told by the entry that only it has. */
+const solidMedium = v.lazy((input) => {
+  const has = (key: string): boolean => isObject(input) && key in (input as object);
+  if (has('material')) return catalogueMedium;
+  if (has('code')) return codeMedium;
+  return has('formula') ? ownMedium : fixedMedium;
+});
+const medium = v.lazy((input) => (typeof input === 'string' ? v.literal('air') : solidMedium));
 
 const partBase = {
   id: v.string(),
@@ -41,11 +56,27 @@ export const partSchema = v.variant('kind', [
     focalLengthMm: number,
     abbeNumber: orNull(number),
     index: orNull(number),
+    // Files of version 1 have neither of these two.
+    material: v.optional(orNull(solidMedium), null),
+    shapeFactor: v.optional(orNull(number), null),
     roomFrontMm: number,
     roomBehindMm: number,
   }),
   v.strictObject({ kind: v.literal('stop'), ...partBase }),
-  v.strictObject({ kind: v.literal('plate'), ...partBase, thicknessMm: number, material: fixedMedium }),
+  v.strictObject({ kind: v.literal('plate'), ...partBase, thicknessMm: number, material: solidMedium }),
+  v.strictObject({
+    kind: v.literal('glass'),
+    ...partBase,
+    surfaces: v.array(
+      v.strictObject({
+        radiusMm: orNull(number),
+        conic: number,
+        asphere: v.array(number),
+        semiDiameterMm: orNull(number),
+      }),
+    ),
+    fillings: v.array(v.strictObject({ thicknessMm: number, material: solidMedium })),
+  }),
 ]);
 
 const sensorSize = v.lazy((input) =>
@@ -79,7 +110,19 @@ export const sectionSchemas = {
   stop: orNull(v.string()),
   aperture,
   field: v.strictObject({ size: fieldSize, fractions: v.array(number), vignetting: number }),
-  lines: v.strictObject({ mainNm: number, shortNm: number, longNm: number }),
+  lines: v.strictObject({
+    mainNm: number,
+    shortNm: number,
+    longNm: number,
+    // Files of version 1 have neither weights nor further lines, nor the entry for air.
+    weights: v.optional(v.strictObject({ main: number, short: number, long: number }), {
+      main: 1,
+      short: 1,
+      long: 1,
+    }),
+    more: v.optional(v.array(v.strictObject({ wavelengthNm: number, weight: number })), []),
+  }),
+  air: v.optional(v.picklist(['unity', 'standard']), 'unity'),
   positions: v.array(v.strictObject({ id: v.string(), name: v.string() })),
   groups: v.array(v.strictObject({ id: v.string(), name: v.string(), partIds: v.array(v.string()) })),
   assumedIndex: number,

@@ -4,6 +4,10 @@
  * Light runs to the right; distances are positive to the right, heights positive up.
  */
 
+import type { Air, Medium, SolidMedium } from '../media/medium.ts';
+
+export type { Air, FixedMedium, Medium, SolidMedium } from '../media/medium.ts';
+
 declare const idOf: unique symbol;
 /** Ids are plain strings in the file; the brand keeps one kind from being taken for another. */
 type Id<Kind extends string> = string & { readonly [idOf]: Kind };
@@ -14,17 +18,6 @@ export type GroupId = Id<'group'>;
 
 /** One value for all positions, or one for each, keyed by the position's id. */
 export type PerPosition<T = number> = T | { readonly [position: PositionId]: T };
-
-/** `'air'` is index 1. Any other medium is given by its index in the main line. */
-export type Medium = 'air' | FixedMedium;
-
-export interface FixedMedium {
-  readonly name: string;
-  /** Index in the main line, relative to air. */
-  readonly index: number;
-  /** (n − 1) / (n short − n long); null when unknown: no colour is computed for it. */
-  readonly abbeNumber: number | null;
-}
 
 /**
  * What follows a part: from its rear vertex to the front vertex of the next part. Behind the last part it is
@@ -53,6 +46,10 @@ export interface ThinPart extends PartBase {
   readonly abbeNumber: number | null;
   /** Index assumed for the Petzval sum; null takes the sketch's `assumedIndex`. */
   readonly index: number | null;
+  /** The glass meant: it gives index and dispersion in the place of the two numbers above. */
+  readonly material: SolidMedium | null;
+  /** Bending (R2 + R1)/(R2 − R1) meant for the glass, for the thin-element sums; null when open. */
+  readonly shapeFactor: number | null;
   /** Room reserved for real glass, in front of and behind the principal plane. */
   readonly roomFrontMm: number;
   readonly roomBehindMm: number;
@@ -67,10 +64,36 @@ export interface StopPart extends PartBase {
 export interface PlatePart extends PartBase {
   readonly kind: 'plate';
   readonly thicknessMm: number;
-  readonly material: FixedMedium;
+  readonly material: SolidMedium;
 }
 
-export type Part = ThinPart | StopPart | PlatePart;
+/** One surface of real glass: a conic plus even powers of the radius. */
+export interface GlassSurface {
+  /** Positive when the centre lies to the right; null is flat. */
+  readonly radiusMm: number | null;
+  /** 0 a sphere, −1 a paraboloid. */
+  readonly conic: number;
+  /** Coefficients of r⁴, r⁶, … in mm⁻³, mm⁻⁵, … */
+  readonly asphere: readonly number[];
+  /** Half the clear diameter; null takes the part's. */
+  readonly semiDiameterMm: number | null;
+}
+
+/** What lies between two surfaces of a glass part. */
+export interface Filling {
+  readonly thicknessMm: number;
+  readonly material: SolidMedium;
+}
+
+/** Real glass: a singlet, a cemented doublet or triplet. There is one filling fewer than there are surfaces. */
+export interface GlassPart extends PartBase {
+  readonly kind: 'glass';
+  /** At least two, from left to right. */
+  readonly surfaces: readonly GlassSurface[];
+  readonly fillings: readonly Filling[];
+}
+
+export type Part = ThinPart | StopPart | PlatePart | GlassPart;
 export type PartKind = Part['kind'];
 
 /** Distance from the object to the first part, positive, or at infinity. */
@@ -116,13 +139,17 @@ export interface Field {
   readonly vignetting: number;
 }
 
-/** The three wavelengths; colour is short minus long. */
+/** The wavelengths; colour is short minus long. */
 export interface Lines {
   readonly mainNm: number;
   readonly shortNm: number;
   readonly longNm: number;
+  /** How much each counts in spots and contrast; the main one always counts. */
+  readonly weights: { readonly main: number; readonly short: number; readonly long: number };
+  /** Further wavelengths for spots and colour curves, at most two. */
+  readonly more: readonly { readonly wavelengthNm: number; readonly weight: number }[];
 }
-export type Line = 'main' | 'short' | 'long';
+export type Line = 'main' | 'short' | 'long' | 'fourth' | 'fifth';
 
 export interface Position {
   readonly id: PositionId;
@@ -151,6 +178,8 @@ export interface Sketch {
   readonly aperture: Aperture;
   readonly field: Field;
   readonly lines: Lines;
+  /** Air as index 1, or by the formula for standard air; indices of glass are relative to air and follow. */
+  readonly air: Air;
   /** At least one. */
   readonly positions: readonly Position[];
   readonly groups: readonly Group[];

@@ -32,7 +32,7 @@ const LONGEST_QUOTE = 40;
 export const quoted = (text: string): string =>
   `“${text.length > LONGEST_QUOTE ? `${text.slice(0, LONGEST_QUOTE - 1)}…` : text}”`;
 
-const KIND_NAMES = { thin: 'element', stop: 'stop', plate: 'plate' } as const;
+const KIND_NAMES = { thin: 'element', stop: 'stop', plate: 'plate', glass: 'glass' } as const;
 
 /** What a part is called: its name, or its kind and number along the axis. */
 export const partName = (part: Pick<Part, 'name' | 'kind'>, index: number): string =>

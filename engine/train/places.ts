@@ -1,4 +1,5 @@
-import type { Aperture, Part, Setting, Sketch } from '../sketch/types.ts';
+import { lengthOf } from '../sketch/part.ts';
+import type { Aperture, Setting, Sketch } from '../sketch/types.ts';
 import { objectDistanceAt, valueAt } from '../sketch/values.ts';
 
 /** Where everything stands at one setting, in mm from the first part's front vertex, positive to the right. */
@@ -16,7 +17,7 @@ export function placesOf(sketch: Sketch, setting: Setting): Places {
   const parts: { frontMm: number; rearMm: number }[] = [];
   let at = 0;
   for (const part of sketch.parts) {
-    const rearMm = at + thicknessOf(part);
+    const rearMm = at + lengthOf(part);
     parts.push({ frontMm: at, rearMm });
     at = rearMm + valueAt(part.space.lengthMm, sketch.positions, setting);
   }
@@ -27,9 +28,6 @@ export function placesOf(sketch: Sketch, setting: Setting): Places {
     sensorMm: sketch.image === 'fixed' && parts.length > 0 ? at : null,
   };
 }
-
-/** From the part's front to its rear vertex in mm; 0 for a thin part or a stop. */
-export const thicknessOf = (part: Part): number => (part.kind === 'plate' ? part.thicknessMm : 0);
 
 /** The aperture with its value at one setting. */
 export type ApertureAt =

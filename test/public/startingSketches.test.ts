@@ -153,5 +153,7 @@ function imageBehindSensor(sketch: Sketch, position: Position): number {
 
 function imageBehind(part: Part, objectMm: number): number {
   if (part.kind === 'thin') return 1 / (1 / objectMm + 1 / part.focalLengthMm);
-  return part.kind === 'plate' ? objectMm - part.thicknessMm / part.material.index : objectMm;
+  return part.kind === 'plate' && 'index' in part.material
+    ? objectMm - part.thicknessMm / part.material.index
+    : objectMm;
 }

@@ -58,7 +58,7 @@ function seedLineCamera(): Sketch {
     title: 'Seed line camera',
     notes:
       'Inspection camera of a seed-sorting line. The chute is 500 mm in front of the first group; the fourth group and the sensor stand still.',
-    lines: LINES.e,
+    lines: { ...emptySketch().lines, ...LINES.e },
   };
 }
 
@@ -132,7 +132,7 @@ function chuteScannerExpander(): Sketch {
     stop: id('p1'),
     aperture: { kind: 'entrancePupilDiameter', diameterMm: 4 },
     field: { size: { kind: 'angle', angleDeg: 0.25 }, fractions: [0, 1], vignetting: 0 },
-    lines: { mainNm: 638, shortNm: 633, longNm: 643 },
+    lines: { ...emptySketch().lines, mainNm: 638, shortNm: 633, longNm: 643 },
   };
 }
 

@@ -1,6 +1,7 @@
 import type { Edit, Field, FieldSize, Sketch } from '../../../engine/index.ts';
 import {
   fixSensor,
+  indexOf,
   isCommon,
   setAperture,
   setField,
@@ -96,8 +97,9 @@ function scaleAperture(
 }
 
 /** The marginal slope is what scales: NA = n sin(arctan u). */
-function scaledNA({ object }: Sketch, na: number, ratio: number): number {
-  const index = object.medium === 'air' ? 1 : object.medium.index;
+function scaledNA({ object, lines, air }: Sketch, na: number, ratio: number): number {
+  const known = indexOf(object.medium, lines.mainNm, lines, air);
+  const index = known.ok ? known.value : 1;
   return index * Math.sin(Math.atan(Math.tan(Math.asin(Math.min(1, na / index))) * ratio));
 }
 

@@ -52,7 +52,7 @@ const ORDER = [
   ['later', 'One place right'],
 ] as const;
 
-const KIND_WORDS = { thin: 'thin element', stop: 'stop', plate: 'flat plate' } as const;
+const KIND_WORDS = { thin: 'thin element', stop: 'stop', plate: 'flat plate', glass: 'glass' } as const;
 
 function PartHead({ id }: { readonly id: PartId }) {
   const name = useReadingNow(({ sketch }) => partName(sketch, id));

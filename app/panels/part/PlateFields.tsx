@@ -1,5 +1,5 @@
 import type { Edit, FixedMedium, PartId } from '../../../engine/index.ts';
-import { setMaterial, setThickness } from '../../../engine/index.ts';
+import { mediumName, setMaterial, setThickness } from '../../../engine/index.ts';
 import { useReadingNow } from '../../live/reading.ts';
 import { TextField } from '../../ui/TextField.tsx';
 import { tryEdit } from '../edit.ts';
@@ -10,13 +10,15 @@ import { partIn, readPlate } from './partReading.ts';
 export function PlateFields({ id }: { readonly id: PartId }) {
   const name = useReadingNow((reading) => {
     const part = partIn(reading, id);
-    return part?.kind === 'plate' ? part.material.name : '';
+    return part?.kind === 'plate' ? mediumName(part.material) : '';
   });
   const withMaterial =
     (change: Partial<FixedMedium>): Edit =>
     (sketch) => {
       const part = sketch.parts.find((other) => other.id === id);
-      return part?.kind === 'plate' ? setMaterial(sketch, id, { ...part.material, ...change }) : sketch;
+      return part?.kind === 'plate' && 'index' in part.material
+        ? setMaterial(sketch, id, { ...part.material, ...change })
+        : sketch;
     };
   return (
     <>
@@ -31,7 +33,7 @@ export function PlateFields({ id }: { readonly id: PartId }) {
         unit=""
         digits={5}
         step={0.01}
-        read={readPlate(id, (part) => part.material.index)}
+        read={readPlate(id, ({ material }) => ('index' in material ? material.index : null))}
         edit={(value) => withMaterial({ index: value })}
       />
       <SketchNumber
@@ -39,7 +41,7 @@ export function PlateFields({ id }: { readonly id: PartId }) {
         unit=""
         digits={2}
         step={1}
-        read={readPlate(id, (part) => part.material.abbeNumber)}
+        read={readPlate(id, ({ material }) => ('index' in material ? material.abbeNumber : null))}
         edit={(value) => withMaterial({ abbeNumber: value })}
         empty={{ words: 'unknown', edit: withMaterial({ abbeNumber: null }) }}
       />

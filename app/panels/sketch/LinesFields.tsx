@@ -1,4 +1,4 @@
-import type { Lines } from '../../../engine/index.ts';
+import type { MainLines } from '../../../engine/index.ts';
 import { LINES, setAssumedIndex, setBlur, setLines } from '../../../engine/index.ts';
 import { useReadingNow } from '../../live/reading.ts';
 import type { Choice } from '../../ui/choices.tsx';
@@ -50,20 +50,20 @@ export function LinesFields() {
   );
 }
 
-function LineField({ label, line }: { readonly label: string; readonly line: keyof Lines }) {
+function LineField({ label, line }: { readonly label: string; readonly line: keyof MainLines }) {
   return (
     <SketchNumber
       label={label}
       unit="nm"
       digits={2}
       read={({ sketch }) => sketch.lines[line]}
-      edit={(value) => (sketch) => setLines(sketch, { ...sketch.lines, [line]: value })}
+      edit={(value) => (sketch) => setLines(sketch, { [line]: value })}
     />
   );
 }
 
-function presetOf(lines: Lines): Preset {
-  const same = (other: Lines) =>
+function presetOf(lines: MainLines): Preset {
+  const same = (other: MainLines) =>
     lines.mainNm === other.mainNm && lines.shortNm === other.shortNm && lines.longNm === other.longNm;
   return same(LINES.e) ? 'e' : same(LINES.d) ? 'd' : 'own';
 }

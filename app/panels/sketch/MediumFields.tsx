@@ -1,5 +1,5 @@
 import type { Edit, FixedMedium, Medium, PartId, Sketch } from '../../../engine/index.ts';
-import { setMedium } from '../../../engine/index.ts';
+import { mediumName, setMedium } from '../../../engine/index.ts';
 import type { Reading } from '../../live/reading.ts';
 import { useReadingNow } from '../../live/reading.ts';
 import { Select } from '../../ui/choices.tsx';
@@ -25,11 +25,11 @@ export function MediumFields({ label, where }: MediumFieldsProps) {
         value={medium === 'air' ? 'air' : 'other'}
         choices={[
           { value: 'air', label: 'air' },
-          { value: 'other', label: medium === 'air' ? 'another…' : medium.name || 'unnamed' },
+          { value: 'other', label: medium === 'air' ? 'another…' : mediumName(medium) || 'unnamed' },
         ]}
         onChoose={(chosen) => tryEdit((sketch) => setMedium(sketch, where, chosen === 'air' ? 'air' : WATER))}
       />
-      {medium !== 'air' && <OtherMedium where={where} name={medium.name} />}
+      {medium !== 'air' && <OtherMedium where={where} name={mediumName(medium)} />}
     </>
   );
 }
@@ -39,11 +39,13 @@ function OtherMedium({ where, name }: { readonly where: PartId | 'object'; reado
     (change: Partial<FixedMedium>): Edit =>
     (sketch) => {
       const medium = mediumOf(sketch, where);
-      return medium === 'air' ? sketch : setMedium(sketch, where, { ...medium, ...change });
+      return medium === 'air' || !('index' in medium)
+        ? sketch
+        : setMedium(sketch, where, { ...medium, ...change });
     };
   const read = (pick: (medium: FixedMedium) => number | null) => (reading: Reading) => {
     const medium = mediumOf(reading.sketch, where);
-    return medium === 'air' ? null : pick(medium);
+    return medium === 'air' || !('index' in medium) ? null : pick(medium);
   };
   return (
     <>

@@ -60,9 +60,6 @@ export function withoutTies(sketch: Sketch, ids: ReadonlySet<PartId>): Sketch {
   return { ...sketch, groups };
 }
 
-/** Length of a part along the axis in mm: the thickness of a plate, 0 for a thin part or a stop. */
-export const lengthOf = (part: Part): number => (part.kind === 'plate' ? part.thicknessMm : 0);
-
 function sameData(a: unknown, b: unknown): boolean {
   if (a === b) return true;
   if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return false;

@@ -1,7 +1,8 @@
 import { freshPartId } from '../create.ts';
+import { lengthOf } from '../part.ts';
 import type { Medium, Part, PerPosition, PositionId, Sketch } from '../types.ts';
 import { combineValues, everyPosition, isCommon, valueOn, withValue } from '../values.ts';
-import { lengthOf, withGap } from './change.ts';
+import { withGap } from './change.ts';
 
 /**
  * Puts a part on the axis with its front vertex at `atMm` from the front vertex of the first part, as the layout stands at

@@ -1,6 +1,6 @@
-import type { Aperture, FieldSize, Lines, PositionId, Sketch } from '../types.ts';
+import type { Air, Aperture, FieldSize, Lines, PositionId, Sketch } from '../types.ts';
 import { joinValue, splitValue, withValue } from '../values.ts';
-import { withField } from './change.ts';
+import { withField, withFields } from './change.ts';
 
 /*
  * −0 plus 0 is 0: the file could not give −0 back.
@@ -54,8 +54,12 @@ export function setFractions(sketch: Sketch, fractions: readonly number[]): Sket
 export const setVignetting = (sketch: Sketch, vignetting: number): Sketch =>
   withField(sketch, 'field', withField(sketch.field, 'vignetting', vignetting));
 
-/** Sets the three wavelengths in nm. */
-export const setLines = (sketch: Sketch, lines: Lines): Sketch => withField(sketch, 'lines', lines);
+/** Changes wavelengths in nm, weights, or the further lines. */
+export const setLines = (sketch: Sketch, change: Partial<Lines>): Sketch =>
+  withField(sketch, 'lines', withFields(sketch.lines, change));
+
+/** Takes air as index 1, or by the formula for standard air. */
+export const setAir = (sketch: Sketch, air: Air): Sketch => withField(sketch, 'air', air);
 
 /** Sets the index assumed for thin parts that do not name one. */
 export const setAssumedIndex = (sketch: Sketch, assumedIndex: number): Sketch =>

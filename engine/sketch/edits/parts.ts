@@ -1,5 +1,14 @@
-import type { FixedMedium, Part, PartId, PlatePart, Sketch, ThinPart } from '../types.ts';
-import { changePart, withField } from './change.ts';
+import type {
+  Filling,
+  GlassPart,
+  GlassSurface,
+  Part,
+  PartId,
+  Sketch,
+  SolidMedium,
+  ThinPart,
+} from '../types.ts';
+import { changePart, withField, withFields } from './change.ts';
 
 /*
  * Numbers and names of one part. Every one gives the same sketch back when there is no such part, when the part is of
@@ -32,13 +41,51 @@ export const setRoom = (sketch: Sketch, partId: PartId, side: 'front' | 'behind'
     withField(part, side === 'front' ? 'roomFrontMm' : 'roomBehindMm', roomMm),
   );
 
-/** Sets the thickness of a plate in mm; what is behind it moves along. */
-export const setThickness = (sketch: Sketch, partId: PartId, thicknessMm: number): Sketch =>
-  changePlate(sketch, partId, (part) => withField(part, 'thicknessMm', thicknessMm));
+/** Sets the bending (R2 + R1)/(R2 − R1) meant for a thin part; null leaves it open. */
+export const setShapeFactor = (sketch: Sketch, partId: PartId, shapeFactor: number | null): Sketch =>
+  changeThin(sketch, partId, (part) => withField(part, 'shapeFactor', shapeFactor));
 
-/** Sets the material of a plate. */
-export const setMaterial = (sketch: Sketch, partId: PartId, material: FixedMedium): Sketch =>
-  changePlate(sketch, partId, (part) => withField(part, 'material', material));
+/** Sets the thickness in mm of a plate, or of one filling of a glass part; what is behind it moves along. */
+export const setThickness = (sketch: Sketch, partId: PartId, thicknessMm: number, filling = 0): Sketch =>
+  changePart(sketch, partId, (part) => {
+    if (part.kind === 'plate') return withField(part, 'thicknessMm', thicknessMm);
+    return changeFilling(part, filling, (own) => withField(own, 'thicknessMm', thicknessMm));
+  });
+
+/** Sets the material of a plate, of a thin part (null: none is meant), or of one filling of a glass part. */
+export const setMaterial = (
+  sketch: Sketch,
+  partId: PartId,
+  material: SolidMedium | null,
+  filling = 0,
+): Sketch =>
+  changePart(sketch, partId, (part) => {
+    if (part.kind === 'thin') return withField(part, 'material', material);
+    if (material === null) return part;
+    if (part.kind === 'plate') return withField(part, 'material', material);
+    return changeFilling(part, filling, (own) => withField(own, 'material', material));
+  });
+
+/** Changes entries of one surface of a glass part, counted from 0. */
+export const setSurface = (
+  sketch: Sketch,
+  partId: PartId,
+  surface: number,
+  change: Partial<GlassSurface>,
+): Sketch =>
+  changePart(sketch, partId, (part) => {
+    const own = part.kind === 'glass' ? part.surfaces[surface] : undefined;
+    if (part.kind !== 'glass' || own === undefined) return part;
+    const next = withFields(own, change);
+    return next === own ? part : { ...part, surfaces: part.surfaces.with(surface, next) };
+  });
+
+/** Gives a glass part other surfaces and fillings; what is behind it moves along when its length changes. */
+export const setGlass = (
+  sketch: Sketch,
+  partId: PartId,
+  glass: Pick<GlassPart, 'surfaces' | 'fillings'>,
+): Sketch => changePart(sketch, partId, (part) => (part.kind === 'glass' ? withFields(part, glass) : part));
 
 /** Sets the name of a part; an empty one is shown as the part's number. */
 export const renamePart = (sketch: Sketch, partId: PartId, name: string): Sketch =>
@@ -51,5 +98,9 @@ export const setNote = (sketch: Sketch, partId: PartId, note: string): Sketch =>
 const changeThin = (sketch: Sketch, partId: PartId, change: (part: ThinPart) => Part): Sketch =>
   changePart(sketch, partId, (part) => (part.kind === 'thin' ? change(part) : part));
 
-const changePlate = (sketch: Sketch, partId: PartId, change: (part: PlatePart) => Part): Sketch =>
-  changePart(sketch, partId, (part) => (part.kind === 'plate' ? change(part) : part));
+function changeFilling(part: Part, filling: number, change: (filling: Filling) => Filling): Part {
+  const own = part.kind === 'glass' ? part.fillings[filling] : undefined;
+  if (part.kind !== 'glass' || own === undefined) return part;
+  const next = change(own);
+  return next === own ? part : { ...part, fillings: part.fillings.with(filling, next) };
+}

@@ -1,6 +1,7 @@
+import { lengthOf } from '../part.ts';
 import type { ObjectDistance, Part, PartId, PerPosition, Sketch } from '../types.ts';
 import { combineValues, isCommon } from '../values.ts';
-import { lengthOf, withField, withGap, withoutTies, withSpace } from './change.ts';
+import { withField, withGap, withoutTies, withSpace } from './change.ts';
 
 /**
  * Takes parts away; the others stay where they are. Their gaps merge, plate thickness included, into the gap in front (whose

@@ -1,9 +1,9 @@
-import type { Aperture, FieldSize, ObjectDistance, Part, PartId, Sketch } from '../types.ts';
+import type { Aperture, FieldSize, GlassSurface, ObjectDistance, Part, PartId, Sketch } from '../types.ts';
 import { everyPosition } from '../values.ts';
 import { withField, withFields, withGap } from './change.ts';
 
 /**
- * The whole layout made larger by a factor: focal lengths, gaps, object distance, diameters, room and the field's heights.
+ * The whole layout made larger by a factor: focal lengths, radii, gaps, object distance, diameters, room and the field's heights.
  * Sensor, mount and blur are given from outside and stay. A factor that is not a positive number changes nothing.
  */
 export function scaleSketch(sketch: Sketch, factor: number): Sketch {
@@ -24,7 +24,7 @@ export const scaleToFocalLength = (sketch: Sketch, presentMm: number, wantedMm: 
   scaleSketch(sketch, wantedMm / presentMm);
 
 /**
- * Some parts made larger by a factor: focal lengths, diameters, thickness, room, and the gaps between two chosen neighbours.
+ * Some parts made larger by a factor: focal lengths, radii, diameters, thickness, room, and the gaps between two chosen neighbours.
  * The first of them stays; what is behind moves along. A factor that is not a positive number changes nothing.
  */
 export function scaleParts(sketch: Sketch, ids: readonly PartId[], factor: number): Sketch {
@@ -51,6 +51,13 @@ function scaledPart(part: Part, factor: number): Part {
   if (part.kind === 'stop') return withField(part, 'semiDiameterMm', semiDiameterMm);
   if (part.kind === 'plate')
     return withFields(part, { semiDiameterMm, thicknessMm: part.thicknessMm * factor });
+  if (part.kind === 'glass')
+    return {
+      ...part,
+      semiDiameterMm,
+      surfaces: part.surfaces.map((surface) => scaledSurface(surface, factor)),
+      fillings: part.fillings.map((filling) => ({ ...filling, thicknessMm: filling.thicknessMm * factor })),
+    };
   return withFields(part, {
     semiDiameterMm,
     focalLengthMm: part.focalLengthMm * factor,
@@ -58,6 +65,14 @@ function scaledPart(part: Part, factor: number): Part {
     roomBehindMm: part.roomBehindMm * factor,
   });
 }
+
+/** Sag and height grow alike, so the coefficient of r⁴ falls as the cube of the factor, that of r⁶ as the fifth power. */
+const scaledSurface = (surface: GlassSurface, factor: number): GlassSurface => ({
+  radiusMm: surface.radiusMm === null ? null : surface.radiusMm * factor,
+  conic: surface.conic,
+  asphere: surface.asphere.map((coefficient, term) => coefficient * factor ** -(2 * term + 3)),
+  semiDiameterMm: surface.semiDiameterMm === null ? null : surface.semiDiameterMm * factor,
+});
 
 function scaledAperture(aperture: Aperture, factor: number): Aperture {
   if (aperture.kind === 'stopDiameter') {

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import type {
   Aperture,
   Field,
+  GlassSurface,
   Group,
   Medium,
   ObjectDistance,
@@ -13,6 +14,7 @@ import type {
   Sensor,
   Setting,
   Sketch,
+  SolidMedium,
 } from '../../../engine/sketch/types.ts';
 
 export interface SketchSize {
@@ -67,7 +69,20 @@ export const anySetting = (positions: readonly Position[]): fc.Arbitrary<Setting
     }));
 
 const anyMedium = (): fc.Arbitrary<Medium> =>
-  fc.oneof({ weight: 4, arbitrary: fc.constant('air' as const) }, { weight: 1, arbitrary: anyFixedMedium() });
+  fc.oneof({ weight: 4, arbitrary: fc.constant('air' as const) }, { weight: 1, arbitrary: anySolid() });
+
+/** A medium of each kind; each has an index in all lines of `anySketch`. */
+const anySolid = (): fc.Arbitrary<SolidMedium> =>
+  fc.oneof(
+    anyFixedMedium(),
+    fc.constantFrom('n-bk7', 'n-sf6', 'f2').map((material) => ({ material })),
+    fc.constantFrom('517642', '620364').map((code) => ({ code })),
+    fc.constant({
+      name: 'own plastic',
+      formula: { kind: 'cauchy' as const, coefficients: [1.48, 0.004, -2] },
+      rangeNm: [400, 1000] as const,
+    }),
+  );
 
 const anyFixedMedium = () =>
   fc.record({
@@ -91,6 +106,8 @@ const anyPart = (positions: readonly Position[], id: string): fc.Arbitrary<Part>
     focalLengthMm: anyFocalLength(),
     abbeNumber: fc.option(anyNumber(20, 90)),
     index: fc.option(anyNumber(1, 2)),
+    material: fc.option(anySolid(), { freq: 2 }),
+    shapeFactor: fc.option(anyNumber(-3, 3)),
     roomFrontMm: anyNumber(0, 10),
     roomBehindMm: anyNumber(0, 10),
   });
@@ -99,14 +116,49 @@ const anyPart = (positions: readonly Position[], id: string): fc.Arbitrary<Part>
     kind: fc.constant('plate' as const),
     ...base,
     thicknessMm: anyNumber(0.5, 20),
-    material: anyFixedMedium(),
+    material: anySolid(),
   });
+  const glass = fc.integer({ min: 2, max: 4 }).chain((count) =>
+    fc.record({
+      kind: fc.constant('glass' as const),
+      ...base,
+      surfaces: fc.array(anySurface(), { minLength: count, maxLength: count }),
+      fillings: fc.array(fc.record({ thicknessMm: anyNumber(0, 15), material: anySolid() }), {
+        minLength: count - 1,
+        maxLength: count - 1,
+      }),
+    }),
+  );
   return fc.oneof(
     { weight: 5, arbitrary: thin },
     { weight: 1, arbitrary: stop },
     { weight: 1, arbitrary: plate },
+    { weight: 2, arbitrary: glass },
   );
 };
+
+/** Spheres, flats, conics and aspheres; rims of their own for some. */
+const anySurface = (): fc.Arbitrary<GlassSurface> =>
+  fc.record({
+    radiusMm: fc.option(
+      anyNumber(15, 400).chain((size) => fc.constantFrom(size, -size)),
+      { freq: 5 },
+    ),
+    conic: fc.oneof({ weight: 3, arbitrary: fc.constant(0) }, { weight: 1, arbitrary: anyNumber(-3, 1) }),
+    asphere: fc.oneof(
+      { weight: 3, arbitrary: fc.constant([]) },
+      {
+        weight: 1,
+        arbitrary: fc.array(
+          fc
+            .double({ min: -1e-7, max: 1e-7, noNaN: true })
+            .map((value) => (Math.abs(value) < 1e-12 ? 0 : value)),
+          { maxLength: 3 },
+        ),
+      },
+    ),
+    semiDiameterMm: fc.option(anyNumber(1, 40)),
+  });
 
 const anyAperture = (positions: readonly Position[]): fc.Arbitrary<Aperture> =>
   fc.oneof(
@@ -187,9 +239,22 @@ export const anySketch = ({
         aperture: anyAperture(positions),
         field: anyField(),
         lines: fc.constantFrom(
-          { mainNm: 587.5618, shortNm: 486.1327, longNm: 656.2725 },
-          { mainNm: 850, shortNm: 830, longNm: 870 },
+          {
+            mainNm: 587.5618,
+            shortNm: 486.1327,
+            longNm: 656.2725,
+            weights: { main: 1, short: 1, long: 1 },
+            more: [],
+          },
+          {
+            mainNm: 850,
+            shortNm: 830,
+            longNm: 870,
+            weights: { main: 2, short: 1, long: 0.5 },
+            more: [{ wavelengthNm: 860, weight: 1 }],
+          },
         ),
+        air: fc.constantFrom('unity' as const, 'standard' as const),
         positions: fc.constant(positions),
         groups: fc.array(fc.integer({ min: 1, max: 3 }), { maxLength: 3 }),
         assumedIndex: anyNumber(1.4, 1.9),

@@ -1,4 +1,5 @@
 import { emptySketch, newThin } from '../../../engine/sketch/create.ts';
+import { lengthOf } from '../../../engine/sketch/part.ts';
 import type { PartId, PerPosition, PositionId, Sketch } from '../../../engine/sketch/types.ts';
 import { valueOn } from '../../../engine/sketch/values.ts';
 
@@ -30,7 +31,7 @@ export function placesFrom(sketch: Sketch, from: PartId, position: PositionId): 
   if (object !== 'infinity') places.set('object', -object);
   for (const part of sketch.parts) {
     places.set(part.id, z);
-    z += (part.kind === 'plate' ? part.thicknessMm : 0) + valueOn(part.space.lengthMm, position);
+    z += lengthOf(part) + valueOn(part.space.lengthMm, position);
   }
   if (sketch.image === 'fixed') places.set('sensor', z);
   const datum = places.get(from) ?? 0;

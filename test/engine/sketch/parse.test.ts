@@ -23,7 +23,7 @@ describe('a file that is sound', () => {
   test('is JSON with format and version first', () => {
     const text = writeSketch(inspectionZoom());
     expect(
-      text.startsWith('{\n  "format": "gapwright-sketch",\n  "version": 1,\n  "title": "Inspection zoom"'),
+      text.startsWith('{\n  "format": "gapwright-sketch",\n  "version": 2,\n  "title": "Inspection zoom"'),
     ).toBe(true);
     expect(text.endsWith('}\n')).toBe(true);
   });
@@ -69,15 +69,15 @@ describe('a text that is no sketch', () => {
     ],
     [
       '{"format": "gapwright-sketch", "version": 7}',
-      'The file is of version 7; this Gapwright reads version 1.',
+      'The file is of version 7; this Gapwright reads version 2.',
     ],
     [
       '{"format": "gapwright-sketch", "version": "one"}',
-      'The version of the file is “one”; it must be a whole number from 1 to 1.',
+      'The version of the file is “one”; it must be a whole number from 1 to 2.',
     ],
     [
       '{"format": "gapwright-sketch"}',
-      'The version of the file is missing; it must be a whole number from 1 to 1.',
+      'The version of the file is missing; it must be a whole number from 1 to 2.',
     ],
   ])('has one fault: %s', (text, sentence) => {
     expect(sentencesIn(text)).toEqual([sentence]);
@@ -154,7 +154,7 @@ describe('a damaged file', () => {
       {
         path: 'parts[1].space.medium',
         sentence:
-          'The medium of “second group” is “water”; it must be “air”, or an object with name, index and abbeNumber.',
+          'The medium of “second group” is “water”; it must be “air”, or an object with material, with code, with name, formula and rangeNm, or with name, index and abbeNumber.',
       },
       {
         path: 'parts[1].abbeNumber',
@@ -163,7 +163,7 @@ describe('a damaged file', () => {
       },
       {
         path: 'parts[2].kind',
-        sentence: 'The kind of part 3 is “mirror”; it must be “thin”, “stop” or “plate”.',
+        sentence: 'The kind of part 3 is “mirror”; it must be “thin”, “stop”, “plate” or “glass”.',
       },
       {
         path: 'extra',
@@ -247,6 +247,6 @@ describe('a damaged file', () => {
     if (parsed.ok) expect(faultsOf(parsed.sketch)).toEqual([]);
     else
       for (const fault of parsed.faults)
-        expect(fault.sentence).toMatch(/^(The|Entry|There) .*[^ ]; .*\.$|reads version 1\.$/);
+        expect(fault.sentence).toMatch(/^(The|Entry|There) .*[^ ]; .*\.$|reads version 2\.$/);
   });
 });

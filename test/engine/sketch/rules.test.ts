@@ -2,7 +2,7 @@ import { fc, test } from '@fast-check/vitest';
 import { describe, expect } from 'vitest';
 import { emptySketch, newPlate, newStop, newThin } from '../../../engine/sketch/create.ts';
 import { faultsOf } from '../../../engine/sketch/rules.ts';
-import type { Aperture, Field, FieldSize, Part, Sketch } from '../../../engine/sketch/types.ts';
+import type { Aperture, Field, FieldSize, Lines, Part, Sketch } from '../../../engine/sketch/types.ts';
 import { inspectionZoom } from '../demo.ts';
 import { anySketch } from './arbitrary.ts';
 import { at, id, row } from './layout.ts';
@@ -15,6 +15,10 @@ const withAperture = (aperture: Aperture): Sketch => ({ ...emptySketch(), apertu
 const withField = (field: Partial<Field>): Sketch => ({
   ...emptySketch(),
   field: { ...emptySketch().field, ...field },
+});
+const withLines = (lines: Partial<Lines>): Sketch => ({
+  ...emptySketch(),
+  lines: { ...emptySketch().lines, ...lines },
 });
 const withSize = (size: FieldSize): Sketch => withField({ size });
 
@@ -109,7 +113,7 @@ describe('a broken rule', () => {
     ],
     [
       'wavelengths out of order',
-      { ...emptySketch(), lines: { mainNm: 500, shortNm: 600, longNm: 700 } },
+      withLines({ mainNm: 500, shortNm: 600, longNm: 700 }),
       'lines',
       'The short, main and long wavelengths are 600 nm, 500 nm and 700 nm; each must be longer than the one before.',
     ],
@@ -162,7 +166,7 @@ describe('a broken rule', () => {
     ['number of field fractions', withField({ fractions: [] })],
     ['number of field fractions', withField({ fractions: Array.from({ length: 10 }, () => 0) })],
     ['vignetting', withField({ vignetting: 1.1 })],
-    ['wavelength of the main line', { ...emptySketch(), lines: { mainNm: 50, shortNm: 40, longNm: 60 } }],
+    ['wavelength of the main line', withLines({ mainNm: 50, shortNm: 40, longNm: 60 })],
     [
       'width of the sensor',
       { ...emptySketch(), sensor: { size: { widthMm: 0, heightMm: 1 }, pixelPitchMm: null } },

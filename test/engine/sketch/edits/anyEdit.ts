@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { newPlate, newStop, newThin } from '../../../../engine/sketch/create.ts';
+import { newGlass, newPlate, newStop, newSurface, newThin } from '../../../../engine/sketch/create.ts';
 import { withGroups } from '../../../../engine/sketch/edits/change.ts';
 import { copyParts, duplicateParts, pasteParts } from '../../../../engine/sketch/edits/copy.ts';
 import * as ends from '../../../../engine/sketch/edits/ends.ts';
@@ -62,6 +62,23 @@ export const EDITS: Readonly<Record<string, (sketch: Sketch, given: Chosen) => S
   setIndex: (s, g) => part.setIndex(s, g.part, g.yes ? g.number : null),
   setRoom: (s, g) => part.setRoom(s, g.part, g.yes ? 'front' : 'behind', g.number),
   setThickness: (s, g) => part.setThickness(s, g.part, g.number),
+  setShapeFactor: (s, g) => part.setShapeFactor(s, g.part, g.yes ? g.number : null),
+  setFillingThickness: (s, g) => part.setThickness(s, g.part, g.number, g.pick % 3),
+  setSurface: (s, g) =>
+    part.setSurface(
+      s,
+      g.part,
+      g.pick % 4,
+      g.yes ? { radiusMm: g.number } : { asphere: [g.other], conic: g.share },
+    ),
+  setGlass: (s, g) =>
+    part.setGlass(s, g.part, {
+      surfaces: [newSurface(g.number), newSurface(null)],
+      fillings: [{ thicknessMm: g.other, material: { material: 'f2' } }],
+    }),
+  noMaterial: (s, g) => part.setMaterial(s, g.part, null),
+  setAir: (s, g) => light.setAir(s, g.yes ? 'standard' : 'unity'),
+  insertGlass: (s, g) => insertPart(s, newGlass(g.other, 4), g.number, g.position),
   setMaterial: (s, g) => part.setMaterial(s, g.part, { name: 'flint', index: g.number, abbeNumber: null }),
   renamePart: (s, g) => part.renamePart(s, g.part, `part ${g.pick}`),
   setNote: (s, g) => part.setNote(s, g.part, `note ${g.pick}`),
@@ -76,7 +93,7 @@ export const EDITS: Readonly<Record<string, (sketch: Sketch, given: Chosen) => S
     ),
   setFractions: (s, g) => light.setFractions(s, [g.number, g.share]),
   setVignetting: (s, g) => light.setVignetting(s, g.number),
-  setLines: (s, g) => light.setLines(s, { ...s.lines, mainNm: g.number }),
+  setLines: (s, g) => light.setLines(s, { mainNm: g.number }),
   setAssumedIndex: (s, g) => light.setAssumedIndex(s, g.number),
   setBlur: (s, g) => light.setBlur(s, g.yes ? g.number : null),
   insertThin: (s, g) => insertPart(s, newThin(g.other), g.number, g.position),

@@ -56,7 +56,7 @@ describe('the field and the lines', () => {
       fractions: [0, 1],
       vignetting: 0.2,
     });
-    expect(setLines(sketch, LINES.e).lines).toBe(LINES.e);
+    expect(setLines(sketch, LINES.e).lines).toEqual({ ...sketch.lines, ...LINES.e });
     expect(setBlur(setAssumedIndex(sketch, 1.7), 0.01)).toMatchObject({ assumedIndex: 1.7, blurMm: 0.01 });
     expect(setNotes(setTitle(sketch, 'B'), 'n')).toMatchObject({ title: 'B', notes: 'n' });
   });

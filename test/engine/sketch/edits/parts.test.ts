@@ -34,6 +34,8 @@ describe('a number of one part', () => {
       focalLengthMm: -80,
       abbeNumber: 60,
       index: 1.6,
+      material: null,
+      shapeFactor: null,
       roomFrontMm: 2,
       roomBehindMm: 3,
       space: { lengthMm: 10, medium: 'air' },

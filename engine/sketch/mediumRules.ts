@@ -1,0 +1,66 @@
+import { codeFault, formulaFaults, materialFault } from '../media/faults.ts';
+import { mediumName, rangeOf } from '../media/medium.ts';
+import type { Fault } from '../outcome.ts';
+import { numberFault, textFault } from './faults.ts';
+import { keeps, LIMITS, LONGEST_TEXT } from './limits.ts';
+import { weightedLines } from './lines.ts';
+import type { Line, Sketch, SolidMedium } from './types.ts';
+import { quantityText } from './words.ts';
+
+/**
+ * The rules on one medium: its own numbers, and that every line of the sketch lies where its index is known. So a train never
+ * meets a medium without an index.
+ */
+export function mediumFaults(
+  faults: Fault[],
+  sketch: Sketch,
+  medium: SolidMedium,
+  path: string,
+  owner: string,
+): void {
+  const before = faults.length;
+  if ('material' in medium) add(faults, `${path}.material`, owner, materialFault(medium.material));
+  else if ('code' in medium) add(faults, `${path}.code`, owner, codeFault(medium.code));
+  else {
+    if (medium.name.length > LONGEST_TEXT.name)
+      textFault(faults, `${path}.name`, `The name of the medium of ${owner}`, medium.name, LONGEST_TEXT.name);
+    if ('formula' in medium)
+      add(faults, `${path}.formula`, owner, formulaFaults(medium.formula, medium.rangeNm));
+    else {
+      if (!keeps(LIMITS.index, medium.index))
+        numberFault(faults, LIMITS.index, medium.index, `${path}.index`, owner);
+      if (medium.abbeNumber !== null && !keeps(LIMITS.abbeNumber, medium.abbeNumber))
+        numberFault(faults, LIMITS.abbeNumber, medium.abbeNumber, `${path}.abbeNumber`, owner);
+    }
+  }
+  if (faults.length === before) rangeFaults(faults, sketch, medium, owner);
+}
+
+/** A fault of media says what is wrong and what is allowed; here it gets its place. */
+function add(faults: Fault[], path: string, owner: string, sentence: string | null): void {
+  if (sentence !== null) faults.push({ path, sentence: sentence.replace(/\.$/, ` (in ${owner}).`) });
+}
+
+const LINE_WORDS: Readonly<Record<Line, { readonly path: string; readonly words: string }>> = {
+  main: { path: 'lines.mainNm', words: 'main wavelength' },
+  short: { path: 'lines.shortNm', words: 'short wavelength' },
+  long: { path: 'lines.longNm', words: 'long wavelength' },
+  fourth: { path: 'lines.more[0].wavelengthNm', words: 'fourth wavelength' },
+  fifth: { path: 'lines.more[1].wavelengthNm', words: 'fifth wavelength' },
+};
+
+function rangeFaults(faults: Fault[], { lines, air }: Sketch, medium: SolidMedium, owner: string): void {
+  const range = rangeOf(medium, air);
+  if (range === null) return;
+  const [low, high] = range;
+  if (Math.min(lines.shortNm, lines.mainNm) >= low && Math.max(lines.longNm, lines.mainNm) <= high)
+    if (lines.more.every(({ wavelengthNm }) => wavelengthNm >= low && wavelengthNm <= high)) return;
+  for (const { line, wavelengthNm } of weightedLines(lines)) {
+    if (wavelengthNm >= low && wavelengthNm <= high) continue;
+    const { path, words } = LINE_WORDS[line];
+    faults.push({
+      path,
+      sentence: `The ${words} is ${quantityText(wavelengthNm, 'nm')}; it must be between ${quantityText(low, '')} and ${quantityText(high, 'nm')}, where the index of ${mediumName(medium)} in ${owner} is known.`,
+    });
+  }
+}
