@@ -78,21 +78,3 @@ export type ObjectEdge =
   | { readonly kind: 'infinite'; readonly slope: number };
 
 export type SetupOutcome = Outcome<ExactSetup, Absence>;
-
-/**
- * The rays of one field point in one line, by where they go in the real stop. `chief` and the rim are aimed; `map` places all
- * others between them.
- */
-export interface PupilMap {
-  readonly setup: ExactSetup;
-  /** Place in `setup.lines`. */
-  readonly line: number;
-  /** Share of the field. */
-  readonly fraction: number;
-  /**
-   * Coefficients of the two launch numbers as polynomials in the pupil coordinates. For an object at infinity they are x and y in the
-   * tangent plane of the first vertex (mm), else the direction cosines L and M.
-   */
-  readonly first: Float64Array;
-  readonly second: Float64Array;
-}

@@ -1,0 +1,161 @@
+import { none, type Outcome, some } from '../outcome.ts';
+import { aimAll, type Bundle, bundleAbout } from './aim.ts';
+import { aimChief, paraxialLaunch } from './chief.ts';
+import { launch, sourceOf } from './launch.ts';
+import { CODE, L, lostOf, M, N, PATH, STRIDE, X, Y, Z } from './rayBuffer.ts';
+import { type Sight, sightOf } from './sight.ts';
+import type { ExactSetup, Lost, Vector } from './types.ts';
+
+/**
+ * The rays of one field point in one line, by where they go in the real stop. The chief ray and eight others are aimed; the rest can be
+ * placed between them by `mapRays`, or aimed one by one by `aimRays`.
+ */
+export interface PupilMap {
+  readonly setup: ExactSetup;
+  /** Place in `setup.lines`. */
+  readonly line: number;
+  /** Share of the field. */
+  readonly fraction: number;
+  /** Why there is no chief ray, and so no bundle; null when there is one. */
+  readonly lost: Lost | null;
+  /** Null when not all of the eight get to the stop: then every ray has to be aimed. */
+  readonly shape: Shape | null;
+  readonly bundle: Bundle;
+  readonly sight: Sight;
+}
+
+/** Launch numbers as polynomials in the place (x, y) in the stop; a is odd in x, b even. */
+interface Shape {
+  /** x · (1, x², y, y²). */
+  readonly a: readonly [number, number, number, number];
+  /** 1, y, y², y³, y⁴. */
+  readonly b: readonly [number, number, number, number, number];
+  /** x² · (1, x², y, y²). */
+  readonly across: readonly [number, number, number, number];
+}
+
+const INNER = 0.6;
+const DIAGONAL = Math.SQRT1_2;
+/** Rim and an inner zone, in the meridian, across it and between; those on the other side of the meridian are alike. */
+const AIMED_POINTS = new Float64Array([
+  ...[0, 1, 0, -1, 0, INNER, 0, -INNER],
+  ...[1, 0, INNER, 0, DIAGONAL, DIAGONAL, DIAGONAL, -DIAGONAL],
+]);
+const AIMED_COUNT = AIMED_POINTS.length / 2;
+
+/** The bundle of the share `fraction` of the field in line `line` of the setup. Its `lost` says when no ray gets to the stop's centre. */
+export function pupilMapOf(setup: ExactSetup, line: number, fraction: number): PupilMap {
+  const sight = sightOf(setup, line);
+  const chief = aimChief(sight, setup, line, fraction);
+  const source = sourceOf(setup, line, fraction);
+  const paraxial = paraxialLaunch(source, setup, fraction, 1) - paraxialLaunch(source, setup, fraction, 0);
+  const bundle = bundleAbout(sight, source, chief, paraxial);
+  const shape = chief.code === 0 ? shapeOf(sight, bundle) : null;
+  return { setup, line, fraction, lost: lostOf(chief.code), shape, bundle, sight };
+}
+
+/**
+ * Starts `count` rays for `traceBatch`, each to its point of the stop (`pupil` has x and y in turn, in shares of its radius), placed
+ * between the aimed ones: good for drawing and dragging; where the map has no shape they are aimed. Rays of one map have paths that can be
+ * compared. A ray that cannot get there has its `CODE` from the start, so that `traceBatch` leaves it alone.
+ */
+export function mapRays(map: PupilMap, pupil: ArrayLike<number>, count: number, rays: Float64Array): void {
+  const { bundle, shape } = map;
+  if (shape === null) {
+    aimRays(map, pupil, count, rays);
+    return;
+  }
+  for (let i = 0; i < count; i++) {
+    const x = pupil[2 * i]!;
+    const y = pupil[2 * i + 1]!;
+    launch(bundle.source, firstAt(shape, x, y), secondAt(shape, x, y), rays, i * STRIDE);
+  }
+}
+
+/** As `mapRays`, with every ray aimed at its point of the stop. */
+export function aimRays(map: PupilMap, pupil: ArrayLike<number>, count: number, rays: Float64Array): void {
+  const { sight, bundle, shape } = map;
+  const guess = shape && ((x: number, y: number) => [firstAt(shape, x, y), secondAt(shape, x, y)] as const);
+  aimAll(sight, bundle, pupil, count, rays, guess);
+}
+
+/** The start of a single aimed ray for `traceRay`, z from the first vertex. */
+export interface AimedRay {
+  readonly start: Vector;
+  readonly direction: Vector;
+  /** Index times length from the object point to the start; from infinity, from the plane wave through the first vertex. */
+  readonly pathMm: number;
+}
+
+/** The ray to the point (x, y) of the stop, in shares of its radius: (0, 0) is the chief, (0, ±1) are the marginal rays. Absent when none gets there. */
+export function aimedRay(map: PupilMap, x: number, y: number): Outcome<AimedRay, Lost['why']> {
+  const ray = new Float64Array(STRIDE);
+  aimRays(map, [x, y], 1, ray);
+  const lost = lostOf(ray[CODE]!);
+  if (lost) return none(lost.why);
+  return some({
+    start: [ray[X]!, ray[Y]!, ray[Z]!],
+    direction: [ray[L]!, ray[M]!, ray[N]!],
+    pathMm: ray[PATH]!,
+  });
+}
+
+const firstAt = ({ a }: Shape, x: number, y: number): number =>
+  x * (a[0] + a[1] * x * x + y * (a[2] + a[3] * y));
+
+const secondAt = ({ b, across }: Shape, x: number, y: number): number =>
+  b[0] +
+  y * (b[1] + y * (b[2] + y * (b[3] + y * b[4]))) +
+  x * x * (across[0] + across[1] * x * x + y * (across[2] + across[3] * y));
+
+/** The polynomials through the nine aimed rays, each term from the rays that single it out; null when one of them does not get there. */
+function shapeOf(sight: Sight, bundle: Bundle): Shape | null {
+  const rays = new Float64Array(AIMED_COUNT * STRIDE);
+  aimAll(sight, bundle, AIMED_POINTS, AIMED_COUNT, rays);
+  const numbers = Array.from({ length: AIMED_COUNT }, (_, i): readonly [number, number] => {
+    const at = i * STRIDE;
+    if (rays[at + CODE] !== 0) return [Number.NaN, Number.NaN];
+    return bundle.source.kind === 'infinite'
+      ? [rays[at + X]!, rays[at + Y]!]
+      : [rays[at + L]!, rays[at + M]!];
+  });
+  const [up, down, upIn, downIn, side, sideIn, upSide, downSide] = numbers;
+  if (!(up && down && upIn && downIn && side && sideIn && upSide && downSide)) return null;
+  const centre = bundle.chief.b;
+  const [odd, cubic] = oddThrough((up[1] - down[1]) / 2, (upIn[1] - downIn[1]) / 2);
+  const [even, quartic] = evenThrough((up[1] + down[1]) / 2 - centre, (upIn[1] + downIn[1]) / 2 - centre);
+  const [across, acrossQuartic] = evenThrough(side[1] - centre, sideIn[1] - centre);
+  const [linear, acrossCubic] = oddThrough(side[0], sideIn[0]);
+  const plain: Shape = {
+    a: [linear, acrossCubic, 0, 0],
+    b: [centre, odd, even, cubic, quartic],
+    across: [across, acrossQuartic, 0, 0],
+  };
+  const [d, dd] = [DIAGONAL, DIAGONAL * DIAGONAL];
+  const leftA = (ray: readonly [number, number], y: number) => (ray[0] - firstAt(plain, d, y)) / d;
+  const leftB = (ray: readonly [number, number], y: number) => (ray[1] - secondAt(plain, d, y)) / dd;
+  const [upA, downA, upB, downB] = [
+    leftA(upSide, d),
+    leftA(downSide, -d),
+    leftB(upSide, d),
+    leftB(downSide, -d),
+  ];
+  const shape: Shape = {
+    a: [linear, acrossCubic, (upA - downA) / (2 * d), (upA + downA) / (2 * dd)],
+    b: plain.b,
+    across: [across, acrossQuartic, (upB - downB) / (2 * d), (upB + downB) / (2 * dd)],
+  };
+  return [...shape.a, ...shape.b, ...shape.across].every(Number.isFinite) ? shape : null;
+}
+
+/** [p, q] of p·x + q·x³ from its values at 1 and at the inner zone. */
+function oddThrough(atRim: number, inside: number): readonly [number, number] {
+  const q = (atRim - inside / INNER) / (1 - INNER * INNER);
+  return [atRim - q, q];
+}
+
+/** [p, q] of p·x² + q·x⁴ from its values at 1 and at the inner zone. */
+function evenThrough(atRim: number, inside: number): readonly [number, number] {
+  const q = (atRim - inside / (INNER * INNER)) / (1 - INNER * INNER);
+  return [atRim - q, q];
+}
