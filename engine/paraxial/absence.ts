@@ -30,7 +30,12 @@ const SENTENCES = {
   'no real object': 'No object in front of the first part is sharp on this image plane.',
   'no bundle': 'The bundle has no width here.',
   'ray lost': 'The exact ray does not get through: the drawing shows where it ends, and why.',
-  'no ray through': 'No exact ray of this bundle reaches the image: the drawing shows where they end, and why.',
+  'no ray through':
+    'No exact ray of this bundle reaches the image: the drawing shows where they end, and why.',
+  'pupil at the image':
+    'The exit pupil stands on the image, so there is no sphere to measure the wavefront against: move the stop.',
+  'thin parts':
+    'Thin parts have no optical path of their own: thicken them to see the wavefront across the meridian.',
   'out of range': 'The numbers grow too large to compute: check for extreme powers and gaps.',
 } as const;
 
