@@ -2,6 +2,7 @@
  * The engine's only door: what the app uses, by name. Everything it offers is a pure function over readonly data; units, signs,
  * absence and sources stand in the docstrings of the rooms.
  */
+export { materials } from './media/materials.ts';
 export { indexOf, type MainLines, mediumName } from './media/medium.ts';
 export { type Fault, none, type Outcome, some } from './outcome.ts';
 export { type Quantity, sentenceOf } from './paraxial/absence.ts';
