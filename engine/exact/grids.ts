@@ -1,17 +1,16 @@
 /**
  * Points of the unit pupil, +y up, each with the share of the pupil's area that it stands for. A layout with an axis sends the points
- * (x, y) and (−x, y) of a field in the meridian to places that mirror each other, so only the first `traced` points need a ray.
+ * (x, y) and (−x, y) of a field in the meridian to places that mirror each other, so only those with x ≥ 0 are listed and need a ray.
  */
 export interface PupilGrid {
+  /** Points of the whole grid. */
   readonly count: number;
-  /** The points with x ≥ 0 come first, this many. */
+  /** Points listed: those with x ≥ 0. */
   readonly traced: number;
   readonly x: Float64Array;
   readonly y: Float64Array;
-  /** Adds up to 1. */
+  /** Of the listed point; its mirror image weighs as much. Over the whole grid they add up to 1. */
   readonly weight: Float64Array;
-  /** For point `traced` + i the traced point that it mirrors. */
-  readonly mirrorOf: Int32Array;
 }
 
 /**
@@ -78,27 +77,11 @@ const gregory = (rings: number, fromRim: number): number =>
 function gridOf(points: readonly Point[]): PupilGrid {
   const whole = points.reduce((sum, { weight }) => sum + weight, 0);
   const traced = points.filter(({ x }) => x >= 0);
-  const mirrorOf: number[] = [];
-  for (const [i, { x }] of traced.entries()) if (x > 0) mirrorOf.push(i);
-  const count = traced.length + mirrorOf.length;
-  const block = new Float64Array(3 * count);
-  const grid = {
-    count,
+  return {
+    count: points.length,
     traced: traced.length,
-    x: block.subarray(0, count),
-    y: block.subarray(count, 2 * count),
-    weight: block.subarray(2 * count),
-    mirrorOf: Int32Array.from(mirrorOf),
+    x: Float64Array.from(traced, ({ x }) => x),
+    y: Float64Array.from(traced, ({ y }) => y),
+    weight: Float64Array.from(traced, ({ weight }) => weight / whole),
   };
-  for (const [i, { x, y, weight }] of traced.entries()) {
-    grid.x[i] = x;
-    grid.y[i] = y;
-    grid.weight[i] = weight / whole;
-  }
-  for (const [i, from] of mirrorOf.entries()) {
-    grid.x[traced.length + i] = -grid.x[from]!;
-    grid.y[traced.length + i] = grid.y[from]!;
-    grid.weight[traced.length + i] = grid.weight[from]!;
-  }
-  return grid;
 }

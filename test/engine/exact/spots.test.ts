@@ -36,15 +36,18 @@ function landingOf(rays: readonly Ray[], lost = 0): Landing {
 
 /** A cone of rays from the pupil's grid that meets in a point `focusMm` behind the plane. */
 function cone(focusMm: number, slope: number, heightMm = 0): Landing {
-  const { count, x, y, weight } = hexapolarGrid(8);
+  const { x, y, weight } = hexapolarGrid(8);
   return landingOf(
-    Array.from({ length: count }, (_, i) => ({
-      x: slope * x[i]! * focusMm,
-      y: slope * y[i]! * focusMm + heightMm,
-      slopeX: -slope * x[i]!,
-      slopeY: -slope * y[i]!,
-      weight: weight[i]!,
-    })),
+    [...x].flatMap((px, i) => {
+      const ray = (x1: number): Ray => ({
+        x: slope * x1 * focusMm,
+        y: slope * y[i]! * focusMm + heightMm,
+        slopeX: -slope * x1,
+        slopeY: -slope * y[i]!,
+        weight: weight[i]!,
+      });
+      return px === 0 ? [ray(0)] : [ray(px), ray(-px)];
+    }),
   );
 }
 
