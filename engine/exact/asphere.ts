@@ -1,5 +1,5 @@
 import type { Train } from '../train/types.ts';
-import type { Block } from './blocks.ts';
+import { type Meeting, WORK } from './blocks.ts';
 import { CLIPPED, MISSED, REFLECTED } from './rayBuffer.ts';
 
 /*
@@ -17,7 +17,7 @@ const BRACKET_STEPS = 60;
 const HALVINGS = 200;
 
 /** One surface with one ray at hand: the point in the tangent plane, the direction, and what was last computed. */
-interface Meeting {
+interface Course {
   x0: number;
   y0: number;
   l: number;
@@ -34,7 +34,7 @@ interface Meeting {
   slope: number;
 }
 
-const meeting: Meeting = {
+const course: Course = {
   x0: 0,
   y0: 0,
   l: 0,
@@ -50,20 +50,24 @@ const meeting: Meeting = {
 };
 
 /** The block through surface `k` of the train, which has even powers. */
-export function asphereBlock(block: Block, train: Train, k: number): void {
-  const { rays, start, stop, reach, nFront, nBehind, rimSquared, code } = block;
+export function asphereBlock(
+  { stop, reach, nFront, nBehind, rimSquared, code }: Meeting,
+  train: Train,
+  k: number,
+): void {
+  const rays = WORK;
   const side = nFront > 0 ? 1 : -1;
   const mirror = nFront * nBehind < 0;
   const mu = Math.abs(nFront / nBehind);
   const muSquared = mu * mu;
   const n = Math.abs(nFront);
-  const at = meeting;
+  const at = course;
   at.c = train.curvature[k]!;
   at.edge = (1 + train.conic[k]!) * at.c * at.c;
   at.powers = train.asphere;
   at.first = train.asphereFrom[k]!;
   at.last = train.asphereFrom[k + 1]! - 1;
-  for (let i = start; i < stop; i += 8) {
+  for (let i = 0; i < stop; i += 8) {
     if (rays[i + 7] !== 0) continue;
     const l = rays[i + 3]!;
     const m = rays[i + 4]!;
@@ -86,7 +90,7 @@ export function asphereBlock(block: Block, train: Train, k: number): void {
     rays[i + 1] = y;
     rays[i + 2] = t * cosZ;
     rays[i + 6] = rays[i + 6]! + n * (toPlane + t);
-    if (x * x + y * y > rimSquared) {
+    if (!(x * x + y * y <= rimSquared)) {
       rays[i + 7] = code + CLIPPED;
       continue;
     }
@@ -105,7 +109,7 @@ export function asphereBlock(block: Block, train: Train, k: number): void {
 }
 
 /** Length from the tangent plane to the hit, with `at.slope` there; NaN when the surface is missed. */
-function meet(at: Meeting, side: number, conic: number): number {
+function meet(at: Course, side: number, conic: number): number {
   const begin = conicHit(at, side, conic);
   let t = begin;
   let before = Number.POSITIVE_INFINITY;
@@ -130,7 +134,7 @@ function meet(at: Meeting, side: number, conic: number): number {
 }
 
 /** Where the ray meets the conic, which is near the hit; 0, the tangent plane, when it misses it. */
-function conicHit({ x0, y0, l, m, cosZ, c }: Meeting, side: number, conic: number): number {
+function conicHit({ x0, y0, l, m, cosZ, c }: Course, side: number, conic: number): number {
   const f = c * (x0 * x0 + y0 * y0);
   const g = cosZ - c * (x0 * l + y0 * m);
   const radicand = g * g - c * (1 + conic * cosZ * cosZ) * f;
@@ -139,7 +143,7 @@ function conicHit({ x0, y0, l, m, cosZ, c }: Meeting, side: number, conic: numbe
 }
 
 /** Puts height and slope at `t` into `at`; false beyond the conic's edge or where they are not finite. */
-function evaluate(at: Meeting, t: number): boolean {
+function evaluate(at: Course, t: number): boolean {
   const { powers, first, c } = at;
   const x = at.x0 + t * at.l;
   const y = at.y0 + t * at.m;
@@ -160,7 +164,7 @@ function evaluate(at: Meeting, t: number): boolean {
 }
 
 /** The first change of sign found from `begin`, in front of it or behind, halved until it is found or lost. NaN when there is none. */
-function bracketed(at: Meeting, side: number, begin: number): number {
+function bracketed(at: Course, side: number, begin: number): number {
   const { x0, y0, l, m, edge } = at;
   let least = Number.NEGATIVE_INFINITY;
   let most = Number.POSITIVE_INFINITY;
@@ -195,7 +199,7 @@ function bracketed(at: Meeting, side: number, begin: number): number {
 }
 
 /** The sign change between `before` and `after`, by Newton steps that stay between them, else by halves. */
-function halved(at: Meeting, side: number, before: number, after: number): number {
+function halved(at: Course, side: number, before: number, after: number): number {
   let [low, high] = [before, after];
   let t = (low + high) / 2;
   for (let step = 0; step < HALVINGS; step++) {

@@ -1,11 +1,8 @@
 import { powerAt } from '../paraxial/trace.ts';
 import type { Train } from '../train/types.ts';
 import { asphereBlock } from './asphere.ts';
-import { type Block, conicBlock, sphereBlock, thinBlock } from './blocks.ts';
+import { BLOCK_RAYS, conicBlock, type Meeting, sphereBlock, thinBlock, WORK } from './blocks.ts';
 import { LOSSES, STRIDE } from './rayBuffer.ts';
-
-/** So many rays go through a surface before the next one: neighbours do not wait for each other, and a block stays in the nearest cache. */
-const BLOCK = 128;
 
 /** Share of a rim's radius by which a ray may pass beyond it: a ray aimed at the very edge passes. */
 const RIM_SLACK = 1e-9;
@@ -24,7 +21,7 @@ const RIM_SLACK = 1e-9;
  * runs against the light.
  *
  * A thin part is a plane with the collinear map n′ dx′/dz = n dx/dz − φ x, the same in y; its own path is 0, so behind thin parts
- * `PATH` is a length and no phase. Never allocates but for one record at the call, never throws.
+ * `PATH` is a length and no phase. Never allocates, never throws.
  */
 export function traceBatch(
   train: Train,
@@ -36,21 +33,26 @@ export function traceBatch(
 ): void {
   const { gap, index, curvature, conic, asphereFrom, thinPower, semiDiameter } = train;
   const end = count * STRIDE;
-  const block: Block = { rays, start: 0, stop: 0, reach: 0, nFront: 1, nBehind: 1, rimSquared: 0, code: 0 };
-  for (let start = 0; start < end; start += BLOCK * STRIDE) {
-    block.start = start;
-    block.stop = Math.min(end, start + BLOCK * STRIDE);
+  for (let start = 0; start < end; start += BLOCK_RAYS * STRIDE) {
+    const stop = Math.min(end - start, BLOCK_RAYS * STRIDE);
+    for (let i = 0; i < stop; i++) WORK[i] = rays[start + i]!;
+    meeting.stop = stop;
     for (let k = from; k < to; k++) {
       const rim = clip ? semiDiameter[k]! * (1 + RIM_SLACK) : Number.POSITIVE_INFINITY;
-      block.reach = k === 0 ? 0 : gap[k - 1]!;
-      block.nFront = index[k]!;
-      block.nBehind = index[k + 1]!;
-      block.rimSquared = rim * rim;
-      block.code = LOSSES * k;
-      if (thinPower[k] !== 0) thinBlock(block, powerAt(train, k));
-      else if (asphereFrom[k + 1]! > asphereFrom[k]!) asphereBlock(block, train, k);
-      else if (conic[k] === 0 || curvature[k] === 0) sphereBlock(block, curvature[k]!);
-      else conicBlock(block, curvature[k]!, conic[k]!);
+      meeting.reach = k === 0 ? 0 : gap[k - 1]!;
+      meeting.nFront = index[k]!;
+      meeting.nBehind = index[k + 1]!;
+      meeting.rimSquared = rim * rim;
+      meeting.code = LOSSES * k;
+      const c = curvature[k]!;
+      if (thinPower[k] !== 0) thinBlock(meeting, powerAt(train, k));
+      else if (asphereFrom[k + 1]! > asphereFrom[k]!) asphereBlock(meeting, train, k);
+      else if (conic[k]! * c === 0 && index[k]! > 0 && index[k + 1]! > 0) sphereBlock(meeting, c);
+      else conicBlock(meeting, c, conic[k]!);
     }
+    for (let i = 0; i < stop; i++) rays[start + i] = WORK[i]!;
   }
 }
+
+/** Filled anew for every surface: a call makes no object. */
+const meeting: Meeting = { stop: 0, reach: 0, nFront: 1, nBehind: 1, rimSquared: 0, code: 0 };
