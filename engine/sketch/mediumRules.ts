@@ -4,7 +4,7 @@ import type { Fault } from '../outcome.ts';
 import { numberFault, textFault } from './faults.ts';
 import { keeps, LIMITS, LONGEST_TEXT } from './limits.ts';
 import { weightedLines } from './lines.ts';
-import type { Line, Sketch, SolidMedium } from './types.ts';
+import type { Line, Medium, Sketch, SolidMedium } from './types.ts';
 import { quantityText } from './words.ts';
 
 /**
@@ -49,7 +49,8 @@ const LINE_WORDS: Readonly<Record<Line, { readonly path: string; readonly words:
   fifth: { path: 'lines.more[1].wavelengthNm', words: 'fifth wavelength' },
 };
 
-function rangeFaults(faults: Fault[], { lines, air }: Sketch, medium: SolidMedium, owner: string): void {
+/** A fault for each line of the sketch that lies where the medium has no index. */
+export function rangeFaults(faults: Fault[], { lines, air }: Sketch, medium: Medium, owner: string): void {
   const range = rangeOf(medium, air);
   if (range === null) return;
   const [low, high] = range;

@@ -2,7 +2,7 @@ import { indexOf } from '../media/medium.ts';
 import type { Fault } from '../outcome.ts';
 import { countFault, idFaults, numberFault, textFault, valueFaults } from './faults.ts';
 import { keeps, LIMITS, LONGEST_TEXT, MOST } from './limits.ts';
-import { mediumFaults } from './mediumRules.ts';
+import { mediumFaults, rangeFaults } from './mediumRules.ts';
 import { partFaults } from './partRules.ts';
 import type { Part, Sketch } from './types.ts';
 import { quantityText, quoted } from './words.ts';
@@ -37,6 +37,7 @@ export function faultsOf(sketch: Sketch): readonly Fault[] {
   apertureFaults(faults, sketch);
   fieldFaults(faults, sketch);
   lineFaults(faults, sketch);
+  if (sketch.air === 'standard') rangeFaults(faults, sketch, 'air', 'the sketch');
   groupFaults(faults, sketch);
   numberFault(faults, LIMITS.assumedIndex, sketch.assumedIndex, 'assumedIndex');
   if (sketch.blurMm !== null) numberFault(faults, LIMITS.blurMm, sketch.blurMm, 'blurMm');

@@ -14,7 +14,8 @@ export interface Profile {
  */
 export function sagAt({ curvaturePerMm: c, conic, asphere }: Profile, radiusMm: number): number | null {
   const squared = radiusMm * radiusMm;
-  const radicand = 1 - (1 + conic) * c * c * squared;
+  const share = c * radiusMm;
+  const radicand = 1 - (1 + conic) * share * share;
   if (!(radicand >= 0)) return null;
   let powers = 0;
   for (let i = asphere.length - 1; i >= 0; i--) powers = powers * squared + (asphere[i] ?? 0);

@@ -1,5 +1,4 @@
 import { emptySketch, newThin } from '../../../engine/sketch/create.ts';
-import { lengthOf } from '../../../engine/sketch/part.ts';
 import type { PartId, PerPosition, PositionId, Sketch } from '../../../engine/sketch/types.ts';
 import { valueOn } from '../../../engine/sketch/values.ts';
 
@@ -31,7 +30,9 @@ export function placesFrom(sketch: Sketch, from: PartId, position: PositionId): 
   if (object !== 'infinity') places.set('object', -object);
   for (const part of sketch.parts) {
     places.set(part.id, z);
-    z += lengthOf(part) + valueOn(part.space.lengthMm, position);
+    if (part.kind === 'plate') z += part.thicknessMm;
+    if (part.kind === 'glass') for (const { thicknessMm } of part.fillings) z += thicknessMm;
+    z += valueOn(part.space.lengthMm, position);
   }
   if (sketch.image === 'fixed') places.set('sensor', z);
   const datum = places.get(from) ?? 0;
