@@ -1,14 +1,15 @@
 import { readFileSync } from 'node:fs';
 import { finite } from '../../engine/paraxial/absence.ts';
 import { heightInSpace, paraxialRay } from '../../engine/paraxial/trace.ts';
+import { readAxisRays } from './axisRays.ts';
 import { readClosedForm } from './closedForms.ts';
+import { readDispersion } from './dispersion.ts';
+import { runExactRays } from './exactRays.ts';
 import { isRecord, numberIn } from './json.ts';
 import { type Reader, readTrain } from './measure.ts';
 import { type Laid, layOut } from './prescription.ts';
 import { type CaseReport, COMPUTED_RELATIVE, compare, type Miss, missLine, reportOf } from './report.ts';
 import { runSeidel } from './seidelSums.ts';
-
-export type { CaseReport, Miss } from './report.ts';
 
 /** Printed tolerances end on a digit; this keeps the conversion to binary from counting as a miss. */
 const PRINTED_SLACK = 1e-12;
@@ -24,7 +25,7 @@ export function runCases(list: unknown): readonly CaseReport[] {
 }
 
 /**
- * Runs case files and prints a line per miss, the ids that cannot be expressed, and `N passed, N failed, N skipped`. Returns the exit
+ * Runs case files and prints a line per miss, what cannot be expressed, and `N passed, N failed, N skipped`. Returns the exit
  * code: 1 on a miss or a file that cannot be read.
  */
 export function main(paths: readonly string[], print: (line: string) => void): number {
@@ -44,7 +45,10 @@ export function main(paths: readonly string[], print: (line: string) => void): n
     }
   }
   for (const { id, misses } of reports) for (const miss of misses) print(missLine(id, miss));
-  for (const { id, outcome } of reports) if (outcome === 'skipped') print(`cannot express: ${id}`);
+  for (const { id, outcome, left } of reports) {
+    if (outcome === 'skipped') print(`cannot express: ${id}`);
+    else if (left.length > 0) print(`left out: ${id}, ${left.join(', ')}`);
+  }
   const count = (outcome: CaseReport['outcome']) =>
     reports.filter((report) => report.outcome === outcome).length;
   print(`${count('passed')} passed, ${count('failed')} failed, ${count('skipped')} skipped`);
@@ -67,19 +71,20 @@ function runFile(path: string): readonly CaseReport[] | string {
   }
 }
 
-/** A list of cases, or systems with Seidel sums; null when it is neither. */
+/** A list of cases, or systems with exact rays or with Seidel sums; null when it is none of them. */
 function runParsed(file: unknown): readonly CaseReport[] | null {
   if (Array.isArray(file)) return runCases(file);
   const systems: readonly unknown[] = isRecord(file) && Array.isArray(file.systems) ? file.systems : [];
-  if (systems.some((system) => isRecord(system) && isRecord(system.sums))) return runSeidel(file);
-  return null;
+  const hold = (key: string) => systems.some((system) => isRecord(system) && key in system);
+  if (hold('rays')) return runExactRays(file);
+  return hold('sums') ? runSeidel(file) : null;
 }
 
 function runCase(id: string, entry: Record<string, unknown>): CaseReport {
   const input = isRecord(entry.input) ? entry.input : {};
   const expected = isRecord(entry.expected) ? entry.expected : {};
   const computed = isRecord(entry.computed) && isRecord(entry.computed.values) ? entry.computed.values : {};
-  const reader = readerOf(id, input);
+  const reader = readerOf(id, input, entry.kind);
   const names = [...new Set([...Object.keys(expected), ...Object.keys(computed)])];
   const covered: string[] = [];
   const left: string[] = [];
@@ -114,15 +119,21 @@ function claimOf(entry: unknown): { value: number | null; tolerance: number } | 
   return { value, tolerance };
 }
 
-function readerOf(id: string, input: Record<string, unknown>): Reader | null {
+function readerOf(id: string, input: Record<string, unknown>, kind: unknown): Reader | null {
+  if (kind === 'dispersion') return readDispersion(input);
   if (input.prescription === undefined) return readClosedForm(input);
   const prescription = isRecord(input.prescription) ? input.prescription : {};
   if (Array.isArray(input.positions)) return readPositions(prescription, input.positions);
   const laid = layOut(prescription);
   if (laid === null) return null;
-  const plain = readTrain(laid, prescription);
-  const own = NOTES[id]?.(laid);
-  return own ? (quantity) => plain(quantity) ?? own(quantity) : plain;
+  const readers = [readTrain(laid, prescription), readAxisRays(laid, input), NOTES[id]?.(laid)];
+  return (quantity) => {
+    for (const reader of readers) {
+      const measured = reader?.(quantity);
+      if (measured) return measured;
+    }
+    return null;
+  };
 }
 
 /** The quantities of several positions, prefixed by the position's name and a dot. */

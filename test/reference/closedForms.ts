@@ -1,14 +1,18 @@
-import { derive, finite, type Quantity } from '../../engine/paraxial/absence.ts';
+import { derive, derive2, finite, type Quantity } from '../../engine/paraxial/absence.ts';
 import { axialOf } from '../../engine/paraxial/axial.ts';
 import { petzval, thinColour } from '../../engine/paraxial/colour.ts';
 import { blurDepthMm, quarterWaveDepthMm } from '../../engine/paraxial/depth.ts';
 import { firstOrder } from '../../engine/paraxial/firstOrder.ts';
 import { light } from '../../engine/paraxial/light.ts';
 import { referenceRays } from '../../engine/paraxial/rays.ts';
+import { achromaticPair } from '../../engine/solve/achromat.ts';
+import { objectForMagnification, objectsForTrack } from '../../engine/solve/conjugateSolves.ts';
 import { buildTrain, type SurfaceSpec } from '../../engine/train/build.ts';
+import { readAxisRays } from './axisRays.ts';
 import { isRecord, numberIn } from './json.ts';
 import { type Measured, type Reader, readTrain } from './measure.ts';
 import { layOut } from './prescription.ts';
+import { readBending, readFoci, readTwoElements } from './solves.ts';
 
 /** Double-precision rounding of a short closed form, relative. */
 const ROUNDING = 1e-13;
@@ -42,11 +46,17 @@ const numbersIn = <K extends string>(
   return found as Record<K, number>;
 };
 
-const thinAt = (focalLength: number, distance: number): Reader | null => {
-  const prescription = { thinLenses: [{ focalLength, gapAfter: 0 }], object: { distance } };
+/** A thin lens with an object so far in front of it. */
+function thinFrom(focalLength: number, objectDistanceMm: number): Reader {
+  const prescription = {
+    thinLenses: [{ focalLength, gapAfter: 0 }],
+    object: { distance: -objectDistanceMm },
+  };
   const laid = layOut(prescription);
-  return laid && readTrain(laid, prescription);
-};
+  const traced = laid && readTrain(laid, prescription);
+  return (quantity) =>
+    quantity === 'objectDistance' ? measured(finite(-objectDistanceMm)) : (traced?.(quantity) ?? null);
+}
 
 /** One refracting surface by itself. */
 const singleSurface: Form = (input) => {
@@ -58,18 +68,20 @@ const singleSurface: Form = (input) => {
     object: { distance: input.objectDistance },
   };
   const laid = layOut(prescription);
-  return laid && readTrain(laid, prescription);
+  if (laid === null) return null;
+  const [paraxial, exact] = [readTrain(laid, prescription), readAxisRays(laid, input)];
+  return (quantity) => paraxial(quantity) ?? exact(quantity);
 };
 
-/** A thin lens at several magnifications: the object stands at f(1/m − 1), the engine gives the rest. */
+/** A thin lens at several magnifications: the engine gives the object's distance, then the rest from a trace. */
 const magnifications: Form = (input) => {
   const lens = numbersIn(input, 'focalLength');
   if (!lens || !Array.isArray(input.magnifications)) return null;
   const readers = new Map<string, Reader>();
   for (const m of input.magnifications) {
     if (typeof m !== 'number' || m === 0) return null;
-    const reader = thinAt(lens.focalLength, lens.focalLength * (1 / m - 1));
-    if (reader) readers.set(String(m), reader);
+    const distance = objectForMagnification(lens.focalLength, m);
+    if (distance.ok) readers.set(String(m), thinFrom(lens.focalLength, distance.value));
   }
   return (quantity) => {
     const [, name = '', m = ''] = /^(\w+)\[(.+)\]$/.exec(quantity) ?? [];
@@ -77,39 +89,40 @@ const magnifications: Form = (input) => {
   };
 };
 
-/** Two ways to put a thin lens between object and image: the object at −(L ± √(L² − 4fL))/2, the engine gives the rest. */
+/** Two ways to put a thin lens between object and image, likewise. */
 const doubleSolution: Form = (input) => {
   const given = numbersIn(input, 'focalLength', 'objectToImage');
   if (!given) return null;
-  const { focalLength: f, objectToImage: L } = given;
-  const root = Math.sqrt(L * L - 4 * f * L);
-  if (!(root > 0)) return null;
-  const readers = { A: thinAt(f, -(L - root) / 2), B: thinAt(f, -(L + root) / 2) };
+  const distances = objectsForTrack(given.focalLength, given.objectToImage);
+  if (!distances.ok) return null;
+  const [near, far] = distances.value;
+  const readers = { A: thinFrom(given.focalLength, near), B: thinFrom(given.focalLength, far) };
   return (quantity) => {
     const magnification = (key: 'A' | 'B'): Quantity =>
-      readers[key]?.('magnification')?.value ?? finite(Number.NaN);
-    if (quantity === 'magnificationProduct') {
-      const other = magnification('B');
-      return measured(derive(magnification('A'), (m) => m * (other.ok ? other.value : Number.NaN)));
-    }
+      readers[key]('magnification')?.value ?? finite(Number.NaN);
+    if (quantity === 'magnificationProduct')
+      return measured(derive2(magnification('A'), magnification('B'), (a, b) => a * b));
     const key = quantity.at(-1);
-    return key === 'A' || key === 'B' ? (readers[key]?.(quantity.slice(0, -1)) ?? null) : null;
+    return key === 'A' || key === 'B' ? readers[key](quantity.slice(0, -1)) : null;
   };
 };
 
-/** Two thin lenses in contact with φ₁ = φV₁/(V₁ − V₂), φ₂ = −φV₂/(V₁ − V₂): what they add up to. */
+/** Two thin lenses in contact without axial colour: their powers, and what they add up to. */
 const achromat: Form = (input) => {
   const f = numberIn(input, 'focalLength');
   const one = isRecord(input.glass1) ? numbersIn(input.glass1, 'index', 'abbe') : null;
   const two = isRecord(input.glass2) ? numbersIn(input.glass2, 'index', 'abbe') : null;
-  if (!f || !one || !two || one.abbe === two.abbe) return null;
-  const lens = (part: number, glass: { abbe: number }, other: { abbe: number }): SurfaceSpec => {
-    const thinPowerPerMm = glass.abbe / (glass.abbe - other.abbe) / f;
-    return { part, thinPowerPerMm, powerSpreadPerMm: thinPowerPerMm / glass.abbe, indexAfter: 1, gapMm: 0 };
+  if (!f || !one || !two) return null;
+  const pair = achromaticPair(f, one.abbe, two.abbe);
+  if (!pair.ok) return null;
+  const { firstFocalLengthMm, secondFocalLengthMm } = pair.value;
+  const lens = (part: number, focalLengthMm: number, abbe: number): SurfaceSpec => {
+    const thinPowerPerMm = 1 / focalLengthMm;
+    return { part, thinPowerPerMm, powerSpreadPerMm: thinPowerPerMm / abbe, indexAfter: 1, gapMm: 0 };
   };
   const train = buildTrain({
     objectIndex: 1,
-    surfaces: [lens(0, one, two), lens(1, two, one)],
+    surfaces: [lens(0, firstFocalLengthMm, one.abbe), lens(1, secondFocalLengthMm, two.abbe)],
     stopSurface: 0,
     objectZ: null,
     imageDistanceMm: null,
@@ -127,6 +140,8 @@ const achromat: Form = (input) => {
   const colourSum = derive(thinColour(train, rays, axial).axialMm, (mm) => -mm / (f * f));
   const table = new Map<string, Measured>([
     ['focalLength', measured(firstOrder(train).focalLengthMm)],
+    ['focalLength1', measured(finite(firstFocalLengthMm))],
+    ['focalLength2', measured(finite(secondFocalLengthMm))],
     ['petzvalSum', measured(petz.sumPerMm)],
     ['petzvalRadius', measured(petz.radiusMm)],
     ['colourSum', { value: colourSum, floor: ROUNDING * spread }],
@@ -197,6 +212,9 @@ const workingFNumber: Form = (input) => {
 };
 
 const FORMS: readonly Form[] = [
+  readFoci,
+  readBending,
+  readTwoElements,
   singleSurface,
   magnifications,
   doubleSolution,

@@ -1,10 +1,11 @@
+import { coddington } from '../../engine/exact/coddington.ts';
 import { traceRay } from '../../engine/exact/ray.ts';
 import type { Hit, RayPath, Vector } from '../../engine/exact/types.ts';
 import { firstOrder } from '../../engine/paraxial/firstOrder.ts';
 import type { Train } from '../../engine/train/types.ts';
-import type { CaseReport, Miss } from './cases.ts';
 import { isRecord, numberIn } from './json.ts';
 import { layOut } from './prescription.ts';
+import type { CaseReport, Miss } from './report.ts';
 
 /** Of points and paths, times the size of the numbers that made them, at least 1 mm. */
 const LENGTH_MM = 1e-12;
@@ -88,7 +89,7 @@ function compareRay(
   }
   const focus = entry.atParaxialFocus;
   if (isRecord(focus)) compareFocus(train, path, focus, id, seen);
-  if (entry.parallelBundleFoci) seen.left.push('parallelBundleFoci');
+  if (isRecord(entry.parallelBundleFoci)) compareFoci(train, path, entry.parallelBundleFoci, seen);
 }
 
 function compareHit(
@@ -144,6 +145,23 @@ function compareFocus(
   const z = numberIn(wanted, 'z');
   if (z !== null)
     seen.near('focus z', back.ok ? back.value : undefined, z, LENGTH_MM * Math.max(1, Math.abs(z)));
+}
+
+/** The foci of a narrow parallel pencil about the ray, along it from its last point. */
+function compareFoci(train: Train, path: RayPath, wanted: Record<string, unknown>, seen: Comparison): void {
+  const foci = coddington(train, path, null);
+  for (const name of ['tangential', 'sagittal'] as const) {
+    const value = numberIn(wanted, name);
+    const got = foci[name];
+    if (value === null) seen.same(`${name} focus`, got.ok, false);
+    else
+      seen.near(
+        `${name} focus`,
+        got.ok ? got.value : undefined,
+        value,
+        LENGTH_MM * Math.max(1, Math.abs(value)),
+      );
+  }
 }
 
 function vectorOf(value: unknown): Vector | null {

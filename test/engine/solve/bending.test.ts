@@ -1,0 +1,70 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { thinElementSums } from '../../../engine/aberration/thinElement.ts';
+import {
+  bendingOf,
+  leastSphericalShape,
+  positionFactor,
+  shapeFactorOf,
+  zeroComaShape,
+} from '../../../engine/solve/bending.ts';
+import { between } from '../anyTrain.ts';
+import { given } from '../quantity.ts';
+
+const lens = { powerPerMm: 0.01, mediumIndex: 1 };
+
+/** Sums of a bent lens of f = 100 with a ray 10 high that comes from slope `u`, the stop at it. */
+const sumsAt = (glassIndex: number, shapeFactor: number, u: number) => {
+  const sums = thinElementSums(
+    { ...lens, glassIndex, shapeFactor },
+    { y: 10, nu: u, yChief: 0, nuChief: 0.1 },
+  );
+  if (!sums) throw new Error('glass bends light');
+  return sums;
+};
+
+describe('the best bendings of a thin lens', () => {
+  // Jenkins and White, Fundamentals of Optics, 4th ed., ch. 9: n = 1.50, object at infinity: 0.714 and 0.800.
+  it('for a far object and n = 1.5 are 5/7 and 4/5', () => {
+    const far = given(positionFactor(0, -0.1));
+    expect(far).toBe(-1);
+    expect(leastSphericalShape(1.5, far)).toBeCloseTo(5 / 7, 15);
+    expect(zeroComaShape(1.5, far)).toBeCloseTo(4 / 5, 15);
+  });
+
+  it('have the least spherical aberration, and no coma, of all bendings', () => {
+    fc.assert(
+      fc.property(between(1.3, 4), between(-0.3, 0.3), between(-2, 2), (index, u, off) => {
+        const position = given(positionFactor(u, u - 10 * lens.powerPerMm));
+        const best = leastSphericalShape(index, position);
+        const least = sumsAt(index, best, u).spherical;
+        const other = sumsAt(index, best + off, u).spherical;
+        expect(other - least).toBeGreaterThanOrEqual(-1e-13 * (Math.abs(other) + Math.abs(least)));
+        const { coma, astigmatism } = sumsAt(index, zeroComaShape(index, position), u);
+        expect(Math.abs(coma)).toBeLessThanOrEqual(1e-12 * (1 + Math.abs(astigmatism)));
+      }),
+    );
+  });
+
+  it('take conjugates through infinity, and say when the lens does nothing', () => {
+    expect(positionFactor(0.1, 0)).toEqual({ ok: true, value: 1 });
+    expect(positionFactor(0.1, -0.1)).toEqual({ ok: true, value: 0 });
+    expect(positionFactor(0.1, 0.1)).toEqual({ ok: false, why: 'no power' });
+    expect(positionFactor(1.7e308, 1.6e308).ok).toBe(false);
+  });
+});
+
+describe('a bending as a ratio of curvatures', () => {
+  it('gives its shape factor back', () => {
+    fc.assert(
+      fc.property(between(-20, 20), (q) => {
+        expect(shapeFactorOf(bendingOf(q))).toBeCloseTo(q, 12);
+      }),
+    );
+  });
+
+  it('has no shape factor for equal radii', () => {
+    expect(shapeFactorOf({ front: 1, rear: 1 })).toBeNull();
+    expect(bendingOf(0)).toEqual({ front: 1, rear: -1 });
+  });
+});
