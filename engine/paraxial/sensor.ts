@@ -1,5 +1,6 @@
 import { none, some } from '../outcome.ts';
 import type { Part, Sensor } from '../sketch/types.ts';
+import { roomBeside } from '../train/body.ts';
 import type { Train } from '../train/types.ts';
 import { derive, derive2, type Quantity } from './absence.ts';
 import type { Conjugates } from './conjugates.ts';
@@ -81,8 +82,8 @@ export function sensorView(
   const airy = derive(lightOf.workingFNumber, (fNumber) => airyDiameter(wavelengthNm, fNumber));
   const firstPart = parts[0];
   const lastPart = parts.at(-1);
-  const roomFront = firstPart?.kind === 'thin' ? firstPart.roomFrontMm : 0;
-  const roomBehind = lastPart?.kind === 'thin' ? lastPart.roomBehindMm : 0;
+  const roomFront = firstPart ? roomBeside(firstPart, 'front') : 0;
+  const roomBehind = lastPart ? roomBeside(lastPart, 'behind') : 0;
   return {
     halfDiagonalMm: half,
     objectWidthMm: atObject(width),

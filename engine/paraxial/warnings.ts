@@ -1,33 +1,14 @@
-import type { Part, PartId, PositionId, Setting, Sketch } from '../sketch/types.ts';
+import { givenSemiDiameter } from '../sketch/part.ts';
+import type { Part, PartId, Setting, Sketch } from '../sketch/types.ts';
 import { settingAt, valueAt } from '../sketch/values.ts';
 import { capitalised, partName } from '../sketch/words.ts';
-import { type LengthUnit, lengthText } from '../units.ts';
+import { roomBeside } from '../train/body.ts';
 import { sentenceOf } from './absence.ts';
 import { type Analysis, analyse } from './analyse.ts';
+import { bodyWarnings, neededOn, neighbourWarning } from './glassWarnings.ts';
+import { type Found, saying, TOUCHING_MM, type Warning, type WarningKind } from './warning.ts';
 
-export type WarningKind =
-  | 'negative gap'
-  | 'rooms overlap'
-  | 'object inside'
-  | 'image inside'
-  | 'behind the mount'
-  | 'axial bundle cut'
-  | 'field edge dark'
-  | 'sensor not covered'
-  | 'out of focus'
-  | 'no marginal ray'
-  | 'no chief ray';
-
-/** Something about the layout that a person should know. */
-export interface Warning {
-  readonly kind: WarningKind;
-  readonly severity: 'cannot be built' | 'look at this';
-  /** The part to select; null when it is about an end or the whole. */
-  readonly partId: PartId | null;
-  readonly positionId: PositionId;
-  /** Plain, with its lengths in `unit`. */
-  readonly sentence: (unit: LengthUnit) => string;
-}
+export type { Warning, WarningKind } from './warning.ts';
 
 /** What is wrong at `setting`, what cannot be built first. Pass the analysis when it is at hand. */
 export function warningsOf(
@@ -46,26 +27,11 @@ export const unbuildable = (sketch: Sketch): readonly Warning[] =>
     warningsOf(sketch, settingAt(id)).filter(({ severity }) => severity === 'cannot be built'),
   );
 
-type Found = Omit<Warning, 'positionId'>;
-
-type Sentence = Warning['sentence'];
-
-/** A sentence that waits for its unit: the numbers in it are lengths in mm. */
-const saying =
-  (texts: TemplateStringsArray, ...values: readonly (string | number)[]): Sentence =>
-  (unit) =>
-    String.raw(
-      { raw: texts },
-      ...values.map((value) => (typeof value === 'number' ? lengthText(value, unit) : value)),
-    );
-
-/** Rounding of gaps that were solved to touch must not count as an overlap (mm). */
-const TOUCHING_MM = 1e-9;
-
-function mechanics(sketch: Sketch, setting: Setting, { conjugates, sensor }: Analysis): readonly Found[] {
+function mechanics(sketch: Sketch, setting: Setting, analysis: Analysis): readonly Found[] {
+  const { conjugates, sensor } = analysis;
   const nameOf = namesIn(sketch);
   const found: Found[] = [];
-  const cannot = (kind: WarningKind, partId: PartId | null, sentence: Sentence) =>
+  const cannot = (kind: WarningKind, partId: PartId | null, sentence: Warning['sentence']) =>
     found.push({ kind, severity: 'cannot be built', partId, sentence });
   const { parts } = sketch;
   const first = parts[0];
@@ -77,10 +43,12 @@ function mechanics(sketch: Sketch, setting: Setting, { conjugates, sensor }: Ana
     );
   }
   for (const [i, part] of parts.entries()) {
+    found.push(...bodyWarnings(part, i, analysis, nameOf));
     const next = parts[i + 1];
     if (!next) break;
     const gapMm = valueAt(part.space.lengthMm, sketch.positions, setting);
-    const clearMm = gapMm - roomBehind(part) - roomFront(next);
+    const hasBody = [part, next].some(({ kind }) => kind === 'glass' || kind === 'plate');
+    const clearMm = hasBody ? gapMm : gapMm - roomBeside(part, 'behind') - roomBeside(next, 'front');
     if (gapMm < -TOUCHING_MM) {
       cannot(
         'negative gap',
@@ -93,11 +61,15 @@ function mechanics(sketch: Sketch, setting: Setting, { conjugates, sensor }: Ana
         part.id,
         saying`${capitalised(nameOf(part))} and ${nameOf(next)} overlap by ${-clearMm}: the gap of ${gapMm} is smaller than their rooms.`,
       );
+    } else {
+      const warning = hasBody ? neighbourWarning(sketch, i, gapMm, analysis, nameOf) : null;
+      if (warning) found.push(warning);
     }
   }
   const last = parts.at(-1);
-  if (last && conjugates.imagePlaneMm.ok && conjugates.imagePlaneMm.value - roomBehind(last) < -TOUCHING_MM) {
-    const inside = roomBehind(last) - conjugates.imagePlaneMm.value;
+  const roomMm = last ? roomBeside(last, 'behind', neededOn(analysis, parts.length - 1)) : 0;
+  if (last && conjugates.imagePlaneMm.ok && conjugates.imagePlaneMm.value - roomMm < -TOUCHING_MM) {
+    const inside = roomMm - conjugates.imagePlaneMm.value;
     const what = sketch.image === 'fixed' ? 'The sensor' : 'The image';
     found.push({
       kind: 'image inside',
@@ -113,7 +85,7 @@ function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
   const nameOf = namesIn(sketch);
   const { rays, light, sensor, conjugates, vignetting, depth } = analysis;
   const found: Found[] = [];
-  const look = (kind: WarningKind, partId: PartId | null, sentence: Sentence) =>
+  const look = (kind: WarningKind, partId: PartId | null, sentence: Warning['sentence']) =>
     found.push({ kind, severity: 'look at this', partId, sentence });
   if (!rays.marginal.ok) look('no marginal ray', null, saying`No aperture: ${sentenceOf(rays.marginal.why)}`);
   if (!rays.chief.ok) look('no chief ray', null, saying`No field: ${sentenceOf(rays.chief.why)}`);
@@ -123,7 +95,7 @@ function optics(sketch: Sketch, analysis: Analysis): readonly Found[] {
     look(
       'axial bundle cut',
       drawn.id,
-      saying`The rim of ${nameOf(drawn)} cuts the axial bundle: it is ${2 * (drawn.semiDiameterMm ?? 0)} wide, the aperture asks for ${2 * y}.`,
+      saying`The rim of ${nameOf(drawn)} cuts the axial bundle: it is ${2 * (givenSemiDiameter(drawn) ?? 0)} wide, the aperture asks for ${2 * y}.`,
     );
   }
   const edge = vignetting.ok ? vignetting.value.find(({ fraction }) => Math.abs(fraction) === 1) : undefined;
@@ -180,5 +152,3 @@ const namesIn =
   ({ parts }: Sketch) =>
   (part: Part): string =>
     partName(part, parts.indexOf(part));
-const roomFront = (part: Part): number => (part.kind === 'thin' ? part.roomFrontMm : 0);
-const roomBehind = (part: Part): number => (part.kind === 'thin' ? part.roomBehindMm : 0);
