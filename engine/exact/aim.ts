@@ -5,7 +5,7 @@ import { CODE, LOSSES, MISSED, STRIDE, X, Y } from './rayBuffer.ts';
 import { reaches, type Sight, shoot } from './sight.ts';
 
 /** What the aiming of one bundle starts from: its chief ray, and how much the launch numbers change per radius of the stop there. */
-export interface Bundle {
+export interface AimedBundle {
   readonly source: Source;
   readonly chief: Chief;
   readonly perRadiusX: number;
@@ -19,7 +19,7 @@ const NEWTON_STEPS = 25;
 const NUDGE = 1e-6;
 
 /** The bundle about a chief ray; `perRadius` is the paraxial change of the launch number, used where the ray has no neighbours. */
-export function bundleAbout(sight: Sight, source: Source, chief: Chief, perRadius: number): Bundle {
+export function bundleAbout(sight: Sight, source: Source, chief: Chief, perRadius: number): AimedBundle {
   const nudge = NUDGE * perRadius;
   const slope = (there: boolean, value: number): number => {
     const found = nudge / value;
@@ -39,7 +39,7 @@ export function bundleAbout(sight: Sight, source: Source, chief: Chief, perRadiu
  */
 export function aimAll(
   sight: Sight,
-  bundle: Bundle,
+  bundle: AimedBundle,
   pupil: ArrayLike<number>,
   count: number,
   rays: Float64Array,
@@ -158,7 +158,7 @@ function improve(search: Search, there: boolean, x: number, y: number): void {
  * The same search by small steps from the chief ray outwards, each by Newton's method with derivatives from neighbours. Returns 0 with
  * the ray in `search`, or the code of what is in the way, and there the last ray that was lost to it.
  */
-function walk(sight: Sight, bundle: Bundle, search: Search): number {
+function walk(sight: Sight, bundle: AimedBundle, search: Search): number {
   const { chief, perRadiusX, perRadiusY } = bundle;
   const { px, py } = search;
   const at: Step = { a: 0, b: chief.b, lostA: Number.NaN, lostB: Number.NaN, code: 0 };
@@ -197,7 +197,7 @@ interface Step {
 }
 
 /** Newton's method from the launch numbers in `at` to the point (px, py), halving steps that lose the ray; true when it gets there. */
-function step(sight: Sight, bundle: Bundle, px: number, py: number, at: Step): boolean {
+function step(sight: Sight, bundle: AimedBundle, px: number, py: number, at: Step): boolean {
   const { source, perRadiusX, perRadiusY } = bundle;
   const [nudgeA, nudgeB] = [NUDGE * perRadiusX, NUDGE * perRadiusY];
   let [a, b] = [at.a, at.b];

@@ -1,5 +1,5 @@
 import { none, type Outcome, some } from '../outcome.ts';
-import { aimAll, type Bundle, bundleAbout } from './aim.ts';
+import { type AimedBundle, aimAll, bundleAbout } from './aim.ts';
 import { aimChief, paraxialLaunch } from './chief.ts';
 import { launch, sourceOf } from './launch.ts';
 import { CODE, L, lostOf, M, N, PATH, STRIDE, X, Y, Z } from './rayBuffer.ts';
@@ -20,7 +20,7 @@ export interface PupilMap {
   readonly lost: Lost | null;
   /** Null when not all of the eight get to the stop: then every ray has to be aimed. */
   readonly shape: Shape | null;
-  readonly bundle: Bundle;
+  readonly bundle: AimedBundle;
   readonly sight: Sight;
 }
 
@@ -109,7 +109,7 @@ const secondAt = ({ b, across }: Shape, x: number, y: number): number =>
   x * x * (across[0] + across[1] * x * x + y * (across[2] + across[3] * y));
 
 /** The polynomials through the nine aimed rays, each term from the rays that single it out; null when one of them does not get there. */
-function shapeOf(sight: Sight, bundle: Bundle): Shape | null {
+function shapeOf(sight: Sight, bundle: AimedBundle): Shape | null {
   const rays = new Float64Array(AIMED_COUNT * STRIDE);
   aimAll(sight, bundle, AIMED_POINTS, AIMED_COUNT, rays);
   const numbers = Array.from({ length: AIMED_COUNT }, (_, i): readonly [number, number] => {
