@@ -1,4 +1,4 @@
-import type { Analysis, LengthUnit, RayOutcome, Sketch } from '../../engine/index.ts';
+import type { Analysis, LengthUnit, RayOutcome, Sketch, Train } from '../../engine/index.ts';
 import { heightInSpace, mmPer, powerAt } from '../../engine/index.ts';
 import { nameAt } from '../drawing/words.ts';
 import { formatLength, formatNumber } from '../ui/format.ts';
@@ -29,6 +29,9 @@ export function worksheetOf(sketch: Sketch, analysis: Analysis): Worksheet {
   return {
     columns: ['object', ...surfaces.map((surface) => surfaceName(sketch, analysis, surface)), 'image'],
     rows: [
+      ...(isCurved(train)
+        ? [row('radius', 'length', 4, [null, ...surfaces.map((k) => radiusOf(train, k)), null])]
+        : []),
       row('power', 'perLength', 6, [null, ...surfaces.map((surface) => powerAt(train, surface)), null]),
       row('gap behind', 'length', 4, [
         object === null ? null : -object,
@@ -41,8 +44,28 @@ export function worksheetOf(sketch: Sketch, analysis: Analysis): Worksheet {
       row('nu behind', 'number', 6, slopes(rays.marginal, train.count)),
       row('ȳ', 'length', 4, heights(analysis, rays.chief, plane)),
       row('nū behind', 'number', 6, slopes(rays.chief, train.count)),
+      ...(isCurved(train)
+        ? [
+            row('i', 'number', 6, [null, ...surfaces.map((k) => incidence(train, rays.marginal, k)), null]),
+            row('ī', 'number', 6, [null, ...surfaces.map((k) => incidence(train, rays.chief, k)), null]),
+          ]
+        : []),
     ],
   };
+}
+
+const isCurved = ({ curvature }: Train): boolean => curvature.some((c) => c !== 0);
+
+/** Null at flat surfaces and thin parts. */
+const radiusOf = ({ curvature }: Train, k: number): number | null => {
+  const c = curvature[k] ?? 0;
+  return c === 0 ? null : 1 / c;
+};
+
+/** Paraxial angle of incidence u + c y in rad; null at a thin part, which has no normal. */
+function incidence({ thinPower, curvature, index }: Train, ray: RayOutcome, k: number): number | null {
+  if (!ray.ok || thinPower[k] !== 0) return null;
+  return (ray.value.nu[k] ?? 0) / (index[k] ?? 1) + (curvature[k] ?? 0) * (ray.value.y[k] ?? 0);
 }
 
 function row(
@@ -67,12 +90,15 @@ function heights({ train }: Analysis, ray: RayOutcome, planeMm: number | null): 
 const slopes = (ray: RayOutcome, count: number): (number | null)[] =>
   ray.ok ? [...ray.value.nu, null] : Array.from({ length: count + 2 }, () => null);
 
-/** A part with two surfaces names them front and rear. */
+/** A part with two surfaces names them front and rear, one with more counts them. */
 function surfaceName(sketch: Sketch, { train }: Analysis, surface: number): string {
   const part = train.partOf[surface] ?? -1;
   const name = nameAt(sketch, part);
-  if (train.partOf[surface + 1] === part) return `${name}, front`;
-  return train.partOf[surface - 1] === part ? `${name}, rear` : name;
+  const first = train.partOf.indexOf(part);
+  const last = train.partOf.lastIndexOf(part);
+  if (first === last) return name;
+  if (last - first > 1) return `${name}, surface ${surface - first + 1}`;
+  return surface === first ? `${name}, front` : `${name}, rear`;
 }
 
 /** One cell as it is shown, in `unit`; empty where there is none. */

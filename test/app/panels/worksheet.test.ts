@@ -2,7 +2,8 @@ import { test } from '@fast-check/vitest';
 import { describe, expect, it } from 'vitest';
 import { cellText, rowUnit, worksheetOf, worksheetTsv } from '../../../app/panels/worksheet.ts';
 import type { Sketch } from '../../../engine/index.ts';
-import { analyse, settingAt } from '../../../engine/index.ts';
+import { analyse, newGlass, settingAt } from '../../../engine/index.ts';
+import { newSurface } from '../../../engine/sketch/create.ts';
 import { inspectionZoom, MIDDLE } from '../../engine/demo.ts';
 import { anySketch } from '../../engine/sketch/arbitrary.ts';
 import { empty } from './sketches.ts';
@@ -45,6 +46,23 @@ describe('the trace sheet', () => {
       ).toBeCloseTo(y?.[k] ?? Number.NaN, 10);
       expect((nu?.[before] ?? 0) - (power?.[k] ?? 0) * (y?.[k] ?? 0)).toBeCloseTo(nu?.[k] ?? Number.NaN, 12);
     }
+  });
+
+  it('has radius and incidence where surfaces are curved, and counts the surfaces of cemented glass', () => {
+    const singlet = { ...empty(), parts: [newGlass(50, 4)] };
+    expect(sheetOf(singlet).columns).toEqual(['object', 'glass 1, front', 'glass 1, rear', 'image']);
+    expect(rowOf(singlet, 'radius').cells).toEqual([null, 50, -50, null]);
+    const [, incidence] = rowOf({ ...singlet, stop: singlet.parts[0]?.id ?? null }, 'i').cells;
+    const [, y] = rowOf({ ...singlet, stop: singlet.parts[0]?.id ?? null }, 'y').cells;
+    // A ray parallel to the axis meets the first surface at y/R.
+    expect(incidence).toBeCloseTo((y ?? Number.NaN) / 50, 15);
+    const cemented = {
+      ...newGlass(50, 4),
+      surfaces: [newSurface(50), newSurface(-50), newSurface(null)],
+      fillings: [1, 2].map((thicknessMm) => ({ thicknessMm, material: { material: 'f2' } })),
+    };
+    expect(sheetOf({ ...empty(), parts: [cemented] }).columns[2]).toBe('glass 1, surface 2');
+    expect(sheetOf(inspectionZoom(), MIDDLE).rows.map(({ label }) => label)).not.toContain('radius');
   });
 
   it('leaves the heights of an empty sketch open', () => {
