@@ -8,7 +8,7 @@ export { type Fault, none, type Outcome, some } from './outcome.ts';
 export { type Quantity, sentenceOf } from './paraxial/absence.ts';
 export { type Analysis, analyse } from './paraxial/analyse.ts';
 export { clearDiameters } from './paraxial/clear.ts';
-export { firstOrder } from './paraxial/firstOrder.ts';
+export { type FirstOrder, firstOrder } from './paraxial/firstOrder.ts';
 export { conjugateChain, type LedgerRow } from './paraxial/ledger.ts';
 export { isZeroPower, systemMatrix } from './paraxial/matrix.ts';
 export { pupils } from './paraxial/pupils.ts';
@@ -114,7 +114,9 @@ export type {
 } from './sketch/types.ts';
 export { isCommon, objectDistanceAt, settingAt, valueAt } from './sketch/values.ts';
 export { partName } from './sketch/words.ts';
+export { type Body, bodyOf, edgeThicknesses, type Face, faceAt } from './train/body.ts';
 export { placesOf } from './train/places.ts';
+export { partTrain } from './train/slice.ts';
 export { trainOf } from './train/train.ts';
 export type { Train } from './train/types.ts';
 export { digitsIn, type LengthUnit, MM_PER_INCH, mmPer } from './units.ts';

@@ -19,6 +19,7 @@ export type MarkStyle =
   | 'part selected'
   | 'part quiet'
   | 'glass'
+  | 'glass seam'
   | 'room'
   | 'stop'
   | 'stop hover'
@@ -186,6 +187,7 @@ const MARKS: Readonly<Record<Exclude<MarkStyle, RayStyle>, MarkLook>> = {
   'part selected': crisp('chosen', 2.4),
   'part quiet': crisp('quiet', 1.2),
   glass: outlined('glass edge', 'glass', 1.2),
+  'glass seam': line('glass edge', 1.6),
   room: crisp('quiet', 'hairline', DOTTED),
   stop: crisp('ink', 2.2),
   'stop hover': crisp('ink', 2.7),

@@ -1,21 +1,13 @@
-import type { Analysis, ParaxialRay, Part, PartId, Sketch, Train } from '../../engine/index.ts';
+import type { Analysis, ParaxialRay, PartId, Sketch, Train, Warning } from '../../engine/index.ts';
 import { halfDiagonal, heightInSpace } from '../../engine/index.ts';
 import type { View } from '../store/viewStore.ts';
+import { faultsIn, partsOf, type SceneFault, type ScenePart } from './sceneParts.ts';
 import { type Stage, stageOf } from './stage.ts';
 
 /** A ray as it is drawn: z and y in mm, alternating, from the stage's start to its end. */
 export type RayLine = Float64Array;
 
-export interface ScenePart {
-  readonly part: Part;
-  readonly index: number;
-  readonly frontMm: number;
-  readonly rearMm: number;
-  /** Half the height it is drawn at. */
-  readonly semiMm: number;
-  readonly carriesStop: boolean;
-  readonly selected: boolean;
-}
+export type { ScenePart } from './sceneParts.ts';
 
 /** Off-axis rays of one field; `share` is its fraction of the largest field. */
 export interface SceneBundle {
@@ -53,6 +45,8 @@ export interface ScenePlane {
 export interface Scene {
   readonly stage: Stage;
   readonly parts: readonly ScenePart[];
+  /** What cannot be made as it is drawn. */
+  readonly faults: readonly SceneFault[];
   readonly stop: { readonly zMm: number; readonly semiMm: number } | null;
   readonly marginal: readonly RayLine[];
   readonly chief: RayLine | null;
@@ -71,13 +65,13 @@ export interface Scene {
   readonly tallestMm: number;
 }
 
-/** Height of an open part where no ray tells how tall it has to be, as a share of the stage's length. */
-const BARE_SHARE = 0.12;
-/** Open parts are drawn a little taller than the rays need. */
-const OPEN_MARGIN = 1.15;
-
-/** The scene of a sketch at the view's setting. */
-export function sceneOf(sketch: Sketch, analysis: Analysis, view: View): Scene {
+/** The scene of a sketch at the view's setting, with what of `warnings` is drawn at the parts. */
+export function sceneOf(
+  sketch: Sketch,
+  analysis: Analysis,
+  view: View,
+  warnings: readonly Warning[] = [],
+): Scene {
   const stage = stageOf(sketch, analysis);
   const { train } = analysis;
   const marginal = analysis.rays.marginal.ok ? analysis.rays.marginal.value : null;
@@ -95,6 +89,7 @@ export function sceneOf(sketch: Sketch, analysis: Analysis, view: View): Scene {
   return {
     stage,
     parts,
+    faults: faultsIn(parts, warnings),
     stop,
     marginal: marginal ? [line(0, 1), line(0, -1)] : [],
     chief: chief ? line(1, 0) : null,
@@ -126,38 +121,6 @@ export function tallestAt({ bundles, axial, tallestMm }: Scene, zMm: number): nu
 export function heightOnFirstStretch(line: RayLine, zMm: number): number {
   const [z0 = 0, y0 = 0, z1 = 0, y1 = 0] = line;
   return z1 === z0 ? y0 : y0 + ((y1 - y0) * (zMm - z0)) / (z1 - z0);
-}
-
-function partsOf(
-  sketch: Sketch,
-  { places, train }: Analysis,
-  view: View,
-  stage: Stage,
-  marginal: ParaxialRay | null,
-  chief: ParaxialRay | null,
-): ScenePart[] {
-  const selection = new Set<string>(view.selection);
-  const needed = new Float64Array(sketch.parts.length);
-  for (let k = 0; k < train.count; k++) {
-    const reach = Math.abs(marginal?.y[k] ?? 0) + Math.abs(chief?.y[k] ?? 0);
-    const index = train.partOf[k] ?? 0;
-    needed[index] = Math.max(needed[index] ?? 0, reach);
-  }
-  const bareMm = BARE_SHARE * (stage.parts.toMm - stage.parts.fromMm);
-  const leastMm = 0.25 * Math.max(...needed);
-  return sketch.parts.map((part, index) => {
-    const place = places.parts[index];
-    const open = Math.max((needed[index] ?? 0) * OPEN_MARGIN, leastMm) || bareMm;
-    return {
-      part,
-      index,
-      frontMm: place?.frontMm ?? 0,
-      rearMm: place?.rearMm ?? 0,
-      semiMm: part.semiDiameterMm ?? open,
-      carriesStop: sketch.stop === part.id,
-      selected: selection.has(part.id),
-    };
-  });
 }
 
 function stopOf({ pupils, train }: Analysis, marginal: ParaxialRay | null): Scene['stop'] {

@@ -1,6 +1,7 @@
 import type { Analysis, Outcome, Sketch } from '../../engine/index.ts';
 import { foldOf } from '../board/fit.ts';
 import type { Fold, LengthRange } from '../board/viewport.ts';
+import { ownFocalLength } from './own.ts';
 
 /** Where the drawing's lengths run, in mm from the first part's front vertex. */
 export interface Stage {
@@ -46,8 +47,9 @@ export function stageOf(sketch: Sketch, analysis: Analysis): Stage {
   const imageMm = places.sensorMm ?? behindLast(conjugates.imagePlaneMm, rears.at(-1) ?? 0);
   const objectMm = places.objectMm;
   const lengthMm = lastMm - firstMm;
-  const aloneMm = sketch.parts.length === 1 ? shortestFocalMm(sketch) : 0;
-  const farMm = FAR * Math.max(lengthMm, LEAST_LEAD_MM, shortestFocalMm(sketch));
+  const shortestMm = shortestFocalMm(sketch, analysis);
+  const aloneMm = sketch.parts.length === 1 ? shortestMm : 0;
+  const farMm = FAR * Math.max(lengthMm, LEAST_LEAD_MM, shortestMm);
   const imageNear =
     imageMm !== null && (places.sensorMm !== null || (imageMm > lastMm - farMm && imageMm < lastMm + farMm));
   const toMm = imageNear ? Math.max(lastMm, imageMm) : lastMm;
@@ -72,9 +74,11 @@ export function stageFold(stage: Stage): Fold | null {
   return foldOf({ fromMm: stage.objectMm, toMm: stage.parts.fromMm }, stage.parts.toMm - stage.parts.fromMm);
 }
 
-/** The least focal length of the thin parts in size, which a single element is as long as; 0 without any. */
-function shortestFocalMm({ parts }: Sketch): number {
-  const sizes = parts.map((part) => (part.kind === 'thin' ? Math.abs(part.focalLengthMm) : Infinity));
+/** The least focal length of the parts in size, which a single element is as long as; 0 without any. */
+function shortestFocalMm({ parts }: Sketch, analysis: Analysis): number {
+  const sizes = parts.map((part, index) =>
+    Math.abs(ownFocalLength(part, index, analysis) ?? Number.POSITIVE_INFINITY),
+  );
   const least = Math.min(...sizes);
   return Number.isFinite(least) ? least : 0;
 }

@@ -25,7 +25,8 @@ export interface Picture {
 }
 
 /** The scene of a reading. */
-export const sceneOfReading = ({ sketch, analysis, view }: Reading): Scene => sceneOf(sketch, analysis, view);
+export const sceneOfReading = ({ sketch, analysis, view, warnings }: Reading): Scene =>
+  sceneOf(sketch, analysis, view, warnings);
 
 /** The picture of a reading in a view; `scene` may be passed when it is at hand. */
 export function pictureOf(

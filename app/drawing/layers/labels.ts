@@ -50,6 +50,7 @@ export function labelsOf(
 ): readonly Label[] {
   return [
     ...scene.parts.map((part) => partLabel(scene, part, view, unit)),
+    ...faultLabels(scene, view),
     ...endLabels(scene, view, unit),
     ...imageLabels(scene, view),
     ...planeLabels(scene, view),
@@ -71,6 +72,21 @@ function partLabel(scene: Scene, part: ScenePart, view: Viewport, unit: LengthUn
     distancePx: 10,
     leader: 'when far',
   };
+}
+
+/** What cannot be made is said under the part. */
+function faultLabels({ faults }: Scene, view: Viewport): readonly Draft[] {
+  return faults.map(({ part, zMm, words }) => ({
+    id: `fault:${part.part.id}`,
+    text: words,
+    style: 'label bad',
+    xPx: xOf(view, zMm),
+    yPx: Math.min(view.heightPx - HIGHEST_PX, yOf(view, -part.semiMm)),
+    sides: ['below', 'below right', 'below left'],
+    priority: 10,
+    distancePx: 10,
+    leader: 'when far',
+  }));
 }
 
 function endLabels(scene: Scene, view: Viewport, unit: LengthUnit): readonly Draft[] {
@@ -324,10 +340,11 @@ function uprights({ parts, stage, sensorSemiMm, objectHeightMm }: Scene, view: V
   return lines;
 }
 
-function partText({ part, index, carriesStop }: ScenePart, unit: LengthUnit): string {
+function partText({ part, index, carriesStop, focalLengthMm }: ScenePart, unit: LengthUnit): string {
   const stop = carriesStop ? ', stop' : '';
-  if (part.kind === 'thin') {
-    const f = plainLength(part.focalLengthMm, unit).replace(` ${unit}`, '');
+  const isLens = part.kind === 'thin' || part.kind === 'glass';
+  if (isLens && focalLengthMm !== null) {
+    const f = plainLength(focalLengthMm, unit).replace(` ${unit}`, '');
     return `f ${f}${stop}`;
   }
   if (part.kind === 'stop') return carriesStop ? part.name || 'stop' : partName(part, index);

@@ -4,20 +4,24 @@ import type { MarkStyle } from '../../board/styles.ts';
 import type { Viewport } from '../../board/viewport.ts';
 import { xOf, yOf } from '../../board/viewport.ts';
 import type { Scene, ScenePart } from '../scene.ts';
+import { drawGlass, drawGlassOutline, faultsLayer } from './glass.ts';
 
 const ARROW_PX = 6.5;
 const STOP_BAR_PX = 7;
 const STOP_WING_PX = 16;
 
-/** The glass of plates; it lies under the rays. */
+/** Glass and plates; they lie under the rays. */
 export function glassLayer(pen: Pen, scene: Scene, view: Viewport): void {
-  for (const part of scene.parts)
+  for (const part of scene.parts) {
     if (part.part.kind === 'plate') pen.closed(plateOutline(part, view), 'glass');
+    if (part.body) drawGlass(pen, part, view);
+  }
 }
 
 /** Every part in its textbook form, and the aperture stop's edges. `hovered` is the id of the part under the pointer. */
 export function partsLayer(pen: Pen, scene: Scene, view: Viewport, hovered: string | null): void {
   for (const part of scene.parts) drawPart(pen, part, view, part.part.id === hovered);
+  faultsLayer(pen, scene, view);
   if (scene.stop) drawStop(pen, scene.stop, view);
 }
 
@@ -26,6 +30,7 @@ function drawPart(pen: Pen, drawn: ScenePart, view: Viewport, hovered: boolean):
   const { part } = drawn;
   if (part.kind === 'thin') drawThin(pen, drawn, part.focalLengthMm > 0, view, style);
   else if (part.kind === 'plate') drawPlate(pen, drawn, view, style);
+  else if (part.kind === 'glass') drawGlassOutline(pen, drawn, view, style);
   else if (!drawn.carriesStop) drawDiaphragm(pen, drawn, view, hovered || drawn.selected);
 }
 
