@@ -2,6 +2,7 @@ import { none, type Outcome, some } from '../outcome.ts';
 import { AIR_RANGE_NM, airIndex } from './air.ts';
 import { CODE_RANGE_NM, codeIndex, parseCode } from './code.ts';
 import { type DispersionFormula, indexFrom } from './dispersion.ts';
+import { lineNm } from './lines.ts';
 import { materialOf } from './materials.ts';
 
 /** `'air'` is the surrounding air, see `Air`. */
@@ -148,4 +149,52 @@ export function mediumName(medium: Medium): string {
   const name = medium.name.trim();
   if (name !== '') return name;
   return 'index' in medium ? `index ${medium.index}` : 'a material of your own';
+}
+
+/** Index in the d line and Abbe number (nd − 1)/(nF − nC), relative to air; null where the medium does not tell. */
+export interface Nominal {
+  readonly nd: number | null;
+  readonly vd: number | null;
+}
+
+/** Where the medium stands on a map of index against Abbe number. A fixed index stands by what is given, in whatever lines that is. */
+export function nominal(medium: Medium): Nominal {
+  if (medium === 'air') return { nd: 1, vd: null };
+  if ('index' in medium) return { nd: medium.index, vd: medium.abbeNumber };
+  if ('code' in medium) return parseCode(medium.code) ?? { nd: null, vd: null };
+  const [nd, nF, nC] = [indexIn(medium, 'd'), indexIn(medium, 'F'), indexIn(medium, 'C')];
+  const known = nd !== null && nF !== null && nC !== null && nF !== nC;
+  return { nd, vd: known ? (nd - 1) / (nF - nC) : null };
+}
+
+/** Whether two media are the same, entry by entry; the catalogue's glass and a code for it are not. */
+export function mediaEqual(one: Medium, other: Medium): boolean {
+  if (one === other) return true;
+  if (one === 'air' || other === 'air') return false;
+  if ('material' in one) return 'material' in other && one.material === other.material;
+  if ('code' in one) return 'code' in other && one.code === other.code;
+  if ('index' in one)
+    return (
+      'index' in other &&
+      one.name === other.name &&
+      one.index === other.index &&
+      one.abbeNumber === other.abbeNumber
+    );
+  return (
+    'formula' in other &&
+    one.name === other.name &&
+    one.formula.kind === other.formula.kind &&
+    sameNumbers(one.formula.coefficients, other.formula.coefficients) &&
+    sameNumbers(one.rangeNm, other.rangeNm)
+  );
+}
+
+const sameNumbers = (one: readonly number[], other: readonly number[]): boolean =>
+  one.length === other.length && one.every((number, place) => number === other[place]);
+
+const VISIBLE: MainLines = { mainNm: lineNm('d'), shortNm: lineNm('F'), longNm: lineNm('C') };
+
+function indexIn(medium: CatalogueMedium | OwnMedium, letter: 'd' | 'F' | 'C'): number | null {
+  const index = indexOf(medium, lineNm(letter), VISIBLE, 'unity');
+  return index.ok ? index.value : null;
 }
