@@ -2,6 +2,13 @@
  * The engine's only door: what the app uses, by name. Everything it offers is a pure function over readonly data; units, signs,
  * absence and sources stand in the docstrings of the rooms.
  */
+export { exactSetupOf, leastSpotShift } from './exact/analyse.ts';
+export { type Compared, type Comparison, compare } from './exact/compare.ts';
+export { type DrawnRay, drawnField } from './exact/drift.ts';
+export { lostFieldWarnings, lostWords, refracts } from './exact/lostFields.ts';
+export { type PupilMap, pupilMapOf } from './exact/pupilMap.ts';
+export { type Trust, trust } from './exact/trust.ts';
+export type { ExactSetup, Lost, SetupOutcome } from './exact/types.ts';
 export { materials } from './media/materials.ts';
 export { indexOf, type MainLines, mediumName } from './media/medium.ts';
 export { type Fault, none, type Outcome, some } from './outcome.ts';
@@ -88,6 +95,13 @@ export { dropStop, releaseStop, rideStop, setStop } from './sketch/edits/stop.ts
 export { setNotes, setTitle } from './sketch/edits/text.ts';
 export { writeSketch } from './sketch/file.ts';
 export { type Parsed, parseSketch } from './sketch/parse.ts';
+export type { Role } from './sketch/prescription/columns.ts';
+export {
+  insertPrescription,
+  looksLikePrescription,
+  type Prescription,
+  readPrescription,
+} from './sketch/prescription/prescription.ts';
 export { type Edit, type Note, propose, type Settling, unsettled } from './sketch/propose.ts';
 export { faultsOf } from './sketch/rules.ts';
 export type {

@@ -15,7 +15,8 @@ export type WarningKind =
   | 'sensor not covered'
   | 'out of focus'
   | 'no marginal ray'
-  | 'no chief ray';
+  | 'no chief ray'
+  | 'field lost';
 
 /** Something about the layout that a person should know. */
 export interface Warning {
