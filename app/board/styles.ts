@@ -10,9 +10,16 @@ export type RayName =
 /** Dotted for a backward extension; dashed for a paraxial ray beside its exact one. */
 export type RayStyle = RayName | `${RayName} virtual` | `${RayName} paraxial`;
 
+/** What a curve of a plot stands for, by which it has its colour. */
+export type CurveInk = 'axial' | 'field inner' | 'field middle' | 'field outer' | 'ink' | 'quiet';
+/** The line of its light, or the member of a family, by which it has its dash. */
+export type CurveLine = 'main' | 'short' | 'long' | 'fourth' | 'fifth';
+type CurveStyle = `curve ${CurveInk} ${CurveLine}` | `dots ${CurveInk}`;
+
 /** Looks of lines and outlines, named by what they mean. */
 export type MarkStyle =
   | RayStyle
+  | CurveStyle
   | 'axis'
   | 'part'
   | 'part hover'
@@ -58,6 +65,9 @@ export type MarkStyle =
   | 'grid'
   | 'curve'
   | 'curve quiet'
+  | 'curve reference'
+  | 'Airy disc'
+  | 'glow'
   | 'paper'
   | 'ink';
 
@@ -180,7 +190,7 @@ const RAYS: Readonly<Record<RayName, MarkLook>> = {
   'field outer bundle': line('field outer', 'hairline'),
 };
 
-const MARKS: Readonly<Record<Exclude<MarkStyle, RayStyle>, MarkLook>> = {
+const MARKS: Readonly<Record<Exclude<MarkStyle, RayStyle | CurveStyle>, MarkLook>> = {
   axis: crisp('quiet', 'hairline', CHAIN),
   part: crisp('ink', 1.6),
   'part hover': crisp('ink', 2.1),
@@ -226,6 +236,9 @@ const MARKS: Readonly<Record<Exclude<MarkStyle, RayStyle>, MarkLook>> = {
   grid: crisp('line', 'hairline'),
   curve: line('ink', 1.6),
   'curve quiet': line('quiet', 1),
+  'curve reference': line('line', 2.5),
+  'Airy disc': line('quiet', 1, [4, 3]),
+  glow: line('glass edge', 5),
   paper: outlined(null, 'paper', 0),
   ink: outlined(null, 'ink', 0),
 };
@@ -269,6 +282,23 @@ export function fieldBundle(index: number, count: number): RayName {
   return ramp[Math.min(2, Math.max(0, step))] ?? 'field outer bundle';
 }
 
+const CURVE_INKS: Readonly<Record<CurveInk, ColourToken>> = {
+  axial: 'axial',
+  'field inner': 'field inner',
+  'field middle': 'field middle',
+  'field outer': 'field outer',
+  ink: 'ink',
+  quiet: 'quiet',
+};
+
+const CURVE_DASHES: Readonly<Record<CurveLine, readonly number[]>> = {
+  main: [],
+  short: [7, 3],
+  long: [2, 3],
+  fourth: [9, 3, 2, 3],
+  fifth: [9, 2, 2, 2, 2, 2],
+};
+
 /** Every line style with its look, for a legend or a check of the whole table. */
 export const LOOKS: ReadonlyMap<MarkStyle, MarkLook> = new Map<MarkStyle, MarkLook>([
   ...(Object.entries(MARKS) as [MarkStyle, MarkLook][]),
@@ -277,6 +307,14 @@ export const LOOKS: ReadonlyMap<MarkStyle, MarkLook> = new Map<MarkStyle, MarkLo
     [`${name} virtual`, { ...look, width: 1.2, dash: DOTTED }],
     [`${name} paraxial`, { ...look, dash: DASHED }],
   ]),
+  ...(Object.entries(CURVE_INKS) as [CurveInk, ColourToken][]).flatMap(
+    ([ink, token]): [MarkStyle, MarkLook][] => [
+      [`dots ${ink}`, line(token, 1)],
+      ...(Object.entries(CURVE_DASHES) as [CurveLine, readonly number[]][]).map(
+        ([name, dash]): [MarkStyle, MarkLook] => [`curve ${ink} ${name}`, line(token, 1.4, dash)],
+      ),
+    ],
+  ),
 ]);
 
 function line(stroke: ColourToken, width: number | 'hairline', dash: readonly number[] = []): MarkLook {
