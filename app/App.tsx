@@ -57,7 +57,7 @@ export function App({ groups, commands, services, board, onBoard }: AppProps) {
           speak={(text) => text && announce(`${text}. ${chosenReadout(currentReading())}`)}
         />
         <ViewTools board={board} />
-        <EmptySheet />
+        <EmptySheet commands={commands} />
         <Hints />
         <div className="app-notice">
           <Notice />

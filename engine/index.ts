@@ -2,17 +2,30 @@
  * The engine's only door: what the app uses, by name. Everything it offers is a pure function over readonly data; units, signs,
  * absence and sources stand in the docstrings of the rooms.
  */
+export { type Seidel, seidel, type ThinGlass } from './aberration/seidel.ts';
+export { SUM_NAMES, SUM_WORDS, type SumName } from './aberration/sums.ts';
 export { exactSetupOf, leastSpotShift } from './exact/analyse.ts';
+export { type FieldRays, type Sample, sampleOf, traceFields } from './exact/bundles.ts';
+export { type ChiefSweep, chiefSweep, fieldShares } from './exact/chiefSweep.ts';
 export { type Compared, type Comparison, compare } from './exact/compare.ts';
+export { contrastOf, diffractionLimit } from './exact/contrast.ts';
+export type { Curve } from './exact/curve.ts';
 export { type DrawnRay, drawnField } from './exact/drift.ts';
+export { rayFans, wavefrontFans } from './exact/fans.ts';
+export { distortion, fieldCurves, lateralColour } from './exact/fieldCurves.ts';
+export { hexapolarGrid } from './exact/grids.ts';
+export { illumination } from './exact/illumination.ts';
+export { landingsOf, type Weighted } from './exact/landing.ts';
+export { axialColour, longitudinal } from './exact/longitudinal.ts';
 export { lostFieldWarnings, lostWords, refracts } from './exact/lostFields.ts';
 export { type PupilMap, pupilMapOf } from './exact/pupilMap.ts';
+export { airyRadius, type SpotSize, spotSize } from './exact/spots.ts';
 export { type Trust, trust } from './exact/trust.ts';
 export type { ExactSetup, Lost, SetupOutcome } from './exact/types.ts';
 export { materials } from './media/materials.ts';
 export { indexOf, type MainLines, mediumName } from './media/medium.ts';
 export { type Fault, none, type Outcome, some } from './outcome.ts';
-export { type Quantity, sentenceOf } from './paraxial/absence.ts';
+export { type Absence, type Quantity, sentenceOf } from './paraxial/absence.ts';
 export { type Analysis, analyse } from './paraxial/analyse.ts';
 export { clearDiameters } from './paraxial/clear.ts';
 export { type FirstOrder, firstOrder } from './paraxial/firstOrder.ts';

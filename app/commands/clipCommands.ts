@@ -1,7 +1,9 @@
-import { copyParts, parseClip, pasteParts, writeClip } from '../../engine/index.ts';
+import { copyParts, looksLikePrescription, parseClip, pasteParts, writeClip } from '../../engine/index.ts';
 import { copyText, pasteText } from '../desk/clipboard.ts';
+import { deskStore } from '../desk/deskStore.ts';
 import { faultsLine } from '../desk/faultsText.ts';
 import { complain } from '../desk/notices.ts';
+import { setView } from '../store/viewStore.ts';
 import { command, selectedNow, settingNow, sketchNow } from './now.ts';
 import { addAndSelect, removeSelected } from './partCommands.ts';
 import type { CommandGroup, Services } from './services.ts';
@@ -26,10 +28,11 @@ export function clipCommands({ clipboard }: Services): CommandGroup {
       command('cut', 'Cut the selected parts', ['Ctrl+X'], () => void cut(), hasSelected),
       command(
         'paste',
-        'Paste parts behind the selection',
+        'Paste parts, or a table of surfaces, behind the selection',
         ['Ctrl+V'],
         () => void pasteText(clipboard, putIn),
       ),
+      command('pastePrescription', 'Paste a prescription…', [], () => openPrescription('')),
     ],
   };
 }
@@ -37,9 +40,16 @@ export function clipCommands({ clipboard }: Services): CommandGroup {
 function putIn(text: string): void {
   const parsed = parseClip(text);
   if (!parsed.ok) {
-    complain(faultsLine(parsed.faults));
+    if (looksLikePrescription(text)) openPrescription(text);
+    else complain(faultsLine(parsed.faults));
     return;
   }
   const behind = selectedNow().at(-1) ?? sketchNow().parts.at(-1)?.id ?? null;
   addAndSelect((sketch) => pasteParts(sketch, parsed.clip, behind));
+}
+
+/** A table of surfaces is shown as it is read before it becomes parts. */
+function openPrescription(text: string): void {
+  deskStore.setState({ pasted: text });
+  setView({ sheet: 'prescription' });
 }

@@ -18,6 +18,8 @@ export interface DeskState {
   /** Null until it was first looked at. */
   readonly shelf: Kept<readonly ShelfEntry[]> | null;
   readonly refused: RefusedSketch | null;
+  /** What the sheet for pasted tables opens with. */
+  readonly pasted: string;
 }
 
 export const deskStore = createStore<DeskState>(() => ({
@@ -25,6 +27,7 @@ export const deskStore = createStore<DeskState>(() => ({
   shelfName: null,
   shelf: null,
   refused: null,
+  pasted: '',
 }));
 
 /** Takes the list of faults off the screen. */

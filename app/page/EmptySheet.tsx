@@ -1,8 +1,14 @@
 import { useReading } from '../live/reading.ts';
+import { CommandButton } from '../panels/CommandButton.tsx';
+import type { Commands } from '../panels/useCommand.ts';
 import { setView } from '../store/viewStore.ts';
 
-/** What an empty sheet says: one sentence, and the way to the starting sketches. */
-export function EmptySheet() {
+interface EmptySheetProps {
+  readonly commands: Commands;
+}
+
+/** What an empty sheet says: one sentence, and the ways to begin. */
+export function EmptySheet({ commands }: EmptySheetProps) {
   const empty = useReading(({ sketch }) => sketch.parts.length === 0);
   if (!empty) return null;
   return (
@@ -11,6 +17,7 @@ export function EmptySheet() {
       <button type="button" className="text-button" onClick={() => setView({ sheet: 'shelf' })}>
         Begin with a starting sketch…
       </button>
+      <CommandButton commands={commands} id="pastePrescription" word="Paste a prescription…" />
     </div>
   );
 }

@@ -1,6 +1,9 @@
+import { lazy, Suspense } from 'react';
 import { useStore } from 'zustand';
 import { Help } from '../commands/Help.tsx';
+import { addAndSelect } from '../commands/partCommands.ts';
 import type { CommandGroup, Services } from '../commands/services.ts';
+import { deskStore } from '../desk/deskStore.ts';
 import { HandOver } from '../desk/HandOver.tsx';
 import { RefusedFile } from '../desk/RefusedFile.tsx';
 import { Shelf } from '../desk/Shelf.tsx';
@@ -15,6 +18,10 @@ interface SheetsProps {
   readonly commands: Commands;
   readonly services: Services;
 }
+
+const PasteSheet = lazy(async () => ({
+  default: (await import('../desk/prescription/PasteSheet.tsx')).PasteSheet,
+}));
 
 const close = () => setView({ sheet: null });
 
@@ -48,6 +55,18 @@ export function Sheets({ groups, commands, services }: SheetsProps) {
           print={services.print}
           onClose={close}
         />
+      )}
+      {sheet === 'prescription' && (
+        <Suspense>
+          <PasteSheet
+            text={deskStore.getState().pasted}
+            insert={(edit) => {
+              addAndSelect(edit);
+              services.fitView('parts');
+            }}
+            onClose={close}
+          />
+        </Suspense>
       )}
       <RefusedFile />
     </>
