@@ -2,6 +2,8 @@ import { none, type Outcome, some } from '../outcome.ts';
 
 const SENTENCES = {
   'no power': 'Light passes unbent, so there is nothing to solve for: give it a power.',
+  'no such part': 'There is no thin part here to make of glass, or no glass to make thin.',
+  'no index': 'A glass has no index in the lines in use: choose another glass or other lines.',
   'no bending': 'Two flat surfaces have no power: curve one of them.',
   'index of its surroundings':
     'Glass with the index of what surrounds it does not bend light: choose another.',

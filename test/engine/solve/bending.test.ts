@@ -8,6 +8,8 @@ import {
   shapeFactorOf,
   zeroComaShape,
 } from '../../../engine/solve/bending.ts';
+import { bestShapes } from '../../../engine/solve/bestShapes.ts';
+import { buildTrain } from '../../../engine/train/build.ts';
 import { between } from '../anyTrain.ts';
 import { given } from '../quantity.ts';
 
@@ -66,5 +68,40 @@ describe('a bending as a ratio of curvatures', () => {
   it('has no shape factor for equal radii', () => {
     expect(shapeFactorOf({ front: 1, rear: 1 })).toBeNull();
     expect(bendingOf(0)).toEqual({ front: 1, rear: -1 });
+  });
+});
+
+describe('the best shapes of a part in its layout', () => {
+  const layout = (indexAfter: number, surfaces: Parameters<typeof buildTrain>[0]['surfaces']) =>
+    buildTrain({ objectIndex: indexAfter, surfaces, objectZ: -200, imageDistanceMm: null });
+  const thin = (part: number, focalLengthMm: number, gapMm = 0, indexAfter = 1) => ({
+    part,
+    thinPowerPerMm: 1 / focalLengthMm,
+    indexAfter,
+    gapMm,
+  });
+
+  it('go by its own conjugates', () => {
+    // The first part makes the light parallel, the second works at infinity.
+    const train = layout(1, [thin(0, 200, 50), thin(1, 100)]);
+    const first = given(bestShapes(train, 0, 1.5));
+    const second = given(bestShapes(train, 1, 1.5));
+    expect(first.positionFactor).toBeCloseTo(1, 14);
+    expect(second.positionFactor).toBeCloseTo(-1, 14);
+    expect(second.leastSpherical).toBeCloseTo(5 / 7, 14);
+    expect(first.zeroComa).toBeCloseTo(-4 / 5, 14);
+  });
+
+  it('take the glass relative to the medium', () => {
+    const { leastSpherical } = given(bestShapes(layout(4 / 3, [thin(0, 200, 50, 4 / 3)]), 0, 2));
+    const relative = given(bestShapes(layout(1, [thin(0, 200, 50)]), 0, 1.5));
+    const p = given(bestShapes(layout(4 / 3, [thin(0, 200, 50, 4 / 3)]), 0, 2)).positionFactor;
+    expect(leastSpherical / p).toBeCloseTo(relative.leastSpherical / relative.positionFactor, 13);
+  });
+
+  it('are none for a part that is not there or does not bend light', () => {
+    const train = layout(1, [thin(0, 200, 50), { part: 1, indexAfter: 1, gapMm: 0 }]);
+    expect(bestShapes(train, 2, 1.5)).toEqual({ ok: false, why: 'no such part' });
+    expect(bestShapes(train, 1, 1.5)).toEqual({ ok: false, why: 'no power' });
   });
 });
