@@ -13,7 +13,7 @@ const SETTLED = 1e-14;
 /** Steps that no longer shrink but are this small move within rounding. */
 const NOISE = 1e-11;
 const NEWTON_STEPS = 12;
-const BRACKET_STEPS = 60;
+const BRACKET_STEPS = 80;
 const HALVINGS = 200;
 
 /** One surface with one ray at hand: the point in the tangent plane, the direction, and what was last computed. */
@@ -186,14 +186,16 @@ function bracketed(at: Course, side: number, begin: number): number {
   if (!evaluate(at, t)) return Number.NaN;
   const forward = side * at.height < 0 ? 1 : -1;
   let other = t;
-  let stride = Math.abs(at.height) / 4 + 1e-6 * (Math.abs(x0) + Math.abs(y0));
+  // Small against the radius, or a rim that bends away would be leapt over.
+  const radius = Math.hypot(x0 + t * l, y0 + t * m);
+  let stride = Math.min(Math.abs(at.height) / 4, radius / 16) + 1e-6 * (Math.abs(at.height) + radius);
   for (let step = 0; ; step++) {
     if (step === BRACKET_STEPS || t === (forward > 0 ? most : least)) return Number.NaN;
     other = t;
     t = Math.min(most, Math.max(least, t + forward * stride));
     if (!evaluate(at, t)) return Number.NaN;
     if (side * at.height * forward >= 0) break;
-    stride *= 1.5;
+    stride *= 1.25;
   }
   return halved(at, side, Math.min(t, other), Math.max(t, other));
 }

@@ -93,10 +93,10 @@ function traceOf(
   const { source } = map.bundle;
   const fromObject = source.kind === 'finite' && source.zMm < 0;
   const z = fromObject ? source.zMm : drawn.fromMm;
-  const rise = rays[at + M]! / rays[at + N]!;
+  const ahead = z - rays[at + Z]!;
   return {
     pupil: [pupil[2 * i]!, pupil[2 * i + 1]!],
-    exact: [z, rays[at + Y]! + (z - rays[at + Z]!) * rise],
+    exact: [z, rays[at + Y]! + (ahead === 0 ? 0 : (ahead * rays[at + M]!) / rays[at + N]!)],
     paraxial: paraxialOf(map, pupil[2 * i + 1]!),
     heights: [],
     slopes: [],

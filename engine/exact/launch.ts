@@ -20,7 +20,7 @@ export function sourceOf({ object, lines }: ExactSetup, line: number, fraction: 
 
 /**
  * Puts the ray with launch numbers `a`, `b` into `rays` from place `at`: in the tangent plane of the first vertex, its path counted from
- * the object point, or from the plane wave through the first vertex. Cosines that are none give a ray that misses the first surface.
+ * the object point, or from the plane wave through the first vertex. Cosines that are none give a ray across the axis that misses the first surface.
  */
 export function launch(source: Source, a: number, b: number, rays: Float64Array, at: number): void {
   rays[at + Z] = 0;
@@ -36,15 +36,23 @@ export function launch(source: Source, a: number, b: number, rays: Float64Array,
     return;
   }
   const squared = 1 - a * a - b * b;
-  const cosZ = squared > 0 ? Math.sqrt(squared) : 1;
+  rays[at + L] = a;
+  rays[at + M] = b;
+  if (!(squared > 0)) {
+    rays[at + X] = 0;
+    rays[at + Y] = source.heightMm;
+    rays[at + Z] = source.zMm;
+    rays[at + N] = 0;
+    rays[at + PATH] = 0;
+    rays[at + CODE] = MISSED;
+    return;
+  }
+  const cosZ = Math.sqrt(squared);
   const length = -source.zMm / cosZ;
   rays[at + X] = length * a;
   rays[at + Y] = source.heightMm + length * b;
-  rays[at + L] = a;
-  rays[at + M] = b;
   rays[at + N] = cosZ;
   rays[at + PATH] = source.index * length;
-  if (!(squared > 0)) rays[at + CODE] = MISSED;
 }
 
 /** The launch numbers of the ray of this source through a point, z from the first vertex. */
