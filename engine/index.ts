@@ -141,6 +141,8 @@ export type {
 } from './sketch/types.ts';
 export { isCommon, objectDistanceAt, settingAt, valueAt } from './sketch/values.ts';
 export { partName } from './sketch/words.ts';
+export { unsolvableSentence } from './solve/absence.ts';
+export { bendGlass, bendGlassToShape, shapeOfGlass } from './solve/bend.ts';
 export { type Body, bodyOf, edgeThicknesses, type Face, faceAt } from './train/body.ts';
 export { placesOf } from './train/places.ts';
 export { partTrain } from './train/slice.ts';

@@ -1,5 +1,6 @@
 import * as v from 'valibot';
-import type { View } from '../store/viewStore.ts';
+import { SUM_NAMES } from '../../engine/index.ts';
+import type { Drawer, View } from '../store/viewStore.ts';
 
 /** The parts of the view that are there again after a reload. */
 const KEPT = [
@@ -14,6 +15,7 @@ const KEPT = [
   'datum',
   'drawer',
   'topic',
+  'plots',
   'foldedGroups',
   'setting',
   'selection',
@@ -29,6 +31,19 @@ export function keptViewOf(view: View): KeptView {
 const flag = v.boolean();
 const count = (from: number, to: number) => v.pipe(v.number(), v.integer(), v.minValue(from), v.maxValue(to));
 const texts = v.array(v.string());
+
+const DRAWERS = [
+  'fans',
+  'wavefront',
+  'spots',
+  'field',
+  'contrast',
+  'colour',
+  'sums',
+  'ledger',
+  'trace',
+  'table',
+] as const satisfies readonly Drawer[];
 
 /** Each field by itself, so that one that is broken or from another version does not cost the rest. */
 const fields = {
@@ -48,8 +63,14 @@ const fields = {
   hints: flag,
   digits: count(0, 6),
   datum: v.picklist(['first part', 'sensor', 'mount']),
-  drawer: v.nullable(v.picklist(['ledger', 'table', 'trace'])),
+  drawer: v.nullable(v.picklist(DRAWERS)),
   topic: v.string(),
+  plots: v.object({
+    all: flag,
+    spots: v.picklist(['plane', 'throughFocus']),
+    distortion: v.picklist(['paraxial', 'fTheta']),
+    sum: v.picklist(SUM_NAMES),
+  }),
   foldedGroups: texts,
   setting: v.object({ at: v.string(), toNext: v.pipe(v.number(), v.minValue(0), v.ltValue(1)) }),
   selection: texts,
