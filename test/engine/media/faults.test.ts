@@ -63,6 +63,12 @@ describe('a formula of the user’s own', () => {
     expect(sentence).toMatch(/^[A-Z].*\.$/);
   });
 
+  it('is refused when its index is good at both ends alone', () => {
+    // 10 (L − 0.6)² + 0.9
+    const dip: DispersionFormula = { kind: 'cauchy', coefficients: [4.5, -12, 1, 10, 2] };
+    expect(formulaFaults(dip, RANGE)).toMatch(/index at 5\d\d(\.\d+)? nm is 0\.9/);
+  });
+
   it('may have a pole outside its range, or one without weight', () => {
     expect(formulaFaults({ kind: 'sellmeier', coefficients: [0, 1, 0.1, 0, 0.5] }, RANGE)).toBeNull();
   });
