@@ -1,7 +1,7 @@
 import type { PupilGrid } from './grids.ts';
 import { traceBatch } from './kernel.ts';
 import { aimRays, mapRays, type PupilMap, pupilMapOf } from './pupilMap.ts';
-import { CODE, lostOf, PATH, STRIDE, X, Y } from './rayBuffer.ts';
+import { CODE, lostOf, MISSED, PATH, STRIDE, X, Y } from './rayBuffer.ts';
 import type { ExactSetup, Lost } from './types.ts';
 
 /** Which rays of every field and line are traced. Made once, by `sampleOf`. */
@@ -94,7 +94,7 @@ export function traceBundle(map: PupilMap, sample: Sample, rays: Float64Array): 
   const { train } = setup.lines[line] ?? setup.lines[0];
   const index = Math.abs(train.index[train.count]!);
   if (map.lost) {
-    for (let i = 0; i < sample.count; i++) rays[i * STRIDE + CODE] = map.bundle.chief.code;
+    for (let i = 0; i < sample.count; i++) rays[i * STRIDE + CODE] = MISSED;
     return { lost: map.lost, rays, index };
   }
   if (sample.fine) aimRays(map, sample.points, sample.count, rays);

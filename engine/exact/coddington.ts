@@ -1,10 +1,12 @@
 import { none } from '../outcome.ts';
-
-import { finite, type Quantity } from '../paraxial/absence.ts';
+import type { Quantity } from '../paraxial/absence.ts';
 import { axisCrossing } from '../paraxial/scale.ts';
 import { powerAt } from '../paraxial/trace.ts';
 import type { Train } from '../train/types.ts';
-import type { Hit, RayPath } from './types.ts';
+import { traceBatch } from './kernel.ts';
+import { CODE, L, M, N, STRIDE, X, Y, Z } from './rayBuffer.ts';
+import { runAt } from './surface.ts';
+import type { RayPath } from './types.ts';
 
 /** Where the rays close to one ray come together, in mm along the ray from its last surface, positive the way the light runs. */
 export interface Foci {
@@ -16,90 +18,125 @@ export interface Foci {
 
 /**
  * The foci of the narrow pencil about a ray in the meridian, by Coddington's equations n′cos²I′/t′ − n cos²I/t = Φκt and n′/s′ − n/s = Φκs,
- * Φ = n′cos I′ − n cos I, with the curvatures κ of the surface at the very point (Welford, Aberrations of Optical Systems, 9.7; Smith,
- * Modern Optical Engineering, on Coddington's equations). They are carried as offset and slope of the close rays, so that a focus passes
- * through infinity and back without a case. The pencil starts at `objectZ` (from the first vertex), or parallel when it is null.
- * 'ray lost' when the ray does not get through, 'image at infinity' when the pencil leaves parallel.
+ * Φ = n′cos I′ − n cos I, with the curvatures κ of the surface at the very point (Welford, Aberrations of Optical Systems, 9.7). The ray has
+ * its start (z from the first vertex) and direction; the pencil starts at `objectZ`, or parallel when it is null. 'ray lost', 'image at infinity'.
  */
-export function coddington(train: Train, path: RayPath, objectZ: number | null): Foci {
-  if (path.lost !== null) return { tangential: none('ray lost'), sagittal: none('ray lost') };
-  const { count } = train;
-  let [offsetT, offsetS, slopeT, slopeS] = objectZ === null ? [1, 1, 0, 0] : [0, 0, 1, 1];
-  let [scaleT, scaleS] = [1, 1];
-  let z = objectZ ?? 0;
-  let directionZ = path.direction[2];
-  for (let k = 0; k < count; k++) {
-    const hit = path.hits[k];
-    if (hit?.direction == null || hit.cosRefraction === null) break;
-    const at = train.z[k]! + hit.point[2];
-    const [n, nRear] = [train.index[k]!, train.index[k + 1]!];
-    // Behind a mirror, where the index is negative, lengths along the ray are negative too.
-    const length = (at - z) / (directionZ * Math.sign(n));
-    offsetT += length * slopeT;
-    offsetS += length * slopeS;
-    const power = train.thinPower[k] === 0 ? 0 : powerAt(train, k);
-    if (power === 0) {
-      const [cosI, cosR] = [hit.cosIncidence, hit.cosRefraction];
-      const [curvedT, curvedS] = localCurvatures(train, k, hit);
-      const bend = nRear * cosR - n * cosI;
-      const arc = offsetT / cosI;
-      const [cameT, bentT] = [n * cosI * slopeT, bend * curvedT * arc];
-      const [cameS, bentS] = [n * slopeS, bend * curvedS * offsetS];
-      slopeT = (cameT - bentT) / (nRear * cosR);
-      slopeS = (cameS - bentS) / nRear;
-      scaleT = (Math.abs(cameT) + Math.abs(bentT)) / Math.abs(nRear * cosR);
-      scaleS = (Math.abs(cameS) + Math.abs(bentS)) / Math.abs(nRear);
-      offsetT = arc * cosR;
-    } else {
-      // The collinear map acts on depths along the axis, n′/z′ = n/z + φ, in both directions alike.
-      const cosZ = directionZ * Math.sign(n);
-      const cosRearZ = hit.direction[2] * Math.sign(nRear);
-      const [cameT, bentT] = [(n * slopeT) / cosZ, power * offsetT];
-      const [cameS, bentS] = [(n * slopeS) / cosZ, power * offsetS];
-      slopeT = (cosRearZ / nRear) * (cosRearZ / cosZ) * (cameT - bentT);
-      slopeS = (cosRearZ / nRear) * (cameS - bentS);
-      scaleT = (Math.abs(cameT) + Math.abs(bentT)) / Math.abs(nRear);
-      scaleS = (Math.abs(cameS) + Math.abs(bentS)) / Math.abs(nRear);
-      offsetT *= cosRearZ / cosZ;
+export function coddington(
+  train: Train,
+  { start, direction }: Pick<RayPath, 'start' | 'direction'>,
+  objectZ: number | null,
+): Foci {
+  const ray = new Float64Array(STRIDE);
+  const length = Math.hypot(...direction);
+  ray.set(start, X);
+  for (let i = 0; i < 3; i++) ray[L + i] = direction[i]! / length;
+  const [pencil] = follow(train, ray, 1, objectZ);
+  if (!pencil || ray[CODE] !== 0) return { tangential: none('ray lost'), sagittal: none('ray lost') };
+  return { tangential: along(train, pencil.meridian), sagittal: along(train, pencil.across) };
+}
+
+/** The z of the foci of many rays, in mm from the last vertex; NaN where the ray is lost or its pencil leaves parallel. */
+export interface FocusDepths {
+  readonly tangential: Float64Array;
+  readonly sagittal: Float64Array;
+}
+
+/** The same for `count` rays in the meridian as they start in the first vertex plane; `starts` stays as it is. */
+export function focusDepths(
+  train: Train,
+  starts: Float64Array,
+  count: number,
+  objectZ: number | null,
+): FocusDepths {
+  const rays = starts.slice(0, count * STRIDE);
+  const pencils = follow(train, rays, count, objectZ);
+  const depths = (which: 'meridian' | 'across') =>
+    Float64Array.from(pencils, (pencil, i) => {
+      const focus = rays[i * STRIDE + CODE] === 0 ? along(train, pencil[which]) : none('ray lost');
+      return focus.ok ? rays[i * STRIDE + Z]! + focus.value * rays[i * STRIDE + N]! : Number.NaN;
+    });
+  return { tangential: depths('meridian'), sagittal: depths('across') };
+}
+
+/** A ray close by: how far beside the ray it runs and how fast that grows, and what was added up to get the slope. */
+interface Neighbour {
+  offset: number;
+  slope: number;
+  scale: number;
+}
+
+interface Pencil {
+  readonly meridian: Neighbour;
+  readonly across: Neighbour;
+  /** Of the ray: where it last was, z from the first vertex, and its direction from there. */
+  z: number;
+  cosZ: number;
+  cosY: number;
+}
+
+/** Crossing with the ray at −offset/slope: a focus passes through infinity and back without a case of its own. */
+const along = ({ index, count }: Train, { offset, slope, scale }: Neighbour): Quantity =>
+  axisCrossing(Math.sign(index[count]!), offset, slope, scale, 'image at infinity');
+
+/** Traces the rays surface by surface, and the pencils about them. */
+function follow(train: Train, rays: Float64Array, count: number, objectZ: number | null): Pencil[] {
+  const close = (): Neighbour => ({
+    offset: objectZ === null ? 1 : 0,
+    slope: objectZ === null ? 0 : 1,
+    scale: 1,
+  });
+  const pencils = Array.from({ length: count }, (_, i) => ({
+    meridian: close(),
+    across: close(),
+    z: objectZ ?? 0,
+    cosZ: rays[i * STRIDE + N]!,
+    cosY: rays[i * STRIDE + M]!,
+  }));
+  for (let k = 0; k < train.count; k++) {
+    traceBatch(train, rays, count, false, k, k + 1);
+    for (const [i, pencil] of pencils.entries()) {
+      if (rays[i * STRIDE + CODE] === 0) meet(pencil, train, k, rays, i * STRIDE);
     }
-    z = at;
-    directionZ = hit.direction[2];
   }
-  const way = Math.sign(train.index[count]!);
-  return {
-    tangential: axisCrossing(way, offsetT, slopeT, scaleT, 'image at infinity'),
-    sagittal: axisCrossing(way, offsetS, slopeS, scaleS, 'image at infinity'),
-  };
+  return pencils;
 }
 
-/** z of both foci less the plane `planeZ`, all from the last vertex: what a plot of the field shows. */
-export function fociFrom(foci: Foci, path: RayPath, planeZ: number): Foci {
-  const last = path.hits.at(-1);
-  const shift = (along: Quantity): Quantity =>
-    along.ok && last?.direction != null
-      ? finite(last.point[2] + along.value * last.direction[2] - planeZ)
-      : along;
-  return { tangential: shift(foci.tangential), sagittal: shift(foci.sagittal) };
+/** Takes the pencil to surface `k` and through it; the ray at place `at` is behind it. */
+function meet(pencil: Pencil, train: Train, k: number, rays: Float64Array, at: number): void {
+  const { meridian, across, cosZ, cosY } = pencil;
+  const [n, nRear] = [train.index[k]!, train.index[k + 1]!];
+  const z = train.z[k]! + rays[at + Z]!;
+  // Behind a mirror, where the index is negative, lengths along the ray are negative too.
+  const length = (z - pencil.z) / (cosZ * Math.sign(n));
+  meridian.offset += length * meridian.slope;
+  across.offset += length * across.slope;
+  const [rearY, rearZ] = [rays[at + M]!, rays[at + N]!];
+  if (train.thinPower[k] !== 0) {
+    // The collinear map acts on depths along the axis, n′/z′ = n/z + φ, in both directions alike.
+    const [front, rear] = [cosZ * Math.sign(n), rearZ * Math.sign(nRear)];
+    const power = powerAt(train, k);
+    bend(meridian, (n * meridian.slope) / front, power * meridian.offset, (rear * rear) / (nRear * front));
+    bend(across, (n * across.slope) / front, power * across.offset, rear / nRear);
+    meridian.offset *= rear / front;
+  } else {
+    const y = rays[at + Y]!;
+    const { slope, bend: second, slopeOverRadius } = runAt(train, k, Math.abs(y));
+    const rise = slopeOverRadius * y;
+    const stretch = Math.sqrt(1 + slope * slope);
+    const cosI = Math.abs(cosZ - rise * cosY) / stretch;
+    const cosR = Math.abs(rearZ - rise * rearY) / stretch;
+    const power = nRear * cosR - n * cosI;
+    const arc = meridian.offset / cosI;
+    bend(meridian, n * cosI * meridian.slope, (power * second * arc) / stretch ** 3, 1 / (nRear * cosR));
+    bend(across, n * across.slope, (power * slopeOverRadius * across.offset) / stretch, 1 / nRear);
+    meridian.offset = arc * cosR;
+  }
+  pencil.z = z;
+  pencil.cosZ = rearZ;
+  pencil.cosY = rearY;
 }
 
-/**
- * Curvatures of surface `k` where the ray meets it, in the meridian z″/(1 + z′²)^{3/2} and across it z′/(r√(1 + z′²)), in 1/mm, positive when
- * the centre lies to the right. z′/r is formed without dividing by r, so that the vertex is no case of its own.
- */
-function localCurvatures(train: Train, k: number, { point }: Hit): readonly [number, number] {
-  const c = train.curvature[k]!;
-  const squared = point[0] * point[0] + point[1] * point[1];
-  const root = Math.sqrt(1 - (1 + train.conic[k]!) * c * c * squared);
-  let slopeOverR = 0;
-  let second = 0;
-  for (let i = train.asphereFrom[k + 1]! - 1; i >= train.asphereFrom[k]!; i--) {
-    const power = 2 * (i - train.asphereFrom[k]!) + 4;
-    const coefficient = train.asphere[i]!;
-    slopeOverR = slopeOverR * squared + power * coefficient;
-    second = second * squared + power * (power - 1) * coefficient;
-  }
-  slopeOverR = slopeOverR * squared + c / root;
-  second = second * squared + c / root ** 3;
-  const stretch = Math.sqrt(1 + slopeOverR * slopeOverR * squared);
-  return [second / stretch ** 3, slopeOverR / stretch];
+function bend(neighbour: Neighbour, came: number, bent: number, share: number): void {
+  neighbour.slope = (came - bent) * share;
+  neighbour.scale = (Math.abs(came) + Math.abs(bent)) * Math.abs(share);
 }

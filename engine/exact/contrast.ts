@@ -1,7 +1,7 @@
 import { none, type Outcome, some } from '../outcome.ts';
 import type { Absence } from '../paraxial/absence.ts';
 import { diffractionContrast } from '../paraxial/sensor.ts';
-import type { Weighted } from './landing.ts';
+import type { Landing, Weighted } from './landing.ts';
 
 /** Contrast of a pattern of lines at one frequency, 0 to 1: of the traced spot alone, and what diffraction alone would leave. */
 export interface Contrast {
@@ -19,11 +19,33 @@ export interface ContrastPair {
   readonly atHalfNyquist: Contrast;
 }
 
-/** What diffraction allows in the main line: the f-numbers of the bundle as it arrives on the image plane. */
+/** What diffraction allows in the main line: the f-numbers of the bundle as it arrives on the image plane, Infinity for one that has no width. */
 export interface DiffractionLimit {
   readonly wavelengthNm: number;
   readonly tangentialFNumber: number;
   readonly sagittalFNumber: number;
+}
+
+/**
+ * The limit of a bundle from the directions in which its rays arrive, 1/(n′·spread of the direction cosines): on the axis 1/(2 n′ sin U′), off it with the
+ * obliquity and the vignetting that the bundle has. An outline that is cut is taken as the ellipse of the same width and height.
+ */
+export function diffractionLimit(landing: Landing, index: number, wavelengthNm: number): DiffractionLimit {
+  const { slopeX, slopeY, count } = landing;
+  let [widest, lowest, highest] = [0, 1, -1];
+  for (let i = 0; i < count; i++) {
+    const [sx, sy] = [slopeX[i]!, slopeY[i]!];
+    const stretch = Math.sqrt(1 + sx * sx + sy * sy);
+    const [l, m] = [Math.abs(sx) / stretch, sy / stretch];
+    if (l > widest) widest = l;
+    if (m < lowest) lowest = m;
+    if (m > highest) highest = m;
+  }
+  return {
+    wavelengthNm,
+    tangentialFNumber: 1 / (index * Math.max(0, highest - lowest)),
+    sagittalFNumber: 1 / (index * 2 * widest),
+  };
 }
 
 /**
@@ -67,11 +89,14 @@ export function contrastOf(
     perMm,
     tangential: tangential / total,
     sagittal: sagittal / total,
-    tangentialLimit: diffractionContrast(perMm, limit.wavelengthNm, limit.tangentialFNumber),
-    sagittalLimit: diffractionContrast(perMm, limit.wavelengthNm, limit.sagittalFNumber),
+    tangentialLimit: limitAt(perMm, limit.wavelengthNm, limit.tangentialFNumber),
+    sagittalLimit: limitAt(perMm, limit.wavelengthNm, limit.sagittalFNumber),
   });
   return some({
     atNyquist: at(nyquistPerMm, Math.hypot(cos2Y, sin2Y), Math.hypot(cos2X, sin2X)),
     atHalfNyquist: at(nyquistPerMm / 2, Math.hypot(cosY, sinY), Math.hypot(cosX, sinX)),
   });
 }
+
+const limitAt = (perMm: number, wavelengthNm: number, fNumber: number): number =>
+  perMm === 0 ? 1 : diffractionContrast(perMm, wavelengthNm, fNumber);

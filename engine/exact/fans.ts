@@ -1,7 +1,9 @@
 import { none, type Outcome, some } from '../outcome.ts';
 import type { Absence } from '../paraxial/absence.ts';
 import { CHIEF, type FieldRays, sagittalFrom, TANGENTIAL } from './bundles.ts';
-import { CODE, L, M, N, STRIDE, X, Y, Z } from './rayBuffer.ts';
+import { type Curve, curveOf } from './curve.ts';
+import { xOn, yOn } from './imagePlane.ts';
+import { CODE, M, STRIDE } from './rayBuffer.ts';
 import {
   beyondFoot,
   exitPupil,
@@ -11,20 +13,10 @@ import {
   referenceSphere,
 } from './wavefront.ts';
 
-/** One curve over the pupil. Rays that are lost are left out and counted. */
-export interface FanCurve {
-  /** Place in the lines of the setup. */
-  readonly line: number;
-  /** Share of the real stop's radius, from −1 to 1. */
-  readonly pupil: Float64Array;
-  readonly value: Float64Array;
-  readonly lost: number;
-}
-
 /** Curves over the stop's diameter in the meridian (y) and across it (x), one for each line whose chief ray gets through. */
 export interface Fans {
-  readonly tangential: readonly FanCurve[];
-  readonly sagittal: readonly FanCurve[];
+  readonly tangential: readonly Curve[];
+  readonly sagittal: readonly Curve[];
 }
 
 /**
@@ -37,19 +29,19 @@ export function rayFans(field: FieldRays): Outcome<Fans, Absence> {
   const plane = setup.imagePlaneMm.value;
   const main = bundles[0];
   if (!main || main.lost) return none('ray lost');
-  const chief = landing(main.rays, CHIEF * STRIDE, Y, M, plane);
+  const chief = yOn(main.rays, CHIEF * STRIDE, plane);
   return some({
-    tangential: curves(field, (rays, at) => landing(rays, at, Y, M, plane) - chief, 'whole'),
-    sagittal: curves(field, (rays, at) => landing(rays, at, X, L, plane), 'odd'),
+    tangential: curves(field, (rays, at) => yOn(rays, at, plane) - chief, 'whole'),
+    sagittal: curves(field, (rays, at) => xOn(rays, at, plane), 'odd'),
   });
 }
 
 /** Wavefront errors in waves of each line, and the sphere that they are measured against. */
 export interface WavefrontFans {
   readonly sphere: ReferenceSphere;
-  readonly tangential: readonly FanCurve[];
+  readonly tangential: readonly Curve[];
   /** Thin parts have no path of their own, so across the meridian there is none behind them. */
-  readonly sagittal: Outcome<readonly FanCurve[], Absence>;
+  readonly sagittal: Outcome<readonly Curve[], Absence>;
 }
 
 /**
@@ -85,17 +77,13 @@ export function wavefrontFans(field: FieldRays, defocusMm = 0): Outcome<Wavefron
 const waveMm = ({ setup }: FieldRays, line: number): number =>
   (setup.lines[line] ?? setup.lines[0]).wavelengthNm * 1e-6;
 
-/** Where the ray at place `at` meets the plane, in x or in y. */
-const landing = (rays: Float64Array, at: number, place: number, cosine: number, planeMm: number): number =>
-  rays[at + place]! + ((planeMm - rays[at + Z]!) * rays[at + cosine]!) / rays[at + N]!;
-
 type Read = (rays: Float64Array, at: number, line: number) => number;
 
 /** The curves of all lines: of the fan in the meridian ('whole'), or of the half fan across it, whose other half is `odd` or `even`. */
-function curves(field: FieldRays, read: Read, kind: 'whole' | 'odd' | 'even'): FanCurve[] {
+function curves(field: FieldRays, read: Read, kind: 'whole' | 'odd' | 'even'): Curve[] {
   const { sample, bundles } = field;
   const half = (sample.fanRays - 1) / 2;
-  const found: FanCurve[] = [];
+  const found: Curve[] = [];
   for (const [line, { lost, rays }] of bundles.entries()) {
     if (lost || sample.fanRays === 0) continue;
     const all = new Float64Array(sample.fanRays);
@@ -105,17 +93,17 @@ function curves(field: FieldRays, read: Read, kind: 'whole' | 'odd' | 'even'): F
       const sign = kind === 'odd' && i < half ? -1 : 1;
       all[i] = rays[at + CODE] === 0 ? sign * read(rays, at, line) : Number.NaN;
     }
-    found.push(curveOf(all, line));
+    found.push(curveOf(line, pupilOf(sample.fanRays), all));
   }
   return found;
 }
 
 /** The wavefront of the fan in the meridian from its transverse errors. */
-function fromErrors(field: FieldRays, sphere: ReferenceSphere): FanCurve[] {
+function fromErrors(field: FieldRays, sphere: ReferenceSphere): Curve[] {
   const { sample, bundles } = field;
   const { fanRays } = sample;
   const centre = (fanRays - 1) / 2;
-  const found: FanCurve[] = [];
+  const found: Curve[] = [];
   for (const [line, { lost, rays, index }] of bundles.entries()) {
     if (lost || fanRays === 0) continue;
     const [height, cosine, paths] = [0, 1, 2].map(() => new Float64Array(fanRays)) as [
@@ -127,7 +115,7 @@ function fromErrors(field: FieldRays, sphere: ReferenceSphere): FanCurve[] {
     const placeOf = (i: number) => (i === centre ? CHIEF : TANGENTIAL + i) * STRIDE;
     for (let i = 0; i < fanRays; i++) {
       const at = placeOf(i);
-      height[i] = rays[at + CODE] === 0 ? landing(rays, at, Y, M, sphere.zMm) - sphere.yMm : Number.NaN;
+      height[i] = yOn(rays, at, sphere.zMm) - sphere.yMm;
       cosine[i] = rays[at + M]!;
     }
     pathsFromErrors(height, cosine, index, centre, paths);
@@ -137,27 +125,11 @@ function fromErrors(field: FieldRays, sphere: ReferenceSphere): FanCurve[] {
       const path = paths[i]! + index * beyondFoot(rays, placeOf(i), sphere);
       paths[i] = clipped ? Number.NaN : (chief - path) / waveMm(field, line);
     }
-    found.push(curveOf(paths, line));
+    found.push(curveOf(line, pupilOf(fanRays), paths));
   }
   return found;
 }
 
-/** The curve without the values that are none. */
-function curveOf(all: Float64Array, line: number): FanCurve {
-  const half = (all.length - 1) / 2;
-  const pupil = new Float64Array(all.length);
-  const value = new Float64Array(all.length);
-  let count = 0;
-  for (const [i, one] of all.entries()) {
-    if (!Number.isFinite(one)) continue;
-    pupil[count] = (i - half) / half;
-    value[count] = one + 0;
-    count++;
-  }
-  return {
-    line,
-    pupil: pupil.subarray(0, count),
-    value: value.subarray(0, count),
-    lost: all.length - count,
-  };
-}
+/** Shares of the stop's radius at which the rays of a fan stand. */
+const pupilOf = (count: number): Float64Array =>
+  Float64Array.from({ length: count }, (_, i) => (2 * i) / (count - 1) - 1);

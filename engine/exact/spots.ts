@@ -1,6 +1,7 @@
 import { none, type Outcome, some } from '../outcome.ts';
-import type { Absence } from '../paraxial/absence.ts';
+import { type Absence, finite, type Quantity } from '../paraxial/absence.ts';
 import type { Weighted } from './landing.ts';
+import type { ExactSetup } from './types.ts';
 
 /** The size of a spot on a plane, lengths in mm; the lines that make it up taken together. */
 export interface SpotSize {
@@ -61,4 +62,11 @@ export function spotSize(parts: readonly Weighted[], defocusMm = 0): Outcome<Spo
     through,
     lost,
   });
+}
+
+/** Radius (mm) of the first dark ring in the main line, 1.22 λ N with the paraxial working f-number (Airy; Born and Wolf, Principles of Optics, 8.5); 'image at infinity'. */
+export function airyRadius({ lines, marginal, imagePlaneMm }: ExactSetup): Quantity {
+  const nu = Math.abs(marginal.nu[lines[0].train.count]!);
+  if (!imagePlaneMm.ok || nu === 0) return none('image at infinity');
+  return finite((1.22 * lines[0].wavelengthNm * 1e-6) / (2 * nu));
 }

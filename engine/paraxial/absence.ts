@@ -36,6 +36,8 @@ const SENTENCES = {
     'The exit pupil stands on the image, so there is no sphere to measure the wavefront against: move the stop.',
   'thin parts':
     'Thin parts have no optical path of their own: thicken them to see the wavefront across the meridian.',
+  'no image height':
+    'The paraxial chief ray meets this image plane on the axis, so there is no height to compare with.',
   'out of range': 'The numbers grow too large to compute: check for extreme powers and gaps.',
 } as const;
 

@@ -1,0 +1,65 @@
+import { none, type Outcome, some } from '../outcome.ts';
+import type { Absence } from '../paraxial/absence.ts';
+import { type Curve, curveOf } from './curve.ts';
+import { traceBatch } from './kernel.ts';
+import { aimRays, mapRays, type PupilMap, pupilMapOf } from './pupilMap.ts';
+import { pupilOutline } from './pupilOutline.ts';
+import { CODE, L, M, STRIDE } from './rayBuffer.ts';
+import type { ExactSetup } from './types.ts';
+
+/** Points of half the pupil's edge: of a polygon of 64 sides the axis and the field lose the same share. */
+const STEPS = 32;
+/** Halvings in the search for an edge that a rim cuts: to 1/1000 of the stop's radius, or finer than any plot. */
+const COARSE = 10;
+const FINE = 24;
+
+/**
+ * Relative illumination over the share of the field, in the main line: the projected solid angle ∬ dL dM of the light that arrives at the image, over that
+ * on the axis (of an object that is evenly bright from all sides). Vignetting counts, losses too; a field that no light passes has 0. 'image at infinity', 'ray lost'
+ * when the axis is dark.
+ */
+export function illumination(
+  setup: ExactSetup,
+  fractions: Float64Array,
+  { clip = true, fine = false }: { readonly clip?: boolean; readonly fine?: boolean } = {},
+): Outcome<Curve, Absence> {
+  if (!setup.imagePlaneMm.ok) return setup.imagePlaneMm;
+  const axis = solidAngle(pupilMapOf(setup, 0, 0), clip, fine);
+  if (!(axis > 0)) return none('ray lost');
+  const values = fractions.map((fraction) => solidAngle(pupilMapOf(setup, 0, fraction), clip, fine) / axis);
+  return some(curveOf(0, fractions.slice(), values));
+}
+
+/** Half the edge of the whole stop, from the top over positive x to the bottom. */
+const WHOLE_STOP = Float64Array.from({ length: 2 * (STEPS + 1) }, (_, i) => {
+  const angle = (Math.PI * Math.floor(i / 2)) / STEPS;
+  return i % 2 === 0 ? Math.sin(angle) : Math.cos(angle);
+});
+
+/** Area that the directions of the pupil's edge enclose in (L, M) behind the last surface. */
+function solidAngle(map: PupilMap, clip: boolean, fine: boolean): number {
+  if (map.lost) return 0;
+  const rays = new Float64Array((STEPS + 1) * STRIDE);
+  const start = fine ? aimRays : mapRays;
+  start(map, WHOLE_STOP, STEPS + 1, rays);
+  traceBatch(map.sight.train, rays, STEPS + 1, clip);
+  if (!allThrough(rays)) {
+    if (!clip) return Number.NaN;
+    const outline = pupilOutline(map, fine, STEPS, fine ? FINE : COARSE);
+    if (!outline.ok) return 0;
+    start(map, outline.value.points, STEPS + 1, rays);
+    traceBatch(map.sight.train, rays, STEPS + 1, false);
+    if (!allThrough(rays)) return Number.NaN;
+  }
+  let area = 0;
+  for (let at = 0; at < STEPS * STRIDE; at += STRIDE) {
+    const next = at + STRIDE;
+    area += rays[at + L]! * rays[next + M]! - rays[next + L]! * rays[at + M]!;
+  }
+  return Math.abs(area);
+}
+
+function allThrough(rays: Float64Array): boolean {
+  for (let at = 0; at < rays.length; at += STRIDE) if (rays[at + CODE] !== 0) return false;
+  return true;
+}
