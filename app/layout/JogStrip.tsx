@@ -11,40 +11,55 @@ interface JogStripProps {
   readonly board: () => Board | null;
 }
 
-/** The grips that a finger can take without covering them, by the start of their ids. */
-const CHIPS = [
-  { id: 'part:', end: '', label: 'Position' },
-  { id: 'focal:', end: ':rear', label: 'Focal' },
-  { id: 'rim:', end: ':upper', label: 'Rim' },
-  { id: 'thickness:', end: '', label: 'Thickness' },
-] as const;
+interface Chip {
+  readonly handleId: string;
+  readonly label: string;
+  /** The grip goes up and down. */
+  readonly upright?: true;
+}
+
+/** The grips of a part that a finger can take without covering them. */
+function chipsOf(part: Part): readonly Chip[] {
+  const { id } = part;
+  const chips: Chip[] = [{ handleId: `part:${id}`, label: 'Position' }];
+  if (part.kind === 'thin') chips.push({ handleId: `focal:${id}:rear`, label: 'Focal' });
+  if (part.kind === 'glass') {
+    chips.push({ handleId: `bend:${id}`, label: 'Bending' });
+    for (const k of part.surfaces.keys())
+      chips.push({ handleId: `radius:${id}:${k}`, label: `Radius ${k + 1}` });
+  }
+  if (part.kind !== 'stop') chips.push({ handleId: `rim:${id}:upper`, label: 'Rim', upright: true });
+  if (part.kind === 'plate') chips.push({ handleId: `thickness:${id}`, label: 'Thickness' });
+  if (part.kind === 'glass')
+    for (const k of part.fillings.keys())
+      chips.push({
+        handleId: `thickness:${id}:${k}`,
+        label: part.fillings.length === 1 ? 'Thickness' : `Thickness ${k + 1}`,
+      });
+  return chips;
+}
 
 /**
  * The phone's way to drag: chips choose a grip of the selected part, the strip moves it, so that the finger never covers it. Two
  * toggles stand for Shift and Alt.
  */
 export function JogStrip({ board }: JogStripProps) {
-  const id = useReading((reading) => onlySelected(reading)?.id);
-  const kind = useReading((reading) => onlySelected(reading)?.kind);
+  const part = useReading((reading) => onlySelected(reading));
   const behindMoves = useReading(({ view }) => view.otherRule);
   const snap = useReading(({ view }) => view.snap);
-  const [chip, setChip] = useState<(typeof CHIPS)[number]>(CHIPS[0]);
+  const [chip, setChip] = useState('Position');
   const from = useRef<{ readonly x: number; readonly y: number } | null>(null);
-  if (id === undefined) return <p className="jog-hint">Tap a part to move it from here.</p>;
+  if (part === undefined) return <p className="jog-hint">Tap a part to move it from here.</p>;
 
-  const chips = CHIPS.filter((item) => {
-    if (item.id === 'focal:') return kind === 'thin';
-    if (item.id === 'thickness:') return kind === 'plate';
-    return item.id === 'part:' || kind !== 'stop';
-  });
-  const chosen = chips.includes(chip) ? chip : chips[0];
-  const handleId = `${chosen?.id}${id}${chosen?.end}`;
+  const chips = chipsOf(part);
+  const chosen = chips.find(({ label }) => label === chip) ?? chips[0];
+  const handleId = chosen?.handleId ?? '';
 
   const onMove = (event: PointerEvent) => {
     const { current } = from;
     if (!current) return;
     const along = event.clientX - current.x;
-    const vertical = chosen?.id === 'rim:';
+    const vertical = chosen?.upright ?? false;
     board()?.jog(handleId, vertical ? 0 : along, vertical ? -along : 0, snap);
   };
   const onEnd = (keep: boolean) => () => {
@@ -58,11 +73,11 @@ export function JogStrip({ board }: JogStripProps) {
       <fieldset className="jog-chips" aria-label="What the strip moves">
         {chips.map((item) => (
           <button
-            key={item.id}
+            key={item.handleId}
             type="button"
             className="jog-chip"
             aria-pressed={item === chosen}
-            onClick={() => setChip(item)}
+            onClick={() => setChip(item.label)}
           >
             {item.label}
           </button>

@@ -51,7 +51,7 @@ const FAMILIES: Readonly<Record<EntryUnit, Family>> = {
 };
 
 const LONGEST_ENTRY = 120;
-const INFINITE = /^[+]?(∞|inf|infinity|infinite)$/i;
+const INFINITE = /^[+]?(∞|inf|infinity|infinite|flat)$/i;
 
 /** A number of `unit` in the base unit of its family. */
 export const toBase = (amount: number, unit: EntryUnit): number => times(amount, factorOf(unit));

@@ -11,6 +11,12 @@ import { shapeFactorOf } from './bending.ts';
 import { changeGaps } from './remake.ts';
 import { thinEquivalent } from './thinEquivalent.ts';
 
+/** A sketch with a part bent, and by how much the gap in front of it became longer so that its principal planes stayed (mm). */
+export interface Bent {
+  readonly sketch: Sketch;
+  readonly frontByMm: number;
+}
+
 /**
  * Bends glass at constant power: its first surface takes the given curvature (1/mm), cemented surfaces are bent along by as much, and the
  * last is solved for at the real thickness so that 1/power stays exactly. The gaps beside it give by what its principal planes move, at
@@ -20,7 +26,7 @@ export function bendGlass(
   sketch: Sketch,
   partId: PartId,
   frontCurvaturePerMm: number,
-): Outcome<Sketch, Unsolvable> {
+): Outcome<Bent, Unsolvable> {
   const found = glassIn(sketch, partId);
   if (!found) return none('no such part');
   const { index, glass, train } = found;
@@ -28,18 +34,13 @@ export function bendGlass(
   if (!before.ok) return none('no power');
   const curvatures = bentTo(train, frontCurvaturePerMm, 1 / before.value.focalLengthMm);
   if (!curvatures) return none('no such radii');
-  if (frontCurvaturePerMm === train.curvature[0]) return some(sketch);
+  if (frontCurvaturePerMm === train.curvature[0]) return some({ sketch, frontByMm: 0 });
   const after = thinEquivalent({ ...train, curvature: curvatures });
   if (!after.ok) return none('out of range');
   const parts = sketch.parts.with(index, withCurvatures(glass, curvatures));
-  return some(
-    changeGaps(
-      { ...sketch, parts },
-      index,
-      before.value.principalFrontMm - after.value.principalFrontMm,
-      after.value.principalRearMm - before.value.principalRearMm,
-    ),
-  );
+  const frontByMm = before.value.principalFrontMm - after.value.principalFrontMm;
+  const behindByMm = after.value.principalRearMm - before.value.principalRearMm;
+  return some({ sketch: changeGaps({ ...sketch, parts }, index, frontByMm, behindByMm), frontByMm });
 }
 
 /**
@@ -50,7 +51,7 @@ export function bendGlassToShape(
   sketch: Sketch,
   partId: PartId,
   shapeFactor: number,
-): Outcome<Sketch, Unsolvable> {
+): Outcome<Bent, Unsolvable> {
   const found = glassIn(sketch, partId);
   if (!found) return none('no such part');
   const before = thinEquivalent(found.train);

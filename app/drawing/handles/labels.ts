@@ -45,4 +45,13 @@ export function labelOf(handleId: string): string | null {
   return of !== undefined && PART_GRIPS.has(kind ?? '') ? `part:${of}` : null;
 }
 
-const PART_GRIPS: ReadonlySet<string> = new Set(['part', 'label', 'focal', 'rim', 'thickness', 'tick']);
+const PART_GRIPS: ReadonlySet<string> = new Set([
+  'part',
+  'label',
+  'focal',
+  'rim',
+  'thickness',
+  'radius',
+  'bend',
+  'tick',
+]);

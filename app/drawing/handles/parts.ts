@@ -14,20 +14,27 @@ import { selectedParts } from '../../store/viewStore.ts';
 import { catchesFor } from '../catches.ts';
 import type { Handle, LayoutDrag, Move } from '../handle.ts';
 import { BETWEEN, plainMove } from '../handle.ts';
-import { FOCAL_STEM_PX, ownFocalPoints } from '../layers/marks.ts';
+import { FOCAL_STEM_PX, ownFocalPoints, VERTEX_RISE_PX } from '../layers/marks.ts';
 import type { ScenePart } from '../scene.ts';
 import type { Sight } from '../sight.ts';
+import { glassHandles, sharedSemi } from './glass.ts';
 
 /** Lengths that a drag may not shrink below, mm. */
 const LEAST_MM = 0.01;
-const VERTEX_RISE_PX = 14;
+/** Under deep zoom glass fills the sheet, which must still be panned. */
+const MOST_HALF_PX = 40;
 
 /** The grips of all parts: each can be moved; a selected one also shows its focal points, rims and thickness. */
 export function partHandles(sight: Sight): readonly Handle[] {
   return sight.scene.parts.flatMap((part) => [
     moveHandle(sight, part),
     ...(part.selected
-      ? [...focalHandles(sight, part), ...rimHandles(sight, part), ...thicknessHandle(sight, part)]
+      ? [
+          ...focalHandles(sight, part),
+          ...rimHandles(sight, part),
+          ...thicknessHandle(sight, part),
+          ...glassHandles(sight, part),
+        ]
       : []),
   ]);
 }
@@ -93,12 +100,15 @@ function moveHandle(sight: Sight, part: ScenePart): Handle {
   const top = yOf(view, part.semiMm);
   const bottom = yOf(view, -part.semiMm);
   const middle = (part.frontMm + part.rearMm) / 2;
+  const halfPx = xOf(view, part.rearMm) - xOf(view, middle);
   return {
     id: `part:${part.part.id}`,
     order: 6,
     xPx: xOf(view, middle),
     yPx: yOf(view, 0),
     line: { topPx: top, bottomPx: bottom },
+    // Glass can be taken anywhere on it.
+    ...(part.body && { halfWidthPx: Math.min(MOST_HALF_PX, halfPx) }),
     cursor: 'ew-resize',
     label: `${name}, position`,
     slider: {
@@ -158,11 +168,10 @@ function focalHandles(sight: Sight, drawn: ScenePart): readonly Handle[] {
   }));
 }
 
-function rimHandles(
-  sight: Sight,
-  { part, index, frontMm, rearMm, semiMm, carriesStop }: ScenePart,
-): readonly Handle[] {
-  if (part.kind === 'stop' && carriesStop) return [];
+function rimHandles(sight: Sight, drawn: ScenePart): readonly Handle[] {
+  const { part, index, frontMm, rearMm, carriesStop } = drawn;
+  const semiMm = sharedSemi(drawn);
+  if ((part.kind === 'stop' && carriesStop) || semiMm === null) return [];
   const { view } = sight;
   const set =
     (value: number): Edit =>

@@ -1,3 +1,4 @@
+import type { Body } from '../../../engine/index.ts';
 import type { Pen } from '../../board/pen.ts';
 import { segment } from '../../board/pen.ts';
 import type { Viewport } from '../../board/viewport.ts';
@@ -12,6 +13,8 @@ const PUPIL_BAR_PX = 6;
 const EDGE_PX = 12;
 /** How far below the axis a selected part's own focal points stand on their stems. */
 export const FOCAL_STEM_PX = 14;
+/** How far above the axis the grips of thicknesses stand. */
+export const VERTEX_RISE_PX = 14;
 
 /** Intermediate images, and the pupils, principal planes and focal points that are switched on. */
 export function marksLayer(pen: Pen, scene: Scene, view: Viewport): void {
@@ -29,7 +32,10 @@ export function marksLayer(pen: Pen, scene: Scene, view: Viewport): void {
     pen.polyline([x - ARROW_PX, tip + back, x, tip, x + ARROW_PX, tip + back], 'image');
   }
   for (const plane of scene.planes) drawPlane(pen, plane, scene.tallestMm, view);
-  for (const part of scene.parts) drawOwnFocalPoints(pen, part, view);
+  for (const part of scene.parts) {
+    drawOwnFocalPoints(pen, part, view);
+    if (part.selected && part.body) drawGripStems(pen, part, part.body, view);
+  }
 }
 
 function mirrored(line: Float64Array): Float64Array {
@@ -50,6 +56,17 @@ function drawPlane(pen: Pen, plane: ScenePlane, tallestMm: number, view: Viewpor
     const y = yOf(view, side * (plane.semiMm ?? 0));
     segment(pen, x - PUPIL_BAR_PX, y, x + PUPIL_BAR_PX, y, 'pupil');
     segment(pen, x, y, x, y - side * 12, 'pupil');
+  }
+}
+
+/** Stems from the axis to the grips of selected glass: bending below it, thicknesses above. */
+function drawGripStems(pen: Pen, { frontMm, rearMm }: ScenePart, { faces }: Body, view: Viewport): void {
+  const y = yOf(view, 0);
+  const middle = xOf(view, (frontMm + rearMm) / 2);
+  segment(pen, middle, y, middle, y + FOCAL_STEM_PX, 'leader');
+  for (const { vertexMm } of faces.slice(1)) {
+    const x = xOf(view, frontMm + vertexMm);
+    segment(pen, x, y, x, y - VERTEX_RISE_PX, 'leader');
   }
 }
 
