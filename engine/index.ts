@@ -22,8 +22,13 @@ export { type PupilMap, pupilMapOf } from './exact/pupilMap.ts';
 export { airyRadius, type SpotSize, spotSize } from './exact/spots.ts';
 export { type Trust, trust } from './exact/trust.ts';
 export type { ExactSetup, Lost, SetupOutcome } from './exact/types.ts';
-export { materials } from './media/materials.ts';
-export { indexOf, type MainLines, mediumName } from './media/medium.ts';
+export { filterMaterials, kindOf, type MapDirection, materialNamed, neighbour } from './media/chooser.ts';
+export { CODE_MODEL } from './media/code.ts';
+export { type DispersionFormula, FORMULA_KINDS } from './media/dispersion.ts';
+export { codeFault, formulaFaults } from './media/faults.ts';
+export { spectralLines } from './media/lines.ts';
+export { type Material, materialOf, materials } from './media/materials.ts';
+export { indexOf, type MainLines, mediumName, type Nominal, nominal, rangeOf } from './media/medium.ts';
 export { type Fault, none, type Outcome, some } from './outcome.ts';
 export { type Absence, type Quantity, sentenceOf } from './paraxial/absence.ts';
 export { type Analysis, analyse } from './paraxial/analyse.ts';
@@ -107,6 +112,7 @@ export { scaleParts, scaleSketch, scaleToFocalLength } from './sketch/edits/scal
 export { dropStop, releaseStop, rideStop, setStop } from './sketch/edits/stop.ts';
 export { setNotes, setTitle } from './sketch/edits/text.ts';
 export { writeSketch } from './sketch/file.ts';
+export { weightedLines } from './sketch/lines.ts';
 export { type Parsed, parseSketch } from './sketch/parse.ts';
 export type { Role } from './sketch/prescription/columns.ts';
 export {

@@ -39,11 +39,12 @@ export function sheetScale(reading: Reading): string {
     : `not to a drawing scale; heights ×${heights}`;
 }
 
-const withoutHand = ({ sketch, setting, view, analysis, warnings }: Reading): Reading => ({
+const withoutHand = ({ sketch, setting, view, analysis, exact, warnings }: Reading): Reading => ({
   sketch,
   setting,
   view: { ...view, selection: [], typing: null },
   analysis,
+  exact,
   warnings,
 });
 

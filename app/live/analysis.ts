@@ -1,8 +1,8 @@
 import type { Analysis, Setting, Sketch, Warning } from '../../engine/index.ts';
-import { analyse, warningsOf } from '../../engine/index.ts';
+import { analyse, exactSetupOf, lostFieldWarnings, warningsOf } from '../../engine/index.ts';
 
 /** `compute` of a sketch at a setting, remembered by the identity of the sketch. */
-function remembering<T>(compute: (sketch: Sketch, setting: Setting) => T) {
+export function remembering<T>(compute: (sketch: Sketch, setting: Setting) => T) {
   const remembered = new WeakMap<Sketch, Map<string, T>>();
   return (sketch: Sketch, setting: Setting): T => {
     const settings = remembered.get(sketch) ?? new Map<string, T>();
@@ -24,5 +24,12 @@ export const analysisOf: (sketch: Sketch, setting: Setting) => Analysis = rememb
 
 /** What a person should know about a sketch at a setting, what cannot be built first; remembered likewise. */
 export const warningsAt: (sketch: Sketch, setting: Setting) => readonly Warning[] = remembering(
-  (sketch, setting) => warningsOf(sketch, setting, analysisOf(sketch, setting)),
+  (sketch, setting) => {
+    const analysis = analysisOf(sketch, setting);
+    const setup = exactSetupOf(sketch, setting, analysis);
+    return [
+      ...warningsOf(sketch, setting, analysis),
+      ...(setup.ok ? lostFieldWarnings(sketch, setting.at, setup.value) : []),
+    ];
+  },
 );

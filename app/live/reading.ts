@@ -4,6 +4,7 @@ import { sketchStore } from '../store/sketchStore.ts';
 import type { View } from '../store/viewStore.ts';
 import { settingIn, viewStore } from '../store/viewStore.ts';
 import { analysisOf, warningsAt } from './analysis.ts';
+import { type Exact, exactOf } from './exact.ts';
 import { frameLoop } from './frame.ts';
 
 /** What everything on screen is read from. The analysis is worked out when first asked for. */
@@ -12,6 +13,7 @@ export interface Reading {
   readonly view: View;
   readonly setting: Setting;
   readonly analysis: Analysis;
+  readonly exact: Exact;
   readonly warnings: readonly Warning[];
 }
 
@@ -29,6 +31,9 @@ export function currentReading(): Reading {
     setting,
     get analysis() {
       return analysisOf(sketch, setting);
+    },
+    get exact() {
+      return exactOf(sketch, setting);
     },
     get warnings() {
       return warningsAt(sketch, setting);

@@ -3,7 +3,7 @@ import type { PositionId, Sketch } from '../sketch/types.ts';
 import { partName } from '../sketch/words.ts';
 import type { Train } from '../train/types.ts';
 import { traceBatch } from './kernel.ts';
-import { aimRays, pupilMapOf } from './pupilMap.ts';
+import { mapRays, pupilMapOf } from './pupilMap.ts';
 import { CODE, lostOf, STRIDE } from './rayBuffer.ts';
 import type { ExactSetup, Lost } from './types.ts';
 
@@ -32,7 +32,7 @@ export function lostFields(setup: ExactSetup, fractions: readonly number[]): rea
   return fractions.flatMap((fraction) => {
     const map = pupilMapOf(setup, 0, fraction);
     if (map.lost) return [{ fraction, lost: map.lost }];
-    aimRays(map, TRIED, TRIED_COUNT, rays);
+    mapRays(map, TRIED, TRIED_COUNT, rays);
     traceBatch(setup.lines[0].train, rays, TRIED_COUNT, true);
     for (let i = 0; i < TRIED_COUNT; i++) if (rays[i * STRIDE + CODE] === 0) return [];
     const lost = lostOf(rays[CODE]!);

@@ -1,4 +1,5 @@
 import { analysisOf, warningsAt } from '../../app/live/analysis.ts';
+import { exactOf } from '../../app/live/exact.ts';
 import type { Reading } from '../../app/live/reading.ts';
 import { settingIn, type View, viewStore } from '../../app/store/viewStore.ts';
 import type { Sketch } from '../../engine/index.ts';
@@ -12,6 +13,9 @@ export function readingOf(sketch: Sketch, change: Partial<View> = {}): Reading {
     view,
     setting,
     analysis: analysisOf(sketch, setting),
+    get exact() {
+      return exactOf(sketch, setting);
+    },
     warnings: warningsAt(sketch, setting),
   };
 }

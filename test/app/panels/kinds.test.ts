@@ -6,19 +6,14 @@ import {
   FIELD_CHOICES,
   fieldOfKind,
 } from '../../../app/panels/sketch/apertureKinds.ts';
-import { viewStore } from '../../../app/store/viewStore.ts';
 import type { Sketch } from '../../../engine/index.ts';
 import { analyse, faultsOf, setAperture, setField, settingAt } from '../../../engine/index.ts';
 import { inspectionZoom, MIDDLE, NARROW, WIDE } from '../../engine/demo.ts';
+import { readingOf as reading } from '../reading.ts';
 import { empty } from './sketches.ts';
 
-const readingOf = (sketch: Sketch, at = sketch.positions[0]?.id ?? WIDE): Reading => ({
-  sketch,
-  view: viewStore.getState(),
-  setting: settingAt(at),
-  analysis: analyse(sketch, settingAt(at)),
-  warnings: [],
-});
+const readingOf = (sketch: Sketch, at = sketch.positions[0]?.id ?? WIDE): Reading =>
+  reading(sketch, { setting: settingAt(at) });
 
 describe('another kind of aperture', () => {
   const sketch = inspectionZoom();
