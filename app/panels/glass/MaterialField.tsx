@@ -1,9 +1,16 @@
+import { lazy, Suspense, useId, useRef, useState } from 'react';
 import type { Edit, SolidMedium } from '../../../engine/index.ts';
-import { materials } from '../../../engine/index.ts';
+import { mediumName, nominal } from '../../../engine/index.ts';
 import type { Reading } from '../../live/reading.ts';
 import { useReadingNow } from '../../live/reading.ts';
-import { Select } from '../../ui/choices.tsx';
-import { tryEdit } from '../edit.ts';
+import { cancelEdit } from '../../store/sketchStore.ts';
+import { Field } from '../../ui/Field.tsx';
+import { formatNumber } from '../../ui/format.ts';
+import { tryEdit, tryPreview } from '../edit.ts';
+import { mainIndexWords } from './mediumWords.ts';
+import './glass.css';
+
+const Chooser = lazy(async () => ({ default: (await import('./Chooser.tsx')).Chooser }));
 
 /** What may stand there instead of a glass: air in a space, nothing where a thin part names no glass. */
 type Instead = 'air' | null;
@@ -21,15 +28,70 @@ interface MaterialFieldProps<Other extends Instead> {
 /** A medium as a row of a card: its name, index and Abbe number, and the way to choose another. */
 export function MaterialField<Other extends Instead = never>(props: MaterialFieldProps<Other>) {
   const { label, read, edit, instead } = props;
+  const id = useId();
+  const opener = useRef<HTMLButtonElement>(null);
   const medium = useReadingNow(read);
-  const catalogue = materials.map(({ id, name }) => ({ value: id, label: name }));
-  const other = instead ? [{ value: '', label: instead.words }] : [];
+  const index = useReadingNow((reading) => figuresWords(read(reading), reading));
+  /** The medium as it stood when the chooser opened. */
+  const [opened, setOpened] = useState<{ readonly medium: SolidMedium | null } | null>(null);
+
+  const close = (focusBack: boolean) => {
+    setOpened(null);
+    if (focusBack) opener.current?.focus();
+  };
+  const preview = (next: SolidMedium): string | null => {
+    const refused = tryPreview(edit(next));
+    // The last good preview would be another glass.
+    if (refused !== null) cancelEdit();
+    return refused;
+  };
+  const choose = (next: SolidMedium | 'instead'): string | null => {
+    const refused = next === 'instead' ? instead && tryEdit(edit(instead.value)) : tryEdit(edit(next));
+    if (!refused) close(true);
+    return refused ?? null;
+  };
+
   return (
-    <Select
-      label={label}
-      value={medium !== null && medium !== 'air' && 'material' in medium ? medium.material : ''}
-      choices={[...other, ...catalogue]}
-      onChoose={(id) => tryEdit(id === '' && instead ? edit(instead.value) : edit({ material: id }))}
-    />
+    <Field id={id} label={label}>
+      <button
+        ref={opener}
+        id={id}
+        type="button"
+        className="field-input material-button"
+        aria-labelledby={`${id}-label ${id}`}
+        aria-haspopup="dialog"
+        aria-expanded={opened !== null}
+        onClick={() => {
+          if (opened) cancelEdit();
+          setOpened(opened ? null : { medium: solid(medium) });
+        }}
+      >
+        {medium === null || medium === 'air' ? (instead?.words ?? 'none') : mediumName(medium)}
+        {index !== '' && <span className="material-figures">{index}</span>}
+      </button>
+      {opened && (
+        <Suspense>
+          <Chooser
+            label={label}
+            medium={opened.medium}
+            instead={instead?.words ?? null}
+            onPreview={preview}
+            onRestore={cancelEdit}
+            onChoose={choose}
+            onClose={close}
+          />
+        </Suspense>
+      )}
+    </Field>
   );
+}
+
+const solid = (medium: SolidMedium | Instead): SolidMedium | null => (medium === 'air' ? null : medium);
+
+/** Index in the main line and Abbe number; empty for air and where there is no glass. */
+function figuresWords(medium: SolidMedium | Instead, { sketch }: Reading): string {
+  if (medium === null || medium === 'air') return '';
+  const { vd } = nominal(medium);
+  const abbe = vd === null ? '' : `  V ${formatNumber(vd, 1)}`;
+  return mainIndexWords(medium, sketch) + abbe;
 }
