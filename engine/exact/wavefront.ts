@@ -47,22 +47,33 @@ export function referenceSphere(
   return radius.ok && radius.value === 0 ? none('pupil at the image') : some({ ...sphere, radiusMm: radius });
 }
 
-/**
- * How far along the light, in mm, the ray at place `at` runs from its foot, the point of it nearest to the image point, to the reference
- * sphere, less the same for a ray through the image point: (distance)²/(2R) in the main. NaN when the ray passes the sphere by. With a pupil at
- * infinity it is 0: the limit of long spheres, which needs no radius.
- */
-export function beyondFoot(rays: Float64Array, at: number, { yMm, zMm, radiusMm }: ReferenceSphere): number {
-  if (!radiusMm.ok) return 0;
+/** Square of the distance at which the ray at place `at` passes the image point, mm². */
+function missSquared(rays: Float64Array, at: number, { yMm, zMm }: ReferenceSphere): number {
   const [l, m, n] = [rays[at + L]!, rays[at + M]!, rays[at + N]!];
   const along = (zMm - rays[at + Z]!) / n;
   const x = rays[at + X]! + along * l;
   const y = rays[at + Y]! + along * m - yMm;
   const part = x * l + y * m;
-  const squared = Math.max(0, x * x + y * y - part * part);
+  return Math.max(0, x * x + y * y - part * part);
+}
+
+/**
+ * How far along the light, in mm, a ray that passes the image point at this distance squared runs from its foot, the point of it nearest to the
+ * image point, to the reference sphere, less the same for a ray through the image point: (distance)²/(2R) in the main. NaN when the ray passes the
+ * sphere by. With a pupil at infinity it is 0: the limit of long spheres, which needs no radius.
+ */
+function sphereBehindFoot(squared: number, { radiusMm }: ReferenceSphere): number {
+  if (!radiusMm.ok) return 0;
   const radius = Math.abs(radiusMm.value);
   return (Math.sign(radiusMm.value) * squared) / (radius + Math.sqrt(radius * radius - squared));
 }
+
+/** The same for the ray at place `at`. */
+export const beyondFoot = (rays: Float64Array, at: number, sphere: ReferenceSphere): number =>
+  sphereBehindFoot(missSquared(rays, at, sphere), sphere);
+
+/** Share of a distance squared below which the miss leaves its root all digits. */
+const SMALL_MISS = 1e-2;
 
 /**
  * Optical path in mm of the ray at place `at` up to the reference sphere, but for a length that all rays to this sphere share. The sphere is
@@ -74,11 +85,16 @@ export function pathToSphere(
   indexMagnitude: number,
   sphere: ReferenceSphere,
 ): number {
+  const [x, y, z] = [rays[at + X]!, rays[at + Y]! - sphere.yMm, rays[at + Z]! - sphere.zMm];
+  const squared = missSquared(rays, at, sphere);
+  const projected = rays[at + L]! * x + rays[at + M]! * y + rays[at + N]! * z;
+  const distanceSquared = x * x + y * y + z * z;
+  // The distance, where it is nearly that to the foot, holds more digits: a direction is of unit length but for its rounding.
   const pastFoot =
-    rays[at + L]! * rays[at + X]! +
-    rays[at + M]! * (rays[at + Y]! - sphere.yMm) +
-    rays[at + N]! * (rays[at + Z]! - sphere.zMm);
-  return rays[at + PATH]! + indexMagnitude * (beyondFoot(rays, at, sphere) - pastFoot);
+    squared < SMALL_MISS * distanceSquared
+      ? Math.sign(projected) * Math.sqrt(distanceSquared - squared)
+      : projected;
+  return rays[at + PATH]! + indexMagnitude * (sphereBehindFoot(squared, sphere) - pastFoot);
 }
 
 /**

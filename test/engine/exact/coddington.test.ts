@@ -7,8 +7,8 @@ import type { RayPath, Vector } from '../../../engine/exact/types.ts';
 import { buildTrain, type SurfaceSpec } from '../../../engine/train/build.ts';
 import type { Train } from '../../../engine/train/types.ts';
 import { layOut } from '../../reference/prescription.ts';
-import { between } from '../anyTrain.ts';
 import { given } from '../quantity.ts';
+import { between } from './anyRay.ts';
 
 interface ListedRay {
   readonly id: string;

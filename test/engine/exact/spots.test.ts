@@ -6,8 +6,8 @@ import { hexapolarGrid } from '../../../engine/exact/grids.ts';
 import { alone, emptyLanding, type Landing } from '../../../engine/exact/landing.ts';
 import { spotSize } from '../../../engine/exact/spots.ts';
 import { diffractionContrast } from '../../../engine/paraxial/sensor.ts';
-import { between } from '../anyTrain.ts';
 import { given } from '../quantity.ts';
+import { between } from './anyRay.ts';
 
 /** A few hundred roundings of the size of what was added. */
 const ROUNDING = 1e-12;
