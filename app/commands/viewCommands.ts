@@ -26,6 +26,15 @@ export function viewCommands({ fitView }: Services): CommandGroup {
       command('snap', 'Switch snapping on and off', ['Q'], () =>
         setView({ snap: !viewStore.getState().snap }),
       ),
+      command(
+        'equivalentGaps',
+        'Measure the gaps of glass from its vertices or its principal planes',
+        [],
+        () => {
+          const { shown } = viewStore.getState();
+          setView({ shown: { ...shown, equivalentGaps: !shown.equivalentGaps } });
+        },
+      ),
       command('help', 'Help', ['?'], () => setView({ sheet: 'help' })),
       command('escape', 'One step back: gesture, entry, sheet, selection', ['Escape'], stepBack),
     ],

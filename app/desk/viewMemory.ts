@@ -55,6 +55,7 @@ const fields = {
     pupils: flag,
     principalPlanes: flag,
     focalPoints: flag,
+    equivalentGaps: v.optional(flag, false),
     labels: flag,
   }),
   raysPerBundle: count(1, 99),

@@ -20,7 +20,7 @@ const FOLDED_PER_PX = 0.002;
 /** The ribbon's grips: the values (click types, a sideways drag scrubs) and the ticks, which are the parts. */
 export function ribbonHandles(plan: RibbonPlan, sight: Sight): readonly Handle[] {
   return [
-    ...plan.cells.map((cell) => valueHandle(cell, sight)),
+    ...plan.cells.map((cell) => (cell.kind === 'planes' ? planesHandle(cell) : valueHandle(cell, sight))),
     ...tickHandles(plan, sight),
     ...plan.cells.flatMap(splitHandle),
     ...trackHandle(plan),
@@ -79,12 +79,23 @@ function valueHandle(cell: PlacedCell, sight: Sight): Handle {
 
 function setterOf(cell: PlacedCell, { reading }: Sight): (value: number, other: boolean) => Edit {
   const { at } = reading.setting;
-  const { after } = cell;
+  const { after, beyondMm, filling } = cell;
   if (after === null)
-    return (value) => (sketch) => setObjectDistance(sketch, Number.isFinite(value) ? value : 'infinity', at);
-  if (cell.kind === 'thickness') return (value) => (sketch) => setThickness(sketch, after, value);
-  return (value, other) => (sketch) => setGap(sketch, after, value, at, other ? 'neighbours' : 'carry');
+    return (value) => (sketch) =>
+      setObjectDistance(sketch, Number.isFinite(value) ? value - beyondMm : 'infinity', at);
+  if (cell.kind === 'thickness') return (value) => (sketch) => setThickness(sketch, after, value, filling);
+  return (value, other) => (sketch) =>
+    setGap(sketch, after, value - beyondMm, at, other ? 'neighbours' : 'carry');
 }
+
+/** The distance between principal planes follows from the glass and says so. */
+const planesHandle = (cell: PlacedCell): Handle =>
+  readOnly(
+    `cell:${cell.id}`,
+    cell.label,
+    'The principal planes follow from the radii, the thickness and the glass.',
+    { xPx: cell.textXPx, yPx: cell.textYPx, line: null, halfWidthPx: cell.halfTextPx },
+  );
 
 /** The mark "= all": a click gives every position its own value. */
 function splitHandle(cell: PlacedCell): readonly Handle[] {

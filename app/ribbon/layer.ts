@@ -29,7 +29,7 @@ export function ribbonLayer(pen: Pen, plan: RibbonPlan, view: Viewport, hovered:
 function dimensionsOf(grip: string | null, cells: readonly PlacedCell[]): readonly string[] {
   const [kind = '', of = ''] = grip?.split(':') ?? [];
   if (kind === 'cell') return [(grip ?? '').slice('cell:'.length)];
-  if (kind === 'thickness') return [`thickness:${of}`];
+  if (kind === 'thickness') return [grip ?? ''];
   if (kind === 'object') return ['object'];
   if (kind === 'image') return cells.slice(-1).map(({ id }) => id);
   if (!MOVES_PART.has(kind)) return [];
@@ -56,7 +56,7 @@ function drawLine(pen: Pen, cell: PlacedCell, view: Viewport, hovered: boolean):
 function drawTexts(pen: Pen, cell: PlacedCell, hovered: boolean): void {
   const value: TextStyle = cell.bad
     ? 'value bad'
-    : cell.follows
+    : cell.follows || cell.kind === 'planes'
       ? 'value quiet'
       : hovered
         ? 'value strong'

@@ -202,7 +202,7 @@ function markOf(
   measure: MeasureText,
 ): PlacedText | null {
   const { cell } = draft;
-  const text = cell.follows ? 'follows focus' : cell.common ? '= all' : null;
+  const text = cell.kind === 'planes' ? 'HH′' : cell.follows ? 'follows focus' : cell.common ? '= all' : null;
   if (text === null) return null;
   const halfPx = measure(text, 'label quiet') / 2;
   const least = Math.min(draft.fromPx, draft.toPx) + halfPx + ASIDE_PX / 2;

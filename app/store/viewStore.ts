@@ -17,6 +17,8 @@ export interface Shown {
   readonly pupils: boolean;
   readonly principalPlanes: boolean;
   readonly focalPoints: boolean;
+  /** The ribbon measures glass between its principal planes, as the thin part that it stands for. */
+  readonly equivalentGaps: boolean;
   readonly labels: boolean;
 }
 
@@ -124,6 +126,7 @@ const start: View = {
     pupils: false,
     principalPlanes: false,
     focalPoints: false,
+    equivalentGaps: false,
     labels: true,
   },
   raysPerBundle: 5,

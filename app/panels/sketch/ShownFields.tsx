@@ -15,6 +15,7 @@ const SHOWN: readonly (readonly [keyof Shown, string])[] = [
   ['pupils', 'Pupils'],
   ['principalPlanes', 'Principal planes'],
   ['focalPoints', 'Focal points'],
+  ['equivalentGaps', 'Gaps of glass between its principal planes'],
   ['labels', 'Labels'],
 ];
 

@@ -26,6 +26,7 @@ export const ALL_SHOWN: View['shown'] = {
   pupils: true,
   principalPlanes: true,
   focalPoints: true,
+  equivalentGaps: false,
   labels: true,
 };
 
