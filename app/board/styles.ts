@@ -69,7 +69,10 @@ export type MarkStyle =
   | 'Airy disc'
   | 'glow'
   | 'paper'
-  | 'ink';
+  | 'ink'
+  | 'lost'
+  | 'drift'
+  | 'drift beyond';
 
 /** Looks of texts. */
 export type TextStyle =
@@ -241,6 +244,9 @@ const MARKS: Readonly<Record<Exclude<MarkStyle, RayStyle | CurveStyle>, MarkLook
   glow: line('glass edge', 5),
   paper: outlined(null, 'paper', 0),
   ink: outlined(null, 'ink', 0),
+  lost: line('bad', 1.6),
+  drift: crisp('ink', 1.6),
+  'drift beyond': crisp('bad', 2),
 };
 
 const TEXTS: Readonly<Record<TextStyle, TextLook>> = {

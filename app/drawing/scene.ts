@@ -1,6 +1,8 @@
 import type { Analysis, ParaxialRay, PartId, Sketch, Train, Warning } from '../../engine/index.ts';
 import { halfDiagonal, heightInSpace } from '../../engine/index.ts';
-import type { View } from '../store/viewStore.ts';
+import type { ExactView, View } from '../store/viewStore.ts';
+import type { ExactRays } from './exact/rays.ts';
+import { axialPupil, fieldPupils } from './pupilPoints.ts';
 import { faultsIn, partsOf, type SceneFault, type ScenePart } from './sceneParts.ts';
 import { type Stage, stageOf } from './stage.ts';
 
@@ -13,6 +15,12 @@ export type { ScenePart } from './sceneParts.ts';
 export interface SceneBundle {
   readonly share: number;
   readonly rays: readonly RayLine[];
+}
+
+/** Exact rays and how they are shown; `rays` is null when none are asked for, or there are none. */
+export interface SceneExact {
+  readonly shown: ExactView;
+  readonly rays: ExactRays | null;
 }
 
 /** An image between two parts (or in front of all of them), as arrow from the axis to the full field's height. */
@@ -52,6 +60,8 @@ export interface Scene {
   readonly chief: RayLine | null;
   readonly axial: readonly RayLine[];
   readonly bundles: readonly SceneBundle[];
+  /** What exact rays do beside these; null where both are the same, in a layout of ideal thin parts. */
+  readonly exact: SceneExact | null;
   readonly images: readonly SceneImage[];
   readonly planes: readonly ScenePlane[];
   /** Height of the largest field's object point; null at infinity. */
@@ -71,6 +81,7 @@ export function sceneOf(
   analysis: Analysis,
   view: View,
   warnings: readonly Warning[] = [],
+  exact: SceneExact | null = null,
 ): Scene {
   const stage = stageOf(sketch, analysis);
   const { train } = analysis;
@@ -93,8 +104,18 @@ export function sceneOf(
     stop,
     marginal: marginal ? [line(0, 1), line(0, -1)] : [],
     chief: chief ? line(1, 0) : null,
-    axial: marginal && view.shown.bundles ? axialOf(analysis, view, line) : [],
-    bundles: marginal && chief && view.shown.bundles ? bundlesOf(analysis, view, line) : [],
+    axial:
+      marginal && view.shown.bundles
+        ? axialPupil(analysis, view.raysPerBundle).map((point) => line(0, point))
+        : [],
+    bundles:
+      marginal && chief && view.shown.bundles
+        ? fieldPupils(analysis, view.raysPerBundle).map(({ share, points }) => ({
+            share,
+            rays: points.map((point) => line(share, point)),
+          }))
+        : [],
+    exact,
     images: view.shown.images && marginal ? imagesOf(sketch, analysis, stage, marginal, chief) : [],
     planes: planesOf(analysis, view),
     objectHeightMm: stage.objectMm !== null && chief ? heightInSpace(train, chief, 0, stage.objectMm) : null,
@@ -150,38 +171,6 @@ function rayLine(
   points[2 * train.count + 2] = stage.endMm;
   points[2 * train.count + 3] = combine((ray) => heightInSpace(train, ray, train.count, stage.endMm));
   return points;
-}
-
-/** `count` pupil points from `low` to `high`, ends included. */
-function pupilSteps(count: number, low: number, high: number): number[] {
-  if (count <= 1) return [(low + high) / 2];
-  return Array.from({ length: count }, (_, i) => low + ((high - low) * i) / (count - 1));
-}
-
-/** The bundle of the axis point, as far as rims are known to let it through. */
-function axialOf(
-  { vignetting }: Analysis,
-  view: View,
-  line: (share: number, pupil: number) => RayLine,
-): RayLine[] {
-  const onAxis = vignetting.ok ? vignetting.value.find(({ fraction }) => fraction === 0) : undefined;
-  const limits = onAxis ? onAxis.meridian : { lower: -1, upper: 1 };
-  return limits ? pupilSteps(view.raysPerBundle, limits.lower, limits.upper).map((p) => line(0, p)) : [];
-}
-
-function bundlesOf(
-  { vignetting }: Analysis,
-  view: View,
-  line: (share: number, pupil: number) => RayLine,
-): SceneBundle[] {
-  if (!vignetting.ok) return [];
-  const bundles: SceneBundle[] = [];
-  for (const { fraction, meridian } of vignetting.value) {
-    if (fraction === 0 || meridian === null) continue;
-    const rays = pupilSteps(view.raysPerBundle, meridian.lower, meridian.upper).map((p) => line(fraction, p));
-    bundles.push({ share: fraction, rays });
-  }
-  return bundles.sort((a, b) => Math.abs(a.share) - Math.abs(b.share));
 }
 
 function imagesOf(

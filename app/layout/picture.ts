@@ -1,5 +1,6 @@
 import type { MeasureText } from '../board/measure.ts';
 import type { Viewport } from '../board/viewport.ts';
+import { exactRaysOf } from '../drawing/exact/rays.ts';
 import type { Handle } from '../drawing/handle.ts';
 import { endHandles } from '../drawing/handles/ends.ts';
 import { markHandles } from '../drawing/handles/marks.ts';
@@ -24,9 +25,13 @@ export interface Picture {
   readonly sight: Sight;
 }
 
-/** The scene of a reading. */
-export const sceneOfReading = ({ sketch, analysis, view, warnings }: Reading): Scene =>
-  sceneOf(sketch, analysis, view, warnings);
+/** The scene of a reading, with its exact rays as far as they are shown. */
+export function sceneOfReading(reading: Reading): Scene {
+  const { sketch, analysis, view, warnings, exact } = reading;
+  const { exact: asked, whiskers, largest } = view.exact;
+  const rays = exact.differs && (asked || whiskers || largest) ? exactRaysOf(reading) : null;
+  return sceneOf(sketch, analysis, view, warnings, exact.differs ? { shown: view.exact, rays } : null);
+}
 
 /** The picture of a reading in a view; `scene` may be passed when it is at hand. */
 export function pictureOf(
