@@ -1,9 +1,9 @@
 import { codeFault, formulaFaults, materialFault } from '../media/faults.ts';
-import { mediumName, rangeOf } from '../media/medium.ts';
+import { indexOf, mediumName, rangeOf } from '../media/medium.ts';
 import type { Fault } from '../outcome.ts';
 import { numberFault, textFault } from './faults.ts';
 import { keeps, LIMITS, LONGEST_TEXT } from './limits.ts';
-import { weightedLines } from './lines.ts';
+import { wavelengthOf } from './lines.ts';
 import type { Line, Medium, Sketch, SolidMedium } from './types.ts';
 import { quantityText } from './words.ts';
 
@@ -49,19 +49,24 @@ const LINE_WORDS: Readonly<Record<Line, { readonly path: string; readonly words:
   fifth: { path: 'lines.more[1].wavelengthNm', words: 'fifth wavelength' },
 };
 
-/** A fault for each line of the sketch that lies where the medium has no index. */
-export function rangeFaults(faults: Fault[], { lines, air }: Sketch, medium: Medium, owner: string): void {
-  const range = rangeOf(medium, air);
-  if (range === null) return;
-  const [low, high] = range;
-  if (Math.min(lines.shortNm, lines.mainNm) >= low && Math.max(lines.longNm, lines.mainNm) <= high)
-    if (lines.more.every(({ wavelengthNm }) => wavelengthNm >= low && wavelengthNm <= high)) return;
-  for (const { line, wavelengthNm } of weightedLines(lines)) {
-    if (wavelengthNm >= low && wavelengthNm <= high) continue;
+/** A fault for each line of the sketch in which the medium has no index. */
+export function rangeFaults(faults: Fault[], sketch: Sketch, medium: Medium, owner: string): void {
+  const { lines, air } = sketch;
+  for (let at = 0; at < 3 + lines.more.length; at++) {
+    const line = LINES_IN_ORDER[at] ?? 'main';
+    const wavelengthNm = wavelengthOf(lines, line);
+    if (indexOf(medium, wavelengthNm, lines, air).ok) continue;
     const { path, words } = LINE_WORDS[line];
+    const [low, high] = rangeOf(medium, air) ?? [Number.NaN, Number.NaN];
+    const inside = !(wavelengthNm < low || wavelengthNm > high);
+    const allowed = inside
+      ? `a wavelength at which ${mediumName(medium)} in ${owner} has an index above 0`
+      : `between ${quantityText(low, '')} and ${quantityText(high, 'nm')}, where the index of ${mediumName(medium)} in ${owner} is known`;
     faults.push({
       path,
-      sentence: `The ${words} is ${quantityText(wavelengthNm, 'nm')}; it must be between ${quantityText(low, '')} and ${quantityText(high, 'nm')}, where the index of ${mediumName(medium)} in ${owner} is known.`,
+      sentence: `The ${words} is ${quantityText(wavelengthNm, 'nm')}; it must be ${allowed}.`,
     });
   }
 }
+
+const LINES_IN_ORDER: readonly Line[] = ['main', 'short', 'long', 'fourth', 'fifth'];

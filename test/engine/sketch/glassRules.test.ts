@@ -113,6 +113,17 @@ describe('a line outside the range of a medium', () => {
     expect(faultsOf(lit({ longNm: 1500 }, wet)).map(({ path }) => path)).toEqual(['lines.longNm']);
   });
 
+  test('is refused too where a steep fixed index has fallen below 0', () => {
+    const steep = filled({ name: 'odd', index: 1.5, abbeNumber: 0.1 });
+    expect(faultsOf(steep)).toEqual([
+      {
+        path: 'lines.longNm',
+        sentence:
+          'The long wavelength is 656.2725 nm; it must be a wavelength at which odd in “front lens” has an index above 0.',
+      },
+    ]);
+  });
+
   test('of standard air counts too', () => {
     const vacuum = lit({ mainNm: 150, shortNm: 140 }, { ...emptySketch(), parts: [newThin(50)] });
     expect(faultsOf(vacuum)).toEqual([]);
