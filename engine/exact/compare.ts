@@ -35,7 +35,11 @@ export interface Comparison {
   readonly workingFNumber: Compared;
 }
 
-/** What exact marginal and chief rays say in place of the first order. An exact ray that is lost makes its quantities absent: 'ray lost'. */
+/**
+ * What exact marginal and chief rays say in place of the first order. Sines stand where the sine condition has them, so an ideal thin part, which keeps
+ * tangents, differs in focal length and f-number. An exact ray that is lost makes its quantities absent:
+ * 'ray lost'.
+ */
 export function compare(setup: ExactSetup): Comparison {
   const { train } = setup.lines[0];
   const { count } = train;

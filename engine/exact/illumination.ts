@@ -7,11 +7,24 @@ import { pupilOutline } from './pupilOutline.ts';
 import { CODE, L, M, STRIDE } from './rayBuffer.ts';
 import type { ExactSetup } from './types.ts';
 
-/** Points of half the pupil's edge: of a polygon of 64 sides the axis and the field lose the same share. */
-const STEPS = 32;
-/** Halvings in the search for an edge that a rim cuts: to 1/1000 of the stop's radius, or finer than any plot. */
-const COARSE = 10;
-const FINE = 24;
+/**
+ * How finely the pupil's edge is followed: sides of half the polygon (the axis and an open field lose the same share to it; where a rim cuts through
+ * the middle it may lose 1/steps), and halvings in the search for an edge that a rim cuts.
+ */
+interface Fineness {
+  readonly steps: number;
+  readonly halvings: number;
+  readonly wholeStop: Float64Array;
+}
+
+/** Half the edge of the whole stop, from the top over positive x to the bottom. */
+const edgeOf = (steps: number): Float64Array =>
+  Float64Array.from({ length: 2 * (steps + 1) }, (_, i) => {
+    const angle = (Math.PI * Math.floor(i / 2)) / steps;
+    return i % 2 === 0 ? Math.sin(angle) : Math.cos(angle);
+  });
+const COARSE: Fineness = { steps: 32, halvings: 10, wholeStop: edgeOf(32) };
+const FINE: Fineness = { steps: 96, halvings: 24, wholeStop: edgeOf(96) };
 
 /**
  * Relative illumination over the share of the field, in the main line: the projected solid angle ∬ dL dM of the light that arrives at the image, over that
@@ -30,29 +43,24 @@ export function illumination(
   return some(curveOf(0, fractions.slice(), values));
 }
 
-/** Half the edge of the whole stop, from the top over positive x to the bottom. */
-const WHOLE_STOP = Float64Array.from({ length: 2 * (STEPS + 1) }, (_, i) => {
-  const angle = (Math.PI * Math.floor(i / 2)) / STEPS;
-  return i % 2 === 0 ? Math.sin(angle) : Math.cos(angle);
-});
-
 /** Area that the directions of the pupil's edge enclose in (L, M) behind the last surface. */
 function solidAngle(map: PupilMap, clip: boolean, fine: boolean): number {
   if (map.lost) return 0;
-  const rays = new Float64Array((STEPS + 1) * STRIDE);
+  const { steps, halvings, wholeStop } = fine ? FINE : COARSE;
+  const rays = new Float64Array((steps + 1) * STRIDE);
   const start = fine ? aimRays : mapRays;
-  start(map, WHOLE_STOP, STEPS + 1, rays);
-  traceBatch(map.sight.train, rays, STEPS + 1, clip);
+  start(map, wholeStop, steps + 1, rays);
+  traceBatch(map.sight.train, rays, steps + 1, clip);
   if (!allThrough(rays)) {
     if (!clip) return Number.NaN;
-    const outline = pupilOutline(map, fine, STEPS, fine ? FINE : COARSE);
+    const outline = pupilOutline(map, fine, steps, halvings);
     if (!outline.ok) return 0;
-    start(map, outline.value.points, STEPS + 1, rays);
-    traceBatch(map.sight.train, rays, STEPS + 1, false);
+    start(map, outline.value.points, steps + 1, rays);
+    traceBatch(map.sight.train, rays, steps + 1, false);
     if (!allThrough(rays)) return Number.NaN;
   }
   let area = 0;
-  for (let at = 0; at < STEPS * STRIDE; at += STRIDE) {
+  for (let at = 0; at < steps * STRIDE; at += STRIDE) {
     const next = at + STRIDE;
     area += rays[at + L]! * rays[next + M]! - rays[next + L]! * rays[at + M]!;
   }
