@@ -68,13 +68,13 @@ function addSurface(terms: Terms, train: Train, k: number, marginal: ParaxialRay
   const A = marginal.nu[k]! + n * c * y;
   const AChief = chief.nu[k]! + n * c * yChief;
   const H = marginal.nu[k]! * yChief - chief.nu[k]! * y;
-  const slopeStep = marginal.nu[k + 1]! / (nAfter * nAfter) - marginal.nu[k]! / (n * n);
   const inverseStep = (n - nAfter) / (n * nAfter);
-  const inverseSquareStep = inverseStep * (1 / n + 1 / nAfter);
+  const inverseSum = 1 / n + 1 / nAfter;
+  // Δ(u/n) = AΔ(1/n²) − ycΔ(1/n): nothing is lost where the indices hardly differ.
+  const slopeStep = inverseStep * (A * inverseSum - y * c);
   // H = Aȳ − Āy turns (Ā/A)(S_III + S_IV) into a form that survives A = 0.
   const distortion =
-    AChief *
-    (yChief * c * inverseStep * (2 * AChief * y - A * yChief) - AChief * AChief * y * inverseSquareStep);
+    AChief * inverseStep * (yChief * c * (2 * AChief * y - A * yChief) - AChief * AChief * y * inverseSum);
   // Departure from the vertex sphere.
   const fourth =
     (train.conic[k]! * c * c * c) / 8 +

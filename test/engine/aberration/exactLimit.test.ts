@@ -8,8 +8,8 @@ import { stopOf } from '../../../engine/paraxial/stop.ts';
 import { paraxialRay } from '../../../engine/paraxial/trace.ts';
 import { buildTrain, type SurfaceSpec } from '../../../engine/train/build.ts';
 import type { Train } from '../../../engine/train/types.ts';
-import { between } from '../anyTrain.ts';
 import { given } from '../quantity.ts';
+import { uniform } from '../uniform.ts';
 
 /** Apertures and fields are shrunk together by these; two halvings take the fifth and the seventh order out of the third. */
 const SHRINK = [0.06, 0.03, 0.015] as const;
@@ -30,12 +30,12 @@ const anySystem = (): fc.Arbitrary<readonly SurfaceSpec[]> =>
   fc
     .array(
       fc.record({
-        curvaturePerMm: between(-0.02, 0.02),
-        conic: fc.oneof(fc.constant(0), between(-3, 1)),
-        fourth: fc.oneof(fc.constant(0), between(-1, 1)),
+        curvaturePerMm: uniform(-0.02, 0.02),
+        conic: fc.oneof(fc.constant(0), uniform(-3, 1)),
+        fourth: fc.oneof(fc.constant(0), uniform(-1, 1)),
         mirror: fc.boolean().chain((one) => (one ? fc.boolean() : fc.constant(false))),
-        size: between(1.3, 1.9),
-        lengthMm: between(0.5, 12),
+        size: uniform(1.3, 1.9),
+        lengthMm: uniform(0.5, 12),
       }),
       { minLength: 1, maxLength: 6 },
     )
@@ -51,10 +51,10 @@ const anySystem = (): fc.Arbitrary<readonly SurfaceSpec[]> =>
 
 const anyLight = (): fc.Arbitrary<Light> =>
   fc.record({
-    y: between(2, 5),
-    u: fc.oneof(fc.constant(0), between(-0.1, 0.1)),
-    yChief: between(-4, 4),
-    uChief: between(-0.25, 0.25),
+    y: uniform(2, 5),
+    u: fc.oneof(fc.constant(0), uniform(-0.1, 0.1)),
+    yChief: uniform(-4, 4),
+    uChief: uniform(-0.25, 0.25),
   });
 
 function sumsOf(train: Train, light: Light): Seidel {

@@ -10,8 +10,9 @@ import { paraxialRay } from '../../../engine/paraxial/trace.ts';
 import type { TrainSpec } from '../../../engine/train/build.ts';
 import { buildTrain } from '../../../engine/train/build.ts';
 import { runSeidel } from '../../reference/seidelSums.ts';
-import { between, scaledBy } from '../anyTrain.ts';
+import { scaledBy } from '../anyTrain.ts';
 import { given } from '../quantity.ts';
+import { uniform } from '../uniform.ts';
 
 /** A few hundred roundings of the size of what was added. */
 const ROUNDING = 1e-13;
@@ -35,10 +36,10 @@ interface Light {
 
 const anyLight = (): fc.Arbitrary<Light> =>
   fc.record({
-    y: fc.oneof({ weight: 4, arbitrary: between(-8, 8) }, { weight: 1, arbitrary: fc.constant(0) }),
-    nu: between(-0.2, 0.2),
-    yChief: between(-8, 8),
-    nuChief: between(-0.3, 0.3),
+    y: fc.oneof({ weight: 4, arbitrary: uniform(-8, 8) }, { weight: 1, arbitrary: fc.constant(0) }),
+    nu: uniform(-0.2, 0.2),
+    yChief: uniform(-8, 8),
+    nuChief: uniform(-0.3, 0.3),
   });
 
 /** Glass of a few conic and aspheric surfaces. */
@@ -46,15 +47,15 @@ const anyGlass = (): fc.Arbitrary<TrainSpec> =>
   fc
     .array(
       fc.record({
-        curvaturePerMm: between(-0.05, 0.05),
-        conic: between(-3, 2),
+        curvaturePerMm: uniform(-0.05, 0.05),
+        conic: uniform(-3, 2),
         asphere: fc.array(
-          between(-1e-6, 1e-6).map((value) => value / 10),
+          uniform(-1e-6, 1e-6).map((value) => value / 10),
           { maxLength: 2 },
         ),
-        indexAfter: between(1, 2),
-        spreadAfter: between(0, 0.03),
-        gapMm: between(0, 20),
+        indexAfter: uniform(1, 2),
+        spreadAfter: uniform(0, 0.03),
+        gapMm: uniform(0, 20),
       }),
       { minLength: 1, maxLength: 8 },
     )
@@ -80,7 +81,7 @@ describe('the Seidel sums', () => {
 
   it('obey the stop-shift equations', () => {
     fc.assert(
-      fc.property(anyGlass(), anyLight(), between(-3, 3), (spec, light, shift) => {
+      fc.property(anyGlass(), anyLight(), uniform(-3, 3), (spec, light, shift) => {
         const before = sumsOf(spec, light);
         const moved = {
           ...light,
@@ -98,7 +99,7 @@ describe('the Seidel sums', () => {
 
   it('of a layout scaled in length are scaled by the same factor when angles stay', () => {
     fc.assert(
-      fc.property(anyGlass(), anyLight(), between(0.1, 10), (spec, light, factor) => {
+      fc.property(anyGlass(), anyLight(), uniform(0.1, 10), (spec, light, factor) => {
         const before = sumsOf(spec, light);
         const grown = scaledBy(spec, factor);
         const scaled = {

@@ -6,8 +6,8 @@ import { some } from '../../../engine/outcome.ts';
 import { stopOf } from '../../../engine/paraxial/stop.ts';
 import { paraxialRay } from '../../../engine/paraxial/trace.ts';
 import { buildTrain, type SurfaceSpec } from '../../../engine/train/build.ts';
-import { between } from '../anyTrain.ts';
 import { given } from '../quantity.ts';
+import { uniform } from '../uniform.ts';
 
 /** Both ways add terms of either sign that nearly cancel for some bendings: a few hundred roundings of the largest. */
 const ROUNDING = 1e-12;
@@ -57,19 +57,19 @@ function sumsOf(
 const anyLens = (): fc.Arbitrary<Lens> =>
   fc
     .record({
-      c1: between(-0.05, 0.05),
-      c2: between(-0.05, 0.05),
-      glassIndex: between(1.4, 4),
-      gapMm: between(-10, 40),
+      c1: uniform(-0.05, 0.05),
+      c2: uniform(-0.05, 0.05),
+      glassIndex: uniform(1.4, 4),
+      gapMm: uniform(-10, 40),
     })
     .filter(({ c1, c2 }) => Math.abs(c1 - c2) > 1e-3);
 
 const anyRays = (): fc.Arbitrary<Rays> =>
   fc.record({
-    y: fc.oneof({ weight: 3, arbitrary: between(-8, 8) }, { weight: 1, arbitrary: fc.constant(0) }),
-    nu: between(-0.2, 0.2),
-    yChief: fc.oneof({ weight: 3, arbitrary: between(-8, 8) }, { weight: 1, arbitrary: fc.constant(0) }),
-    nuChief: between(-0.3, 0.3),
+    y: fc.oneof({ weight: 3, arbitrary: uniform(-8, 8) }, { weight: 1, arbitrary: fc.constant(0) }),
+    nu: uniform(-0.2, 0.2),
+    yChief: fc.oneof({ weight: 3, arbitrary: uniform(-8, 8) }, { weight: 1, arbitrary: fc.constant(0) }),
+    nuChief: uniform(-0.3, 0.3),
   });
 
 describe('a thin element', () => {

@@ -10,8 +10,8 @@ import {
 } from '../../../engine/solve/bending.ts';
 import { bestShapes } from '../../../engine/solve/bestShapes.ts';
 import { buildTrain } from '../../../engine/train/build.ts';
-import { between } from '../anyTrain.ts';
 import { given } from '../quantity.ts';
+import { uniform } from '../uniform.ts';
 
 const lens = { powerPerMm: 0.01, mediumIndex: 1 };
 
@@ -36,7 +36,7 @@ describe('the best bendings of a thin lens', () => {
 
   it('have the least spherical aberration, and no coma, of all bendings', () => {
     fc.assert(
-      fc.property(between(1.3, 4), between(-0.3, 0.3), between(-2, 2), (index, u, off) => {
+      fc.property(uniform(1.3, 4), uniform(-0.3, 0.3), uniform(-2, 2), (index, u, off) => {
         const position = given(positionFactor(u, u - 10 * lens.powerPerMm));
         const best = leastSphericalShape(index, position);
         const least = sumsAt(index, best, u).spherical;
@@ -59,7 +59,7 @@ describe('the best bendings of a thin lens', () => {
 describe('a bending as a ratio of curvatures', () => {
   it('gives its shape factor back', () => {
     fc.assert(
-      fc.property(between(-20, 20), (q) => {
+      fc.property(uniform(-20, 20), (q) => {
         expect(shapeFactorOf(bendingOf(q))).toBeCloseTo(q, 12);
       }),
     );

@@ -6,8 +6,8 @@ import { unsolvableSentence } from '../../../engine/solve/absence.ts';
 import { objectForMagnification, objectsForTrack } from '../../../engine/solve/conjugateSolves.ts';
 import { type TwoElements, twoForBackFocus, twoForRelay } from '../../../engine/solve/twoElements.ts';
 import { buildTrain } from '../../../engine/train/build.ts';
-import { between } from '../anyTrain.ts';
 import { given } from '../quantity.ts';
+import { uniform } from '../uniform.ts';
 
 /** Shares of what a trace of two lenses keeps, for layouts that are no near miss. */
 const TRACED = 1e-9;
@@ -32,9 +32,9 @@ const close = (got: number, wanted: number) =>
 
 describe('two thin parts', () => {
   it('have the focal length and back focus they were solved for', () => {
-    const length = () => fc.oneof(between(5, 400), between(-400, -5));
+    const length = () => fc.oneof(uniform(5, 400), uniform(-400, -5));
     fc.assert(
-      fc.property(length(), length(), between(1, 200), (focalLengthMm, backFocusMm, gapMm) => {
+      fc.property(length(), length(), uniform(1, 200), (focalLengthMm, backFocusMm, gapMm) => {
         fc.pre(Math.abs(focalLengthMm - backFocusMm) > 1);
         fc.pre(Math.abs(focalLengthMm - backFocusMm - gapMm) > 1);
         const solved = given(twoForBackFocus({ focalLengthMm, backFocusMm, gapMm }));
@@ -46,13 +46,13 @@ describe('two thin parts', () => {
   });
 
   it('relay the object where and as large as they were solved for', () => {
-    const magnification = () => fc.oneof(between(-5, -0.2), between(0.2, 5));
+    const magnification = () => fc.oneof(uniform(-5, -0.2), uniform(0.2, 5));
     fc.assert(
       fc.property(
         magnification(),
-        between(20, 300),
-        between(5, 100),
-        between(20, 300),
+        uniform(20, 300),
+        uniform(5, 100),
+        uniform(20, 300),
         (m, objectMm, gapMm, imageMm) => {
           const solved = twoForRelay({
             objectDistanceMm: objectMm,
@@ -104,9 +104,9 @@ describe('one thin part', () => {
     );
 
   it('stands where it has a wanted magnification', () => {
-    const size = () => fc.oneof(between(-20, -0.01), between(0.01, 0.9));
+    const size = () => fc.oneof(uniform(-20, -0.01), uniform(0.01, 0.9));
     fc.assert(
-      fc.property(between(5, 500), size(), (focalLengthMm, m) => {
+      fc.property(uniform(5, 500), size(), (focalLengthMm, m) => {
         const objectMm = given(objectForMagnification(focalLengthMm, m));
         close(given(thinAt(focalLengthMm, objectMm).magnification), m);
       }),
@@ -116,7 +116,7 @@ describe('one thin part', () => {
 
   it('stands in two places between an object and its image, as long as they are 4f apart', () => {
     fc.assert(
-      fc.property(between(5, 500), between(4.001, 50), (focalLengthMm, times) => {
+      fc.property(uniform(5, 500), uniform(4.001, 50), (focalLengthMm, times) => {
         const track = times * focalLengthMm;
         const [near, far] = given(objectsForTrack(focalLengthMm, track));
         expect(near).toBeLessThanOrEqual(far);

@@ -5,8 +5,8 @@ import { bendingOf } from '../../../engine/solve/bending.ts';
 import { trainOfStack } from '../../../engine/solve/stack.ts';
 import { type LensWish, thickLens } from '../../../engine/solve/thickLens.ts';
 import { sagAt } from '../../../engine/train/profile.ts';
-import { between } from '../anyTrain.ts';
 import { given } from '../quantity.ts';
+import { uniform } from '../uniform.ts';
 
 const centre = (thicknessMm: number) => ({ kind: 'centre', thicknessMm }) as const;
 const radii = (wish: LensWish) => given(thickLens(wish)).curvaturesPerMm.map((c) => 1 / c);
@@ -58,14 +58,14 @@ describe('a lens of focal length 48 and index 1.5168, 4 thick', () => {
 /** Focal lengths, bendings and thicknesses of glass that can be made. */
 const anyWish = (): fc.Arbitrary<LensWish> =>
   fc.record({
-    focalLengthMm: fc.oneof(between(5, 2000), between(-2000, -5)),
-    index: between(1.4, 4),
+    focalLengthMm: fc.oneof(uniform(5, 2000), uniform(-2000, -5)),
+    index: uniform(1.4, 4),
     bending: fc.oneof(
-      fc.record({ front: between(-3, 3), rear: between(-3, 3) }),
+      fc.record({ front: uniform(-3, 3), rear: uniform(-3, 3) }),
       fc.constant({ front: 1, rear: 1 }),
-      between(-4, 4).map(bendingOf),
+      uniform(-4, 4).map(bendingOf),
     ),
-    thickness: between(0, 20).map(centre),
+    thickness: uniform(0, 20).map(centre),
     curved: fc.constantFrom(1 as const, -1 as const),
     indexInFront: fc.constantFrom(1, 1.33),
     indexBehind: fc.constantFrom(1, 1.33),
@@ -118,7 +118,7 @@ describe('any lens that was solved for', () => {
 
   it('given at its edge has that edge, at the same focal length', () => {
     fc.assert(
-      fc.property(anyWish(), between(0.2, 8), between(0.5, 12), (wish, edgeMm, semiDiameterMm) => {
+      fc.property(anyWish(), uniform(0.2, 8), uniform(0.5, 12), (wish, edgeMm, semiDiameterMm) => {
         const lens = thickLens({ ...wish, thickness: { kind: 'edge', thicknessMm: edgeMm, semiDiameterMm } });
         if (!lens.ok) return;
         const { curvaturesPerMm, thicknessMm } = lens.value;
