@@ -4,6 +4,7 @@ import { trainOf } from '../../engine/train/train.ts';
 import { analyseAll } from './analyseAll.ts';
 import { bareRays, traceBareRays } from './bareRays.ts';
 import { benchSketch } from './benchSketch.ts';
+import { kernelRows } from './kernelRows.ts';
 import { liveUpdate } from './liveUpdate.ts';
 import { measure, ratioOf, sunk, type Timing } from './measure.ts';
 
@@ -12,7 +13,7 @@ export interface BenchRow {
   readonly name: string;
   readonly min: number;
   readonly median: number;
-  readonly unit: 'µs';
+  readonly unit: 'µs' | 'M/s';
   /** How many times as long as what it is compared with, in the same run; 1 for the yardsticks themselves. */
   readonly ratio: number;
   /** What the ratio compares with. */
@@ -29,7 +30,7 @@ const REFERENCE_RAYS = 2;
 
 /** Every row; `measureText` is how labels are measured here. Throws when what was measured did not give numbers. */
 export function runBench(measureText: MeasureText): readonly BenchRow[] {
-  const rows = [...analysisRows(), ...liveRows(measureText), ...growthRows(measureText)];
+  const rows = [...analysisRows(), ...liveRows(measureText), ...growthRows(measureText), ...kernelRows()];
   if (!Number.isFinite(sunk())) throw new Error(`runBench: the results add up to ${sunk()}`);
   return rows;
 }

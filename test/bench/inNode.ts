@@ -1,7 +1,8 @@
 import { roughMeasure } from '../../app/board/measure.ts';
 import { type BenchRow, runBench } from './bench.ts';
+import { nativeRows } from './kernelNative.ts';
 
 export { rowsJson, rowsTable } from './bench.ts';
 
 /** Every row, measured in this process; there is no canvas, so labels are measured by their characters. */
-export const benchInNode = (): readonly BenchRow[] => runBench(roughMeasure);
+export const benchInNode = (): readonly BenchRow[] => [...runBench(roughMeasure), ...nativeRows()];
