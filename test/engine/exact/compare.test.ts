@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { bufferSize, sampleOf, traceFields } from '../../../engine/exact/bundles.ts';
-import { compare } from '../../../engine/exact/compare.ts';
+import { type Comparison, compare } from '../../../engine/exact/compare.ts';
 import { contrastOf, diffractionLimit } from '../../../engine/exact/contrast.ts';
 import { bestFocus, spotMoments } from '../../../engine/exact/focus.ts';
 import { hexapolarGrid, squareGrid } from '../../../engine/exact/grids.ts';
@@ -16,8 +16,8 @@ import { given } from '../quantity.ts';
 import { between } from './anyRay.ts';
 import { type Drawn, setupOf } from './setupOf.ts';
 
-/** A few surfaces' rounding, relative to lengths of some hundred mm. */
-const ROUNDING = 1e-11;
+/** Of lengths: aiming stops at 1e-11 of the stop's radius. */
+const ROUNDING = 1e-10;
 
 const thin = (more: Partial<Drawn> = {}): Drawn => ({
   surfaces: [{ thinPowerPerMm: 1 / 100, indexAfter: 1, gapMm: 0 }],
@@ -44,16 +44,17 @@ describe('first order and exact rays side by side', () => {
   it('are the same for ideal thin parts, but where sines are taken: ideal parts keep tangents', () => {
     const setup = setupOf(thin({ objectZ: -250 }));
     const report = compare(setup);
-    for (const [name, { paraxial, exact, difference }] of Object.entries(report)) {
+    for (const name of Object.keys(report) as (keyof Comparison)[]) {
+      const { paraxial, exact, difference } = report[name];
       if (name === 'workingFNumber' || name === 'focalLengthMm') continue;
       expect(Math.abs(given(difference)), name).toBeLessThan(ROUNDING * (1 + Math.abs(given(paraxial))));
       expect(given(exact) - given(paraxial)).toBeCloseTo(given(difference), 11);
     }
     expect(given(report.magnification.exact)).toBeCloseTo(-100 / 150, 12);
-    expect(given(report.focalLengthMm.exact)).toBeCloseTo(10 / Math.sin(Math.atan(0.1)), 11);
+    expect(given(report.focalLengthMm.exact)).toBeCloseTo(10 / Math.sin(Math.atan(0.1)), 9);
     const slope = 10 / (500 / 3);
     expect(given(report.workingFNumber.paraxial)).toBeCloseTo(1 / (2 * slope), 11);
-    expect(given(report.workingFNumber.exact)).toBeCloseTo(1 / (2 * Math.sin(Math.atan(slope))), 11);
+    expect(given(report.workingFNumber.exact)).toBeCloseTo(1 / (2 * Math.sin(Math.atan(slope))), 9);
   });
 
   it('of a plano-convex lens are those of its one bending surface, by hand', () => {
