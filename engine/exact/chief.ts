@@ -13,6 +13,7 @@ const FAR_OFF = 0.5;
 const STEPS = 60;
 const SHORTEST = 1 / 4096;
 const SCANNED = 128;
+const EDGE_HALVINGS = 24;
 
 /** The launch number of the chief ray, or the code of the loss that keeps any ray from the stop's centre. */
 export interface Chief {
@@ -134,20 +135,46 @@ function scan(sight: Sight, source: Source, expected: number): number {
   };
   const reach = Math.min(conicEdge(profile) * 0.9999, train.semiDiameter[0]!, 1e4 * stopRadiusMm);
   let best = Number.NaN;
-  let [lastB, lastY] = [Number.NaN, Number.NaN];
+  let last: Seen | null = null;
   for (let i = -SCANNED; i <= SCANNED; i++) {
     // Denser towards the axis, where layouts have their light.
     const y = reach * (i / SCANNED) * Math.abs(i / SCANNED);
     const sag = sagAt(profile, Math.abs(y));
-    const b = sag === null ? Number.NaN : launchThrough(source, 0, y, sag)[1];
-    const there = shoot(sight, source, 0, b);
-    if (there && lastY * sight.y <= 0) {
-      const perRadius = (b - lastB) / (sight.y - lastY);
-      const found = aimInMeridian(sight, source, 0, (b + lastB) / 2, perRadius);
-      if (!(Math.abs(found - expected) >= Math.abs(best - expected)) && Number.isFinite(found)) best = found;
-      shoot(sight, source, 0, b);
+    if (sag === null) continue;
+    const seen: Seen = look(sight, source, launchThrough(source, 0, y, sag)[1]);
+    const pair: readonly [Seen, Seen] | null = last && changeBetween(sight, source, last, seen);
+    if (pair) {
+      const [one, other] = pair;
+      const perRadius = (other.b - one.b) / (other.y - one.y);
+      const found = aimInMeridian(sight, source, 0, one.b - one.y * perRadius, perRadius);
+      const nearer = !(Math.abs(found - expected) >= Math.abs(best - expected));
+      if (Number.isFinite(found) && nearer) best = found;
     }
-    [lastB, lastY] = there ? [b, sight.y] : [Number.NaN, Number.NaN];
+    last = seen;
   }
   return best;
+}
+
+/** A meridional ray that was tried: its height in the stop, in radii, NaN when it does not get there. */
+interface Seen {
+  readonly b: number;
+  readonly y: number;
+}
+
+function look(sight: Sight, source: Source, b: number): Seen {
+  return { b, y: shoot(sight, source, 0, b) ? sight.y : Number.NaN };
+}
+
+/** Two rays on either side of the stop's centre between these two; sought up to where rays are lost, as heights run off there. Null when there are none. */
+function changeBetween(sight: Sight, source: Source, one: Seen, other: Seen): readonly [Seen, Seen] | null {
+  if (one.y * other.y <= 0) return [one, other];
+  let [good, lost] = Number.isNaN(one.y) ? [other, one] : [one, other];
+  if (Number.isNaN(good.y) || !Number.isNaN(lost.y)) return null;
+  for (let halving = 0; halving < EDGE_HALVINGS; halving++) {
+    const middle = look(sight, source, (good.b + lost.b) / 2);
+    if (middle.y * good.y <= 0) return [good, middle];
+    if (Number.isNaN(middle.y)) lost = middle;
+    else good = middle;
+  }
+  return null;
 }
