@@ -149,6 +149,12 @@ export { isCommon, objectDistanceAt, settingAt, valueAt } from './sketch/values.
 export { partName } from './sketch/words.ts';
 export { unsolvableSentence } from './solve/absence.ts';
 export { bendGlass, bendGlassToShape, shapeOfGlass } from './solve/bend.ts';
+export { type Bending, bendingOf } from './solve/bending.ts';
+export { type BestShapes, bestShapes } from './solve/bestShapes.ts';
+export type { Recipe } from './solve/recipe.ts';
+export type { Remade } from './solve/remake.ts';
+export { thickenPart } from './solve/thicken.ts';
+export { thinPart } from './solve/thin.ts';
 export { type Body, bodyOf, edgeThicknesses, type Face, faceAt } from './train/body.ts';
 export { placesOf } from './train/places.ts';
 export { partTrain } from './train/slice.ts';

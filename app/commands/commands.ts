@@ -1,5 +1,6 @@
 import type { Command } from '../store/command.ts';
 import { clipCommands } from './clipCommands.ts';
+import { glassCommands } from './glassCommands.ts';
 import { partCommands } from './partCommands.ts';
 import type { CommandGroup, Services } from './services.ts';
 import { positionCommands, stopAndImageCommands } from './settingCommands.ts';
@@ -11,6 +12,7 @@ export function createCommands(services: Services): readonly CommandGroup[] {
   return [
     sketchCommands(services),
     partCommands(),
+    glassCommands(),
     selectionCommands(),
     clipCommands(services),
     stopAndImageCommands(),

@@ -16,6 +16,8 @@ export const orWhy = (quantity: Quantity): number | string => (quantity.ok ? qua
 
 interface SketchNumberProps {
   readonly label: string;
+  /** The place already says the label, as in a table. */
+  readonly labelHidden?: boolean;
   /** `length` is a length in the unit chosen for the screen. */
   readonly unit: EntryUnit | 'length';
   /** Decimals; of a millimetre where it is a length. */
@@ -61,6 +63,7 @@ export function SketchNumber(props: SketchNumberProps) {
   return (
     <NumberField
       label={label}
+      {...(props.labelHidden && { labelHidden: true })}
       value={typeof shown === 'number' ? shown : null}
       {...(typeof shown === 'string' && { absence: shown })}
       unit={unit}

@@ -105,6 +105,8 @@ export interface View {
   readonly panel: 'readouts' | 'part' | 'sketch' | 'plots' | 'warnings' | null;
   /** What waits to be set down on the axis. */
   readonly placing: TrayKind | null;
+  /** The thin part whose card asks what glass it shall become. */
+  readonly thickening: PartId | null;
   /** The grip whose number is being typed on the drawing. */
   readonly typing: string | null;
 }
@@ -149,6 +151,7 @@ const start: View = {
   hints: true,
   panel: null,
   placing: null,
+  thickening: null,
   typing: null,
 };
 

@@ -8,6 +8,7 @@ import { tryEdit } from '../edit.ts';
 import { partName } from '../names.ts';
 import type { Commands } from '../useCommand.ts';
 import { GlassFields } from './GlassFields.tsx';
+import { GlassPartFields } from './GlassPartFields.tsx';
 import { LightThrough } from './LightThrough.tsx';
 import { PlaceFields } from './PlaceFields.tsx';
 import { PlateFields } from './PlateFields.tsx';
@@ -29,10 +30,11 @@ export function OnePart({ id, commands }: OnePartProps) {
       <PartHead id={id} />
       {kind === 'thin' && <PowerFields id={id} />}
       {kind === 'plate' && <PlateFields id={id} />}
+      {kind === 'glass' && <GlassPartFields id={id} commands={commands} />}
       <PlaceFields id={id} />
       <RimField id={id} />
       <StopFields id={id} />
-      {kind === 'thin' && <GlassFields id={id} />}
+      {kind === 'thin' && <GlassFields id={id} commands={commands} />}
       <LightThrough id={id} />
       <PartTexts id={id} />
       <TiedIn id={id} />

@@ -1,4 +1,4 @@
-import type { Part, PartId, PlatePart, ThinPart } from '../../../engine/index.ts';
+import type { GlassPart, Part, PartId, PlatePart, ThinPart } from '../../../engine/index.ts';
 import type { Reading } from '../../live/reading.ts';
 
 /** The part of that id, if the sketch holds it. */
@@ -23,4 +23,12 @@ export const readPlate =
   (reading: Reading): number | null => {
     const part = partIn(reading, id);
     return part?.kind === 'plate' ? read(part) : null;
+  };
+
+/** A value of a glass part; null for any other. */
+export const readGlass =
+  <T>(id: PartId, read: (part: GlassPart) => T) =>
+  (reading: Reading): T | null => {
+    const part = partIn(reading, id);
+    return part?.kind === 'glass' ? read(part) : null;
   };
