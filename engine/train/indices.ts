@@ -18,8 +18,8 @@ export interface Indices {
 }
 
 /**
- * Reads indices in `line` of `sketch`. A thin part's focal length holds in the main line: with a glass its power goes as n − 1 of that
- * glass relative to air, with an Abbe number V alone as φ·(1 + s/V), s from `cauchyShare`. The rules of the sketch see to it that
+ * Reads indices in `line` of `sketch`. A thin part's focal length holds in the main line: with a glass its power goes as that glass's
+ * index less that of air, with an Abbe number V alone as φ·(1 + s/V), s from `cauchyShare`. The rules of the sketch see to it that
  * every medium has an index; throws when one has none, naming it.
  */
 export function indicesIn(sketch: Sketch, line: Line): Indices {
@@ -49,7 +49,7 @@ export function indicesIn(sketch: Sketch, line: Line): Indices {
         const spreadPerMm = abbeNumber === null ? 0 : power / abbeNumber;
         return { powerPerMm: power + spreadPerMm * share, spreadPerMm };
       }
-      const excess = (nm: number): number => indexAt(material, nm) / indexAt('air', nm) - 1;
+      const excess = (nm: number): number => indexAt(material, nm) - indexAt('air', nm);
       const main = excess(lines.mainNm);
       // Glass of index 1 has no power to spread.
       if (main === 0) return { powerPerMm: power, spreadPerMm: 0 };

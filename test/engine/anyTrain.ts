@@ -1,9 +1,16 @@
 import fc from 'fast-check';
 import type { SurfaceSpec, TrainSpec } from '../../engine/train/build.ts';
+import { uniform } from './uniform.ts';
 
 /** A number between two limits; no length smaller than an atom, so that nothing underflows. */
 export const between = (min: number, max: number): fc.Arbitrary<number> =>
-  fc.double({ min, max, noNaN: true }).map((value) => (Math.abs(value) < 1e-9 ? 0 : value));
+  fc.oneof(
+    { weight: 3, arbitrary: uniform(min, max) },
+    {
+      weight: 1,
+      arbitrary: fc.double({ min, max, noNaN: true }).map((value) => (Math.abs(value) < 1e-9 ? 0 : value)),
+    },
+  );
 const signed = (size: fc.Arbitrary<number>) =>
   fc.tuple(size, fc.constantFrom(-1, 1)).map(([value, sign]) => value * sign);
 

@@ -157,7 +157,7 @@ describe('the vignetting of any train', () => {
           }
         }
       }),
-      { numRuns: 60 },
+      { numRuns: 100 },
     );
     expect(cut).toBeGreaterThan(8);
   });
