@@ -1,7 +1,7 @@
 import type { PupilGrid } from './grids.ts';
-import { traceBatch } from './kernel.ts';
 import { aimRays, mapRays, type PupilMap, pupilMapOf } from './pupilMap.ts';
 import { CODE, lostOf, MISSED, PATH, STRIDE, X, Y } from './rayBuffer.ts';
+import { traceThrough } from './through.ts';
 import type { ExactSetup, Lost } from './types.ts';
 
 /** Which rays of every field and line are traced. Made once, by `sampleOf`. */
@@ -89,7 +89,7 @@ export function traceFields(
 }
 
 /** Traces the sample of one field and line into `rays`. */
-export function traceBundle(map: PupilMap, sample: Sample, rays: Float64Array): Bundle {
+function traceBundle(map: PupilMap, sample: Sample, rays: Float64Array): Bundle {
   const { setup, line, fraction } = map;
   const { train } = setup.lines[line] ?? setup.lines[0];
   const index = Math.abs(train.index[train.count]!);
@@ -103,8 +103,8 @@ export function traceBundle(map: PupilMap, sample: Sample, rays: Float64Array): 
     const { heightMm, zMm } = setup.object;
     countPathsFromChief(rays, sample.count, fraction * heightMm, zMm, Math.abs(train.index[0]!));
   }
-  traceBatch(train, rays, 1, false);
-  traceBatch(train, rays.subarray(STRIDE), sample.count - 1, sample.clip);
+  traceThrough(train, rays, 1, false);
+  traceThrough(train, rays.subarray(STRIDE), sample.count - 1, sample.clip);
   return { lost: lostOf(rays[CODE]!), rays, index };
 }
 

@@ -1,9 +1,9 @@
 import { aimChief } from './chief.ts';
 import { yOn } from './imagePlane.ts';
-import { traceBatch } from './kernel.ts';
 import { launch, sourceOf } from './launch.ts';
 import { CODE, STRIDE } from './rayBuffer.ts';
 import { sightOf } from './sight.ts';
+import { traceThrough } from './through.ts';
 import type { ExactSetup } from './types.ts';
 
 /** Exact chief rays over the field in one line. Rims do not end them: a curve shall not break off where the light becomes faint. */
@@ -32,7 +32,7 @@ export function chiefSweep(setup: ExactSetup, line: number, fractions: Float64Ar
     if (chief.code !== 0) starts[i * STRIDE + CODE] = chief.code;
   }
   const rays = starts.slice();
-  traceBatch(sight.train, rays, fractions.length);
+  traceThrough(sight.train, rays, fractions.length);
   return { setup, line, fractions, starts, rays };
 }
 

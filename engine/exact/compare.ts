@@ -4,9 +4,9 @@ import { axialOf } from '../paraxial/axial.ts';
 import { firstOrder } from '../paraxial/firstOrder.ts';
 import type { ParaxialRay } from '../paraxial/trace.ts';
 import { crossing, paraxialOn, yOn } from './imagePlane.ts';
-import { traceBatch } from './kernel.ts';
 import { aimRays, pupilMapOf } from './pupilMap.ts';
 import { CODE, M, N, STRIDE, X, Y } from './rayBuffer.ts';
+import { traceThrough } from './through.ts';
 import type { ExactSetup } from './types.ts';
 
 /** One quantity twice, and exact less paraxial. */
@@ -110,7 +110,7 @@ function aimed(setup: ExactSetup, fraction: number, pupil: number): Ray {
 function traced({ lines }: ExactSetup, start: Ray): Ray {
   if (!start.ok) return start;
   const ray = start.value.slice();
-  traceBatch(lines[0].train, ray, 1);
+  traceThrough(lines[0].train, ray, 1);
   return ray[CODE] === 0 ? some(ray) : none('ray lost');
 }
 

@@ -1,10 +1,10 @@
 import { none, type Outcome, some } from '../outcome.ts';
 import type { Absence } from '../paraxial/absence.ts';
 import { type Curve, curveOf } from './curve.ts';
-import { traceBatch } from './kernel.ts';
 import { aimRays, mapRays, type PupilMap, pupilMapOf } from './pupilMap.ts';
 import { pupilOutline } from './pupilOutline.ts';
 import { CODE, L, M, STRIDE } from './rayBuffer.ts';
+import { traceThrough } from './through.ts';
 import type { ExactSetup } from './types.ts';
 
 /**
@@ -50,13 +50,13 @@ function solidAngle(map: PupilMap, clip: boolean, fine: boolean): number {
   const rays = new Float64Array((steps + 1) * STRIDE);
   const start = fine ? aimRays : mapRays;
   start(map, wholeStop, steps + 1, rays);
-  traceBatch(map.sight.train, rays, steps + 1, clip);
+  traceThrough(map.sight.train, rays, steps + 1, clip);
   if (!allThrough(rays)) {
     if (!clip) return Number.NaN;
     const outline = pupilOutline(map, fine, steps, halvings);
     if (!outline.ok) return 0;
     start(map, outline.value.points, steps + 1, rays);
-    traceBatch(map.sight.train, rays, steps + 1, false);
+    traceThrough(map.sight.train, rays, steps + 1, false);
     if (!allThrough(rays)) return Number.NaN;
   }
   let area = 0;

@@ -5,9 +5,9 @@ import type { Train } from '../train/types.ts';
 import { type FieldRays, TANGENTIAL } from './bundles.ts';
 import { type Curve, curveOf } from './curve.ts';
 import { crossing } from './imagePlane.ts';
-import { traceBatch } from './kernel.ts';
 import { aimRays, pupilMapOf } from './pupilMap.ts';
 import { STRIDE } from './rayBuffer.ts';
+import { traceThrough } from './through.ts';
 import type { ExactSetup } from './types.ts';
 
 /**
@@ -67,7 +67,7 @@ export function axialColour(
       const paraxial = axialOf(train).imageDistanceMm;
       const map = pupilMapOf({ ...setup, lines: [{ ...setup.lines[0], wavelengthNm, train }] }, 0, 0);
       aimRays(map, [0, share], 1, ray);
-      traceBatch(train, ray, 1);
+      traceThrough(train, ray, 1);
       const exact = crossing(ray, 0) - plane;
       return {
         wavelengthNm,

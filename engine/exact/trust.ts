@@ -2,9 +2,9 @@ import { none, type Outcome, some } from '../outcome.ts';
 import type { Absence } from '../paraxial/absence.ts';
 import { chiefSweep, sweepHeight } from './chiefSweep.ts';
 import { paraxialOn, yOn } from './imagePlane.ts';
-import { traceBatch } from './kernel.ts';
 import { aimRays, pupilMapOf } from './pupilMap.ts';
 import { STRIDE } from './rayBuffer.ts';
+import { traceThrough } from './through.ts';
 import type { ExactSetup } from './types.ts';
 
 /** How far down aperture and field the first order can be trusted: shares from 0 to 1 of the stop's radius and of the field. */
@@ -17,8 +17,8 @@ export interface Trust {
 
 /** Shares looked at one by one; between two of them the error is taken to run one way. */
 const SCANNED = 24;
-/** Halvings of the interval in which the limit is first passed: the share is right to 1/100 000. */
-const HALVINGS = 12;
+/** Halvings of the interval in which the limit is first passed; in what is left of it, 1/1500, the error is taken as straight. */
+const HALVINGS = 6;
 
 /**
  * The shares of aperture (on the axis) and field (chief rays) up to which exact and paraxial rays of the main line meet the image plane within `limitMm` of each
@@ -41,7 +41,7 @@ export function trust(setup: ExactSetup, limitMm: number): Outcome<Trust, Absenc
       i % 2 === 0 ? 0 : up * shares[(i - 1) / 2]!,
     );
     aimRays(map, pupil, shares.length, rays);
-    traceBatch(setup.lines[0].train, rays, shares.length);
+    traceThrough(setup.lines[0].train, rays, shares.length);
     return shares.map((share, i) => yOn(rays, i * STRIDE, plane) - share * marginalMm);
   };
   const fieldError = (shares: Float64Array): Float64Array => {
@@ -57,14 +57,18 @@ export function trust(setup: ExactSetup, limitMm: number): Outcome<Trust, Absenc
 /** The largest share up to which no error is beyond the limit. */
 function firstBeyond(errorAt: (shares: Float64Array) => Float64Array, limitMm: number): number {
   const shares = Float64Array.from({ length: SCANNED }, (_, i) => (i + 1) / SCANNED);
-  const beyond = (error: number) => !(Math.abs(error) <= limitMm);
-  const first = errorAt(shares).findIndex(beyond);
+  // How far beyond the limit; NaN, for a lost ray, is beyond too.
+  const excess = errorAt(shares).map((error) => Math.abs(error) - limitMm);
+  const first = excess.findIndex((over) => !(over <= 0));
   if (first < 0) return 1;
   let [within, without] = [first / SCANNED, (first + 1) / SCANNED];
+  let [under, over] = [first === 0 ? -limitMm : excess[first - 1]!, excess[first]!];
   for (let i = 0; i < HALVINGS; i++) {
     const middle = (within + without) / 2;
-    if (beyond(errorAt(Float64Array.of(middle))[0]!)) without = middle;
-    else within = middle;
+    const there = Math.abs(errorAt(Float64Array.of(middle))[0]!) - limitMm;
+    if (there <= 0) [within, under] = [middle, there];
+    else [without, over] = [middle, there];
   }
-  return within;
+  const straight = within + ((without - within) * under) / (under - over);
+  return Number.isFinite(straight) ? straight : within;
 }
