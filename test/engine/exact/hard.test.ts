@@ -120,6 +120,42 @@ describe('hard prescriptions', () => {
     }
   });
 
+  it('an asphere whose sag turns is met wherever a close look sees it', () => {
+    const sag = (r: number) => (r * r) / 40 - 5e-5 * r ** 4;
+    const train = trainOfRows({ rows: [[20, 0, 1.5, { conic: -1, asphere: [-5e-5] }]] });
+    let seen = 0;
+    for (let i = -40; i <= 40; i++) {
+      for (const height of [4, 12, 18]) {
+        const slope = i / 10;
+        const inFront = (z: number) => z - sag(Math.abs(height + slope * z)) < 0;
+        // Only rays that pass from one side to the other once: others have several answers.
+        const changes = Array.from({ length: 4000 }, (_, j) => (j - 2000) / 100).filter(
+          (z) => inFront(z) !== inFront(z + 0.01),
+        );
+        const [only = 0] = changes;
+        if (changes.length !== 1 || !inFront(only)) continue;
+        seen++;
+        const { hits } = traceRay(train, [0, height, 0], [0, slope, 1]);
+        expect(Math.abs((hits[0]?.point[2] ?? Number.NaN) - only), `${height} ${slope}`).toBeLessThan(0.011);
+      }
+    }
+    expect(seen).toBeGreaterThan(20);
+  });
+
+  it('beyond the equator of sphere, ellipsoid or asphere is a miss', () => {
+    const shapes: Row[] = [
+      [10, 0, 1.5],
+      [10, 0, 1.5, { conic: 0.05 }],
+      [10, 0, 1.5, { asphere: [0] }],
+    ];
+    for (const row of shapes) {
+      const train = trainOfRows({ rows: [row] });
+      // Past the edge and into the far half from the side; the second one meets the near half.
+      expect(traceRay(train, [0, -30, 0], [0, 1, 0.55]).lost).toEqual({ why: 'missed', surface: 0 });
+      expect(traceRay(train, [0, -30, 0], [0, 1, 0.35]).lost).toBeNull();
+    }
+  });
+
   it('a surface of wild coefficients gives points or misses, and no numbers that are none', () => {
     for (const powers of [[1e300], [-1e300], [1, -1, 1, -1], [1e5, 1e10], [0, 0, 1e-300]]) {
       const rays = rakedRays(200);
