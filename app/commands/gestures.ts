@@ -25,6 +25,16 @@ export const GESTURES: readonly GestureGroup[] = [
         hand: 'Drag a focal point of the selected part',
         keys: 'Tab to the focal point, ← →',
       },
+      {
+        does: 'Change a radius or a thickness of glass',
+        hand: 'Drag a ring on a surface of the selected glass, or a square above the axis',
+        keys: 'Tab to it, ← →, or Enter and type',
+      },
+      {
+        does: 'Bend glass at constant power; its principal planes stay',
+        hand: 'Drag the ring below the axis',
+        keys: 'Tab to the bending, ← →',
+      },
       { does: 'Change a clear diameter', hand: 'Drag a rim', keys: 'Tab to the rim, ↑ ↓' },
       { does: 'Open or close the stop', hand: 'Drag its edges', keys: 'Tab to the edge, ↑ ↓' },
       {
@@ -41,7 +51,7 @@ export const GESTURES: readonly GestureGroup[] = [
       {
         does: 'Add a part',
         hand: 'Drag it from the tray, or tap the kind and then the axis',
-        keys: 'P N S L',
+        keys: 'P N S L G',
       },
       {
         does: 'Select several',

@@ -59,9 +59,8 @@ function added(kind: TrayKind, sketch: Sketch, atMm: number, position: PositionI
   if (kind === 'stop') return dropStop(sketch, atMm, position);
   const id = freshPartId(sketch);
   if (kind === 'plate') return insertPart(sketch, newPlate(FIRST_THICKNESS_MM, id), atMm, position);
-  if (kind === 'glass')
-    return insertPart(sketch, newGlass(FIRST_RADIUS_MM, FIRST_GLASS_MM, id), atMm, position);
   const focalLengthMm = kind === 'positive' ? FIRST_FOCAL_LENGTH_MM : -FIRST_FOCAL_LENGTH_MM;
-  const placed = insertPart(sketch, newThin(focalLengthMm, id), atMm, position);
+  const part = kind === 'glass' ? newGlass(FIRST_RADIUS_MM, FIRST_GLASS_MM, id) : newThin(focalLengthMm, id);
+  const placed = insertPart(sketch, part, atMm, position);
   return sketch.parts.length === 0 ? rideStop(placed, id) : placed;
 }

@@ -17,6 +17,7 @@ interface SurfaceTableProps {
 export function SurfaceTable({ id }: SurfaceTableProps) {
   const count = useReadingNow((reading) => readGlass(id, ({ surfaces }) => surfaces.length)(reading) ?? 0);
   const terms = useReadingNow((reading) => readGlass(id, termsOf)(reading) ?? 0);
+  const unit = useReadingNow(({ view }) => view.unit);
   const surfaces = Array.from({ length: count }, (_, k) => k);
   const powers = Array.from({ length: terms }, (_, i) => i);
   return (
@@ -24,7 +25,7 @@ export function SurfaceTable({ id }: SurfaceTableProps) {
       <table aria-label="Surfaces">
         <thead>
           <tr>
-            <td />
+            <td className="surface-unit">{unit}</td>
             {surfaces.map((k) => (
               <th key={k} scope="col">
                 {k + 1}

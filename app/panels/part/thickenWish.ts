@@ -17,10 +17,12 @@ import {
   indexOf,
   none,
   setShapeFactor,
+  settingAt,
   some,
   thickenPart,
   unsolvableSentence,
 } from '../../../engine/index.ts';
+import { analysisOf } from '../../live/analysis.ts';
 import type { Reading } from '../../live/reading.ts';
 
 export type BendingChoice =
@@ -54,12 +56,17 @@ const BARE_SEMI_MM = 5;
 const CROWN: SolidMedium = { material: 'n-bk7' };
 const FLINT: SolidMedium = { material: 'n-sf5' };
 
-/** Half the diameter that the glass is made for: the rim that is given, or what the rays need. */
-export function semiFor({ analysis, sketch }: Reading, id: PartId): number {
+/** Half the diameter that the glass is made for: the rim that is given, or what the rays need at any position. */
+export function semiFor({ sketch }: Pick<Reading, 'sketch'>, id: PartId): number {
   const index = sketch.parts.findIndex((part) => part.id === id);
   const given = sketch.parts[index]?.semiDiameterMm ?? null;
-  const need = analysis.clear[analysis.train.partOf.indexOf(index)]?.neededMm;
-  return given ?? (need?.ok && need.value > 0 ? need.value : BARE_SEMI_MM);
+  if (given !== null) return given;
+  const needs = sketch.positions.map((position) => {
+    const { clear, train } = analysisOf(sketch, settingAt(position.id));
+    const need = clear[train.partOf.indexOf(index)]?.neededMm;
+    return need?.ok ? need.value : 0;
+  });
+  return Math.max(...needs) || BARE_SEMI_MM;
 }
 
 /** What the form begins with for a part. */
