@@ -66,9 +66,9 @@ export function App({ groups, commands, services, board, onBoard }: AppProps) {
       <div className="app-jog">
         <JogStrip board={board} />
       </div>
-      <Drawers clipboard={services.clipboard} />
+      <Drawers clipboard={services.clipboard} board={board} />
       <SidePanel commands={commands} />
-      <BottomBar commands={commands} />
+      <BottomBar commands={commands} clipboard={services.clipboard} board={board} />
       <Sheets groups={groups} commands={commands} services={services} />
       <div id="voice" className="visually-hidden" aria-live="polite" />
     </div>

@@ -1,6 +1,7 @@
 import type { Box, LabelPlace } from '../board/labels.ts';
 import type { Pen } from '../board/pen.ts';
 import { endsLayer, scaleBox, scaleLayer } from '../drawing/layers/ends.ts';
+import { glowLayer } from '../drawing/layers/glow.ts';
 import { labelsLayer } from '../drawing/layers/labels.ts';
 import { marksLayer } from '../drawing/layers/marks.ts';
 import { glassLayer, partsLayer } from '../drawing/layers/parts.ts';
@@ -42,7 +43,9 @@ export function paintParts(
 ): readonly LabelPlace[] {
   const hoveredPart = hovered?.startsWith('part:') ? hovered.slice('part:'.length) : null;
   endsLayer(pen, scene, view);
-  partsLayer(pen, scene, view, hoveredPart);
+  glowLayer(pen, scene, view, reading.view.glow);
+  const sheet = { kind: 'box', xPx: 0, yPx: 0, widthPx: view.widthPx, heightPx: plan.topPx } as const;
+  pen.clipped(sheet, () => partsLayer(pen, scene, view, hoveredPart));
   const { unit } = reading.view;
   const scaleBottomPx = view.heightPx - SCALE_ABOVE_PX;
   scaleLayer(pen, view, unit, scaleBottomPx);

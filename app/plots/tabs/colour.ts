@@ -1,0 +1,129 @@
+import type { Sketch } from '../../../engine/index.ts';
+import { axialColour, lateralColour, longitudinal, sentenceOf, trainOf } from '../../../engine/index.ts';
+import { curveStyle, emptyPlot, type Plot, type PlotCurve } from '../plot.ts';
+import { evenAxis, reachOf } from '../scale.ts';
+import { AMOUNTS, type Source } from '../source.ts';
+import { lengthScale, lineDash, lineName, lostNote, scaled } from '../words.ts';
+import { OVER_FIELD } from './field.ts';
+
+const MICRO = 1000;
+/** The zone of the stop whose rays tell the exact focus of a wavelength: half of its light is within. */
+const ZONE = Math.SQRT1_2;
+
+/** Focus over the stop in each line, focus over wavelength, and lateral colour over the field. */
+export const colourPlots = (source: Source): readonly Plot[] => [
+  longitudinalPlot(source),
+  axialPlot(source),
+  lateralPlot(source),
+];
+
+function longitudinalPlot(source: Source): Plot {
+  const [key, title] = ['longitudinal', 'Longitudinal error'];
+  const found = longitudinal(source.axis());
+  if (!found.ok) return emptyPlot(key, title, sentenceOf(found.why));
+  const length = lengthScale(source.unit, 3);
+  const curves = found.value.map(
+    ({ line, at, value }): PlotCurve => ({
+      name: lineName(source.setup, line),
+      style: curveStyle('axial', lineDash(source.setup, line)),
+      x: at,
+      y: scaled(value, length.perMm),
+    }),
+  );
+  return {
+    kind: 'curves',
+    key,
+    title,
+    x: { label: 'share of the stop', unit: '', digits: 2, from: 0, to: 1 },
+    y: evenAxis(
+      'focus behind the image plane',
+      length.unit,
+      length.digits,
+      reachOf(curves),
+      0.01 * length.perMm,
+    ),
+    curves,
+    notes: lostNote(Math.max(...found.value.map(({ lost }) => lost))),
+  };
+}
+
+function axialPlot(source: Source): Plot {
+  const [key, title] = ['axial colour', 'Axial colour'];
+  const wavelengths = wavelengthsOf(source);
+  const trains = wavelengths.map((wavelengthNm) => ({
+    wavelengthNm,
+    train: trainOf(inWavelength(source.sketch, wavelengthNm), source.setting, 'fourth'),
+  }));
+  const found = axialColour(source.setup, trains, ZONE);
+  if (!found.ok) return emptyPlot(key, title, sentenceOf(found.why));
+  const length = lengthScale(source.unit, 3);
+  const curveOf = (name: string, part: 'paraxialMm' | 'exactMm', line: 'main' | 'short'): PlotCurve => {
+    const known = found.value.flatMap((focus) => {
+      const quantity = focus[part];
+      return quantity.ok ? [[focus.wavelengthNm, quantity.value * length.perMm] as const] : [];
+    });
+    return {
+      name,
+      style: curveStyle('axial', line),
+      x: Float64Array.from(known, ([nm]) => nm),
+      y: Float64Array.from(known, ([, value]) => value),
+    };
+  };
+  const curves = [
+    curveOf('exact, 0.71 of the stop', 'exactMm', 'main'),
+    curveOf('paraxial', 'paraxialMm', 'short'),
+  ];
+  return {
+    kind: 'curves',
+    key,
+    title,
+    x: { label: 'wavelength', unit: 'nm', digits: 1, from: wavelengths[0] ?? 0, to: wavelengths.at(-1) ?? 1 },
+    y: evenAxis(
+      'focus behind the image plane',
+      length.unit,
+      length.digits,
+      reachOf(curves),
+      0.01 * length.perMm,
+    ),
+    curves,
+    notes: [],
+  };
+}
+
+/** Equal steps from the shortest to the longest line of the sketch: within them every index is known. */
+function wavelengthsOf({ setup, quality }: Source): readonly number[] {
+  const all = setup.lines.map(({ wavelengthNm }) => wavelengthNm);
+  const [low, high] = [Math.min(...all), Math.max(...all)];
+  const count = AMOUNTS[quality].wavelengths;
+  return Array.from({ length: count }, (_, i) => low + ((high - low) * i) / (count - 1));
+}
+
+/** The sketch with this wavelength as its fourth line. */
+const inWavelength = (sketch: Sketch, wavelengthNm: number): Sketch => ({
+  ...sketch,
+  lines: { ...sketch.lines, more: [{ wavelengthNm, weight: 0 }] },
+});
+
+function lateralPlot(source: Source): Plot {
+  const [key, title] = ['lateral colour', 'Lateral colour'];
+  const [main, ...others] = source.sweeps();
+  const found = main && lateralColour(main, others);
+  if (!found?.ok) return emptyPlot(key, title, sentenceOf(found ? found.why : 'ray lost'));
+  const curves = found.value.map(
+    ({ line, at, value }): PlotCurve => ({
+      name: `${lineName(source.setup, line)} less main`,
+      style: curveStyle('ink', lineDash(source.setup, line)),
+      x: at,
+      y: scaled(value, MICRO),
+    }),
+  );
+  return {
+    kind: 'curves',
+    key,
+    title,
+    x: OVER_FIELD,
+    y: evenAxis('height', 'µm', 2, reachOf(curves), 0.1),
+    curves,
+    notes: lostNote(Math.max(0, ...found.value.map(({ lost }) => lost))),
+  };
+}
