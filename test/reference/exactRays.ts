@@ -11,17 +11,12 @@ import type { CaseReport, Miss } from './report.ts';
 const LENGTH_MM = 1e-12;
 /** Of direction cosines and of the cosines to the normal. */
 const COSINE = 1e-13;
-/** What named rays may take instead: where a small angle is the difference of large ones, doubles hold no more. */
+/** What rays may take instead that leave a surface near the critical angle, and heights in a focus plane that a ray hardly runs towards. */
 const WIDER = 1e-11;
-
-/** Rays that may take `WIDER`, each with the reason. */
-const WIDER_RAYS: Readonly<Record<string, string>> = {
-  'block-exit-03': 'leaves near the critical angle, where the cosine is the root of a difference',
-};
-/** Heights in the plane of the paraxial focus that may take `WIDER` of their size. */
-const WIDER_FOCI: Readonly<Record<string, string>> = {
-  'ball-03': 'leaves almost at right angles to the axis, so its height in the focus plane is 104 mm away',
-};
+/** Cosine of refraction below which it is the root of a difference, of which doubles keep half the digits less. */
+const NEAR_CRITICAL = 0.05;
+/** Direction cosine along the axis below which the focus plane is far away on the ray. */
+const ACROSS = 0.05;
 
 /** Runs every ray of a parsed file of exact rays; a report for each, under the ray's id. Null when it is no such file. */
 export function runExactRays(json: unknown): readonly CaseReport[] | null {
@@ -60,11 +55,29 @@ function runRay(train: Train | null, entry: unknown, place: string): CaseReport 
   const direction = isRecord(entry) ? vectorOf(entry.direction) : null;
   const seen = new Comparison();
   if (train && isRecord(entry) && start && direction) {
-    compareRay(train, traceRay(train, start, direction), entry, id, seen);
+    compareRay(train, traceRay(train, start, direction), entry, seen);
   }
   const { covered, left, misses } = seen;
   if (covered.length === 0) return { id, outcome: 'skipped', covered, left, misses };
   return { id, outcome: misses.length > 0 ? 'failed' : 'passed', covered, left, misses };
+}
+
+/** What makes a ray of the file hard for doubles: the first surface it leaves near the critical angle, and a far focus plane. */
+export function hardshipsOf(ray: unknown): {
+  readonly nearCritical: number | null;
+  readonly farFocus: boolean;
+} {
+  const surfaces: readonly unknown[] = isRecord(ray) && Array.isArray(ray.surfaces) ? ray.surfaces : [];
+  const grazing = surfaces.findIndex((surface) => {
+    const cosine = isRecord(surface) ? numberIn(surface, 'cosRefraction') : null;
+    return cosine !== null && cosine < NEAR_CRITICAL;
+  });
+  const last = surfaces.at(-1);
+  const direction = isRecord(last) ? vectorOf(last.direction) : null;
+  return {
+    nearCritical: grazing < 0 ? null : grazing,
+    farFocus: direction !== null && Math.abs(direction[2]) < ACROSS,
+  };
 }
 
 const STATUS: Readonly<Record<string, string>> = {
@@ -72,23 +85,21 @@ const STATUS: Readonly<Record<string, string>> = {
   missed: 'miss',
 };
 
-function compareRay(
-  train: Train,
-  path: RayPath,
-  entry: Record<string, unknown>,
-  id: string,
-  seen: Comparison,
-): void {
+function compareRay(train: Train, path: RayPath, entry: Record<string, unknown>, seen: Comparison): void {
   seen.same('status', path.lost ? STATUS[path.lost.why] : 'ok', entry.status);
   if (entry.failsAt !== undefined) seen.same('failsAt', path.lost?.surface, entry.failsAt);
   const surfaces: readonly unknown[] = Array.isArray(entry.surfaces) ? entry.surfaces : [];
   seen.same('surfaces', path.hits.length, surfaces.length);
-  const wider = id in WIDER_RAYS ? WIDER : 0;
+  const { nearCritical, farFocus } = hardshipsOf(entry);
   for (const [k, wanted] of surfaces.entries()) {
+    const wider = nearCritical !== null && k >= nearCritical ? WIDER : 0;
     if (isRecord(wanted)) compareHit(path.hits[k], wanted, `surface ${k + 1}`, wider, seen);
   }
   const focus = entry.atParaxialFocus;
-  if (isRecord(focus)) compareFocus(train, path, focus, id, seen);
+  if (isRecord(focus)) {
+    const wider = farFocus || nearCritical !== null;
+    compareFocus(train, path, focus, wider ? WIDER : LENGTH_MM, seen);
+  }
   if (isRecord(entry.parallelBundleFoci)) compareFoci(train, path, entry.parallelBundleFoci, seen);
 }
 
@@ -128,7 +139,7 @@ function compareFocus(
   train: Train,
   path: RayPath,
   wanted: Record<string, unknown>,
-  id: string,
+  relative: number,
   seen: Comparison,
 ): void {
   const back = firstOrder(train).backFocusMm;
@@ -140,7 +151,7 @@ function compareFocus(
     if (value === null) continue;
     const got = (last?.point[i] ?? 0) + reach * (direction?.[i] ?? 0);
     const scale = Math.max(1, Math.abs(value), Math.abs(back.ok ? back.value : 0));
-    seen.near(`focus ${axis}`, got, value, (id in WIDER_FOCI ? WIDER : LENGTH_MM) * scale);
+    seen.near(`focus ${axis}`, got, value, relative * scale);
   }
   const z = numberIn(wanted, 'z');
   if (z !== null)
