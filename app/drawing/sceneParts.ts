@@ -15,6 +15,8 @@ export interface ScenePart {
   readonly body: Body | null;
   /** 1/power of a thin part or of glass by itself in its own media; null for what has none. */
   readonly focalLengthMm: number | null;
+  /** Where its rim stands: of glass between the rims of its outer faces. */
+  readonly rimMm: number;
   readonly carriesStop: boolean;
   readonly selected: boolean;
 }
@@ -54,11 +56,14 @@ export function partsOf(
     const place = places.parts[index];
     const open = Math.max((needed[index] ?? 0) * OPEN_MARGIN, leastMm) || bareMm;
     const body = part.kind === 'glass' ? bodyOf(part, () => open) : null;
+    const frontMm = place?.frontMm ?? 0;
+    const rearMm = place?.rearMm ?? 0;
     return {
       part,
       index,
-      frontMm: place?.frontMm ?? 0,
-      rearMm: place?.rearMm ?? 0,
+      frontMm,
+      rearMm,
+      rimMm: body ? frontMm + rimMiddle(body) : (frontMm + rearMm) / 2,
       semiMm: body?.semiMm ?? part.semiDiameterMm ?? open,
       body,
       focalLengthMm: ownFocalLength(part, index, analysis),
@@ -67,6 +72,8 @@ export function partsOf(
     };
   });
 }
+
+const rimMiddle = ({ faces }: Body): number => ((faces[0]?.rimMm ?? 0) + (faces.at(-1)?.rimMm ?? 0)) / 2;
 
 const WORDS: Partial<Record<WarningKind, string>> = {
   'surfaces cross': 'surfaces cross',
@@ -82,7 +89,7 @@ export function faultsIn(parts: readonly ScenePart[], warnings: readonly Warning
     if (!words) return [];
     const next = parts[i + 1];
     const isBetween = own.kind === 'rims clash' && next !== undefined;
-    const zMm = isBetween ? (part.rearMm + next.frontMm) / 2 : (part.frontMm + part.rearMm) / 2;
+    const zMm = isBetween ? (part.rearMm + next.frontMm) / 2 : part.rimMm;
     return [{ part, zMm, words }];
   });
 }

@@ -14,6 +14,9 @@ const LEAST_MM = 0.01;
 /** The grip of a radius stands at this share of its face's height, above the axis and below it in turn, so that neighbours keep apart. */
 const RADIUS_AT = 0.72;
 
+/** The rim goes about twice as far as its sag changes, as the vertex gives way for the principal planes to stay. */
+const BENT_SHARE = 0.5;
+
 /** The grips of selected glass: radii, bending at constant power, thicknesses on the axis, rims. */
 export function glassHandles(sight: Sight, drawn: ScenePart): readonly Handle[] {
   const { part, body } = drawn;
@@ -88,7 +91,7 @@ function bendHandle(sight: Sight, drawn: ScenePart, part: GlassPart): Handle {
   const presentMm = face ? sagOfConic(face.profile, heightMm) : 0;
   const present = radiusMm === null ? 0 : 1 / radiusMm;
   const curvatureAt = (dzMm: number) =>
-    dzMm === 0 ? present : curvatureForSag(presentMm + dzMm, heightMm, conic);
+    dzMm === 0 ? present : curvatureForSag(presentMm + BENT_SHARE * dzMm, heightMm, conic);
   const bend =
     (curvature: number): Edit =>
     (sketch) => {

@@ -169,7 +169,7 @@ function focalHandles(sight: Sight, drawn: ScenePart): readonly Handle[] {
 }
 
 function rimHandles(sight: Sight, drawn: ScenePart): readonly Handle[] {
-  const { part, index, frontMm, rearMm, carriesStop } = drawn;
+  const { part, index, rimMm, carriesStop } = drawn;
   const semiMm = sharedSemi(drawn);
   if ((part.kind === 'stop' && carriesStop) || semiMm === null) return [];
   const { view } = sight;
@@ -180,7 +180,7 @@ function rimHandles(sight: Sight, drawn: ScenePart): readonly Handle[] {
   return ([1, -1] as const).map((side) => ({
     id: `rim:${part.id}:${side > 0 ? 'upper' : 'lower'}`,
     order: 4.5,
-    xPx: xOf(view, (frontMm + rearMm) / 2),
+    xPx: xOf(view, rimMm),
     yPx: yOf(view, side * semiMm),
     line: null,
     cursor: 'ns-resize',

@@ -65,7 +65,7 @@ function partLabel(scene: Scene, part: ScenePart, view: Viewport, unit: LengthUn
     id: `part:${part.part.id}`,
     text: partText(part, unit),
     style: part.selected ? 'label strong' : 'label',
-    xPx: xOf(view, (part.frontMm + part.rearMm) / 2),
+    xPx: xOf(view, part.rimMm),
     yPx: Math.max(HIGHEST_PX, yOf(view, topMm)),
     sides: ['above', 'above right', 'above left'],
     priority: part.selected ? 10 : 9,
