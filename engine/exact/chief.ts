@@ -54,7 +54,7 @@ export function paraxialLaunch(
  * The launch number of the meridional ray of `source` that meets the stop at the share `target` of its radius, by secants from `guess`
  * that are halved where they lose the ray and kept between the two sides of the target once both are known; NaN when that ends nowhere.
  */
-export function aimInMeridian(
+function aimInMeridian(
   sight: Sight,
   source: Source,
   target: number,

@@ -24,7 +24,7 @@ const anyIndex = () =>
   );
 
 /** A plane, sphere, conic or asphere of refracting kind. */
-export const anyExactSurface = (): fc.Arbitrary<Omit<SurfaceSpec, 'part'>> =>
+const anyExactSurface = (): fc.Arbitrary<Omit<SurfaceSpec, 'part'>> =>
   fc.record({
     curvaturePerMm: fc.oneof(
       { weight: 1, arbitrary: fc.constant(0) },
