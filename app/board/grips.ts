@@ -19,6 +19,8 @@ export interface Grip {
   readonly line: { readonly topPx: number; readonly bottomPx: number } | null;
   /** Half the width over which it can be taken, for a grip that is a text. Default 0. */
   readonly halfWidthPx?: number;
+  /** The grip can be taken anywhere in this circle about its point. Default 0. */
+  readonly radiusPx?: number;
   /** It can be pointed at and clicked, but a drag from it pans. */
   readonly fixed?: true;
   /** CSS cursor over the grip. */
@@ -36,14 +38,14 @@ export const TOUCH_RADIUS_PX = 22;
 /** Distances that differ by less than this share of the radius count as equal: a hand does not aim finer. */
 const TIE_SHARE = 0.5;
 
-type Reach = Pick<Grip, 'xPx' | 'yPx' | 'line' | 'halfWidthPx'>;
+type Reach = Pick<Grip, 'xPx' | 'yPx' | 'line' | 'halfWidthPx' | 'radiusPx'>;
 
-/** Distance (px) from a point to a grip: to its line, its text or its point. */
+/** Distance (px) from a point to a grip: to its line, its text, its circle or its point. */
 export function distanceTo(grip: Reach, xPx: number, yPx: number): number {
   const nearestY =
     grip.line === null ? grip.yPx : Math.min(grip.line.bottomPx, Math.max(grip.line.topPx, yPx));
   const aside = Math.max(0, Math.abs(xPx - grip.xPx) - (grip.halfWidthPx ?? 0));
-  return Math.hypot(aside, yPx - nearestY);
+  return Math.max(0, Math.hypot(aside, yPx - nearestY) - (grip.radiusPx ?? 0));
 }
 
 /**

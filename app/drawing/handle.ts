@@ -1,7 +1,7 @@
 import type { Edit } from '../../engine/index.ts';
 import type { Grip } from '../board/grips.ts';
 import type { Catch } from '../board/snap.ts';
-import type { Selected } from '../store/viewStore.ts';
+import type { Selected, View } from '../store/viewStore.ts';
 import type { EntryUnit } from '../ui/entry.ts';
 
 /** A drag so far, in mm of the layout: total movement since the press, and where the pointer is now. */
@@ -50,8 +50,21 @@ export interface Handle extends Grip {
   readonly why: string | null;
   /** How the grip itself is drawn. */
   readonly look: 'square' | 'round' | 'none';
+  /** Words at the grip while the pointer is over it. */
+  readonly says?: string;
+  /** A grip of the view: what dragging and stepping it change there, while the sketch stays as it is. */
+  readonly viewing?: {
+    readonly drag: (dxPx: number, dyPx: number, snap: boolean) => Viewed;
+    readonly step: (amountMm: number) => Viewed;
+  };
   /** What a click does where it neither selects nor types. */
   readonly press?: Edit;
+}
+
+/** A change of the view, and its value in words. */
+export interface Viewed {
+  readonly change: Partial<View>;
+  readonly says: string;
 }
 
 /** A move that shifts no frame and was caught by nothing. */

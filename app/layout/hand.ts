@@ -1,12 +1,13 @@
+import type { Sketch } from '../../engine/index.ts';
 import type { Effect, PointerKind } from '../board/hand.ts';
 import type { Fold, Viewport } from '../board/viewport.ts';
 import { panBy, stretchBy, withLengthAt, xOf, zoomAbout } from '../board/viewport.ts';
-import type { Handle, Move } from '../drawing/handle.ts';
+import { type Handle, type Move, plainMove } from '../drawing/handle.ts';
 import { typedByLabel } from '../drawing/handles/labels.ts';
 import { frameLoop } from '../live/frame.ts';
 import { currentReading } from '../live/reading.ts';
 import { applyEdit, cancelEdit, commitEdit, previewEdit, sketchStore } from '../store/sketchStore.ts';
-import { type Selected, setView, viewStore } from '../store/viewStore.ts';
+import { type Selected, setView, type View, viewStore } from '../store/viewStore.ts';
 import { cameraAt, heldFold } from './camera.ts';
 import type { HandState } from './overlay.ts';
 
@@ -44,6 +45,8 @@ const CELL = 'cell:';
 interface Pressed {
   readonly handle: Handle;
   readonly view: Viewport;
+  /** Of the view, what a grip of the view may change. */
+  readonly loupe: View['loupe'];
 }
 
 /** Total movement of a drag in px, and what is held beside it. */
@@ -62,10 +65,22 @@ export function createHand(board: HandBoard): Hand {
   let pressed: Pressed | null = null;
 
   const press = (handle: Handle | null) => {
-    pressed = handle ? { handle, view: board.view() } : null;
+    pressed = handle ? { handle, view: board.view(), loupe: viewStore.getState().loupe } : null;
   };
 
   const drag = ({ handle, view }: Pressed, pull: Pull, xPx: number, yPx: number, byFinger: boolean) => {
+    const { viewing } = handle;
+    if (viewing) {
+      frameLoop.ask('settle', 'drag', () => {
+        const { change, says } = viewing.drag(pull.dxPx, pull.dyPx, pull.snapPx > 0);
+        setView(change);
+        const from = { xPx: handle.xPx, yPx: handle.yPx };
+        board.show({
+          dragging: { id: handle.id, xPx, yPx, move: plainMove(unchanged, says), from, byFinger },
+        });
+      });
+      return;
+    }
     const move = moveOf(handle, view, pull);
     if (!move) {
       if (handle.why) board.say(handle.why);
@@ -86,6 +101,7 @@ export function createHand(board: HandBoard): Hand {
 
   const giveUp = () => {
     frameLoop.flush();
+    if (pressed?.handle.viewing) setView({ loupe: pressed.loupe });
     if (pressed && sketchStore.getState().running) {
       cancelEdit();
       board.refold(pressed.view.fold);
@@ -172,7 +188,8 @@ export function createHand(board: HandBoard): Hand {
     onEffect,
     step(id, amountMm, other) {
       const handle = board.handleOf(id);
-      if (handle?.step) applyEdit(handle.step(amountMm, otherRule(other)));
+      if (handle?.viewing) setView(handle.viewing.step(amountMm).change);
+      else if (handle?.step) applyEdit(handle.step(amountMm, otherRule(other)));
       else if (handle?.why) board.say(handle.why);
     },
     type,
@@ -217,6 +234,8 @@ function previewMove(board: HandBoard, move: Move, view: Viewport): void {
   board.refold(fold);
   setView({ camera: cameraAt(withLengthAt({ ...view, fold }, 0, firstPx), follow) });
 }
+
+const unchanged = (sketch: Sketch): Sketch => sketch;
 
 const otherRule = (shift: boolean): boolean => shift !== viewStore.getState().otherRule;
 

@@ -86,6 +86,11 @@ export function overlayLayer(
       drawWords(pen, lines, dragging, dragging.byFinger ? FINGER_PX : POINTER_PX, view, bottomPx, room),
     ];
   }
+  const hovered = handles.find(({ id, says }) => id === hand.hover && says !== undefined);
+  if (hovered) {
+    const lines: readonly Line[] = [{ text: hovered.says ?? '', style: 'label strong' }];
+    return [drawWords(pen, lines, hovered, POINTER_PX, view, bottomPx, room)];
+  }
   if (!focused?.step) return [];
   const { xPx, yPx } = focused;
   const lines: readonly Line[] = [{ text: `step ${hand.step}`, style: 'label quiet' }];
@@ -155,6 +160,7 @@ function drawGrip(pen: Pen, { look, xPx, yPx, drag }: Handle, strong: boolean): 
 
 function drawFocus(pen: Pen, grip: Grip): void {
   const half = grip.halfWidthPx;
-  if (half === undefined) pen.circle(grip.xPx, grip.yPx, RING_PX, 'grip focus');
+  if (grip.radiusPx !== undefined) pen.circle(grip.xPx, grip.yPx, grip.radiusPx + 4, 'grip focus');
+  else if (half === undefined) pen.circle(grip.xPx, grip.yPx, RING_PX, 'grip focus');
   else box(pen, grip.xPx - half - 6, grip.yPx - 12, 2 * half + 12, 24, 'grip focus');
 }

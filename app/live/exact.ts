@@ -1,6 +1,7 @@
 import type {
   Absence,
   Comparison,
+  FieldSpot,
   Outcome,
   PupilMap,
   Setting,
@@ -8,7 +9,16 @@ import type {
   Sketch,
   Trust,
 } from '../../engine/index.ts';
-import { compare, exactSetupOf, none, pupilMapOf, refracts, some, trust } from '../../engine/index.ts';
+import {
+  compare,
+  exactSetupOf,
+  fieldSpot,
+  none,
+  pupilMapOf,
+  refracts,
+  some,
+  trust,
+} from '../../engine/index.ts';
 import { analysisOf, remembering } from './analysis.ts';
 
 /** Exact rays of a sketch at a setting, each thing worked out when first asked for and kept. */
@@ -21,6 +31,8 @@ export interface Exact {
   readonly trust: (limitMm: number) => Outcome<Trust, Absence>;
   /** The main line's pencil of a share of the field; null without a setup. */
   readonly pencil: (fraction: number) => PupilMap | null;
+  /** The spot of a share of the field, all lines together. */
+  readonly spot: (fraction: number) => Outcome<FieldSpot, Absence>;
 }
 
 /** The exact rays of a sketch at a setting, remembered as its analysis is. */
@@ -32,6 +44,7 @@ export const exactOf: (sketch: Sketch, setting: Setting) => Exact = remembering(
     return known.ok ? some(compare(known.value)) : known;
   });
   const pencils = new Map<number, PupilMap>();
+  const spots = new Map<number, Outcome<FieldSpot, Absence>>();
   const trusted = new Map<number, Outcome<Trust, Absence>>();
   return {
     get setup() {
@@ -45,6 +58,11 @@ export const exactOf: (sketch: Sketch, setting: Setting) => Exact = remembering(
       const known = setup();
       if (!known.ok) return none(known.why);
       return kept(trusted, limitMm, () => trust(known.value, limitMm));
+    },
+    spot(fraction) {
+      const known = setup();
+      if (!known.ok) return none(known.why);
+      return kept(spots, fraction, () => fieldSpot(known.value, fraction));
     },
     pencil(fraction) {
       const known = setup();

@@ -1,4 +1,5 @@
-import type { Quantity } from '../paraxial/absence.ts';
+import { mapOutcome, none, type Outcome } from '../outcome.ts';
+import type { Absence, Quantity } from '../paraxial/absence.ts';
 import type { Analysis } from '../paraxial/analyse.ts';
 import { weightedLines } from '../sketch/lines.ts';
 import type { Setting, Sketch } from '../sketch/types.ts';
@@ -8,6 +9,7 @@ import { bestFocus, spotMoments, type WeightedMoments } from './focus.ts';
 import { hexapolarGrid } from './grids.ts';
 import { landingsOf } from './landing.ts';
 import { exactSetup } from './setup.ts';
+import { type SpotSize, spotSize } from './spots.ts';
 import type { ExactLine, ExactSetup, SetupOutcome } from './types.ts';
 
 /**
@@ -53,4 +55,28 @@ export function leastSpotShift(setup: ExactSetup, fractions: readonly number[]):
     if (moments.ok) fields.push({ moments: moments.value, weight: 1 });
   }
   return bestFocus(fields);
+}
+
+/** The spot of one field on planes near the image, all lines together. */
+export interface FieldSpot {
+  /** Where its rms radius is least, in mm behind the image plane; 'image at infinity', 'no ray through'. */
+  readonly bestMm: Quantity;
+  /** Its size on the plane `defocusMm` behind the image plane; 'no ray through'. */
+  readonly sizeAt: (defocusMm: number) => Outcome<SpotSize, Absence>;
+}
+
+/** Rings of a spot that is looked at while something is dragged: 1 + 3·4·5 rays a line. */
+const QUICK_RINGS = 4;
+
+/** The spot of the share `fraction` of the field; rims cut, rays are placed between aimed ones. 'image at infinity'. */
+export function fieldSpot(setup: ExactSetup, fraction: number): Outcome<FieldSpot, Absence> {
+  const [field] = traceFields(setup, [fraction], sampleOf(0, hexapolarGrid(QUICK_RINGS)));
+  if (!field) return none('no ray through');
+  return mapOutcome(landingsOf(field), (landings) => {
+    const moments = spotMoments(landings);
+    return {
+      bestMm: moments.ok ? bestFocus([{ moments: moments.value, weight: 1 }]) : moments,
+      sizeAt: (defocusMm) => spotSize(landings, defocusMm),
+    };
+  });
 }
