@@ -47,7 +47,7 @@ export function PasteSheet({ text: firstText, insert, onClose }: PasteSheetProps
         <textarea
           id={id}
           className="paste-text"
-          rows={8}
+          rows={9}
           spellCheck={false}
           // biome-ignore lint/a11y/noAutofocus: the sheet is there to paste into
           autoFocus

@@ -125,7 +125,7 @@ export function Chooser({ label, medium, instead, onPreview, onRestore, onChoose
     <div
       ref={area}
       popover="manual"
-      className="glass-chooser"
+      className={way === 'catalogue' ? 'glass-chooser' : 'glass-chooser glass-chooser-own'}
       role="dialog"
       aria-labelledby={`${id}-title`}
       onKeyDown={onKeyDown}
@@ -146,66 +146,68 @@ export function Chooser({ label, medium, instead, onPreview, onRestore, onChoose
           if (shown !== null && fault === null) choose(shown);
         }}
       >
-        <Segmented
-          label="Choose by"
-          value={way}
-          choices={WAYS}
-          onChoose={(next) => {
-            setWay(next);
-            setStepped(null);
-            show(null);
-          }}
+        <GlassMap
+          fitting={fitting}
+          marked={marked}
+          from={shown === null ? MIDDLE : nominal(shown)}
+          isKnown={isKnown}
+          onHover={hover}
+          onStep={(material) => step({ material: material.id })}
+          onChoose={(material) => choose({ material: material.id })}
+          onLetter={() => filter.current?.focus()}
         />
-        {way === 'catalogue' && (
-          <>
-            <input
-              ref={filter}
-              type="search"
-              className="field-input glass-filter"
-              aria-label="Filter by name, code or kind"
-              placeholder="name, code or kind, such as flint"
-              autoComplete="off"
-              spellCheck={false}
-              value={text}
-              onChange={(event) => typeFilter(event.target.value)}
-              onKeyDown={(event) => {
-                if (event.key !== 'ArrowDown' && event.key !== 'ArrowUp') return;
-                event.preventDefault();
-                area.current?.querySelector<HTMLElement>('[role="listbox"]')?.focus();
-              }}
-            />
-            <GlassMap
-              fitting={fitting}
-              marked={marked}
-              from={shown === null ? MIDDLE : nominal(shown)}
-              isKnown={isKnown}
-              onHover={hover}
-              onStep={(material) => step({ material: material.id })}
-              onChoose={(material) => choose({ material: material.id })}
-              onLetter={() => filter.current?.focus()}
-            />
-            <Beyond
-              fitting={fitting}
-              marked={marked}
-              onHover={hover}
-              onChoose={(material) => choose({ material: material.id })}
-            />
-          </>
-        )}
-        {way === 'code' && <CodeForm medium={medium} onTyped={type} />}
-        {way === 'index' && <IndexForm medium={medium} onTyped={type} />}
-        {way === 'formula' && <FormulaForm medium={medium} onTyped={type} />}
-        <Said medium={shown} fault={fault} />
-        <p className="glass-do">
-          <button type="submit" className="main-button" disabled={shown === null || fault !== null}>
-            Choose
-          </button>
-          {instead !== null && (
-            <button type="button" className="text-button" onClick={() => choose('instead')}>
-              {instead}
-            </button>
+        <div className="glass-side">
+          <Segmented
+            label="Choose by"
+            value={way}
+            choices={WAYS}
+            onChoose={(next) => {
+              setWay(next);
+              setStepped(null);
+              show(null);
+            }}
+          />
+          {way === 'catalogue' && (
+            <>
+              <input
+                ref={filter}
+                type="search"
+                className="field-input glass-filter"
+                aria-label="Filter by name, code or kind"
+                placeholder="name, code or kind, such as flint"
+                autoComplete="off"
+                spellCheck={false}
+                value={text}
+                onChange={(event) => typeFilter(event.target.value)}
+                onKeyDown={(event) => {
+                  if (event.key !== 'ArrowDown' && event.key !== 'ArrowUp') return;
+                  event.preventDefault();
+                  area.current?.querySelector<HTMLElement>('[role="listbox"]')?.focus();
+                }}
+              />
+              <Beyond
+                fitting={fitting}
+                marked={marked}
+                onHover={hover}
+                onChoose={(material) => choose({ material: material.id })}
+              />
+            </>
           )}
-        </p>
+          {way === 'code' && <CodeForm medium={medium} onTyped={type} />}
+          {way === 'index' && <IndexForm medium={medium} onTyped={type} />}
+          {way === 'formula' && <FormulaForm medium={medium} onTyped={type} />}
+          <Said medium={shown} fault={fault} />
+          <p className="glass-do">
+            <button type="submit" className="main-button" disabled={shown === null || fault !== null}>
+              Choose
+            </button>
+            {instead !== null && (
+              <button type="button" className="text-button" onClick={() => choose('instead')}>
+                {instead}
+              </button>
+            )}
+          </p>
+        </div>
       </form>
     </div>
   );

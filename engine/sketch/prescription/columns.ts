@@ -15,7 +15,7 @@ export const ROLES = [
 ] as const;
 export type Role = (typeof ROLES)[number];
 
-/** What the columns of a table hold, the lines of its surfaces, and those that only name or explain. */
+/** What the columns of a table hold, the lines of its surfaces, and those of no use. */
 export interface Columns {
   readonly roles: readonly Role[];
   readonly data: readonly Line[];
@@ -37,7 +37,7 @@ export function columnsOf(lines: readonly Line[]): Columns {
   const headings = first === undefined ? [] : besides.filter(({ number }) => number < first.number);
   for (const heading of headings.toReversed()) {
     const roles = rolesNamed(heading.cells, width);
-    if (roles !== null) return { roles, data, besides };
+    if (roles !== null) return { roles, data, besides: besides.filter((line) => line !== heading) };
   }
   return { roles: rolesByOrder(data, width), data, besides };
 }

@@ -41,7 +41,8 @@ export function readPrescription(text: string, roles?: readonly Role[]): Prescri
     roles: chosen,
     rows: table.rows,
     faults: all,
-    remarks: [...remarks, ...built.remarks],
+    // A cell that is not read leaves its surface in air.
+    remarks: [...remarks, ...(faults.length === 0 ? built.remarks : [])],
     parts: all.length === 0 ? built.parts : [],
   };
 }
@@ -64,7 +65,8 @@ const NOMINAL_GAP_MM = 10;
 
 /**
  * Puts the parts of a table behind a part, or into the empty sketch. What stands behind moves along. A stop of the table becomes the
- * aperture stop when the sketch has none. Gives the very sketch when the table is not read.
+ * aperture stop when the sketch has none; in an empty sketch without one the stop rides on the first part, until another is chosen.
+ * Gives the very sketch when the table is not read.
  */
 export function insertPrescription(sketch: Sketch, { parts }: Prescription, behind: PartId | null): Sketch {
   const last = parts.at(-1);
@@ -73,8 +75,9 @@ export function insertPrescription(sketch: Sketch, { parts }: Prescription, behi
   const run = alone ? parts : parts.with(-1, { ...last, space: { ...last.space, lengthMm: NOMINAL_GAP_MM } });
   const next = pasteParts(sketch, { format: CLIP_FORMAT, parts: run }, behind);
   const known = new Set(sketch.parts.map(({ id }) => id));
-  const stop = next.parts.find(({ id, kind }) => kind === 'stop' && !known.has(id));
-  return next === sketch || stop === undefined || next.stop !== null ? next : { ...next, stop: stop.id };
+  const ownStop = next.parts.find(({ id, kind }) => kind === 'stop' && !known.has(id));
+  const stop = ownStop ?? (alone ? next.parts[0] : undefined);
+  return stop === undefined || next.stop !== null ? next : { ...next, stop: stop.id };
 }
 
 function tableFaults(text: string, roles: readonly Role[], surfaces: readonly Surface[]): readonly string[] {

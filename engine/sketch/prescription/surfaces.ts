@@ -137,7 +137,8 @@ const READERS: Readonly<Record<Role, (text: string, surface: Surface, isLast: bo
     told(mediumIn(text), mediumWords, (read) => ({ medium: isNamed(medium) ? medium : read })),
   abbe: (text, { medium }) => {
     if (text === '') return SILENT;
-    if (medium === 'air' || !('index' in medium) || isBlank(text)) return { words: 'not needed' };
+    if (medium === 'air' || isBlank(text)) return { words: 'not used' };
+    if (!('index' in medium)) return { words: 'not needed' };
     return told(valueIn(text, 'Abbe number'), abbeWords, (abbeNumber) => ({
       medium: { ...medium, abbeNumber },
     }));

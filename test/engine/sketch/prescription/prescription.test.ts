@@ -209,6 +209,7 @@ describe('the parts of a table', () => {
       ['p1', 3],
       ['p2', 47.5],
     ]);
+    expect(sketch.stop).toBe('p1');
     expect(faultsOf(sketch)).toEqual([]);
   });
 
