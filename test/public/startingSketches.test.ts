@@ -1,12 +1,18 @@
 import { readdirSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { describe, expect, it } from 'vitest';
+import { exactSetupOf } from '../../engine/exact/analyse.ts';
+import { sampleOf, traceFields } from '../../engine/exact/bundles.ts';
+import { hexapolarGrid } from '../../engine/exact/grids.ts';
+import { landingsOf } from '../../engine/exact/landing.ts';
+import { spotSize } from '../../engine/exact/spots.ts';
+import { indexOf } from '../../engine/media/medium.ts';
 import { type Analysis, analyse } from '../../engine/paraxial/analyse.ts';
 import { unbuildable, warningsOf } from '../../engine/paraxial/warnings.ts';
 import { cautionOf } from '../../engine/sheet/notes.ts';
 import { writeSketch } from '../../engine/sketch/file.ts';
 import { parseSketch } from '../../engine/sketch/parse.ts';
-import type { Part, PerPosition, Position, Sketch } from '../../engine/sketch/types.ts';
+import type { GlassPart, Part, PerPosition, Position, Sketch } from '../../engine/sketch/types.ts';
 import { settingAt } from '../../engine/sketch/values.ts';
 import { given } from '../engine/quantity.ts';
 import { STARTING_SKETCHES } from './startingSketches.ts';
@@ -58,6 +64,18 @@ describe('what each starting sketch is there to show', () => {
       { ok: false, why: 'pupil at infinity' },
     ]);
     expect(given(relay?.conjugates.magnification)).toBeCloseTo(-0.6, ROUNDING_DIGITS);
+  });
+
+  it('the relay in glass has the magnification of the thin one, and spots of a few micrometres', () => {
+    const sketch = sketchIn('chute-relay-in-glass.json');
+    const [relay] = analysesOf('chute-relay-in-glass.json');
+    expect(given(relay?.conjugates.magnification)).toBeCloseTo(-0.6, ROUNDING_DIGITS);
+    const setup = given(exactSetupOf(sketch, settingAt(sketch.positions[0]!.id), relay!));
+    const sample = sampleOf(0, hexapolarGrid(6), { fine: true });
+    for (const field of traceFields(setup, [0, 0.7, 1], sample)) {
+      const { rmsMm } = given(spotSize(given(landingsOf(field))));
+      expect(rmsMm).toBeLessThan(0.008);
+    }
   });
 
   it('the colour check camera leaves more back focus than its focal length and clears its mount', () => {
@@ -146,14 +164,33 @@ function imageBehindSensor(sketch: Sketch, position: Position): number {
   const distance = sketch.object.distanceMm;
   let imageMm = typeof distance === 'number' ? -distance : Number.NEGATIVE_INFINITY;
   for (const part of sketch.parts) {
-    imageMm = imageBehind(part, imageMm) - at(part.space.lengthMm);
+    imageMm = imageBehind(sketch, part, imageMm) - at(part.space.lengthMm);
   }
   return imageMm;
 }
 
-function imageBehind(part: Part, objectMm: number): number {
+function imageBehind(sketch: Sketch, part: Part, objectMm: number): number {
+  if (part.kind === 'glass') return imageBehindGlass(sketch, part, objectMm);
   if (part.kind === 'thin') return 1 / (1 / objectMm + 1 / part.focalLengthMm);
   return part.kind === 'plate' && 'index' in part.material
     ? objectMm - part.thicknessMm / part.material.index
     : objectMm;
+}
+
+/** Surface by surface: n′/s′ = n/s + (n′ − n)/R. */
+function imageBehindGlass(
+  { lines, air }: Sketch,
+  { surfaces, fillings }: GlassPart,
+  objectMm: number,
+): number {
+  let index = 1;
+  let imageMm = objectMm;
+  for (const [k, { radiusMm }] of surfaces.entries()) {
+    const filling = fillings[k];
+    const behind = filling ? given(indexOf(filling.material, lines.mainNm, lines, air)) : 1;
+    imageMm = behind / (index / imageMm + (radiusMm === null ? 0 : (behind - index) / radiusMm));
+    imageMm -= filling?.thicknessMm ?? 0;
+    index = behind;
+  }
+  return imageMm;
 }

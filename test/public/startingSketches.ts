@@ -9,6 +9,9 @@ import type {
   Space,
   ThinPart,
 } from '../../engine/sketch/types.ts';
+import { bendingOf } from '../../engine/solve/bending.ts';
+import type { Recipe } from '../../engine/solve/recipe.ts';
+import { thickenPart } from '../../engine/solve/thicken.ts';
 import { inspectionZoom } from '../engine/demo.ts';
 
 /** A sketch that comes with the tool, and what the list of starting sketches says about it. */
@@ -29,6 +32,11 @@ export const STARTING_SKETCHES: readonly StartingSketch[] = [
     file: 'sorting-chute-relay.json',
     summary: 'Two lenses and a stop, telecentric on both sides, 0.6 times',
     sketch: sortingChuteRelay(),
+  },
+  {
+    file: 'chute-relay-in-glass.json',
+    summary: 'The same relay in real glass: two cemented pairs, to compare exact rays with paraxial ones',
+    sketch: chuteRelayInGlass(),
   },
   {
     file: 'colour-check-camera.json',
@@ -90,6 +98,38 @@ function sortingChuteRelay(): Sketch {
     aperture: { kind: 'stopDiameter', diameterMm: 12 },
     field: { size: { kind: 'objectHeight', heightMm: 7.5 }, fractions: [0, 0.7, 1], vignetting: 0 },
   };
+}
+
+/** Both lenses as cemented pairs of crown and flint, bent so that the least spots are small over the field. */
+function chuteRelayInGlass(): Sketch {
+  const [crown, flint] = [{ material: 'n-bk7' }, { material: 'n-sf5' }];
+  const chuteLens: Recipe = {
+    kind: 'cemented pair',
+    materials: [flint, crown],
+    thicknessesMm: [3, 7],
+    bending: bendingOf(-2.5),
+  };
+  const cameraLens: Recipe = {
+    kind: 'cemented pair',
+    materials: [crown, flint],
+    thicknessesMm: [5.6, 2.4],
+    bending: bendingOf(-0.5),
+  };
+  const inGlass = thickened(thickened(sortingChuteRelay(), id('p1'), chuteLens), id('p3'), cameraLens);
+  return {
+    ...inGlass,
+    title: 'Chute relay in glass',
+    notes:
+      'The sorting-chute relay with cemented pairs of N-BK7 and N-SF5 in the place of its thin lenses: the focal lengths and the image are those of the thin relay, the rays are not quite.',
+    aperture: { kind: 'stopDiameter', diameterMm: 8 },
+    sensor: { size: { widthMm: 7.2, heightMm: 5.4 }, pixelPitchMm: 0.00345 },
+  };
+}
+
+function thickened(sketch: Sketch, partId: PartId, recipe: Recipe): Sketch {
+  const made = thickenPart(sketch, partId, recipe);
+  if (!made.ok) throw new Error(`thickened: ${made.why}`);
+  return made.value.sketch;
 }
 
 function colourCheckCamera(): Sketch {
