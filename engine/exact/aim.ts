@@ -35,7 +35,7 @@ export function bundleAbout(sight: Sight, source: Source, chief: Chief, perRadiu
  * Aims `count` rays at points of the real stop: `pupil` has x and y in turn, in shares of its radius. `rays` gets them as `launch` starts
  * them. A point that no ray gets to has a ray with a code from its start, of the surface that is in the way (of a miss of the stop when
  * nothing is): the last one that was tried, which is lost there. Starts at the chief ray; all rays go together by Newton steps with Broyden's correction
- * (Math. Comp. 19, 577, 1965), halved where they lose the ray or lead away.
+ * (Math. Comp. 19, 577, 1965), halved where they lose the ray or lead away. Those that do not arrive are sought again in small steps when `thorough`.
  */
 export function aimAll(
   sight: Sight,
@@ -44,6 +44,7 @@ export function aimAll(
   count: number,
   rays: Float64Array,
   guess: ((x: number, y: number) => readonly [number, number]) | null = null,
+  thorough = true,
 ): void {
   const { source, chief, perRadiusX, perRadiusY } = bundle;
   if (chief.code !== 0) {
@@ -93,7 +94,7 @@ export function aimAll(
   }
   for (const [i, search] of searches.entries()) {
     const at = i * STRIDE;
-    const code = search.done ? 0 : walk(sight, bundle, search);
+    const code = search.done ? 0 : thorough ? walk(sight, bundle, search) : LOSSES * stopSurface + MISSED;
     launch(source, search.a, search.b, rays, at);
     if (code !== 0) rays[at + CODE] = code;
   }

@@ -18,14 +18,16 @@ export interface PupilMap {
   readonly fraction: number;
   /** Why there is no chief ray, and so no bundle; null when there is one. */
   readonly lost: Lost | null;
-  /** Null when not all of the eight get to the stop: then every ray has to be aimed. */
+  /** Null when no eight rays around the chief ray get to the stop: then every ray has to be aimed. */
   readonly shape: Shape | null;
   readonly bundle: AimedBundle;
   readonly sight: Sight;
 }
 
-/** Launch numbers as polynomials in the place (x, y) in the stop; a is odd in x, b even. */
+/** Launch numbers as polynomials in the place (x, y) in the stop, in shares of `ring`; a is odd in x, b even. */
 interface Shape {
+  /** How far out, in shares of the stop's radius, the aimed rays lie: 1 unless the rim is out of reach. */
+  readonly ring: number;
   /** x · (1, x², y, y²). */
   readonly a: readonly [number, number, number, number];
   /** 1, y, y², y³, y⁴. */
@@ -34,6 +36,8 @@ interface Shape {
   readonly across: readonly [number, number, number, number];
 }
 
+/** Tried in turn; further out the polynomials are carried on. */
+const RINGS = [1, 0.7, 0.5, 0.3, 0.15];
 const INNER = 0.6;
 const DIAGONAL = Math.SQRT1_2;
 /** Rim and an inner zone, in the meridian, across it and between; those on the other side of the meridian are alike. */
@@ -50,7 +54,7 @@ export function pupilMapOf(setup: ExactSetup, line: number, fraction: number): P
   const source = sourceOf(setup, line, fraction);
   const paraxial = paraxialLaunch(source, setup, fraction, 1) - paraxialLaunch(source, setup, fraction, 0);
   const bundle = bundleAbout(sight, source, chief, paraxial);
-  const shape = chief.code === 0 ? shapeOf(sight, bundle) : null;
+  const shape = chief.code === 0 ? widestShape(sight, bundle) : null;
   return { setup, line, fraction, lost: lostOf(chief.code), shape, bundle, sight };
 }
 
@@ -100,18 +104,31 @@ export function aimedRay(map: PupilMap, x: number, y: number): Outcome<AimedRay,
   });
 }
 
-const firstAt = ({ a }: Shape, x: number, y: number): number =>
-  x * (a[0] + a[1] * x * x + y * (a[2] + a[3] * y));
+function firstAt({ a, ring }: Shape, xInStop: number, yInStop: number): number {
+  const [x, y] = [xInStop / ring, yInStop / ring];
+  return x * (a[0] + a[1] * x * x + y * (a[2] + a[3] * y));
+}
 
-const secondAt = ({ b, across }: Shape, x: number, y: number): number =>
-  b[0] +
-  y * (b[1] + y * (b[2] + y * (b[3] + y * b[4]))) +
-  x * x * (across[0] + across[1] * x * x + y * (across[2] + across[3] * y));
+function secondAt({ b, across, ring }: Shape, xInStop: number, yInStop: number): number {
+  const [x, y] = [xInStop / ring, yInStop / ring];
+  const inMeridian = b[0] + y * (b[1] + y * (b[2] + y * (b[3] + y * b[4])));
+  return inMeridian + x * x * (across[0] + across[1] * x * x + y * (across[2] + across[3] * y));
+}
+
+/** The shape through the widest ring of rays that get to the stop. */
+function widestShape(sight: Sight, bundle: AimedBundle): Shape | null {
+  for (const ring of RINGS) {
+    const shape = shapeOf(sight, bundle, ring);
+    if (shape) return shape;
+  }
+  return null;
+}
 
 /** The polynomials through the nine aimed rays, each term from the rays that single it out; null when one of them does not get there. */
-function shapeOf(sight: Sight, bundle: AimedBundle): Shape | null {
+function shapeOf(sight: Sight, bundle: AimedBundle, ring: number): Shape | null {
   const rays = new Float64Array(AIMED_COUNT * STRIDE);
-  aimAll(sight, bundle, AIMED_POINTS, AIMED_COUNT, rays);
+  const points = AIMED_POINTS.map((share) => share * ring);
+  aimAll(sight, bundle, points, AIMED_COUNT, rays, null, false);
   const numbers = Array.from({ length: AIMED_COUNT }, (_, i): readonly [number, number] => {
     const at = i * STRIDE;
     if (rays[at + CODE] !== 0) return [Number.NaN, Number.NaN];
@@ -127,13 +144,16 @@ function shapeOf(sight: Sight, bundle: AimedBundle): Shape | null {
   const [across, acrossQuartic] = evenThrough(side[1] - centre, sideIn[1] - centre);
   const [linear, acrossCubic] = oddThrough(side[0], sideIn[0]);
   const plain: Shape = {
+    ring,
     a: [linear, acrossCubic, 0, 0],
     b: [centre, odd, even, cubic, quartic],
     across: [across, acrossQuartic, 0, 0],
   };
   const [d, dd] = [DIAGONAL, DIAGONAL * DIAGONAL];
-  const leftA = (ray: readonly [number, number], y: number) => (ray[0] - firstAt(plain, d, y)) / d;
-  const leftB = (ray: readonly [number, number], y: number) => (ray[1] - secondAt(plain, d, y)) / dd;
+  const leftA = (ray: readonly [number, number], y: number) =>
+    (ray[0] - firstAt(plain, d * ring, y * ring)) / d;
+  const leftB = (ray: readonly [number, number], y: number) =>
+    (ray[1] - secondAt(plain, d * ring, y * ring)) / dd;
   const [upA, downA, upB, downB] = [
     leftA(upSide, d),
     leftA(downSide, -d),
@@ -141,6 +161,7 @@ function shapeOf(sight: Sight, bundle: AimedBundle): Shape | null {
     leftB(downSide, -d),
   ];
   const shape: Shape = {
+    ring,
     a: [linear, acrossCubic, (upA - downA) / (2 * d), (upA + downA) / (2 * dd)],
     b: plain.b,
     across: [across, acrossQuartic, (upB - downB) / (2 * d), (upB + downB) / (2 * dd)],
