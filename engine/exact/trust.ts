@@ -17,6 +17,8 @@ export interface Trust {
 
 /** Shares looked at one by one; between two of them the error is taken to run one way. */
 const SCANNED = 24;
+/** So many at once: beyond the first that passes the limit, where rays are lost and hard to aim, none are needed. */
+const AT_ONCE = 6;
 /** Halvings of the interval in which the limit is first passed; in what is left of it, 1/1500, the error is taken as straight. */
 const HALVINGS = 6;
 
@@ -56,10 +58,15 @@ export function trust(setup: ExactSetup, limitMm: number): Outcome<Trust, Absenc
 
 /** The largest share up to which no error is beyond the limit. */
 function firstBeyond(errorAt: (shares: Float64Array) => Float64Array, limitMm: number): number {
-  const shares = Float64Array.from({ length: SCANNED }, (_, i) => (i + 1) / SCANNED);
   // How far beyond the limit; NaN, for a lost ray, is beyond too.
-  const excess = errorAt(shares).map((error) => Math.abs(error) - limitMm);
-  const first = excess.findIndex((over) => !(over <= 0));
+  const excess: number[] = [];
+  let first = -1;
+  while (first < 0 && excess.length < SCANNED) {
+    const done = excess.length;
+    const shares = Float64Array.from({ length: AT_ONCE }, (_, i) => (done + i + 1) / SCANNED);
+    for (const error of errorAt(shares)) excess.push(Math.abs(error) - limitMm);
+    first = excess.findIndex((over) => !(over <= 0));
+  }
   if (first < 0) return 1;
   let [within, without] = [first / SCANNED, (first + 1) / SCANNED];
   let [under, over] = [first === 0 ? -limitMm : excess[first - 1]!, excess[first]!];
