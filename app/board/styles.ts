@@ -72,7 +72,11 @@ export type MarkStyle =
   | 'ink'
   | 'lost'
   | 'drift'
-  | 'drift beyond';
+  | 'drift beyond'
+  | 'loupe ring'
+  | 'loupe target'
+  | 'loupe plane'
+  | 'loupe airy';
 
 /** Looks of texts. */
 export type TextStyle =
@@ -247,6 +251,10 @@ const MARKS: Readonly<Record<Exclude<MarkStyle, RayStyle | CurveStyle>, MarkLook
   lost: line('bad', 1.6),
   drift: crisp('ink', 1.6),
   'drift beyond': crisp('bad', 2),
+  'loupe ring': line('ink', 1.6),
+  'loupe target': line('ink', 1.2),
+  'loupe plane': crisp('ink', 1, DOTTED),
+  'loupe airy': line('ink', 1.4),
 };
 
 const TEXTS: Readonly<Record<TextStyle, TextLook>> = {

@@ -2,12 +2,14 @@ import type { PartId } from '../../engine/index.ts';
 import {
   addPosition,
   fixSensor,
+  leastSpotShift,
   releaseStop,
   rideStop,
   setImagePlane,
   settingAt,
 } from '../../engine/index.ts';
 import { analysisOf } from '../live/analysis.ts';
+import { exactOf } from '../live/exact.ts';
 import { applyEdit } from '../store/sketchStore.ts';
 import { select, setView } from '../store/viewStore.ts';
 import { command, selectedNow, settingNow, sketchNow } from './now.ts';
@@ -27,6 +29,13 @@ export function stopAndImageCommands(): CommandGroup {
         () => carrier() !== undefined,
       ),
       command('fixSensor', 'Fix the sensor where the image is', [], fix, () => imageDistance() !== null),
+      command(
+        'focusLeastSpot',
+        'Focus for the least spot: fix the sensor at the exact best focus',
+        [],
+        focusLeastSpot,
+        () => sketchNow().parts.length > 0 && exactNow().setup.ok,
+      ),
       command(
         'followFocus',
         'Let the image plane follow the focus',
@@ -93,6 +102,18 @@ function imageDistance(): number | null {
 function fix(): void {
   const distanceMm = imageDistance();
   if (distanceMm !== null) applyEdit((sketch) => fixSensor(sketch, distanceMm));
+}
+
+const exactNow = () => exactOf(sketchNow(), settingNow());
+
+/** Fixes the sensor where the spots of all drawn fields, in all lines, are least together. */
+function focusLeastSpot(): void {
+  const { setup } = exactNow();
+  if (!setup.ok || !setup.value.imagePlaneMm.ok) return;
+  const planeMm = setup.value.imagePlaneMm.value;
+  const shift = leastSpotShift(setup.value, sketchNow().field.fractions);
+  const { at, toNext } = settingNow();
+  if (shift.ok && toNext === 0) applyEdit((sketch) => fixSensor(sketch, planeMm + shift.value, at));
 }
 
 function add(): void {

@@ -8,6 +8,8 @@ const KEPT = [
   'unit',
   'shown',
   'raysPerBundle',
+  'exact',
+  'loupe',
   'realIsPositive',
   'snap',
   'hints',
@@ -30,6 +32,8 @@ export function keptViewOf(view: View): KeptView {
 
 const flag = v.boolean();
 const count = (from: number, to: number) => v.pipe(v.number(), v.integer(), v.minValue(from), v.maxValue(to));
+const number = v.pipe(v.number(), v.finite());
+const positive = v.pipe(number, v.minValue(0));
 const texts = v.array(v.string());
 
 const DRAWERS = [
@@ -59,6 +63,23 @@ const fields = {
     labels: flag,
   }),
   raysPerBundle: count(1, 99),
+  exact: v.object({
+    paraxial: flag,
+    exact: flag,
+    whiskers: flag,
+    stretch: positive,
+    driftLimitMm: positive,
+    largest: flag,
+    trustLimitMm: positive,
+  }),
+  loupe: v.object({
+    shown: flag,
+    zMm: v.nullable(number),
+    heightMm: v.nullable(number),
+    planeMm: number,
+    lengths: v.nullable(positive),
+    heights: v.nullable(positive),
+  }),
   realIsPositive: flag,
   snap: flag,
   hints: flag,

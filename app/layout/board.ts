@@ -14,6 +14,7 @@ import type { Fold, Viewport } from '../board/viewport.ts';
 import { panBy, stretchBy, xOf, zOf, zoomAbout } from '../board/viewport.ts';
 import type { Handle } from '../drawing/handle.ts';
 import { labelHandles } from '../drawing/handles/labels.ts';
+import { loupeBox } from '../drawing/loupe/loupe.ts';
 import type { Scene } from '../drawing/scene.ts';
 import { plainLength } from '../drawing/words.ts';
 import { frameLoop } from '../live/frame.ts';
@@ -25,7 +26,7 @@ import { cameraAt, fitLook, inPlace, type Look, type Size, settled, viewportOf }
 import { frozenLabels } from './frozen.ts';
 import { createHand, type Hand } from './hand.ts';
 import { type HandState, IDLE_HAND, overlayLayer } from './overlay.ts';
-import { paintParts, paintRays } from './paint.ts';
+import { paintLoupe, paintParts, paintRays } from './paint.ts';
 import { type Picture, pictureOf, sceneOfReading } from './picture.ts';
 import type { Spot } from './tray.ts';
 import { viewToolsBox } from './viewToolsBox.ts';
@@ -61,7 +62,7 @@ export interface Board extends Pick<Hand, 'jog' | 'endJog' | 'type'> {
   readonly destroy: () => void;
 }
 
-type Layer = 'rays' | 'parts' | 'overlay';
+type Layer = 'rays' | 'parts' | 'loupe' | 'overlay';
 
 /** How near a part something is set down on it, px. */
 const ONTO_PX = 9;
@@ -85,6 +86,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
   let labelPlaces: readonly LabelPlace[] = [];
   let labelGrips: readonly Handle[] = [];
   let fold: Fold | null = null;
+  let loupeDrawn = false;
   let drawn: Sketch | null = null;
   /** The sketch and the board's size when the camera last came to rest. */
   let rested: { readonly sketch: Sketch; readonly size: Size } | null = null;
@@ -129,7 +131,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     setDown: (xPx) => client.setDown(spotAt(xPx)),
   });
 
-  const surface = createSurface<Layer>(element, ['rays', 'parts', 'overlay'], () => draw());
+  const surface = createSurface<Layer>(element, ['rays', 'parts', 'loupe', 'overlay'], () => draw());
   const { measure, forget } = canvasMeasure(
     surface.canvas('parts').getContext('2d') as CanvasRenderingContext2D,
   );
@@ -151,6 +153,8 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
     const now = pictureOf(currentReading(), view(), measure, scene);
     picture = now;
     paint('rays', (pen) => paintRays(pen, now));
+    if (now.loupe || loupeDrawn) paint('loupe', (pen) => paintLoupe(pen, now));
+    loupeDrawn = now.loupe !== null;
     drawParts();
     mirror.update(now.handles);
     if (drawn !== now.reading.sketch) speak();
@@ -191,7 +195,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
       labelPlaces = paintParts(pen, now, state.hover, {
         former: labelPlaces,
         frozen: frozenLabels(state, labelPlaces),
-        covered: [viewToolsBox(now.view.widthPx)],
+        covered: [viewToolsBox(now.view.widthPx), ...(now.loupe ? [loupeBox(now.loupe)] : [])],
       });
     });
     labelGrips = labelHandles(now.sight, labelPlaces);
@@ -266,6 +270,7 @@ function recorded(picture: Picture | null, state: HandState): readonly Mark[] {
   const pen = recorderPen(3);
   pen.group('rays', () => paintRays(pen, picture));
   pen.group('parts', () => paintParts(pen, picture));
+  pen.group('loupe', () => paintLoupe(pen, picture));
   const { handles, view, plan } = picture;
   const room = { measure: roughMeasure, labels: [], former: [] };
   pen.group('overlay', () => overlayLayer(pen, handles, view, plan.topPx, state, room));

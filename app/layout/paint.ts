@@ -6,6 +6,7 @@ import { labelsLayer } from '../drawing/layers/labels.ts';
 import { marksLayer } from '../drawing/layers/marks.ts';
 import { glassLayer, partsLayer } from '../drawing/layers/parts.ts';
 import { raysLayer } from '../drawing/layers/rays.ts';
+import { loupeLayer } from '../drawing/loupe/layer.ts';
 import { extensionLines, ribbonLayer } from '../ribbon/layer.ts';
 import type { Picture } from './picture.ts';
 
@@ -20,6 +21,11 @@ export function paintRays(pen: Pen, { scene, view, plan }: Picture): void {
     raysLayer(pen, scene, view);
     marksLayer(pen, scene, view);
   });
+}
+
+/** Draws the loupe over parts and labels; nothing while it is not shown. */
+export function paintLoupe(pen: Pen, { loupe, scene, reading }: Picture): void {
+  if (loupe) loupeLayer(pen, loupe, reading.view.exact, scene.sensorFixed);
 }
 
 /** What places labels besides the picture. */

@@ -1,11 +1,14 @@
 import type { MeasureText } from '../board/measure.ts';
 import type { Viewport } from '../board/viewport.ts';
+import { lostHandles } from '../drawing/exact/handles.ts';
 import { exactRaysOf } from '../drawing/exact/rays.ts';
 import type { Handle } from '../drawing/handle.ts';
 import { endHandles } from '../drawing/handles/ends.ts';
 import { markHandles } from '../drawing/handles/marks.ts';
 import { partHandles } from '../drawing/handles/parts.ts';
 import { type Label, labelsOf } from '../drawing/layers/labels.ts';
+import { loupeHandles } from '../drawing/loupe/handles.ts';
+import { type Loupe, loupeOf } from '../drawing/loupe/loupe.ts';
 import type { Scene } from '../drawing/scene.ts';
 import { sceneOf } from '../drawing/scene.ts';
 import { type Sight, sightOf } from '../drawing/sight.ts';
@@ -23,6 +26,7 @@ export interface Picture {
   readonly labels: readonly Label[];
   readonly handles: readonly Handle[];
   readonly sight: Sight;
+  readonly loupe: Loupe | null;
 }
 
 /** The scene of a reading, with its exact rays as far as they are shown. */
@@ -41,12 +45,14 @@ export function pictureOf(
   scene: Scene = sceneOfReading(reading),
 ): Picture {
   const sight = sightOf(reading, scene, view);
+  const loupe = loupeOf(reading, view);
   const plan = ribbonPlan(cellsOf(sight), sight, measure);
   return {
     reading,
     sight,
     view,
     scene,
+    loupe,
     plan,
     labels: reading.view.shown.labels ? labelsOf(scene, view, reading.view.unit, measure) : [],
     handles: [
@@ -54,6 +60,8 @@ export function pictureOf(
       ...endHandles(sight),
       ...ribbonHandles(plan, sight),
       ...markHandles(sight),
+      ...lostHandles(sight),
+      ...loupeHandles(sight, loupe),
     ],
   };
 }

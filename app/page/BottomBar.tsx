@@ -1,6 +1,7 @@
 import { useStore } from 'zustand';
 import type { ClipboardHost } from '../desk/clipboard.ts';
 import type { Board } from '../layout/board.ts';
+import { ParaxialAndExact } from '../panels/exact/ParaxialAndExact.tsx';
 import { PartCard } from '../panels/PartCard.tsx';
 import { Readouts } from '../panels/Readouts.tsx';
 import { SketchCard } from '../panels/SketchCard.tsx';
@@ -51,7 +52,12 @@ export function BottomBar({ commands, clipboard, board }: BottomBarProps) {
       {open && (
         <div className="bottom-sheet">
           <SheetDialog key={open.id} title={open.title} place="below" onClose={close}>
-            {panel === 'readouts' && <Readouts />}
+            {panel === 'readouts' && (
+              <>
+                <Readouts />
+                <ParaxialAndExact commands={commands} />
+              </>
+            )}
             {panel === 'part' && <PartCard commands={commands} />}
             {panel === 'plots' && <DrawerTabs clipboard={clipboard} board={board} />}
             {panel === 'sketch' && <SketchCard titled={false} />}

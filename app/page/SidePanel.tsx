@@ -1,5 +1,6 @@
 import { useRef } from 'react';
 import { useReadingNow } from '../live/reading.ts';
+import { ParaxialAndExact } from '../panels/exact/ParaxialAndExact.tsx';
 import { PartCard } from '../panels/PartCard.tsx';
 import { Readouts } from '../panels/Readouts.tsx';
 import { SketchCard } from '../panels/SketchCard.tsx';
@@ -22,6 +23,7 @@ export function SidePanel({ commands }: SidePanelProps) {
       <SummaryStrip onWarnings={showWarnings} />
       <div ref={panel} className="side-scroll">
         <Readouts />
+        <ParaxialAndExact commands={commands} />
         <div ref={place} className="side-card" />
         <Card commands={commands} />
         <div id="warnings">

@@ -98,7 +98,7 @@ function traced(exact: Exact, stage: Stage, wanted: readonly Wanted[]): ExactRay
 }
 
 /** The ray as far as the first rim that it passes clearly outside of. */
-function endedAtRim(ray: DrawnRay, train: Train): DrawnRay {
+export function endedAtRim(ray: DrawnRay, train: Train): DrawnRay {
   for (let k = 0; k < ray.heightDriftMm.length; k++) {
     const height = Math.abs(ray.exact[2 * k + 3] ?? 0);
     if (height <= (train.semiDiameter[k] ?? Infinity) * (1 + RIM_SLACK)) continue;

@@ -3,6 +3,7 @@ import type { Shown } from '../../store/viewStore.ts';
 import { setView, viewStore } from '../../store/viewStore.ts';
 import type { Choice } from '../../ui/choices.tsx';
 import { Checkbox, Select } from '../../ui/choices.tsx';
+import { ExactSwitch } from '../exact/ExactSwitch.tsx';
 
 const RAY_COUNTS: readonly Choice<string>[] = ['2', '3', '5', '7', '9', '11', '15', '21'].map((count) => ({
   value: count,
@@ -33,6 +34,9 @@ export function ShownFields() {
         choices={counts}
         onChoose={(count) => setView({ raysPerBundle: Number(count) })}
       />
+      <ExactSwitch what="paraxial" label="Paraxial rays" />
+      <ExactSwitch what="exact" label="Exact rays" />
+      <ExactSwitch what="whiskers" label="Drift whiskers" />
       {SHOWN.map(([key, label]) => (
         <ShownCheckbox key={key} what={key} label={label} />
       ))}

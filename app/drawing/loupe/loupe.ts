@@ -1,0 +1,103 @@
+import type { DrawnRay } from '../../../engine/index.ts';
+import type { Box } from '../../board/labels.ts';
+import type { Viewport } from '../../board/viewport.ts';
+import { xOf, yOf } from '../../board/viewport.ts';
+import type { Reading } from '../../live/reading.ts';
+import { fittedTimes, type LoupeLook, loupeLook, loupeRays, REAL_PX_PER_MM } from './look.ts';
+
+/** The loupe as it stands on the sheet. */
+export interface Loupe {
+  readonly look: LoupeLook;
+  readonly rays: readonly DrawnRay[];
+  /** Where it looks. */
+  readonly target: { readonly xPx: number; readonly yPx: number };
+  readonly xPx: number;
+  readonly yPx: number;
+  readonly radiusPx: number;
+  readonly lengths: number;
+  readonly heights: number;
+  /** Places inside the ring, in px of the sheet. */
+  readonly inside: Viewport;
+  /** Half of the length that it shows. */
+  readonly halfMm: number;
+}
+
+/** Radius of the little ring about the point that is looked at, px. */
+export const TARGET_PX = 8;
+const RADIUS_PX = { least: 62, most: 92, share: 0.19 };
+/** Room for the view tools above, and to the edges of the sheet, px. */
+const TOP_PX = 44;
+const EDGE_PX = 6;
+/** Where the ring may stand about its point, in degrees clockwise from the right: outwards of the field first. */
+const PLACES_DEG = [110, 70, 135, 45, 160, 20];
+
+/** The loupe of a reading in a view; null when it is not shown, or there is nothing to look at. */
+export function loupeOf(reading: Reading, view: Viewport): Loupe | null {
+  if (!reading.view.loupe.shown) return null;
+  const look = loupeLook(reading);
+  if (!look) return null;
+  const fitted = fittedTimes(look);
+  const lengths = reading.view.loupe.lengths ?? fitted.lengths;
+  const heights = reading.view.loupe.heights ?? fitted.heights;
+  const { widthPx, heightPx } = view;
+  const { least, most, share } = RADIUS_PX;
+  const radiusPx = Math.min(most, Math.max(least, share * Math.min(widthPx, heightPx)));
+  const target = { xPx: xOf(view, look.zMm), yPx: yOf(view, look.yMm) };
+  const { xPx, yPx } = ringPlace(target, radiusPx, view, look.yMm < 0);
+  const pxPerMm = lengths * REAL_PX_PER_MM;
+  const pxPerMmUp = heights * REAL_PX_PER_MM;
+  const inside: Viewport = {
+    widthPx,
+    heightPx,
+    fold: null,
+    pxPerMm,
+    stretch: pxPerMmUp / pxPerMm,
+    originMm: look.zMm - xPx / pxPerMm,
+    axisYPx: yPx + look.yMm * pxPerMmUp,
+  };
+  const halfMm = radiusPx / pxPerMm;
+  const { train } = reading.analysis;
+  const firstMm = Math.min(0, look.zMm) - halfMm;
+  const rays = loupeRays(
+    reading,
+    look.share,
+    firstMm,
+    Math.max(train.z.at(-1) ?? 0, look.zMm + 1.1 * halfMm),
+  );
+  return { look, rays, target, xPx, yPx, radiusPx, lengths, heights, inside, halfMm };
+}
+
+/** The first place beside the point that lies on the sheet; else the nearest that does. */
+function ringPlace(
+  target: Loupe['target'],
+  radiusPx: number,
+  { widthPx, heightPx }: Viewport,
+  isBelow: boolean,
+): { readonly xPx: number; readonly yPx: number } {
+  const reach = radiusPx + TARGET_PX;
+  const side = isBelow ? 1 : -1;
+  const places = [side, -side].flatMap((up) =>
+    PLACES_DEG.map((degrees) => {
+      const angle = (degrees * Math.PI) / 180;
+      return { xPx: target.xPx + reach * Math.cos(angle), yPx: target.yPx + up * reach * Math.sin(angle) };
+    }),
+  );
+  const clamp = (value: number, from: number, to: number) => Math.max(from, Math.min(to, value));
+  const onSheet = ({ xPx, yPx }: Loupe['target']) => ({
+    xPx: clamp(xPx, radiusPx + EDGE_PX, widthPx - radiusPx - EDGE_PX),
+    yPx: clamp(yPx, radiusPx + TOP_PX, heightPx - radiusPx - EDGE_PX),
+  });
+  const free = places.find((place) => {
+    const moved = onSheet(place);
+    return moved.xPx === place.xPx && moved.yPx === place.yPx;
+  });
+  return free ?? onSheet(places[0] ?? target);
+}
+
+/** What the ring covers. */
+export const loupeBox = ({ xPx, yPx, radiusPx }: Loupe): Box => ({
+  xPx: xPx - radiusPx,
+  yPx: yPx - radiusPx,
+  widthPx: 2 * radiusPx,
+  heightPx: 2 * radiusPx,
+});
