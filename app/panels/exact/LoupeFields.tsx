@@ -46,7 +46,7 @@ function LoupeSettings() {
         valueMm={zMm}
         digits={3}
         step={1}
-        follows="the image plane"
+        follows="image"
         onSet={(next) => change({ zMm: next })}
         onFollow={() => change({ zMm: null })}
       />
@@ -55,7 +55,7 @@ function LoupeSettings() {
         valueMm={heightMm}
         digits={3}
         step={0.1}
-        follows="the field’s end"
+        follows="field end"
         onSet={(next) => change({ heightMm: next })}
         onFollow={() => change({ heightMm: null })}
       />
