@@ -11,7 +11,7 @@ export { type Compared, type Comparison, compare } from './exact/compare.ts';
 export { contrastOf, diffractionLimit } from './exact/contrast.ts';
 export type { Curve } from './exact/curve.ts';
 export { type DrawnRay, drawnField } from './exact/drift.ts';
-export { rayFans, wavefrontFans } from './exact/fans.ts';
+export { rayFans, type WavefrontFans, wavefrontFans } from './exact/fans.ts';
 export { distortion, fieldCurves, lateralColour } from './exact/fieldCurves.ts';
 export { hexapolarGrid } from './exact/grids.ts';
 export { illumination } from './exact/illumination.ts';

@@ -243,7 +243,7 @@ const MARKS: Readonly<Record<Exclude<MarkStyle, RayStyle | CurveStyle>, MarkLook
   grid: crisp('line', 'hairline'),
   curve: line('ink', 1.6),
   'curve quiet': line('quiet', 1),
-  'curve reference': line('line', 2.5),
+  'curve reference': line('quiet', 'hairline'),
   'Airy disc': line('quiet', 1, [4, 3]),
   glow: line('glass edge', 5),
   paper: outlined(null, 'paper', 0),

@@ -58,7 +58,7 @@ export function DrawerTabs({ clipboard, board }: DrawersProps) {
       onSelect={(id) => setView({ drawer: id === drawer ? null : id })}
     >
       {drawer && (
-        <div className="drawers-body">
+        <div className="drawers-body" data-plots-room>
           {plots && (
             <Suspense fallback={null}>
               <Plots tab={plots} theme={theme} lengthX={(zMm) => windowX(board(), zMm)} onCopy={copy} />

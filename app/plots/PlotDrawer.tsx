@@ -117,15 +117,17 @@ function Options({ tab }: { readonly tab: Tab }) {
   return (
     <>
       {tab === 'spots' && (
-        <Segmented
-          label="Spots"
-          value={spots}
-          choices={[
-            { value: 'plane', label: 'on the image plane' },
-            { value: 'throughFocus', label: 'through focus' },
-          ]}
-          onChoose={(value) => setPlots({ spots: value })}
-        />
+        <div className="plots-unlabelled">
+          <Segmented
+            label="Spots"
+            value={spots}
+            choices={[
+              { value: 'plane', label: 'on the image plane' },
+              { value: 'throughFocus', label: 'through focus' },
+            ]}
+            onChoose={(value) => setPlots({ spots: value })}
+          />
+        </div>
       )}
       {tab === 'field' && (
         <Segmented

@@ -14,9 +14,9 @@ export interface Area {
   readonly bottom: number;
 }
 
-const LEFT = 46;
-const RIGHT = 14;
-const TOP = 44;
+const LEFT = 42;
+const RIGHT = 12;
+const TOP = 46;
 const BOTTOM = 36;
 
 /** The area of a plot with a title, the name of its upright axis below it, and a level axis. */
@@ -38,7 +38,7 @@ export function drawHead(
   pen.text(0, 4, title, 'label strong', { baseline: 'top' });
   pen.text(0, 22, below, 'label quiet', { baseline: 'top' });
   if (notes.length > 0)
-    pen.text(measure(below, 'label quiet') + 12, 22, notes.join(', '), 'label bad', { baseline: 'top' });
+    pen.text(measure(below, 'label quiet') + 12, 22, notes.join(', '), 'label quiet', { baseline: 'top' });
 }
 
 /** Hairlines at round values with their numbers left of them, and a firmer line at zero. */
@@ -78,12 +78,12 @@ export function drawLevel(pen: Pen, axis: Axis, area: Area): void {
 /** The values that are read, in lines beside `xPx`, on the side with more room. */
 export function drawReading(
   pen: Pen,
-  { place, values }: PlotReading,
+  { shortPlace, values }: PlotReading,
   xPx: number,
   area: Area,
   measure: MeasureText,
 ): void {
-  const lines = [place, ...values.map(({ name, text }) => `${name}  ${text}`)];
+  const lines = [shortPlace, ...values.map(({ name, word = name, text }) => `${word}  ${text}`)];
   const widest = Math.max(...lines.map((line) => measure(line, 'label')));
   const leftwards = xPx + 8 + widest > area.right && xPx - area.left > area.right - xPx;
   const at = leftwards ? Math.max(widest, xPx - 8) : Math.min(xPx + 8, area.right + RIGHT - widest);

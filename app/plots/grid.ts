@@ -8,9 +8,9 @@ export interface Grid {
 }
 
 const GAP = 18;
-/** Least widths, px: of a plot with its axes, of spots strung along the axis. */
-const LEAST = { plot: 176, strung: 560 } as const;
-const MOST = 460;
+/** Least and greatest width of a plot with its axes, px. */
+const LEAST = 156;
+const MOST = 512;
 
 /**
  * As many in a row as have room, spread so that rows are alike; `heightPx` is what one row has where all fit into one. Stems and strung
@@ -20,10 +20,13 @@ export function gridOf(plots: readonly Plot[], widthPx: number, heightPx: number
   const wide = plots.some((plot) => plot.kind === 'stems' || (plot.kind === 'spots' && plot.x !== null));
   if (wide) {
     const strung = plots.some((plot) => plot.kind === 'spots');
-    return { columns: 1, room: { widthPx, heightPx: strung ? Math.max(128, heightPx * 0.64) : heightPx } };
+    return {
+      columns: 1,
+      room: { widthPx, heightPx: strung ? Math.round(Math.max(128, heightPx * 0.64)) : heightPx },
+    };
   }
   const count = Math.max(1, plots.length);
-  const fitting = Math.max(1, Math.floor((widthPx + GAP) / (LEAST.plot + GAP)));
+  const fitting = Math.max(1, Math.floor((widthPx + GAP) / (LEAST + GAP)));
   const rows = Math.ceil(count / Math.min(fitting, count));
   const columns = Math.ceil(count / rows);
   const share = (widthPx - GAP * (columns - 1)) / columns;

@@ -15,6 +15,8 @@ export interface Axis {
 /** One curve: a name in words, a colour by what it stands for, a dash by its line; places ascend in x. */
 export interface PlotCurve {
   readonly name: string;
+  /** The name in one word, for where there is little room. */
+  readonly word: string;
   readonly style: MarkStyle;
   readonly x: Float64Array;
   readonly y: Float64Array;

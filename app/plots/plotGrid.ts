@@ -36,22 +36,29 @@ export interface PlotGrid {
   readonly destroy: () => void;
 }
 
-/** Height of a row of plots, px; a plot that stands alone below another keeps it. */
-const ROW_PX = 204;
+/** Bounds of the height of a row of plots, px; between them a row fills what is in view. */
+const ROW = { least: 186, most: 248 } as const;
 
 /** Shows plots in `host`, each on its own canvas that can be read by pointer and keys, and their legend on `legend`. */
 export function createPlotGrid(host: HTMLElement, legend: HTMLCanvasElement, client: GridClient): PlotGrid {
   let sets: readonly PlotSet[] = [];
-  let grid: Grid = { columns: 1, room: { widthPx: 0, heightPx: ROW_PX } };
+  let grid: Grid = { columns: 1, room: { widthPx: 0, heightPx: ROW.least } };
   let shape = '';
   const cells: PlotCell[] = [];
   const context = legend.getContext('2d') as CanvasRenderingContext2D;
   const { measure, forget } = canvasMeasure(context);
   const axis: LengthAxis = (zMm) => client.lengthX(zMm) - host.getBoundingClientRect().left;
 
+  const gridNow = (): Grid => {
+    const body = host.closest('[data-plots-room]');
+    const headPx = legend.closest('.plots-head')?.getBoundingClientRect().height ?? 0;
+    const heightPx = Math.floor((body?.clientHeight ?? 0) - headPx - 18);
+    return gridOf(sets[0]?.plots ?? [], host.clientWidth, Math.min(ROW.most, Math.max(ROW.least, heightPx)));
+  };
+
   const show = (next: readonly PlotSet[]) => {
     sets = next;
-    grid = gridOf(next[0]?.plots ?? [], host.clientWidth, ROW_PX);
+    grid = gridNow();
     const nextShape = shapeOf(next);
     if (nextShape !== shape) {
       shape = nextShape;
@@ -129,7 +136,7 @@ export function createPlotGrid(host: HTMLElement, legend: HTMLCanvasElement, cli
   };
 
   const observer = new ResizeObserver(() => {
-    grid = gridOf(sets[0]?.plots ?? [], host.clientWidth, ROW_PX);
+    grid = gridNow();
     repaint();
   });
   observer.observe(host);

@@ -50,12 +50,16 @@ export function firstStop(plot: Plot): number | null {
 /** One value that is read off, under its name. */
 export interface ReadValue {
   readonly name: string;
+  /** The name where there is little room; the name itself when absent. */
+  readonly word?: string;
   readonly text: string;
 }
 
 /** What is read at a stop: the place in words, and the values there. */
 export interface PlotReading {
   readonly place: string;
+  /** The place where there is little room. */
+  readonly shortPlace: string;
   readonly values: readonly ReadValue[];
 }
 
@@ -69,7 +73,7 @@ export function readAt(plot: Plot, stop: number): PlotReading {
     case 'stems':
       return readStems(plot, stop);
     case 'empty':
-      return { place: plot.sentence, values: [] };
+      return { place: plot.sentence, shortPlace: '', values: [] };
   }
 }
 
@@ -88,23 +92,30 @@ export function sampleNear({ x }: PlotCurve, at: number): number {
 function readCurves({ x, y, curves }: CurvePlot, stop: number): PlotReading {
   return {
     place: `${valueText(stop, x)} ${x.unit === '' ? x.label : ''}`.trim(),
+    shortPlace: `at ${valueText(stop, x)}`,
     values: curves.map((curve) => {
       const value = curve.y[sampleNear(curve, stop)];
-      return { name: curve.name, text: value === undefined ? 'no ray' : valueText(value, y) };
+      return {
+        name: curve.name,
+        word: curve.word,
+        text: value === undefined ? 'no ray' : valueText(value, y),
+      };
     }),
   };
 }
 
 function readSpots(plot: SpotPlot, stop: number): PlotReading {
   const spot = plot.x === null ? plot.spots[0] : plot.spots.find(({ at }) => at === stop);
-  if (!spot) return { place: '', values: [] };
+  if (!spot) return { place: '', shortPlace: '', values: [] };
   if (plot.x === null)
     return {
       place: `within ${valueText(stop, plot)}`,
+      shortPlace: `within ${valueText(stop, plot)}`,
       values: [{ name: 'light', text: valueText(100 * lightWithin(spot, stop), { digits: 1, unit: '%' }) }],
     };
   return {
     place: `${valueText(stop, plot.x)} ${plot.x.label}`,
+    shortPlace: `at ${valueText(stop, plot.x)}`,
     values: [
       { name: 'rms', text: valueText(spot.rms, plot) },
       { name: 'largest', text: valueText(spot.largest, plot) },
@@ -114,9 +125,10 @@ function readSpots(plot: SpotPlot, stop: number): PlotReading {
 
 function readStems({ stems, y }: StemPlot, stop: number): PlotReading {
   const stem = stems.find(({ surface }) => surface === stop);
-  if (!stem) return { place: '', values: [] };
+  if (!stem) return { place: '', shortPlace: '', values: [] };
   return {
     place: stem.name,
+    shortPlace: stem.name,
     values: [
       { name: 'adds', text: valueText(stem.value, y) },
       { name: 'sum so far', text: valueText(stem.sum, y) },
@@ -137,7 +149,7 @@ function lightWithin({ dots }: Spot, radius: number): number {
   return all === 0 ? 0 : within / all;
 }
 
-const NONE: PlotCurve = { name: '', style: 'curve', x: new Float64Array(), y: new Float64Array() };
+const NONE: PlotCurve = { name: '', word: '', style: 'curve', x: new Float64Array(), y: new Float64Array() };
 
 const longest = (curves: readonly PlotCurve[]): PlotCurve =>
   curves.reduce((best, curve) => (curve.x.length > best.x.length ? curve : best), NONE);

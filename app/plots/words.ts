@@ -28,6 +28,9 @@ export function lineName({ lines }: ExactSetup, line: number): string {
   return `${known.line} ${plain(known.wavelengthNm, 1)} nm`;
 }
 
+/** A line in one word. */
+export const lineWord = ({ lines }: ExactSetup, line: number): string => (lines[line] ?? lines[0]).line;
+
 /** The dash of a line. */
 export const lineDash = ({ lines }: ExactSetup, line: number): CurveLine => (lines[line] ?? lines[0]).line;
 

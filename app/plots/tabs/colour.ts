@@ -3,7 +3,7 @@ import { axialColour, lateralColour, longitudinal, sentenceOf, trainOf } from '.
 import { curveStyle, emptyPlot, type Plot, type PlotCurve } from '../plot.ts';
 import { evenAxis, reachOf } from '../scale.ts';
 import { AMOUNTS, type Source } from '../source.ts';
-import { lengthScale, lineDash, lineName, lostNote, scaled } from '../words.ts';
+import { lengthScale, lineDash, lineName, lineWord, lostNote, scaled } from '../words.ts';
 import { OVER_FIELD } from './field.ts';
 
 const MICRO = 1000;
@@ -25,6 +25,7 @@ function longitudinalPlot(source: Source): Plot {
   const curves = found.value.map(
     ({ line, at, value }): PlotCurve => ({
       name: lineName(source.setup, line),
+      word: lineWord(source.setup, line),
       style: curveStyle('axial', lineDash(source.setup, line)),
       x: at,
       y: scaled(value, length.perMm),
@@ -64,13 +65,14 @@ function axialPlot(source: Source): Plot {
     });
     return {
       name,
+      word: line === 'main' ? 'exact' : 'paraxial',
       style: curveStyle('axial', line),
       x: Float64Array.from(known, ([nm]) => nm),
       y: Float64Array.from(known, ([, value]) => value),
     };
   };
   const curves = [
-    curveOf('exact, 0.71 of the stop', 'exactMm', 'main'),
+    curveOf('exact at 0.71 of the stop', 'exactMm', 'main'),
     curveOf('paraxial', 'paraxialMm', 'short'),
   ];
   return {
@@ -111,7 +113,8 @@ function lateralPlot(source: Source): Plot {
   if (!found?.ok) return emptyPlot(key, title, sentenceOf(found ? found.why : 'ray lost'));
   const curves = found.value.map(
     ({ line, at, value }): PlotCurve => ({
-      name: `${lineName(source.setup, line)} less main`,
+      name: lineName(source.setup, line),
+      word: lineWord(source.setup, line),
       style: curveStyle('ink', lineDash(source.setup, line)),
       x: at,
       y: scaled(value, MICRO),
@@ -122,7 +125,7 @@ function lateralPlot(source: Source): Plot {
     key,
     title,
     x: OVER_FIELD,
-    y: evenAxis('height', 'µm', 2, reachOf(curves), 0.1),
+    y: evenAxis('height less that of main', 'µm', 2, reachOf(curves), 0.1),
     curves,
     notes: lostNote(Math.max(0, ...found.value.map(({ lost }) => lost))),
   };

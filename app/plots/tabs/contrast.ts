@@ -1,4 +1,4 @@
-import { contrastOf, diffractionLimit, landingsOf, sentenceOf } from '../../../engine/index.ts';
+import { contrastOf, diffractionLimit, landingsOf, sentenceOf, spotSize } from '../../../engine/index.ts';
 import type { CurveInk, CurveLine } from '../../board/styles.ts';
 import { formatNumber } from '../../ui/format.ts';
 import { curveStyle, emptyPlot, type Plot, type PlotCurve } from '../plot.ts';
@@ -6,14 +6,28 @@ import type { Source } from '../source.ts';
 import { OVER_FIELD } from './field.ts';
 
 const PER_CENT = 100;
+/** An rms radius of so many periods spreads the traced rays too thin to tell a contrast near 0. */
+const PERIODS = 2;
 
 /** The curves of one plot: what of a contrast each shows, its colour and its dash. */
 const CURVES = [
-  { name: 'tangential', part: 'tangential', ink: 'ink', line: 'main' },
-  { name: 'sagittal', part: 'sagittal', ink: 'ink', line: 'short' },
-  { name: 'tangential, diffraction alone', part: 'tangentialLimit', ink: 'quiet', line: 'main' },
-  { name: 'sagittal, diffraction alone', part: 'sagittalLimit', ink: 'quiet', line: 'short' },
-] as const satisfies readonly { name: string; part: string; ink: CurveInk; line: CurveLine }[];
+  { name: 'tangential', word: 'tangential', part: 'tangential', ink: 'ink', line: 'main' },
+  { name: 'sagittal', word: 'sagittal', part: 'sagittal', ink: 'ink', line: 'short' },
+  {
+    name: 'tangential, diffraction alone',
+    word: 'alone, tangential',
+    part: 'tangentialLimit',
+    ink: 'quiet',
+    line: 'main',
+  },
+  {
+    name: 'sagittal, diffraction alone',
+    word: 'alone, sagittal',
+    part: 'sagittalLimit',
+    ink: 'quiet',
+    line: 'short',
+  },
+] as const satisfies readonly { name: string; word: string; part: string; ink: CurveInk; line: CurveLine }[];
 
 const FREQUENCIES = [
   { part: 'atNyquist', key: 'contrast at Nyquist', name: 'At Nyquist', share: 1 },
@@ -33,7 +47,9 @@ export function contrastPlots(source: Source): readonly Plot[] {
     if (!landings.ok || !first) return null;
     const limit = diffractionLimit(first.landing, field.bundles[0]?.index ?? 1, main.wavelengthNm);
     const contrast = contrastOf(landings.value, nyquistPerMm, limit);
-    return contrast.ok ? { share: field.fraction, contrast: contrast.value } : null;
+    const size = spotSize(landings.value);
+    const wide = size.ok && size.value.rmsMm * nyquistPerMm > PERIODS;
+    return contrast.ok ? { share: field.fraction, contrast: contrast.value, wide } : null;
   });
   if (!source.setup.imagePlaneMm.ok)
     return [emptyPlot('contrast', 'Contrast', sentenceOf(source.setup.imagePlaneMm.why))];
@@ -43,8 +59,9 @@ export function contrastPlots(source: Source): readonly Plot[] {
   const dark = values.length - known.length;
   return FREQUENCIES.map(({ part: frequency, key, name, share }): Plot => {
     const curves = CURVES.map(
-      ({ name: curve, part, ink, line }): PlotCurve => ({
+      ({ name: curve, word, part, ink, line }): PlotCurve => ({
         name: curve,
+        word,
         style: curveStyle(ink, line),
         x: at,
         y: Float64Array.from(known, ({ contrast }) => contrast[frequency][part] * PER_CENT),
@@ -57,7 +74,10 @@ export function contrastPlots(source: Source): readonly Plot[] {
       x: OVER_FIELD,
       y: { label: 'contrast', unit: '%', digits: 1, from: 0, to: 100 },
       curves,
-      notes: dark === 0 ? [] : [`no light at ${dark} of ${values.length} fields`],
+      notes: [
+        ...(dark === 0 ? [] : [`no light at ${dark} of ${values.length} fields`]),
+        ...(known.some(({ wide }) => wide) ? ['spots wider than the pattern: only roughly'] : []),
+      ],
     };
   });
 }

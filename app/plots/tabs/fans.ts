@@ -4,7 +4,7 @@ import type { CurveInk } from '../../board/styles.ts';
 import { curveStyle, emptyPlot, type Plot } from '../plot.ts';
 import { alike, evenAxis, reachOf } from '../scale.ts';
 import { drawnFractions, type Source } from '../source.ts';
-import { fieldInk, fieldName, lineDash, lineName, lostNote, scaled } from '../words.ts';
+import { fieldInk, fieldName, lineDash, lineName, lineWord, lostNote, scaled } from '../words.ts';
 
 const MICRO = 1000;
 /** The least reach of an upright axis, µm: below it the errors of an ideal layout are rounding. */
@@ -61,6 +61,7 @@ export function overStop(
 ): Plot {
   const curves = found.map(({ line, at, value }) => ({
     name: lineName(setup, line),
+    word: lineWord(setup, line),
     style: curveStyle(ink, lineDash(setup, line)),
     x: at,
     y: scaled(value, factor),

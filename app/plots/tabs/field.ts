@@ -24,12 +24,14 @@ function curvesPlot(source: Source): Plot {
   const curves = [
     {
       name: 'tangential',
+      word: 'tangential',
       style: curveStyle('ink', 'main'),
       x: tangential.at,
       y: scaled(tangential.value, length.perMm),
     },
     {
       name: 'sagittal',
+      word: 'sagittal',
       style: curveStyle('ink', 'short'),
       x: sagittal.at,
       y: scaled(sagittal.value, length.perMm),
@@ -60,7 +62,13 @@ function distortionPlot({ sweeps, view }: Source): Plot {
   if (!found?.ok) return emptyPlot(key, title, sentenceOf(found ? found.why : 'ray lost'));
   const { at, value, lost } = found.value;
   const curves = [
-    { name: 'distortion', style: curveStyle('ink', 'main'), x: at, y: scaled(value, PER_CENT) },
+    {
+      name: 'distortion',
+      word: 'distortion',
+      style: curveStyle('ink', 'main'),
+      x: at,
+      y: scaled(value, PER_CENT),
+    },
   ];
   return {
     kind: 'curves',
@@ -79,7 +87,13 @@ function illuminationPlot({ setup, shares, quality }: Source): Plot {
   if (!found.ok) return emptyPlot(key, title, sentenceOf(found.why));
   const { at, value, lost } = found.value;
   const curves = [
-    { name: 'illumination', style: curveStyle('ink', 'main'), x: at, y: scaled(value, PER_CENT) },
+    {
+      name: 'illumination',
+      word: 'light',
+      style: curveStyle('ink', 'main'),
+      x: at,
+      y: scaled(value, PER_CENT),
+    },
   ];
   const most = reachOf(curves);
   return {

@@ -15,6 +15,8 @@ const LEAST = 0.5;
 const PLANES = 7;
 /** How many times the depth of focus for a quarter wave they reach at least, each way. */
 const DEPTHS = 3;
+/** How many times as far as the least spot. */
+const BEYOND = 1.5;
 
 /** Where the rays of each field meet the image plane, or planes along the axis about it. */
 export function spotPlots(source: Source): readonly Plot[] {
@@ -128,13 +130,27 @@ function spotOf(
   return { at, dots, rms: rmsMm * MICRO, largest: largestMm * MICRO };
 }
 
-/** How far the planes reach each way, mm: some depths of focus, or twice as far as the paraxial image is from the plane. */
-function focusReach({ analysis, setup }: Source): number {
-  const [main] = setup.lines;
-  const nu = setup.marginal.nu[main.train.count] ?? 0;
+/** How far the planes reach each way, mm: some depths of focus, or well beyond the field's least spot that is furthest off. */
+function focusReach(source: Source): number {
+  const [main] = source.setup.lines;
+  const nu = source.setup.marginal.nu[main.train.count] ?? 0;
   const index = main.train.index[main.train.count] ?? 1;
   const quarterWaveMm = (main.wavelengthNm * 1e-6 * Math.abs(index)) / (2 * nu * nu);
-  const { defocusMm } = analysis.conjugates;
-  const wanted = Math.max(DEPTHS * quarterWaveMm, defocusMm.ok ? 2 * Math.abs(defocusMm.value) : 0);
+  const depthsMm = DEPTHS * quarterWaveMm;
+  const leastMm = source.fields().map((field) => {
+    const landings = landingsOf(field);
+    return landings.ok ? leastShift(landings.value, depthsMm) : 0;
+  });
+  const wanted = Math.max(depthsMm, ...leastMm.map((mm) => BEYOND * Math.abs(mm)));
   return Number.isFinite(wanted) ? roundReach(wanted, 1e-4) : 1;
+}
+
+/** Where the rms radius is least: its square is a parabola in the shift, told by three planes. */
+function leastShift(landings: readonly Weighted[], stepMm: number): number {
+  const [before, here, behind] = [-stepMm, 0, stepMm].map((shiftMm) => {
+    const size = spotSize(landings, shiftMm);
+    return size.ok ? size.value.rmsMm ** 2 : 0;
+  }) as [number, number, number];
+  const curved = before - 2 * here + behind;
+  return curved > 0 ? (stepMm * (before - behind)) / (2 * curved) : 0;
 }

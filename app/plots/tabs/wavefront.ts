@@ -1,3 +1,4 @@
+import type { WavefrontFans } from '../../../engine/index.ts';
 import { sentenceOf, wavefrontFans } from '../../../engine/index.ts';
 import { emptyPlot, type Plot } from '../plot.ts';
 import { alike } from '../scale.ts';
@@ -7,23 +8,35 @@ import { overStop, type Values } from './fans.ts';
 
 const WAVES: Values = { label: 'wavefront', unit: 'waves', digits: 3, factor: 1, least: 0.01 };
 
-/** Wavefront errors over the stop, two plots for each field; one where thin parts have no path across the meridian. */
+/** Wavefront errors over the stop, along the meridian and across it for each field; where there is none across it, that is said once. */
 export function wavefrontPlots(source: Source): readonly Plot[] {
   const fractions = drawnFractions(source.sketch);
+  let across: WavefrontFans['sagittal'] | null = null;
+  const plots = source.fields().flatMap((field, index): Plot[] => {
+    const ink = fieldInk(fractions, index);
+    const name = fieldName(field.fraction);
+    const fans = wavefrontFans(field);
+    if (!fans.ok) return [emptyPlot(`wavefront ${index}`, `Wavefront, ${name}`, sentenceOf(fans.why))];
+    const { tangential, sagittal } = fans.value;
+    across = sagittal;
+    const along = overStop(
+      field,
+      `tangential wavefront ${index}`,
+      `Tangential, ${name}`,
+      tangential,
+      ink,
+      WAVES,
+    );
+    if (!sagittal.ok) return [along];
+    return [
+      along,
+      overStop(field, `sagittal wavefront ${index}`, `Sagittal, ${name}`, sagittal.value, ink, WAVES),
+    ];
+  });
+  const missing = across as WavefrontFans['sagittal'] | null;
   return alike(
-    source.fields().flatMap((field, index) => {
-      const ink = fieldInk(fractions, index);
-      const name = fieldName(field.fraction);
-      const fans = wavefrontFans(field);
-      if (!fans.ok) return [emptyPlot(`wavefront ${index}`, `Wavefront, ${name}`, sentenceOf(fans.why))];
-      const { tangential, sagittal } = fans.value;
-      const keys = [`tangential wavefront ${index}`, `sagittal wavefront ${index}`] as const;
-      return [
-        overStop(field, keys[0], `Tangential, ${name}`, tangential, ink, WAVES),
-        sagittal.ok
-          ? overStop(field, keys[1], `Sagittal, ${name}`, sagittal.value, ink, WAVES)
-          : emptyPlot(keys[1], `Sagittal, ${name}`, sentenceOf(sagittal.why)),
-      ];
-    }),
+    missing && !missing.ok
+      ? [...plots, emptyPlot('sagittal wavefront', 'Sagittal', sentenceOf(missing.why))]
+      : plots,
   );
 }
