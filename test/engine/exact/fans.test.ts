@@ -308,6 +308,26 @@ describe('fans that do not exist', () => {
     expect(wavefrontFans(field, 5).ok).toBe(true);
   });
 
+  it('are measured against the chief ray though a rim cuts it', () => {
+    const setup = setupOf({
+      surfaces: [
+        { indexAfter: 1, gapMm: 50 },
+        { indexAfter: 1, gapMm: 0, semiDiameterMm: 25 },
+        { thinPowerPerMm: 1 / 100, indexAfter: 1, gapMm: 0 },
+      ],
+      aperture: { kind: 'stopDiameter', diameterMm: 4 },
+      field: { kind: 'angle', angleDeg: 27 },
+    });
+    // The chief ray passes the rim 0.48 mm outside: of the rays 0.2 mm apart eight of the lower ten get by.
+    const field = traceFields(setup, [1], sampleOf(21, null))[0]!;
+    const { at, value, lost } = only(given(rayFans(field)).tangential);
+    expect(field.bundles[0]!.lost).toBe(null);
+    expect([at.length, lost]).toEqual([8, 13]);
+    expect(largest([{ line: 0, at, value, lost }])).toBeLessThan(100 * PLACE_MM);
+    // Behind thin parts the wavefront is followed ray by ray from the chief ray, whose neighbours are gone here.
+    expect(only(given(wavefrontFans(field)).tangential).lost).toBe(21);
+  });
+
   it('lose the rays that a rim cuts, and count them', () => {
     const drawn = thin([1 / 100], 0);
     const [surface] = drawn.surfaces;
