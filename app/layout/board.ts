@@ -14,7 +14,7 @@ import type { Fold, Viewport } from '../board/viewport.ts';
 import { panBy, stretchBy, xOf, zOf, zoomAbout } from '../board/viewport.ts';
 import type { Handle } from '../drawing/handle.ts';
 import { labelHandles } from '../drawing/handles/labels.ts';
-import { loupeBox } from '../drawing/loupe/loupe.ts';
+import { loupeBoxes } from '../drawing/loupe/loupe.ts';
 import type { Scene } from '../drawing/scene.ts';
 import { plainLength } from '../drawing/words.ts';
 import { frameLoop } from '../live/frame.ts';
@@ -195,7 +195,7 @@ export function createBoard(element: HTMLElement, client: BoardClient): Board {
       labelPlaces = paintParts(pen, now, state.hover, {
         former: labelPlaces,
         frozen: frozenLabels(state, labelPlaces),
-        covered: [viewToolsBox(now.view.widthPx), ...(now.loupe ? [loupeBox(now.loupe)] : [])],
+        covered: [viewToolsBox(now.view.widthPx), ...(now.loupe ? loupeBoxes(now.loupe) : [])],
       });
     });
     labelGrips = labelHandles(now.sight, labelPlaces);

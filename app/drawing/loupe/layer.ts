@@ -5,14 +5,13 @@ import type { ExactView } from '../../store/viewStore.ts';
 import { formatNumber } from '../../ui/format.ts';
 import { pencilLayer } from '../exact/layer.ts';
 import { plain } from '../words.ts';
-import { type Loupe, TARGET_PX } from './loupe.ts';
+import { type Loupe, TARGET_PX, WORDS_LINE_PX, wordsPlace } from './loupe.ts';
 
 const TICK_PX = 5;
 /** Ticks nearer to each other than this are left out. */
 const LEAST_TICK_PX = 4;
 const MARK_PX = 4;
 const AIRY_ASIDE_PX = 8;
-const LINE_PX = 16;
 const ALL = { paraxial: true, exact: true };
 
 /** The loupe: a ring beside the point that it looks at, and in it rays, sensor, pixels, Airy disc and foci at its own scales. */
@@ -86,18 +85,15 @@ const placeOf = (view: Viewport, { zMm, yMm }: { readonly zMm: number; readonly 
 
 /** Its scales and the spot, on the side with more room. */
 function words(pen: Pen, loupe: Loupe): void {
-  const { xPx, yPx, radiusPx, inside } = loupe;
-  const isLeft = xPx > inside.widthPx / 2;
-  const x = isLeft ? xPx - radiusPx - 6 : xPx + radiusPx + 6;
-  const align = isLeft ? 'right' : 'left';
+  const { xPx, yPx, align } = wordsPlace(loupe);
   for (const [i, text] of loupeWords(loupe).entries()) {
-    const y = yPx - radiusPx * 0.75 + i * LINE_PX;
-    pen.text(x, y, text, i === 0 ? 'label' : 'label quiet', { align, baseline: 'middle' });
+    const style = i === 0 ? 'label' : 'label quiet';
+    pen.text(xPx, yPx + i * WORDS_LINE_PX, text, style, { align, baseline: 'middle' });
   }
 }
 
 /** What stands beside the ring. */
-export function loupeWords({ look, lengths, heights }: Loupe): readonly string[] {
+function loupeWords({ look, lengths, heights }: Loupe): readonly string[] {
   const { rmsMm, planeMm, imageMm, zMm } = look;
   const shift = planeMm - (imageMm ?? zMm);
   const at = Math.abs(shift) < 5e-7 ? '' : `, ${shift > 0 ? '+' : ''}${plain(1000 * shift, 0)} µm`;

@@ -24,7 +24,7 @@ export interface Loupe {
 
 /** Radius of the little ring about the point that is looked at, px. */
 export const TARGET_PX = 8;
-const RADIUS_PX = { least: 62, most: 92, share: 0.19 };
+const RADIUS_PX = { least: 52, most: 92, share: 0.18 };
 /** Room for the view tools above, and to the edges of the sheet, px. */
 const TOP_PX = 44;
 const EDGE_PX = 6;
@@ -94,10 +94,32 @@ function ringPlace(
   return free ?? onSheet(places[0] ?? target);
 }
 
-/** What the ring covers. */
-export const loupeBox = ({ xPx, yPx, radiusPx }: Loupe): Box => ({
-  xPx: xPx - radiusPx,
-  yPx: yPx - radiusPx,
-  widthPx: 2 * radiusPx,
-  heightPx: 2 * radiusPx,
-});
+/** Where the words stand beside the ring: their edge next to it, the middle of the first line, and the way they run. */
+export function wordsPlace({ xPx, yPx, radiusPx, inside }: Loupe) {
+  const isLeft = xPx > inside.widthPx / 2;
+  return {
+    xPx: isLeft ? xPx - radiusPx - 6 : xPx + radiusPx + 6,
+    yPx: yPx - radiusPx * 0.75,
+    align: isLeft ? ('right' as const) : ('left' as const),
+  };
+}
+
+/** Height of a line of the words, and what the longest of them needs, px. */
+export const WORDS_LINE_PX = 16;
+const WORDS_LINES = 4;
+const WORDS_PX = 112;
+
+/** What ring and words cover. */
+export function loupeBoxes(loupe: Loupe): readonly Box[] {
+  const { xPx, yPx, radiusPx } = loupe;
+  const words = wordsPlace(loupe);
+  return [
+    { xPx: xPx - radiusPx, yPx: yPx - radiusPx, widthPx: 2 * radiusPx, heightPx: 2 * radiusPx },
+    {
+      xPx: words.align === 'right' ? words.xPx - WORDS_PX : words.xPx,
+      yPx: words.yPx - WORDS_LINE_PX / 2,
+      widthPx: WORDS_PX,
+      heightPx: WORDS_LINES * WORDS_LINE_PX,
+    },
+  ];
+}
