@@ -1,5 +1,4 @@
 import type {
-  FixedMedium,
   GlassPart,
   GlassSurface,
   GroupId,
@@ -18,9 +17,6 @@ export const LINES: Readonly<Record<'e' | 'd', Pick<Lines, 'mainNm' | 'shortNm' 
   e: { mainNm: 546.074, shortNm: 479.9914, longNm: 643.8469 },
   d: { mainNm: 587.5618, shortNm: 486.1327, longNm: 656.2725 },
 };
-
-/** Index and Abbe number in the d line of a common borosilicate crown, six-digit code 517642. */
-export const CROWN: FixedMedium = { name: 'crown 517642', index: 1.5168, abbeNumber: 64.17 };
 
 /** A sketch without parts: object at infinity, image at the focus, f/4, a field of 10° and one position. */
 export function emptySketch(title = 'Untitled'): Sketch {
@@ -66,6 +62,9 @@ export function newStop(id: PartId = FIRST_ID): StopPart {
   return { kind: 'stop', ...plainPart(id) };
 }
 
+/** The catalogue's borosilicate crown, of which new plates and lenses are. */
+const CROWN: SolidMedium = { material: 'n-bk7' };
+
 /** An open flat plate of crown glass, or of the given material. */
 export function newPlate(thicknessMm = 1, id: PartId = FIRST_ID, material: SolidMedium = CROWN): PlatePart {
   return { kind: 'plate', ...plainPart(id), thicknessMm, material };
@@ -85,7 +84,7 @@ export function newGlass(radiusMm: number, thicknessMm: number, id: PartId = FIR
     kind: 'glass',
     ...plainPart(id),
     surfaces: [newSurface(radiusMm), newSurface(-radiusMm)],
-    fillings: [{ thicknessMm, material: { material: 'n-bk7' } }],
+    fillings: [{ thicknessMm, material: CROWN }],
   };
 }
 

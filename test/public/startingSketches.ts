@@ -1,5 +1,6 @@
-import { CROWN, emptySketch, LINES, newPlate, newStop, newThin } from '../../engine/sketch/create.ts';
+import { emptySketch, LINES, newPlate, newStop, newThin } from '../../engine/sketch/create.ts';
 import type {
+  FixedMedium,
   GroupId,
   PartId,
   PerPosition,
@@ -179,9 +180,10 @@ function chuteScannerExpander(): Sketch {
 function germinationMacro(): Sketch {
   const [half, life] = positions('half size', 'life size');
   const lens = 60;
-  const window = newPlate(3, id('p1'));
+  const crown: FixedMedium = { name: 'crown 517642', index: 1.5168, abbeNumber: 64.17 };
+  const window = newPlate(3, id('p1'), crown);
   /** The object as the first lens sees it stands at its focus in life size, 36 mm farther in half size. */
-  const windowToLens = (reducedMm: number): number => reducedMm - 2 - window.thicknessMm / CROWN.index;
+  const windowToLens = (reducedMm: number): number => reducedMm - 2 - window.thicknessMm / crown.index;
   return {
     ...emptySketch('Germination macro'),
     notes:

@@ -150,6 +150,7 @@ export function Chooser({ label, medium, instead, onPreview, onRestore, onChoose
           fitting={fitting}
           marked={marked}
           from={shown === null ? MIDDLE : nominal(shown)}
+          isOwn={shown !== null && marked === null}
           isKnown={isKnown}
           onHover={hover}
           onStep={(material) => step({ material: material.id })}

@@ -10,8 +10,10 @@ interface GlassMapProps {
   readonly fitting: readonly Material[];
   /** The marked material. */
   readonly marked: Material | null;
-  /** Where the steps of the arrow keys begin while no material is marked, and what is drawn as a cross then. */
+  /** Where the steps of the arrow keys begin while no material is marked. */
   readonly from: Nominal;
+  /** Whether a medium that is not of the catalogue stands there; it is drawn as a cross. */
+  readonly isOwn: boolean;
   /** Whether the index of a material is known in every line. */
   readonly isKnown: (material: Material) => boolean;
   /** The pointer is over a material, or over none any more. */
@@ -27,11 +29,11 @@ const REACH_PX = { mouse: 18, touch: 32 } as const;
 
 /** The materials by index against Abbe number, to point at or to step through by the arrow keys. */
 export function GlassMap(props: GlassMapProps) {
-  const { fitting, marked, from, isKnown, onHover, onStep, onChoose, onLetter } = props;
+  const { fitting, marked, from, isOwn, isKnown, onHover, onStep, onChoose, onLetter } = props;
   const id = useId();
   const area = useRef<HTMLDivElement>(null);
   const fits = new Set(fitting);
-  const own = marked === null ? placeOn(from) : null;
+  const own = isOwn ? placeOn(from) : null;
   const label = MARKS.find(({ material }) => material === marked);
 
   const under = (event: PointerEvent): MapMark | null => {
