@@ -28,9 +28,6 @@ const RADIUS_PX = { least: 52, most: 92, share: 0.18 };
 /** Room for the view tools above, and to the edges of the sheet, px. */
 const TOP_PX = 44;
 const EDGE_PX = 6;
-/** Where the ring may stand about its point, in degrees clockwise from the right: outwards of the field first. */
-const PLACES_DEG = [110, 70, 135, 45, 160, 20];
-
 /** The loupe of a reading in a view; null when it is not shown, or there is nothing to look at. */
 export function loupeOf(reading: Reading, view: Viewport): Loupe | null {
   if (!reading.view.loupe.shown) return null;
@@ -67,7 +64,10 @@ export function loupeOf(reading: Reading, view: Viewport): Loupe | null {
   return { look, rays, target, xPx, yPx, radiusPx, lengths, heights, inside, halfMm };
 }
 
-/** The first place beside the point that lies on the sheet; else the nearest that does. */
+/**
+ * Outwards of the field beside the point, as nearly above or below it as the edges of the sheet allow, so that a dragged ring stays under
+ * the pointer; on the other side where there is no room.
+ */
 function ringPlace(
   target: Loupe['target'],
   radiusPx: number,
@@ -75,24 +75,17 @@ function ringPlace(
   isBelow: boolean,
 ): { readonly xPx: number; readonly yPx: number } {
   const reach = radiusPx + TARGET_PX;
-  const side = isBelow ? 1 : -1;
-  const places = [side, -side].flatMap((up) =>
-    PLACES_DEG.map((degrees) => {
-      const angle = (degrees * Math.PI) / 180;
-      return { xPx: target.xPx + reach * Math.cos(angle), yPx: target.yPx + up * reach * Math.sin(angle) };
-    }),
-  );
-  const clamp = (value: number, from: number, to: number) => Math.max(from, Math.min(to, value));
-  const onSheet = ({ xPx, yPx }: Loupe['target']) => ({
-    xPx: clamp(xPx, radiusPx + EDGE_PX, widthPx - radiusPx - EDGE_PX),
-    yPx: clamp(yPx, radiusPx + TOP_PX, heightPx - radiusPx - EDGE_PX),
-  });
-  const free = places.find((place) => {
-    const moved = onSheet(place);
-    return moved.xPx === place.xPx && moved.yPx === place.yPx;
-  });
-  return free ?? onSheet(places[0] ?? target);
+  const xPx = between(target.xPx, radiusPx + EDGE_PX, widthPx - radiusPx - EDGE_PX);
+  const aside = Math.min(reach, Math.abs(xPx - target.xPx));
+  const away = Math.sqrt(reach * reach - aside * aside);
+  const [top, bottom] = [radiusPx + TOP_PX, heightPx - radiusPx - EDGE_PX];
+  const sides = isBelow ? [1, -1] : [-1, 1];
+  const heights = sides.map((side) => target.yPx + side * away);
+  const free = heights.find((yPx) => yPx >= top && yPx <= bottom) ?? heights[0] ?? target.yPx;
+  return { xPx, yPx: between(free, top, bottom) };
 }
+
+const between = (value: number, from: number, to: number): number => Math.max(from, Math.min(to, value));
 
 /** Where the words stand beside the ring: their edge next to it, the middle of the first line, and the way they run. */
 export function wordsPlace({ xPx, yPx, radiusPx, inside }: Loupe) {
