@@ -124,6 +124,7 @@ export {
 export { type Edit, type Note, propose, type Settling, unsettled } from './sketch/propose.ts';
 export { faultsOf } from './sketch/rules.ts';
 export type {
+  Air,
   Aperture,
   Field,
   FieldSize,
