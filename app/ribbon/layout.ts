@@ -164,7 +164,8 @@ function draftsOf(cells: readonly Cell[], { view, reading }: Sight, measure: Mea
       above.push({ xPx, halfPx });
       return { cell, ...span, text: value, halfPx, onLeader: false };
     }
-    const text = cell.bad ? `${value} ${CANNOT_BE_BUILT}` : value;
+    const named = cell.kind === 'planes' ? `HH′ ${value}` : value;
+    const text = cell.bad ? `${named} ${CANNOT_BE_BUILT}` : named;
     return { cell, ...span, text, halfPx: measure(text, 'value') / 2, onLeader: true };
   });
 }

@@ -29,6 +29,7 @@ const COMMANDS = [
   ['bendLeastSpherical', 'Bend: least spherical'],
   ['bendZeroComa', 'Bend: zero coma'],
   ['makeThin', 'Make thin'],
+  ['equivalentGaps', 'Gaps: vertices or planes'],
 ] as const;
 
 /** Surfaces, glasses and bending of a glass part, and what they make of it. */
