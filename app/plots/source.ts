@@ -48,10 +48,10 @@ interface Amount {
   readonly wavelengths: number;
 }
 
-/** Rays of a fan, rings of a spot (six: 127 rays, eight: 217), points over the field with and without spots, points over wavelength. */
+/** Rays of a fan, rings of a spot (eight: 217 rays, ten: 331), points over the field with and without spots, points over wavelength. */
 export const AMOUNTS: Readonly<Record<Quality, Amount>> = {
-  coarse: { fanRays: 21, rings: 6, sweepRings: 4, shares: 9, wideShares: 5, wavelengths: 5 },
-  fine: { fanRays: 41, rings: 8, sweepRings: 7, shares: 21, wideShares: 11, wavelengths: 15 },
+  coarse: { fanRays: 21, rings: 8, sweepRings: 4, shares: 9, wideShares: 5, wavelengths: 5 },
+  fine: { fanRays: 41, rings: 10, sweepRings: 7, shares: 21, wideShares: 11, wavelengths: 15 },
 };
 
 const GRIDS = new Map<number, ReturnType<typeof hexapolarGrid>>();
