@@ -10,7 +10,9 @@ import { formatNumber } from '../../app/ui/format.ts';
 import type { PartId, PositionId, Quantity, Sketch } from '../../engine/index.ts';
 import {
   analyse,
+  compare,
   DEFAULT_SHEET_OPTIONS,
+  exactSetupOf,
   fixSensor,
   insertPart,
   moveParts,
@@ -103,6 +105,25 @@ describe('the figures of the walk in the README', () => {
       expect(row.split(',')).toContain(figure);
       expect(prose).toContain(figure);
     }
+  });
+});
+
+describe('the figures of the relay in glass', () => {
+  it('are those of its starting sketch', () => {
+    const text = readFileSync(
+      fileURLToPath(new URL('../../public/sketches/chute-relay-in-glass.json', import.meta.url)),
+      'utf8',
+    );
+    const parsed = parseSketch(text);
+    if (!parsed.ok) throw new Error(parsed.faults.map(({ sentence }) => sentence).join(' '));
+    const { sketch } = parsed;
+    const setting = settingAt(sketch.positions[0]!.id);
+    const setup = given(exactSetupOf(sketch, setting, analyse(sketch, setting)));
+    const { magnification, chiefHeightMm } = compare(setup);
+    const both = ({ paraxial, exact }: typeof magnification, unit: string) =>
+      `${formatNumber(given(paraxial), 4)} and ${formatNumber(given(exact), 4)}${unit}`;
+    expect(prose).toContain(`magnification ${both(magnification, '')}`);
+    expect(prose).toContain(`chief height ${both(chiefHeightMm, ' mm')}`);
   });
 });
 
