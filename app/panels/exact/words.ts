@@ -12,7 +12,11 @@ import { lostPlaces } from '../../drawing/exact/layer.ts';
 import type { ExactRays, Largest } from '../../drawing/exact/rays.ts';
 import { plain, plainLength } from '../../drawing/words.ts';
 
-const percent = (share: number): string => `${plain(100 * share, 0)} %`;
+/** Whole per cent, rounded down: what is almost all is not said to be all. */
+function percent(share: number): string {
+  const whole = Math.floor(100 * share + 1e-9);
+  return whole === 0 ? 'less than 1 %' : `${whole} %`;
+}
 
 /** How far down aperture and field the first order can be trusted, as one sentence. `fNumber` is that of the whole aperture. */
 export function trustWords(
