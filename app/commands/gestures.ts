@@ -115,6 +115,11 @@ export const GESTURES: readonly GestureGroup[] = [
         keys: '↑ ↓ with nothing selected',
       },
       {
+        does: 'Look closer with the loupe',
+        hand: 'Drag its ring anywhere, the dotted line in it through focus',
+        keys: 'Tab to them, ← →; fields under Loupe in the panel',
+      },
+      {
         does: 'Move between positions',
         hand: 'Drag the scrubber, or tap a stop of it',
         keys: '1 to 9, or ← → on the scrubber',
