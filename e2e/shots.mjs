@@ -16,6 +16,9 @@ import { launchOptions } from './chromium.mjs';
  *   opened page with the demo
  */
 
+const PLOTS = ['Fans', 'Wavefront', 'Spots', 'Field', 'Contrast', 'Colour', 'Sums'];
+const IN_GLASS = 'Chute relay in glass';
+
 /** @type {readonly Screen[]} */
 const SCREENS = [
   { name: 'first', steps: async () => {} },
@@ -30,6 +33,15 @@ const SCREENS = [
   { name: 'empty', steps: (page) => beginWith(page, 'New empty sketch') },
   { name: 'afocal', steps: (page) => beginWith(page, 'Chute scanner expander') },
   { name: 'warnings', steps: makeImpossible },
+  { name: 'glass', steps: selectGlass },
+  { name: 'glass-map', on: 'desk', steps: openGlassMap },
+  { name: 'loupe', on: 'desk', steps: openLoupe },
+  { name: 'thicken', on: 'desk', steps: openThicken },
+  ...PLOTS.map((plot) => ({
+    name: `plot-${plot.toLowerCase()}`,
+    on: /** @type {const} */ ('desk'),
+    steps: (/** @type {Page} */ page) => openPlot(page, plot),
+  })),
   { name: 'readouts-sheet', on: 'phone', steps: (page) => openPanel(page, 'Readouts') },
   { name: 'part-sheet', on: 'phone', steps: openPart },
   { name: 'sketch-sheet', on: 'phone', steps: (page) => openPanel(page, 'Sketch') },
@@ -210,6 +222,43 @@ async function makeImpossible(page, size) {
   await entry.waitFor({ state: 'detached' });
   if (size === 'phone') await openPanel(page, 'Warnings');
   else await page.getByRole('button', { name: /^\d+ warnings?$/ }).click();
+}
+
+/** @param {Page} page */
+async function selectGlass(page) {
+  await beginWith(page, IN_GLASS);
+  await clickGrip(page, 'part:p1', 60);
+  await page.mouse.move(0, 0);
+}
+
+/** @param {Page} page */
+async function openGlassMap(page) {
+  await selectGlass(page);
+  await page.getByRole('button', { name: /^Behind surface 1/ }).click();
+  await page.getByRole('dialog').waitFor();
+}
+
+/** @param {Page} page */
+async function openThicken(page) {
+  await selectSecond(page);
+  await page.getByRole('button', { name: /^Thicken/ }).click();
+}
+
+/** @param {Page} page */
+async function openLoupe(page) {
+  await beginWith(page, IN_GLASS);
+  await page.getByRole('button', { name: /^Loupe/ }).click();
+  await page.getByRole('checkbox', { name: 'Loupe on the drawing' }).check();
+}
+
+/**
+ * @param {Page} page
+ * @param {string} plot
+ */
+async function openPlot(page, plot) {
+  await beginWith(page, IN_GLASS);
+  await page.getByRole('tab', { name: plot, exact: true }).click();
+  await page.locator('.plots').waitFor();
 }
 
 /** @param {Page} page */
