@@ -35,7 +35,9 @@ function valueHandle(cell: PlacedCell, sight: Sight): Handle {
   const scrubbed = (dzMm: number, dxPx: number) =>
     folded ? cell.valueMm * (1 + dxPx * FOLDED_PER_PX) : cell.valueMm + dzMm;
   const kept = (value: number) =>
-    cell.kind === 'object' || cell.kind === 'thickness' ? Math.max(LEAST_MM, value) : value;
+    cell.kind === 'object' || cell.kind === 'thickness'
+      ? Math.max(Math.min(LEAST_MM, cell.valueMm), value)
+      : value;
   const first = cell.kind === 'object';
   return {
     id: `cell:${cell.id}`,

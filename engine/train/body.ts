@@ -29,7 +29,7 @@ const SAMPLES = 32;
 const EDGE_SHARE = 1e-9;
 
 /** The profile of a surface of a sketch. */
-export const profileOf = ({ radiusMm, conic, asphere }: GlassSurface): Profile => ({
+const profileOf = ({ radiusMm, conic, asphere }: GlassSurface): Profile => ({
   curvaturePerMm: radiusMm === null ? 0 : 1 / radiusMm,
   conic,
   asphere,

@@ -144,7 +144,7 @@ function thicknessHandle(sight: Sight, drawn: ScenePart, part: GlassPart, k: num
     (value: number): Edit =>
     (sketch) =>
       setThickness(sketch, part.id, value, k);
-  const kept = (dzMm: number) => (dzMm === 0 ? thicknessMm : Math.max(LEAST_MM, thicknessMm + dzMm));
+  const kept = (dzMm: number) => Math.max(Math.min(LEAST_MM, thicknessMm), thicknessMm + dzMm);
   return {
     id: `thickness:${part.id}:${k}`,
     order: 3,

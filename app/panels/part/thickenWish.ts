@@ -88,7 +88,7 @@ export function firstWish(reading: Reading, part: ThinPart): ThickenWish {
 }
 
 /** The recipe of a wish for a part in its layout, or a sentence on why there is none. */
-export function recipeOf(wish: ThickenWish, reading: Reading, id: PartId): Outcome<Recipe, string> {
+function recipeOf(wish: ThickenWish, reading: Reading, id: PartId): Outcome<Recipe, string> {
   const { materials, pairMm, thicknessMm } = wish;
   const bent = bendingFor(wish, reading, id);
   if (!bent.ok) return bent;
@@ -132,7 +132,7 @@ function bendingFor(
 type BestShape = 'least spherical' | 'zero coma';
 
 /** The best bendings of a part of this glass for its own conjugates, or a sentence on why there are none. */
-export function bestShapeOf(
+function bestShapeOf(
   { sketch, analysis }: Pick<Reading, 'sketch' | 'analysis'>,
   id: PartId,
   material: SolidMedium,
