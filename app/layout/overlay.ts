@@ -151,9 +151,9 @@ function drawFormerPlace(
     segment(pen, xPx - FORMER_PX, from.yPx, xPx + FORMER_PX, from.yPx, 'former place');
 }
 
-function drawGrip(pen: Pen, { look, xPx, yPx, drag }: Handle, strong: boolean): void {
+function drawGrip(pen: Pen, { look, xPx, yPx, drag, viewing }: Handle, strong: boolean): void {
   if (look === 'none') return;
-  const style = strong ? 'grip hover' : drag ? 'grip' : 'grip hollow';
+  const style = strong ? 'grip hover' : drag || viewing ? 'grip' : 'grip hollow';
   if (look === 'round') pen.circle(xPx, yPx, GRIP_PX, style);
   else box(pen, xPx - GRIP_PX, yPx - GRIP_PX, 2 * GRIP_PX, 2 * GRIP_PX, style);
 }

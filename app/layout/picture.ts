@@ -7,7 +7,7 @@ import { endHandles } from '../drawing/handles/ends.ts';
 import { markHandles } from '../drawing/handles/marks.ts';
 import { partHandles } from '../drawing/handles/parts.ts';
 import { type Label, labelsOf } from '../drawing/layers/labels.ts';
-import { loupeHandles } from '../drawing/loupe/handles.ts';
+import { loupeHandles, withCovered } from '../drawing/loupe/handles.ts';
 import { type Loupe, loupeOf } from '../drawing/loupe/loupe.ts';
 import type { Scene } from '../drawing/scene.ts';
 import { sceneOf } from '../drawing/scene.ts';
@@ -56,11 +56,16 @@ export function pictureOf(
     plan,
     labels: reading.view.shown.labels ? labelsOf(scene, view, reading.view.unit, measure) : [],
     handles: [
-      ...partHandles(sight),
-      ...endHandles(sight),
-      ...ribbonHandles(plan, sight),
-      ...markHandles(sight),
-      ...lostHandles(sight),
+      ...withCovered(
+        [
+          ...partHandles(sight),
+          ...endHandles(sight),
+          ...ribbonHandles(plan, sight),
+          ...markHandles(sight),
+          ...lostHandles(sight),
+        ],
+        loupe,
+      ),
       ...loupeHandles(sight, loupe),
     ],
   };

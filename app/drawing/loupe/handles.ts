@@ -10,6 +10,9 @@ import type { Loupe } from './loupe.ts';
 
 /** So near, px, the image plane and the end of the field catch the loupe. */
 const CATCH_PX = 9;
+/** The grip of the plane stands in the lower part of the ring, and is easy to hit. */
+const PLANE_GRIP_SHARE = 0.84;
+const PLANE_GRIP_PX = 8;
 /** Steps of the plane through half the loupe. */
 const PLANE_STEPS = 40;
 
@@ -48,11 +51,12 @@ export function loupeHandles({ reading, view, length }: Sight, loupe: Loupe | nu
       id: 'loupe:plane',
       order: 0,
       xPx: planePx,
-      yPx: yPx + 0.8 * radiusPx,
-      line: { topPx: yPx - 0.85 * radiusPx, bottomPx: yPx + 0.85 * radiusPx },
+      yPx: yPx + PLANE_GRIP_SHARE * radiusPx,
+      line: null,
+      radiusPx: PLANE_GRIP_PX,
       cursor: 'col-resize',
       label: 'loupe, plane through focus',
-      look: 'none',
+      look: 'round',
       slider: {
         valueNow: before.planeMm,
         valueText: `${planeWords(before.planeMm)}${rms}`,
@@ -99,6 +103,15 @@ export function loupeHandles({ reading, view, length }: Sight, loupe: Loupe | nu
       },
     },
   ];
+}
+
+/** The grips with those that the ring covers no longer drawn; they keep their sliders. */
+export function withCovered(handles: readonly Handle[], loupe: Loupe | null): readonly Handle[] {
+  if (!loupe) return handles;
+  const isCovered = ({ xPx, yPx }: Handle) => Math.hypot(xPx - loupe.xPx, yPx - loupe.yPx) < loupe.radiusPx;
+  return handles.map((handle) =>
+    handle.look !== 'none' && isCovered(handle) ? { ...handle, look: 'none' } : handle,
+  );
 }
 
 /** Where the plane through focus stands from the middle of the loupe. */
