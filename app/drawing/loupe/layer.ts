@@ -96,7 +96,8 @@ function words(pen: Pen, loupe: Loupe): void {
 function loupeWords({ look, lengths, heights }: Loupe): readonly string[] {
   const { rmsMm, planeMm, imageMm, zMm } = look;
   const shift = planeMm - (imageMm ?? zMm);
-  const at = Math.abs(shift) < 5e-7 ? '' : `, ${shift > 0 ? '+' : ''}${plain(1000 * shift, 0)} µm`;
+  const text = Math.abs(shift) < 1 ? `${plain(1000 * shift, 0)} µm` : `${plain(shift, 2)} mm`;
+  const at = Math.abs(shift) < 5e-7 ? '' : `, ${shift > 0 ? '+' : ''}${text}`;
   return [
     'loupe',
     `heights ×${plain(heights, 2)}`,
