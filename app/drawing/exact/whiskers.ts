@@ -4,7 +4,7 @@ import { segment } from '../../board/pen.ts';
 import type { Viewport } from '../../board/viewport.ts';
 import { xOf, yOf } from '../../board/viewport.ts';
 import type { ExactView } from '../../store/viewStore.ts';
-import type { ExactRays, Largest } from './rays.ts';
+import type { ExactRays } from './rays.ts';
 
 /** The drift of one ray at one surface. */
 export interface Whisker {
@@ -33,14 +33,25 @@ export function whiskersOf({ pencils, train }: ExactRays): readonly Whisker[] {
 }
 
 function alongRay(ray: DrawnRay, train: Train): readonly Whisker[] {
-  return Array.from(ray.heightDriftMm, (driftMm, surface) => whiskerAt(ray, surface, driftMm, train));
+  return Array.from(ray.heightDriftMm, (driftMm, surface) => ({
+    ray,
+    surface,
+    zMm: train.z[surface] ?? 0,
+    fromMm: ray.paraxial[2 * surface + 3] ?? 0,
+    driftMm,
+  }));
 }
 
-function whiskerAt(ray: DrawnRay, surface: number, driftMm: number, train: Train): Whisker {
-  // Behind the last surface stands the end of the drawing, which is the image plane where there is one.
-  const atImage = surface === train.count;
-  const zMm = atImage ? (ray.paraxial.at(-2) ?? 0) : (train.z[surface] ?? 0);
-  return { ray, surface, zMm, fromMm: ray.paraxial[2 * surface + 3] ?? 0, driftMm };
+/** The whisker of the largest drift, at its surface or on the image plane, wherever that stands. */
+export function largestWhisker({ train, setup, largest }: ExactRays): Whisker | null {
+  if (!largest) return null;
+  const { ray, surface, driftMm } = largest;
+  if (surface < train.count) return alongRay(ray, train)[surface] ?? null;
+  if (!setup.imagePlaneMm.ok) return null;
+  const zMm = (train.z[train.count - 1] ?? 0) + setup.imagePlaneMm.value;
+  const [z1 = 0, y1 = 0, z2 = 0, y2 = 0] = ray.paraxial.slice(-4);
+  const fromMm = z1 === z2 ? y2 : y1 + ((y2 - y1) * (zMm - z1)) / (z2 - z1);
+  return { ray, surface, zMm, fromMm, driftMm };
 }
 
 /** How many of the whiskers are longer than the limit. */
@@ -53,14 +64,11 @@ export const beyondLimit = (whiskers: readonly Whisker[], limitMm: number): numb
  */
 export function whiskersLayer(pen: Pen, rays: ExactRays, shown: ExactView, view: Viewport): void {
   for (const whisker of shown.whiskers ? whiskersOf(rays) : []) drawWhisker(pen, whisker, shown, view);
-  if (!shown.largest || !rays.largest) return;
-  const whisker = whiskerOfLargest(rays.largest, rays.train);
-  drawWhisker(pen, whisker, shown, view);
-  pen.circle(xOf(view, whisker.zMm), yOf(view, whisker.fromMm), RING_PX, 'snap');
+  const largest = shown.largest ? largestWhisker(rays) : null;
+  if (!largest) return;
+  drawWhisker(pen, largest, shown, view);
+  pen.circle(xOf(view, largest.zMm), yOf(view, largest.fromMm), RING_PX, 'snap');
 }
-
-const whiskerOfLargest = ({ ray, surface, driftMm }: Largest, train: Train): Whisker =>
-  whiskerAt(ray, surface, driftMm, train);
 
 function drawWhisker(pen: Pen, { zMm, fromMm, driftMm }: Whisker, shown: ExactView, view: Viewport): void {
   const x = xOf(view, zMm);

@@ -3,7 +3,12 @@ import { type Mark, recorderPen } from '../../../../app/board/recorderPen.ts';
 import { xOf, yOf } from '../../../../app/board/viewport.ts';
 import { lostPlaces } from '../../../../app/drawing/exact/layer.ts';
 import { exactRaysOf } from '../../../../app/drawing/exact/rays.ts';
-import { beyondLimit, whiskersLayer, whiskersOf } from '../../../../app/drawing/exact/whiskers.ts';
+import {
+  beyondLimit,
+  largestWhisker,
+  whiskersLayer,
+  whiskersOf,
+} from '../../../../app/drawing/exact/whiskers.ts';
 import { raysLayer } from '../../../../app/drawing/layers/rays.ts';
 import type { Picture } from '../../../../app/layout/picture.ts';
 import { type ExactView, viewStore } from '../../../../app/store/viewStore.ts';
@@ -28,7 +33,7 @@ const stylesOf = (marks: readonly Mark[]) => [
 ];
 
 /** A biconvex lens of short radii with so wide a bundle that its edge never meets the second surface. */
-function steep(): Sketch {
+function steep(frontMm = 20): Sketch {
   const lens = newGlass(20, 6, 'p1' as PartId);
   return {
     ...emptySketch(),
@@ -36,7 +41,7 @@ function steep(): Sketch {
       {
         ...lens,
         surfaces: [
-          { radiusMm: 20, conic: 0, asphere: [], semiDiameterMm: null },
+          { radiusMm: frontMm, conic: 0, asphere: [], semiDiameterMm: null },
           { radiusMm: -8, conic: 0, asphere: [], semiDiameterMm: null },
         ],
         fillings: [{ thicknessMm: 6, material: { name: 'glass', index: 1.6, abbeNumber: 50 } }],
@@ -159,5 +164,16 @@ describe('drift whiskers', () => {
     expect(Math.abs(largest?.driftMm ?? 0)).toBe(Math.max(...sizes));
     const circles = layer({ whiskers: false, largest: true }).filter(({ kind }) => kind === 'circle');
     expect(circles).toHaveLength(1);
+  });
+
+  it('the largest stands on the image plane where that is its place, also when the image is virtual', () => {
+    const virtual = pictureFor(steep(-8), shownAs({ largest: true }));
+    for (const { scene, reading } of [picture, virtual]) {
+      const whisker = scene.exact?.rays ? largestWhisker(scene.exact.rays) : null;
+      const { train, conjugates } = reading.analysis;
+      const place = conjugates.imagePlaneMm;
+      expect(whisker?.surface).toBe(train.count);
+      expect(whisker?.zMm).toBeCloseTo((train.z.at(-1) ?? 0) + (place.ok ? place.value : Number.NaN), 9);
+    }
   });
 });
