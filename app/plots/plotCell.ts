@@ -78,7 +78,8 @@ export function createPlotCell(id: string, client: CellClient): PlotCell {
     pointermove: (event: PointerEvent) => put(under(event)),
     pointerdown: (event: PointerEvent) => put(under(event)),
     click: () => cursor !== null && client.onChoose(cursor),
-    pointerleave: () => put(null),
+    // A finger leaves as it is lifted; what it read stays until something else has the focus.
+    pointerleave: (event: PointerEvent) => event.pointerType !== 'touch' && put(null),
     keydown: onKeyDown,
     blur: () => put(null),
   };
