@@ -24,7 +24,7 @@ const BAD_FILES: readonly BadFile[] = [
   {
     name: 'later.json',
     text: changed({ version: 7 }),
-    says: 'The file is of version 7; this Gapwright reads version 1.',
+    says: 'The file is of version 7; this Gapwright reads version 2.',
   },
   { name: 'unknown.json', text: changed({ zoomMotor: 3 }), says: 'The entry “zoomMotor” is unknown' },
   { name: 'nonsense.json', text: NONSENSE, says: 'MB; a sketch file is at most 5 MB.' },
