@@ -25,7 +25,7 @@ export function exactRaysLayer(pen: Pen, rays: ExactRays, shown: BothShown, view
 }
 
 /** Every pencil with the style of its rays. */
-export function styled({ pencils }: ExactRays): readonly (readonly [ExactPencil, RayName])[] {
+function styled({ pencils }: ExactRays): readonly (readonly [ExactPencil, RayName])[] {
   const fields = pencils.filter(({ name }) => name === 'off-axis bundle').length;
   return pencils.map((pencil, i) => [
     pencil,

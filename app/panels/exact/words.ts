@@ -39,7 +39,7 @@ export function trustWords(
 }
 
 /** A surface by its number and part; the image plane behind the last one. */
-export function surfaceWords(sketch: Sketch, { train }: ExactRays, surface: number): string {
+function surfaceWords(sketch: Sketch, { train }: ExactRays, surface: number): string {
   if (surface >= train.count) return 'the image plane';
   const index = train.partOf[surface] ?? -1;
   const part = sketch.parts[index];
@@ -47,7 +47,7 @@ export function surfaceWords(sketch: Sketch, { train }: ExactRays, surface: numb
 }
 
 /** Which ray it is. */
-export function pencilWords({ name, share }: Largest['pencil']): string {
+function pencilWords({ name, share }: Largest['pencil']): string {
   return name === 'off-axis bundle' ? `bundle at ${percent(share)} of the field` : name;
 }
 
