@@ -6,7 +6,9 @@ import { bareRays, traceBareRays } from './bareRays.ts';
 import { benchSketch } from './benchSketch.ts';
 import { kernelRows } from './kernelRows.ts';
 import { liveUpdate } from './liveUpdate.ts';
+import { liveZoom, PLOTTED_RAYS, zoomRays } from './liveZoom.ts';
 import { measure, ratioOf, sunk, type Timing } from './measure.ts';
+import { zoomSketch } from './zoomSketch.ts';
 
 /** One line of the result. */
 export interface BenchRow {
@@ -27,10 +29,18 @@ const MOST_PER_DOUBLING = 2.2;
 const DRAWN_FIELDS = 3;
 const DRAWN_RAYS = 7;
 const REFERENCE_RAYS = 2;
+/** A whole update may take so many times as long as its rays. */
+const MOST_OVER_RAYS = 3;
 
 /** Every row; `measureText` is how labels are measured here. Throws when what was measured did not give numbers. */
 export function runBench(measureText: MeasureText): readonly BenchRow[] {
-  const rows = [...analysisRows(), ...liveRows(measureText), ...growthRows(measureText), ...kernelRows()];
+  const rows = [
+    ...analysisRows(),
+    ...liveRows(measureText),
+    ...zoomRows(measureText),
+    ...growthRows(measureText),
+    ...kernelRows(),
+  ];
   if (!Number.isFinite(sunk())) throw new Error(`runBench: the results add up to ${sunk()}`);
   return rows;
 }
@@ -61,6 +71,18 @@ function liveRows(measureText: MeasureText): BenchRow[] {
   return [
     row(`bare arithmetic: ${rays.raysPerTrain} rays, ${ELEMENTS} elements, 1 position`, bare, bare, 'itself'),
     row(`live update without painting: ${size}`, whole, bare, 'bare arithmetic'),
+  ];
+}
+
+/** One move of a drag in a real zoom with all its plots, against the kernel on the rays that these plots trace. */
+function zoomRows(measureText: MeasureText): BenchRow[] {
+  const sketch = zoomSketch();
+  const { bare, whole } = measure({ bare: zoomRays(sketch), whole: liveZoom(sketch, measureText) });
+  const { through, toStop } = PLOTTED_RAYS;
+  const size = '14 elements, 28 surfaces, 5 fields, 3 lines';
+  return [
+    row(`batch kernel: ${through} rays, 28 surfaces, and ${toStop} up to the stop`, bare, bare, 'itself'),
+    row(`live update with all plots: ${size}`, whole, bare, `batch kernel; at most ${MOST_OVER_RAYS}`),
   ];
 }
 
