@@ -1,14 +1,15 @@
 import type { Outcome } from '../outcome.ts';
 import { mapOutcome } from '../outcome.ts';
 import type { Part, Sketch } from '../sketch/types.ts';
+import { roomBeside } from '../train/body.ts';
 import type { Grid } from './grid.ts';
 import { imageWord, labelOf } from './labels.ts';
 import type { ColumnSpec, PositionSheet } from './positionSheet.ts';
 import { gapBehind } from './printed.ts';
 
 /**
- * A column for every space that reserved room narrows: the printed gap less the room behind the part on its left and in
- * front of the one on its right. Negative where the rooms overlap.
+ * A column for every space that room narrows, reserved by a thin part or taken by the rim of glass: the printed gap less the room behind the
+ * part on its left and in front of the one on its right. Negative where the rooms overlap.
  */
 export function clearGapColumns(sketch: Sketch, grid: Grid): ColumnSpec[] {
   const { parts } = sketch;
@@ -51,6 +52,6 @@ function clearColumn(
   ];
 }
 
-const roomInFront = (part: Part | undefined): number => (part?.kind === 'thin' ? part.roomFrontMm : 0);
+const roomInFront = (part: Part | undefined): number => (part ? roomBeside(part, 'front') : 0);
 
-const roomBehind = (part: Part): number => (part.kind === 'thin' ? part.roomBehindMm : 0);
+const roomBehind = (part: Part): number => roomBeside(part, 'behind');

@@ -1,6 +1,7 @@
 import { firstOrder } from '../paraxial/firstOrder.ts';
 import type { Sketch } from '../sketch/types.ts';
 import { objectDistanceAt, settingAt } from '../sketch/values.ts';
+import { roomBeside } from '../train/body.ts';
 import { trainOf } from '../train/train.ts';
 import type { Grid } from './grid.ts';
 import { imageWord, labelOf } from './labels.ts';
@@ -50,7 +51,9 @@ function datumWords(sketch: Sketch, datum: Datum): string {
 
 function gapNotes(sketch: Sketch): readonly string[] {
   const thin = sketch.parts.filter((part) => part.kind === 'thin');
-  const reserved = thin.some((part) => part.roomFrontMm !== 0 || part.roomBehindMm !== 0);
+  const narrowed = sketch.parts.some(
+    (part) => roomBeside(part, 'front') !== 0 || roomBeside(part, 'behind') !== 0,
+  );
   return [
     ...(thin.length > 0
       ? [
@@ -60,7 +63,9 @@ function gapNotes(sketch: Sketch): readonly string[] {
     ...(sketch.parts.some((part) => part.kind === 'glass')
       ? ['Gaps in front of and behind glass run to its vertices on the axis.']
       : []),
-    ...(reserved ? ['A clear gap is the gap less the room reserved for glass on both of its sides.'] : []),
+    ...(narrowed
+      ? ['A clear gap is the gap less the room that glass takes up, or has reserved, on both of its sides.']
+      : []),
   ];
 }
 

@@ -68,11 +68,8 @@ function grindable(part: Part): Part {
   };
 }
 
-const roomInFront = (part: Part | undefined): number => {
-  if (part?.kind === 'glass') return 1;
-  return part?.kind === 'thin' ? part.roomFrontMm : 0;
-};
-const roomBehind = (part: Part): number => {
-  if (part.kind === 'glass') return 1;
-  return part.kind === 'thin' ? part.roomBehindMm : 0;
-};
+/** What a thin part reserves, or more than any rim of `grindable` glass reaches. */
+const roomInFront = (part: Part | undefined): number =>
+  part?.kind === 'glass' ? 1 : part?.kind === 'thin' ? part.roomFrontMm : 0;
+const roomBehind = (part: Part): number =>
+  part.kind === 'glass' ? 1 : part.kind === 'thin' ? part.roomBehindMm : 0;

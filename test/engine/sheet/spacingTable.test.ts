@@ -5,8 +5,8 @@ import { cautionOf } from '../../../engine/sheet/notes.ts';
 import { spacingTable } from '../../../engine/sheet/spacingTable.ts';
 import type { Block, Cell, SheetOptions, SpacingTable } from '../../../engine/sheet/table.ts';
 import { cellText, DEFAULT_SHEET_OPTIONS, headingOf } from '../../../engine/sheet/table.ts';
-import { emptySketch, newPlate, newThin } from '../../../engine/sketch/create.ts';
-import type { PartId, Sketch } from '../../../engine/sketch/types.ts';
+import { emptySketch, newGlass, newPlate, newSurface, newThin } from '../../../engine/sketch/create.ts';
+import type { GlassPart, PartId, Sketch } from '../../../engine/sketch/types.ts';
 import { settingAt } from '../../../engine/sketch/values.ts';
 import { inspectionZoom, MIDDLE } from '../demo.ts';
 import { given } from '../quantity.ts';
@@ -116,6 +116,41 @@ describe('what rounding does to the image', () => {
     expect(
       Math.abs(numberIn(table.positions, table.positions.rows[0]?.cells ?? [], 'imageMiss')),
     ).toBeLessThanOrEqual(0.5);
+  });
+});
+
+describe('glass in the table', () => {
+  const cemented: GlassPart = {
+    ...newGlass(-50, 4, 'p2' as PartId),
+    name: 'rear lens',
+    semiDiameterMm: 10,
+    surfaces: [newSurface(-50), newSurface(null), newSurface(40)],
+    fillings: [
+      { thicknessMm: 2.0004, material: { name: 'n 1.5', index: 1.5, abbeNumber: null } },
+      { thicknessMm: 3.0004, material: { name: 'n 1.6', index: 1.6, abbeNumber: null } },
+    ],
+    space: { lengthMm: 30, medium: 'air' },
+  };
+  const table = tableOf({
+    ...emptySketch(),
+    parts: [{ ...newThin(50), space: { lengthMm: 10, medium: 'air' } }, cemented],
+  });
+
+  it('has its own focal length, and the sum of its rounded thicknesses', () => {
+    // By hand, 1/f of three thin-lens powers with the two reduced thicknesses: φ1 = 0.5/−50, φ2 = 0, φ3 = −0.6/40.
+    const [first, last] = [0.5 / -50, -0.6 / 40];
+    const reduced = 2.0004 / 1.5 + 3.0004 / 1.6;
+    const focalLength = 1 / (first + last - first * last * reduced);
+    expect(columnTexts(table.elements, 'focalLength')).toEqual(['50.000', focalLength.toFixed(3)]);
+    expect(columnTexts(table.elements, 'thickness')).toEqual(['thin element', '5.000']);
+    expect(columnTexts(table.elements, 'clearGiven')).toEqual(['open', '20.000']);
+  });
+
+  it('leaves the gap less what its rim takes as the clear gap', () => {
+    // Sag of a radius of 50 mm at 10 mm from the axis: 50 − √(50² − 10²).
+    const sag = 50 - Math.sqrt(50 ** 2 - 10 ** 2);
+    expect(columnTexts(table.positions, 'clear:p1')).toEqual([(10 - Number(sag.toFixed(3))).toFixed(3)]);
+    expect(table.notes.some((note) => note.startsWith('A clear gap is the gap less'))).toBe(true);
   });
 });
 
