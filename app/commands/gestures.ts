@@ -35,6 +35,11 @@ export const GESTURES: readonly GestureGroup[] = [
         hand: 'Drag the ring below the axis',
         keys: 'Tab to the bending, ← →',
       },
+      {
+        does: 'Choose glass on the map',
+        hand: 'Press a material in the card, point at the map; a click takes it',
+        keys: 'Enter on the material, ← → ↑ ↓ or a name, Enter',
+      },
       { does: 'Change a clear diameter', hand: 'Drag a rim', keys: 'Tab to the rim, ↑ ↓' },
       { does: 'Open or close the stop', hand: 'Drag its edges', keys: 'Tab to the edge, ↑ ↓' },
       {
