@@ -1,7 +1,9 @@
+import { AxeBuilder } from '@axe-core/playwright';
 import type { Locator, Page } from '@playwright/test';
 import { type App, expect, test } from './support/app.ts';
 import { linesIn, recorded } from './support/board.ts';
 import { drawn, grip, middleOf, numberAt } from './support/hand.ts';
+import { beginRenders, endRenders, watchRenders } from './support/renders.ts';
 
 /** A cell of the table of paraxial and exact values. */
 const compared = (app: App, row: string, column: 'paraxial' | 'exact' | 'difference'): Locator =>
@@ -173,3 +175,50 @@ async function spotAt(app: App, page: Page): Promise<string> {
   await drawn(page);
   return (await compared(app, 'Marginal height', 'exact').textContent()) ?? '';
 }
+
+test('with everything exact on show a drag renders nothing for nothing, and nothing is missing for a screen reader', async ({
+  app,
+  page,
+}) => {
+  await watchRenders(page);
+  await thickenFirst(app, page);
+  for (const group of ['Drift', 'Loupe']) await unfold(app, group);
+  await app.panel.getByRole('checkbox', { name: 'Loupe on the drawing' }).check();
+  const { violations } = await new AxeBuilder({ page }).include('[aria-label="Panel"]').analyze();
+  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`)).toEqual([]);
+  await app.hand.pressGrip('bend:p1');
+  await app.hand.move({ dx: 6 });
+  await beginRenders(page);
+  await app.hand.move({ dx: 40, steps: 10 });
+  const { commits, idle } = await endRenders(page);
+  await page.keyboard.press('Escape');
+  await app.hand.release();
+  expect(commits).toBeGreaterThanOrEqual(5);
+  expect(idle).toEqual([]);
+});
+
+test.describe('on a phone', () => {
+  test.use({ viewport: { width: 390, height: 844 }, hasTouch: true, isMobile: true });
+
+  test('the loupe is switched on from below and moved with a finger', async ({ app, page }) => {
+    await app.open();
+    await page.getByRole('button', { name: 'Readouts', exact: true }).click();
+    const sheet = page.getByRole('dialog', { name: 'Readouts' });
+    await sheet.getByRole('button', { name: 'Loupe', exact: true }).click();
+    await sheet.getByRole('checkbox', { name: 'Loupe on the drawing' }).check();
+    await page.getByRole('button', { name: 'Close Readouts' }).click();
+    await drawn(page);
+    const before = await numberAt(page, 'loupe');
+    const from = await middleOf(grip(page, 'loupe'));
+    const touch = await page.context().newCDPSession(page);
+    const at = (dx: number) => [{ x: from.x + dx, y: from.y - 20, id: 0 }];
+    await touch.send('Input.dispatchTouchEvent', { type: 'touchStart', touchPoints: at(0) });
+    for (let dx = -20; dx >= -120; dx -= 20) {
+      await touch.send('Input.dispatchTouchEvent', { type: 'touchMove', touchPoints: at(dx) });
+      await drawn(page);
+    }
+    await touch.send('Input.dispatchTouchEvent', { type: 'touchEnd', touchPoints: [] });
+    await drawn(page);
+    expect(await numberAt(page, 'loupe')).toBeLessThan(before - 10);
+  });
+});

@@ -44,14 +44,18 @@ function chipsOf(part: Part): readonly Chip[] {
  * toggles stand for Shift and Alt.
  */
 export function JogStrip({ board }: JogStripProps) {
-  const part = useReading((reading) => onlySelected(reading));
+  // As a text: the part itself changes with every move of its grips, its chips do not.
+  const chipsText = useReading((reading) => {
+    const part = onlySelected(reading);
+    return part ? JSON.stringify(chipsOf(part)) : '';
+  });
   const behindMoves = useReading(({ view }) => view.otherRule);
   const snap = useReading(({ view }) => view.snap);
   const [chip, setChip] = useState('Position');
   const from = useRef<{ readonly x: number; readonly y: number } | null>(null);
-  if (part === undefined) return <p className="jog-hint">Tap a part to move it from here.</p>;
+  if (chipsText === '') return <p className="jog-hint">Tap a part to move it from here.</p>;
 
-  const chips = chipsOf(part);
+  const chips: readonly Chip[] = JSON.parse(chipsText);
   const chosen = chips.find(({ label }) => label === chip) ?? chips[0];
   const handleId = chosen?.handleId ?? '';
 

@@ -6,11 +6,6 @@ import { trustWords } from './words.ts';
 /** How far down aperture and field the first order can be trusted, and the limit that says so. */
 export function TrustField() {
   const limitMm = useReadingNow(({ view }) => view.exact.trustLimitMm);
-  const words = useReading(({ exact, analysis, view }) => {
-    const fNumber = analysis.light.workingFNumber;
-    const { trustLimitMm } = view.exact;
-    return trustWords(exact.trust(trustLimitMm), trustLimitMm, fNumber.ok ? fNumber.value : null, view.unit);
-  });
   return (
     <>
       <LengthField
@@ -21,9 +16,20 @@ export function TrustField() {
         least={1e-6}
         onSet={(trustLimitMm) => setView({ exact: { ...viewStore.getState().exact, trustLimitMm } })}
       />
-      <p className="exact-note" data-trust>
-        {words}
-      </p>
+      <TrustWords />
     </>
+  );
+}
+
+function TrustWords() {
+  const words = useReading(({ exact, analysis, view }) => {
+    const fNumber = analysis.light.workingFNumber;
+    const { trustLimitMm } = view.exact;
+    return trustWords(exact.trust(trustLimitMm), trustLimitMm, fNumber.ok ? fNumber.value : null, view.unit);
+  });
+  return (
+    <p className="exact-note" data-trust>
+      {words}
+    </p>
   );
 }
