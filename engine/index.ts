@@ -5,7 +5,7 @@
 export { type Seidel, seidel, type ThinGlass } from './aberration/seidel.ts';
 export { SUM_NAMES, SUM_WORDS, type SumName } from './aberration/sums.ts';
 export { exactSetupOf, type FieldSpot, fieldSpot, leastSpotShift } from './exact/analyse.ts';
-export { type FieldRays, type Sample, sampleOf, traceFields } from './exact/bundles.ts';
+export { bufferSize, type FieldRays, type Sample, sampleOf, traceFields } from './exact/bundles.ts';
 export { type ChiefSweep, chiefSweep, fieldShares } from './exact/chiefSweep.ts';
 export { type Compared, type Comparison, compare } from './exact/compare.ts';
 export { contrastOf, diffractionLimit } from './exact/contrast.ts';

@@ -4,10 +4,18 @@ import type {
   ExactSetup,
   FieldRays,
   LengthUnit,
+  Sample,
   Setting,
   Sketch,
 } from '../../engine/index.ts';
-import { chiefSweep, fieldShares, hexapolarGrid, sampleOf, traceFields } from '../../engine/index.ts';
+import {
+  bufferSize,
+  chiefSweep,
+  fieldShares,
+  hexapolarGrid,
+  sampleOf,
+  traceFields,
+} from '../../engine/index.ts';
 import type { PlotsView } from '../store/viewStore.ts';
 
 /** How much is traced: coarse while a hand moves, fine when it rests. */
@@ -54,6 +62,9 @@ export const AMOUNTS: Readonly<Record<Quality, Amount>> = {
   fine: { fanRays: 41, rings: 10, sweepRings: 7, shares: 21, wideShares: 11, wavelengths: 15 },
 };
 
+/** So many drawn fields make a curve over the field. */
+const ENOUGH = 4;
+
 const GRIDS = new Map<number, ReturnType<typeof hexapolarGrid>>();
 
 function gridOf(rings: number): ReturnType<typeof hexapolarGrid> {
@@ -70,26 +81,49 @@ export function sourceOf(given: Given, wants: Wants): Source {
   const amount = AMOUNTS[quality];
   const fine = quality === 'fine';
   const shares = fieldShares(amount.shares);
+  const fractions = drawnFractions(sketch);
+  const fields = once(() => {
+    const grid = wants.spots ? gridOf(amount.rings) : null;
+    return traced('drawn', setup, fractions, sampleOf(wants.fans ? amount.fanRays : 0, grid, { fine }));
+  });
+  // While a hand moves, what is drawn will do, where there is enough of it.
+  const drawnWillDo =
+    !fine && wants.spots && fractions.length >= ENOUGH && fractions.every((share) => share >= 0);
   return {
     ...given,
     shares,
-    fields: once(() =>
-      traceFields(
-        setup,
-        drawnFractions(sketch),
-        sampleOf(wants.fans ? amount.fanRays : 0, wants.spots ? gridOf(amount.rings) : null, { fine }),
-      ),
-    ),
+    fields,
     axis: once(() => oneField(setup, amount.fanRays, fine)),
     sweepFields: once(() =>
-      traceFields(
-        setup,
-        [...fieldShares(amount.wideShares)],
-        sampleOf(0, gridOf(amount.sweepRings), { fine }),
-      ),
+      drawnWillDo
+        ? fields()
+        : traced(
+            'sweep',
+            setup,
+            [...fieldShares(amount.wideShares)],
+            sampleOf(0, gridOf(amount.sweepRings), { fine }),
+          ),
     ),
     sweeps: once(() => setup.lines.map((_, line) => chiefSweep(setup, line, shares))),
   };
+}
+
+const BUFFERS = new Map<string, Float64Array<ArrayBuffer>>();
+
+/** The fields traced into a buffer that is used again at the next source: a plot keeps none of its numbers. */
+function traced(
+  use: 'drawn' | 'sweep',
+  setup: ExactSetup,
+  fractions: readonly number[],
+  sample: Sample,
+): readonly FieldRays[] {
+  const size = bufferSize(setup, fractions.length, sample);
+  let buffer = BUFFERS.get(use);
+  if (buffer === undefined || buffer.length < size) {
+    buffer = new Float64Array(size);
+    BUFFERS.set(use, buffer);
+  }
+  return traceFields(setup, fractions, sample, buffer);
 }
 
 /** The fields drawn, from the axis outwards. */

@@ -6,7 +6,7 @@ import { bareRays, traceBareRays } from './bareRays.ts';
 import { benchSketch } from './benchSketch.ts';
 import { kernelRows } from './kernelRows.ts';
 import { liveUpdate } from './liveUpdate.ts';
-import { liveZoom, PLOTTED_RAYS, zoomRays } from './liveZoom.ts';
+import { liveZoom, UPDATE_RAYS, zoomRays } from './liveZoom.ts';
 import { measure, ratioOf, sunk, type Timing } from './measure.ts';
 import { zoomSketch } from './zoomSketch.ts';
 
@@ -78,7 +78,7 @@ function liveRows(measureText: MeasureText): BenchRow[] {
 function zoomRows(measureText: MeasureText): BenchRow[] {
   const sketch = zoomSketch();
   const { bare, whole } = measure({ bare: zoomRays(sketch), whole: liveZoom(sketch, measureText) });
-  const { through, toStop } = PLOTTED_RAYS;
+  const { through, toStop } = UPDATE_RAYS;
   const size = '14 elements, 28 surfaces, 5 fields, 3 lines';
   return [
     row(`batch kernel: ${through} rays, 28 surfaces, and ${toStop} up to the stop`, bare, bare, 'itself'),

@@ -1,8 +1,9 @@
 import { describe, expect, it, vi } from 'vitest';
+import { roughMeasure } from '../../app/board/measure.ts';
 import type { Train } from '../../engine/index.ts';
 import { faultsOf } from '../../engine/sketch/rules.ts';
 import { readingOf } from '../app/reading.ts';
-import { allPlots, PLOTTED_RAYS, zoomRays } from './liveZoom.ts';
+import { allPlots, liveZoom, UPDATE_RAYS, zoomRays } from './liveZoom.ts';
 import { zoomSketch } from './zoomSketch.ts';
 
 const counted = vi.hoisted(() => ({ through: 0, toStop: 0 }));
@@ -55,13 +56,11 @@ describe('the bench of a real zoom', () => {
   });
 
   it('is compared with as many rays as it traces, those counted that only aim', () => {
-    const reading = readingOf(zoomSketch());
-    expect(reading.exact.setup.ok).toBe(true);
-    const traced = count(() => allPlots(reading));
+    const traced = count(liveZoom(zoomSketch(), roughMeasure));
     for (const way of ['through', 'toStop'] as const)
-      expect(Math.abs(traced[way] / PLOTTED_RAYS[way] - 1), way).toBeLessThan(FEW_MORE);
+      expect(Math.abs(traced[way] / UPDATE_RAYS[way] - 1), way).toBeLessThan(FEW_MORE);
     const bare = zoomRays(zoomSketch());
-    expect(count(bare)).toEqual(PLOTTED_RAYS);
+    expect(count(bare)).toEqual(UPDATE_RAYS);
     expect(bare()).not.toBeNaN();
   });
 });
