@@ -1,10 +1,9 @@
-import { writeFile } from 'node:fs/promises';
-import type { Page } from '@playwright/test';
 import type { GlassPart, GlassSurface, Part, PartId, Sketch } from '../engine/index.ts';
 import { emptySketch, newGlass, newStop, writeSketch } from '../engine/index.ts';
 import { expect, test } from './support/app.ts';
 import { linesIn, recorded } from './support/board.ts';
 import { sketchIn, sketchText } from './support/engine.ts';
+import { openFile, withoutPickers } from './support/files.ts';
 
 const RELAY = sketchIn(sketchText('chute-relay-in-glass.json'));
 const [lens, ...others] = RELAY.parts as [GlassPart, ...Sketch['parts']];
@@ -64,15 +63,7 @@ const REFUSED: readonly { readonly name: string; readonly sketch: Sketch; readon
   },
 ];
 
-async function openSketch(page: Page, name: string, text: string): Promise<void> {
-  const path = test.info().outputPath(`${name}.json`);
-  await writeFile(path, text);
-  const [chooser] = await Promise.all([
-    page.waitForEvent('filechooser'),
-    page.getByRole('button', { name: 'Open', exact: true }).click(),
-  ]);
-  await chooser.setFiles(path);
-}
+const fileOf = (name: string): string => `${name.replaceAll(' ', '-')}.json`;
 
 test('glass that cannot be is drawn as far as it exists, with a sentence, and no number is none', async ({
   app,
@@ -80,10 +71,10 @@ test('glass that cannot be is drawn as far as it exists, with a sentence, and no
 }) => {
   const errors: string[] = [];
   page.on('pageerror', (error) => errors.push(error.message));
-  await page.addInitScript(() => Reflect.deleteProperty(window, 'showOpenFilePicker'));
+  await withoutPickers(page);
   await app.open();
   for (const { name, sketch, says } of DRAWN) {
-    await openSketch(page, name.replaceAll(' ', '-'), writeSketch({ ...sketch, title: name }));
+    await openFile(page, fileOf(name), writeSketch({ ...sketch, title: name }));
     await expect(page.getByTitle(`${name}: sketches on the shelf`)).toBeVisible();
     await expect(app.panel.locator('#warnings'), name).toContainText(says);
     const marks = await recorded(page);
@@ -101,10 +92,10 @@ test('glass that cannot be is drawn as far as it exists, with a sentence, and no
 });
 
 test('glass that is unknown or has no index is refused with a sentence', async ({ app, page }) => {
-  await page.addInitScript(() => Reflect.deleteProperty(window, 'showOpenFilePicker'));
+  await withoutPickers(page);
   await app.open();
   for (const { name, sketch, says } of REFUSED) {
-    await openSketch(page, name.replaceAll(' ', '-'), writeSketch(sketch));
+    await openFile(page, fileOf(name), writeSketch(sketch));
     const dialog = page.getByRole('dialog');
     await expect(dialog, name).toContainText(says);
     await dialog.getByRole('button', { name: 'Close', exact: true }).click();

@@ -1,7 +1,6 @@
-import { writeFile } from 'node:fs/promises';
-import type { Page } from '@playwright/test';
 import { type App, expect, test } from './support/app.ts';
 import { DEMO, sketchText } from './support/engine.ts';
+import { openFile, withoutPickers } from './support/files.ts';
 
 interface BadFile {
   readonly name: string;
@@ -45,28 +44,10 @@ const BAD_FILES: readonly BadFile[] = [
   },
 ];
 
-/** Chromium's own file picker cannot be driven; without it the app asks with a file input, as other browsers do. */
-const withoutPickers = (page: Page) =>
-  page.addInitScript(() => {
-    Reflect.deleteProperty(window, 'showOpenFilePicker');
-    Reflect.deleteProperty(window, 'showSaveFilePicker');
-  });
-
 const expectDemo = async (app: App) => {
   await expect(app.page.getByTitle('Seed line camera: sketches on the shelf')).toBeVisible();
   await expect(app.readout('Focal length')).toHaveText('25.748mm');
 };
-
-/** Opens a real file of that name. Large ones are slow to hand over in any other way. */
-async function openFile(page: Page, name: string, text: string): Promise<void> {
-  const path = test.info().outputPath(name);
-  await writeFile(path, text);
-  const [chooser] = await Promise.all([
-    page.waitForEvent('filechooser'),
-    page.getByRole('button', { name: 'Open', exact: true }).click(),
-  ]);
-  await chooser.setFiles(path);
-}
 
 test('files that hold no sketch are refused with a sentence, and the last sketch stays', async ({
   app,

@@ -1,6 +1,7 @@
 import { readFile } from 'node:fs/promises';
 import { App, expect, test } from './support/app.ts';
 import { sketchIn } from './support/engine.ts';
+import { withoutPickers } from './support/files.ts';
 
 test.use({ permissions: ['clipboard-read', 'clipboard-write'] });
 
@@ -9,10 +10,7 @@ test('a sketch is saved as a file and opened again, and a link carries it to ano
   browser,
   page,
 }) => {
-  await page.addInitScript(() => {
-    Reflect.deleteProperty(window, 'showOpenFilePicker');
-    Reflect.deleteProperty(window, 'showSaveFilePicker');
-  });
+  await withoutPickers(page);
   await app.open();
   await app.hand.clickGrip('cell:gap:p1');
   await app.typeOnDrawing('40.125');

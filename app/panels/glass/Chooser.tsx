@@ -13,7 +13,7 @@ import { CodeForm, FormulaForm, IndexForm } from './OwnMedium.tsx';
 import type { TypedMedium } from './typedMedium.ts';
 import './glass.css';
 
-interface ChooserProps {
+export interface ChooserProps {
   readonly label: string;
   /** What stands there as the chooser opens; null for air or nothing. */
   readonly medium: SolidMedium | null;

@@ -1,16 +1,13 @@
-import { lazy, Suspense, useId, useRef, useState } from 'react';
+import { useRef, useState } from 'react';
 import type { Edit, SolidMedium } from '../../../engine/index.ts';
 import { mediumName, nominal } from '../../../engine/index.ts';
 import type { Reading } from '../../live/reading.ts';
 import { useReadingNow } from '../../live/reading.ts';
 import { cancelEdit } from '../../store/sketchStore.ts';
-import { Field } from '../../ui/Field.tsx';
 import { formatNumber } from '../../ui/format.ts';
 import { tryEdit, tryPreview } from '../edit.ts';
+import { ChooserField } from './ChooserField.tsx';
 import { mainIndexWords } from './mediumWords.ts';
-import './glass.css';
-
-const Chooser = lazy(async () => ({ default: (await import('./Chooser.tsx')).Chooser }));
 
 /** What may stand there instead of a glass: air in a space, nothing where a thin part names no glass. */
 type Instead = 'air' | null;
@@ -28,7 +25,6 @@ interface MaterialFieldProps<Other extends Instead> {
 /** A medium as a row of a card: its name, index and Abbe number, and the way to choose another. */
 export function MaterialField<Other extends Instead = never>(props: MaterialFieldProps<Other>) {
   const { label, read, edit, instead } = props;
-  const id = useId();
   const opener = useRef<HTMLButtonElement>(null);
   const medium = useReadingNow(read);
   const index = useReadingNow((reading) => figuresWords(read(reading), reading));
@@ -51,38 +47,24 @@ export function MaterialField<Other extends Instead = never>(props: MaterialFiel
     return refused ?? null;
   };
 
+  const toggle = () => {
+    if (opened) cancelEdit();
+    setOpened(opened ? null : { medium: solid(medium) });
+  };
+  const chooser = opened && {
+    medium: opened.medium,
+    instead: instead?.words ?? null,
+    onPreview: preview,
+    onRestore: cancelEdit,
+    onChoose: choose,
+    onClose: close,
+  };
+
   return (
-    <Field id={id} label={label}>
-      <button
-        ref={opener}
-        id={id}
-        type="button"
-        className="field-input material-button"
-        aria-labelledby={`${id}-label ${id}`}
-        aria-haspopup="dialog"
-        aria-expanded={opened !== null}
-        onClick={() => {
-          if (opened) cancelEdit();
-          setOpened(opened ? null : { medium: solid(medium) });
-        }}
-      >
-        {medium === null || medium === 'air' ? (instead?.words ?? 'none') : mediumName(medium)}
-        {index !== '' && <span className="material-figures">{index}</span>}
-      </button>
-      {opened && (
-        <Suspense>
-          <Chooser
-            label={label}
-            medium={opened.medium}
-            instead={instead?.words ?? null}
-            onPreview={preview}
-            onRestore={cancelEdit}
-            onChoose={choose}
-            onClose={close}
-          />
-        </Suspense>
-      )}
-    </Field>
+    <ChooserField label={label} opener={opener} onToggle={toggle} chooser={chooser}>
+      {medium === null || medium === 'air' ? (instead?.words ?? 'none') : mediumName(medium)}
+      {index !== '' && <span className="material-figures">{index}</span>}
+    </ChooserField>
   );
 }
 

@@ -1,10 +1,7 @@
-import { lazy, Suspense, useId, useRef, useState } from 'react';
+import { useRef, useState } from 'react';
 import type { SolidMedium } from '../../../engine/index.ts';
 import { mediumName } from '../../../engine/index.ts';
-import { Field } from '../../ui/Field.tsx';
-import '../glass/glass.css';
-
-const Chooser = lazy(async () => ({ default: (await import('../glass/Chooser.tsx')).Chooser }));
+import { ChooserField } from '../glass/ChooserField.tsx';
 
 interface GlassButtonProps {
   readonly label: string;
@@ -14,44 +11,32 @@ interface GlassButtonProps {
 
 /** A glass that is wished for and stands in no sketch yet, with the chooser. */
 export function GlassButton({ label, medium, onChoose }: GlassButtonProps) {
-  const id = useId();
   const opener = useRef<HTMLButtonElement>(null);
   const [isOpen, setOpen] = useState(false);
   const close = (focusBack: boolean) => {
     setOpen(false);
     if (focusBack) opener.current?.focus();
   };
+  const chooser = {
+    medium,
+    instead: null,
+    onPreview: () => null,
+    onRestore: () => undefined,
+    onChoose: (next: SolidMedium | 'instead') => {
+      if (next !== 'instead') onChoose(next);
+      close(true);
+      return null;
+    },
+    onClose: close,
+  };
   return (
-    <Field id={id} label={label}>
-      <button
-        ref={opener}
-        id={id}
-        type="button"
-        className="field-input material-button"
-        aria-labelledby={`${id}-label ${id}`}
-        aria-haspopup="dialog"
-        aria-expanded={isOpen}
-        onClick={() => setOpen(!isOpen)}
-      >
-        {mediumName(medium)}
-      </button>
-      {isOpen && (
-        <Suspense>
-          <Chooser
-            label={label}
-            medium={medium}
-            instead={null}
-            onPreview={() => null}
-            onRestore={() => undefined}
-            onChoose={(next) => {
-              if (next !== 'instead') onChoose(next);
-              close(true);
-              return null;
-            }}
-            onClose={close}
-          />
-        </Suspense>
-      )}
-    </Field>
+    <ChooserField
+      label={label}
+      opener={opener}
+      onToggle={() => setOpen(!isOpen)}
+      chooser={isOpen ? chooser : null}
+    >
+      {mediumName(medium)}
+    </ChooserField>
   );
 }
