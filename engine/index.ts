@@ -16,7 +16,7 @@ export { distortion, fieldCurves, lateralColour } from './exact/fieldCurves.ts';
 export { hexapolarGrid } from './exact/grids.ts';
 export { illumination } from './exact/illumination.ts';
 export { landingsOf, type Weighted } from './exact/landing.ts';
-export { axialColour, longitudinal } from './exact/longitudinal.ts';
+export { axialColour, longitudinal, type TrainAt } from './exact/longitudinal.ts';
 export { lostFieldWarnings, lostWords, refracts } from './exact/lostFields.ts';
 export { type PupilMap, pupilMapOf } from './exact/pupilMap.ts';
 export { airyRadius, type SpotSize, spotSize } from './exact/spots.ts';

@@ -38,13 +38,14 @@ export interface CurvePlot extends PlotBase {
   readonly curves: readonly PlotCurve[];
 }
 
-/** Where the rays of one line meet a plane, x and y in turn, from the centroid; and the share of the light in each. */
+/** Where the rays of one line meet a plane, x and y in turn, from the centroid; the share of the light in each, and how much the line counts. */
 export interface Dots {
   readonly name: string;
   readonly line: CurveLine;
   readonly style: MarkStyle;
   readonly points: Float64Array;
   readonly share: Float64Array;
+  readonly weight: number;
 }
 
 /** Where the rays of a field meet one plane. */

@@ -139,9 +139,9 @@ function readStems({ stems, y }: StemPlot, stop: number): PlotReading {
 /** The share of the light that falls within a radius of the centroid. */
 function lightWithin({ dots }: Spot, radius: number): number {
   let [within, all] = [0, 0];
-  for (const { points, share } of dots) {
+  for (const { points, share, weight: line } of dots) {
     for (let i = 0; i < share.length; i++) {
-      const weight = share[i] ?? 0;
+      const weight = line * (share[i] ?? 0);
       all += weight;
       if (Math.hypot(points[2 * i] ?? 0, points[2 * i + 1] ?? 0) <= radius * (1 + 1e-12)) within += weight;
     }

@@ -13,6 +13,7 @@ import {
   chiefSweep,
   fieldShares,
   hexapolarGrid,
+  landingsOf,
   sampleOf,
   traceFields,
 } from '../../engine/index.ts';
@@ -38,6 +39,8 @@ export interface Source {
   readonly quality: Quality;
   /** The fields of the sketch as drawn, from the axis outwards. */
   readonly fields: () => readonly FieldRays[];
+  /** Where the grid of one of these fields lands on the image plane. */
+  readonly landings: (field: FieldRays) => ReturnType<typeof landingsOf>;
   /** The axial bundle with a fan. */
   readonly axis: () => FieldRays;
   /** Fields at equal steps of the share, with spots: for curves over the field. */
@@ -53,24 +56,25 @@ interface Amount {
   readonly sweepRings: number;
   readonly shares: number;
   readonly wideShares: number;
-  readonly wavelengths: number;
 }
 
-/** Rays of a fan, rings of a spot (eight: 217 rays, ten: 331), points over the field with and without spots, points over wavelength. */
-export const AMOUNTS: Readonly<Record<Quality, Amount>> = {
-  coarse: { fanRays: 21, rings: 8, sweepRings: 4, shares: 9, wideShares: 5, wavelengths: 5 },
-  fine: { fanRays: 41, rings: 10, sweepRings: 7, shares: 21, wideShares: 11, wavelengths: 15 },
+/** Rays of a fan, rings of a spot (eight: 217 rays, ten: 331), points over the field with and without spots. */
+const AMOUNTS: Readonly<Record<Quality, Amount>> = {
+  coarse: { fanRays: 21, rings: 8, sweepRings: 4, shares: 7, wideShares: 5 },
+  fine: { fanRays: 41, rings: 10, sweepRings: 7, shares: 21, wideShares: 11 },
 };
 
 /** So many drawn fields make a curve over the field. */
 const ENOUGH = 4;
 
-const GRIDS = new Map<number, ReturnType<typeof hexapolarGrid>>();
+const SAMPLES = new Map<string, Sample>();
 
-function gridOf(rings: number): ReturnType<typeof hexapolarGrid> {
-  const grid = GRIDS.get(rings) ?? hexapolarGrid(rings);
-  GRIDS.set(rings, grid);
-  return grid;
+/** The sample of so many rays in a fan and rings in a spot, 0 for none; made once. */
+function sampleFor(fanRays: number, rings: number, fine: boolean): Sample {
+  const key = `${fanRays} ${rings} ${fine}`;
+  const sample = SAMPLES.get(key) ?? sampleOf(fanRays, rings === 0 ? null : hexapolarGrid(rings), { fine });
+  SAMPLES.set(key, sample);
+  return sample;
 }
 
 type Given = Pick<Source, 'sketch' | 'setting' | 'analysis' | 'setup' | 'view' | 'unit' | 'quality'>;
@@ -83,8 +87,8 @@ export function sourceOf(given: Given, wants: Wants): Source {
   const shares = fieldShares(amount.shares);
   const fractions = drawnFractions(sketch);
   const fields = once(() => {
-    const grid = wants.spots ? gridOf(amount.rings) : null;
-    return traced('drawn', setup, fractions, sampleOf(wants.fans ? amount.fanRays : 0, grid, { fine }));
+    const sample = sampleFor(wants.fans ? amount.fanRays : 0, wants.spots ? amount.rings : 0, fine);
+    return traced('drawn', setup, fractions, sample);
   });
   // While a hand moves, what is drawn will do, where there is enough of it.
   const drawnWillDo =
@@ -93,16 +97,12 @@ export function sourceOf(given: Given, wants: Wants): Source {
     ...given,
     shares,
     fields,
+    landings: byField(landingsOf),
     axis: once(() => oneField(setup, amount.fanRays, fine)),
     sweepFields: once(() =>
       drawnWillDo
         ? fields()
-        : traced(
-            'sweep',
-            setup,
-            [...fieldShares(amount.wideShares)],
-            sampleOf(0, gridOf(amount.sweepRings), { fine }),
-          ),
+        : traced('sweep', setup, [...fieldShares(amount.wideShares)], sampleFor(0, amount.sweepRings, fine)),
     ),
     sweeps: once(() => setup.lines.map((_, line) => chiefSweep(setup, line, shares))),
   };
@@ -131,9 +131,21 @@ export const drawnFractions = ({ field }: Sketch): readonly number[] =>
   [...new Set(field.fractions)].sort((a, b) => Math.abs(a) - Math.abs(b) || a - b);
 
 function oneField(setup: ExactSetup, fanRays: number, fine: boolean): FieldRays {
-  const [field] = traceFields(setup, [0], sampleOf(fanRays, null, { fine }));
+  const [field] = traceFields(setup, [0], sampleFor(fanRays, 0, fine));
   if (!field) throw new Error('oneField: no field was traced');
   return field;
+}
+
+/** `compute`, called once for each field. */
+function byField<T>(compute: (field: FieldRays) => T): (field: FieldRays) => T {
+  const known = new Map<FieldRays, T>();
+  return (field) => {
+    const before = known.get(field);
+    if (before !== undefined) return before;
+    const result = compute(field);
+    known.set(field, result);
+    return result;
+  };
 }
 
 /** `compute`, called once at most. */

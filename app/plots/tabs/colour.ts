@@ -1,14 +1,16 @@
-import type { Sketch } from '../../../engine/index.ts';
+import type { Sketch, TrainAt } from '../../../engine/index.ts';
 import { axialColour, lateralColour, longitudinal, sentenceOf, trainOf } from '../../../engine/index.ts';
 import { curveStyle, emptyPlot, type Plot, type PlotCurve } from '../plot.ts';
 import { evenAxis, reachOf } from '../scale.ts';
-import { AMOUNTS, type Source } from '../source.ts';
+import type { Source } from '../source.ts';
 import { lengthScale, lineDash, lineName, lineWord, lostNote, scaled } from '../words.ts';
 import { OVER_FIELD } from './field.ts';
 
 const MICRO = 1000;
 /** The zone of the stop whose rays tell the exact focus of a wavelength: half of its light is within. */
 const ZONE = Math.SQRT1_2;
+/** Points over wavelength, when the hand rests. */
+const WAVELENGTHS = 15;
 
 /** Focus over the stop in each line, focus over wavelength, and lateral colour over the field. */
 export const colourPlots = (source: Source): readonly Plot[] => [
@@ -50,11 +52,7 @@ function longitudinalPlot(source: Source): Plot {
 
 function axialPlot(source: Source): Plot {
   const [key, title] = ['axial colour', 'Axial colour'];
-  const wavelengths = wavelengthsOf(source);
-  const trains = wavelengths.map((wavelengthNm) => ({
-    wavelengthNm,
-    train: trainOf(inWavelength(source.sketch, wavelengthNm), source.setting, 'fourth'),
-  }));
+  const trains = trainsOf(source);
   const found = axialColour(source.setup, trains, ZONE);
   if (!found.ok) return emptyPlot(key, title, sentenceOf(found.why));
   const length = lengthScale(source.unit, 3);
@@ -79,7 +77,13 @@ function axialPlot(source: Source): Plot {
     kind: 'curves',
     key,
     title,
-    x: { label: 'wavelength', unit: 'nm', digits: 1, from: wavelengths[0] ?? 0, to: wavelengths.at(-1) ?? 1 },
+    x: {
+      label: 'wavelength',
+      unit: 'nm',
+      digits: 1,
+      from: trains[0]?.wavelengthNm ?? 0,
+      to: trains.at(-1)?.wavelengthNm ?? 1,
+    },
     y: evenAxis(
       'focus behind the image plane',
       length.unit,
@@ -92,12 +96,18 @@ function axialPlot(source: Source): Plot {
   };
 }
 
-/** Equal steps from the shortest to the longest line of the sketch: within them every index is known. */
-function wavelengthsOf({ setup, quality }: Source): readonly number[] {
-  const all = setup.lines.map(({ wavelengthNm }) => wavelengthNm);
-  const [low, high] = [Math.min(...all), Math.max(...all)];
-  const count = AMOUNTS[quality].wavelengths;
-  return Array.from({ length: count }, (_, i) => low + ((high - low) * i) / (count - 1));
+/**
+ * The trains of equal steps from the shortest to the longest line of the sketch, within which every index is known; while a hand moves, those of
+ * the lines, which are there already.
+ */
+function trainsOf({ sketch, setting, setup, quality }: Source): readonly TrainAt[] {
+  const lines = [...setup.lines].sort((a, b) => a.wavelengthNm - b.wavelengthNm);
+  if (quality === 'coarse') return lines.map(({ wavelengthNm, train }) => ({ wavelengthNm, train }));
+  const [low, high] = [lines[0]?.wavelengthNm ?? 0, lines.at(-1)?.wavelengthNm ?? 0];
+  return Array.from({ length: WAVELENGTHS }, (_, i) => {
+    const wavelengthNm = low + ((high - low) * i) / (WAVELENGTHS - 1);
+    return { wavelengthNm, train: trainOf(inWavelength(sketch, wavelengthNm), setting, 'fourth') };
+  });
 }
 
 /** The sketch with this wavelength as its fourth line. */

@@ -1,4 +1,4 @@
-import { contrastOf, diffractionLimit, landingsOf, sentenceOf, spotSize } from '../../../engine/index.ts';
+import { contrastOf, diffractionLimit, sentenceOf, spotSize } from '../../../engine/index.ts';
 import type { CurveInk, CurveLine } from '../../board/styles.ts';
 import { formatNumber } from '../../ui/format.ts';
 import { curveStyle, emptyPlot, type Plot, type PlotCurve } from '../plot.ts';
@@ -42,7 +42,7 @@ export function contrastPlots(source: Source): readonly Plot[] {
   const fields = source.sweepFields();
   const [main] = source.setup.lines;
   const values = fields.map((field) => {
-    const landings = landingsOf(field);
+    const landings = source.landings(field);
     const first = landings.ok ? landings.value[0] : undefined;
     if (!landings.ok || !first) return null;
     const limit = diffractionLimit(first.landing, field.bundles[0]?.index ?? 1, main.wavelengthNm);

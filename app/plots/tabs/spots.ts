@@ -1,5 +1,5 @@
 import type { ExactSetup, FieldRays, SpotSize, Weighted } from '../../../engine/index.ts';
-import { airyRadius, landingsOf, sentenceOf, spotSize } from '../../../engine/index.ts';
+import { airyRadius, sentenceOf, spotSize } from '../../../engine/index.ts';
 import type { CurveInk } from '../../board/styles.ts';
 import { formatNumber } from '../../ui/format.ts';
 import { type Dots, emptyPlot, type Plot, type Spot } from '../plot.ts';
@@ -95,7 +95,7 @@ function ofFields(source: Source, make: Make): readonly Plot[] {
     source.fields().map((field, index) => {
       const key = `spot ${index}`;
       const title = `Spot, ${fieldName(field.fraction)}`;
-      const landings = landingsOf(field);
+      const landings = source.landings(field);
       if (!landings.ok) return emptyPlot(key, title, sentenceOf(landings.why));
       const ink = fieldInk(fractions, index);
       return make(field, landings.value, ink, key, title, airy.ok ? airy.value * MICRO : null);
@@ -124,7 +124,8 @@ function spotOf(
       line: lineDash(setup, line),
       style: `dots ${ink}`,
       points,
-      share: landing.weight.subarray(0, count).map((share) => share * weight),
+      share: landing.weight.subarray(0, count),
+      weight,
     };
   });
   return { at, dots, rms: rmsMm * MICRO, largest: largestMm * MICRO };
@@ -138,7 +139,7 @@ function focusReach(source: Source): number {
   const quarterWaveMm = (main.wavelengthNm * 1e-6 * Math.abs(index)) / (2 * nu * nu);
   const depthsMm = DEPTHS * quarterWaveMm;
   const leastMm = source.fields().map((field) => {
-    const landings = landingsOf(field);
+    const landings = source.landings(field);
     return landings.ok ? leastShift(landings.value, depthsMm) : 0;
   });
   const wanted = Math.max(depthsMm, ...leastMm.map((mm) => BEYOND * Math.abs(mm)));

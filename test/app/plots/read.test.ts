@@ -52,6 +52,7 @@ const SPOT: SpotPlot = {
           style: 'dots axial',
           points: Float64Array.of(0, 0, 3, 4, 0, -9, 1, 0),
           share: Float64Array.of(0.4, 0.3, 0.2, 0.1),
+          weight: 1,
         },
       ],
     },
