@@ -1,4 +1,5 @@
 import { tickIncrement } from 'd3';
+import type { MeasureText } from '../board/measure.ts';
 import { type Pen, segment } from '../board/pen.ts';
 import type { MarkStyle } from '../board/styles.ts';
 import { plain } from '../drawing/words.ts';
@@ -54,7 +55,7 @@ export function drawSpots(
   room: Room,
   { measure, cursor, reference }: DrawnWith,
 ): void {
-  drawHead(pen, plot.title, plot.figures.join('  '), plot.notes, measure);
+  drawHead(pen, plot.title, fitting(plot.figures, room.widthPx, measure), plot.notes, measure);
   const { area, planes, half, middle, perUnit, x } = spotPlaces(plot, room);
   const centre = (area.left + area.right) / 2;
   const across = (at: number) => (plot.x === null ? centre : x(at));
@@ -75,6 +76,17 @@ export function drawSpots(
   if (plot.x === null) pen.circle(centre, middle, cursor * perUnit, 'curve ink main');
   else segment(pen, x(cursor), area.top, x(cursor), area.bottom, 'leader');
   drawReading(pen, readAt(plot, cursor), plot.x === null ? area.left - 8 : x(cursor), area, measure);
+}
+
+/** As many figures as fit into the width; at least the first. */
+function fitting(figures: readonly string[], widthPx: number, measure: MeasureText): string {
+  let text = figures[0] ?? '';
+  for (const figure of figures.slice(1)) {
+    const longer = `${text}  ${figure}`;
+    if (measure(longer, 'label quiet') > widthPx) break;
+    text = longer;
+  }
+  return text;
 }
 
 interface Place {

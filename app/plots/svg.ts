@@ -59,7 +59,7 @@ export function plotsSvg({ title, sets, grid, axis, measure }: SheetOfPlots): st
 }
 
 /** A pen whose (0, 0) lies at (dx, dy) of `pen`. */
-export function shifted(pen: Pen, dx: number, dy: number): Pen {
+function shifted(pen: Pen, dx: number, dy: number): Pen {
   const moved = (points: Flat): Float64Array =>
     Float64Array.from(points, (value, i) => value + (i % 2 === 0 ? dx : dy));
   const movedShape = (shape: ClipShape): ClipShape => ({

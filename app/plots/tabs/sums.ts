@@ -37,7 +37,7 @@ export function sumPlots({ sketch, analysis, view }: SumSource): readonly Plot[]
 }
 
 /** The sums of a sketch, its thin parts with the glass and bending that are meant for them. */
-export const sumsOf = (sketch: Sketch, { train, rays }: Analysis) =>
+const sumsOf = (sketch: Sketch, { train, rays }: Analysis) =>
   seidel(train, rays, thinGlassOf(sketch, train));
 
 function thinGlassOf(sketch: Sketch, train: Analysis['train']): ThinGlass {
