@@ -125,6 +125,11 @@ export const GESTURES: readonly GestureGroup[] = [
         keys: 'Tab to them, ← →; fields under Loupe in the panel',
       },
       {
+        does: 'Read a plot; a stem of a sum lights up its surface',
+        hand: 'Point at it; a press on a stem selects the part',
+        keys: 'Tab to it, ← →, Home and End; Enter selects the part',
+      },
+      {
         does: 'Move between positions',
         hand: 'Drag the scrubber, or tap a stop of it',
         keys: '1 to 9, or ← → on the scrubber',
