@@ -37,8 +37,7 @@ export function sumPlots({ sketch, analysis, view }: SumSource): readonly Plot[]
 }
 
 /** The sums of a sketch, its thin parts with the glass and bending that are meant for them. */
-const sumsOf = (sketch: Sketch, { train, rays }: Analysis) =>
-  seidel(train, rays, thinGlassOf(sketch, train));
+const sumsOf = (sketch: Sketch, { train, rays }: Analysis) => seidel(train, rays, thinGlassOf(sketch, train));
 
 function thinGlassOf(sketch: Sketch, train: Analysis['train']): ThinGlass {
   const parts = Array.from(train.partOf, (part) => sketch.parts[part]);
