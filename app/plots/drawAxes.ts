@@ -14,7 +14,7 @@ export interface Area {
   readonly bottom: number;
 }
 
-const LEFT = 42;
+const LEFT = 48;
 const RIGHT = 12;
 const TOP = 46;
 const BOTTOM = 36;

@@ -26,7 +26,7 @@ export function drawLegend(
       pen.circle(x + wide / 2, y - 6, 2, 'ink');
     } else drawSign(pen, sign, x + wide / 2, y);
     pen.text(x + wide + 6, y, name, 'label quiet', { baseline: 'middle', halo: false });
-    x += width + 16;
+    x += width + 20;
   }
   return entries.length === 0 ? 0 : ROW * (row + 1);
 }

@@ -7,7 +7,7 @@ import { pxScale } from './scale.ts';
 
 const TOP = 44;
 const BOTTOM = 10;
-const LEFT = 46;
+const LEFT = 48;
 
 /** Stems under their surfaces as the drawing above has them, and the line of the sum so far. */
 export function drawStems(

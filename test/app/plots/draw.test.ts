@@ -66,8 +66,8 @@ describe('a drawn plot', () => {
       '"error, µm"',
       '"share of the stop"',
       '"−10"',
-      'line [curve axial main] 42,146 242,46',
-      'line [curve axial short] 42,96 242,96',
+      'line [curve axial main] 48,146 242,46',
+      'line [curve axial short] 48,96 242,96',
     ])
       expect(text).toContain(part);
   });
@@ -80,7 +80,7 @@ describe('a drawn plot', () => {
   });
 
   it('has the kept plot faintly under it', () => {
-    expect(drawn(curve(10), { reference: curve(5) })).toContain('line [curve reference] 42,121 242,71');
+    expect(drawn(curve(10), { reference: curve(5) })).toContain('line [curve reference] 48,121 242,71');
   });
 
   it('hangs stems at the places of their surfaces on the drawing', () => {
