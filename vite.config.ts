@@ -9,7 +9,14 @@ export default defineConfig({
   publicDir: `${repository}/public`,
   plugins: [react()],
   // What the build weighs is judged by size-limit.
-  build: { outDir: `${repository}/dist`, emptyOutDir: true, target: 'es2023', chunkSizeWarningLimit: 1000 },
+  build: {
+    outDir: `${repository}/dist`,
+    emptyOutDir: true,
+    target: 'es2023',
+    chunkSizeWarningLimit: 1000,
+    // As `var` the trace's arrays would be no constants for the compiler: it would check every index, at half the speed.
+    rolldownOptions: { output: { topLevelVar: false } },
+  },
   server: { fs: { allow: [repository] } },
   test: {
     root: repository,

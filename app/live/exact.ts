@@ -43,7 +43,6 @@ export const exactOf: (sketch: Sketch, setting: Setting) => Exact = remembering(
     const known = setup();
     return known.ok ? some(compare(known.value)) : known;
   });
-  const pencils = new Map<number, PupilMap>();
   const spots = new Map<number, Outcome<FieldSpot, Absence>>();
   const trusted = new Map<number, Outcome<Trust, Absence>>();
   return {
@@ -66,7 +65,7 @@ export const exactOf: (sketch: Sketch, setting: Setting) => Exact = remembering(
     },
     pencil(fraction) {
       const known = setup();
-      return known.ok ? kept(pencils, fraction, () => pupilMapOf(known.value, 0, fraction)) : null;
+      return known.ok ? pupilMapOf(known.value, 0, fraction) : null;
     },
   };
 });

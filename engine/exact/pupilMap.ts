@@ -47,8 +47,25 @@ const AIMED_POINTS = new Float64Array([
 ]);
 const AIMED_COUNT = AIMED_POINTS.length / 2;
 
-/** The bundle of the share `fraction` of the field in line `line` of the setup. Its `lost` says when no ray gets to the stop's centre. */
+const made = new WeakMap<ExactSetup, Map<number, PupilMap>>();
+
+/**
+ * The bundle of the share `fraction` of the field in line `line` of the setup. Its `lost` says when no ray gets to the stop's centre.
+ * Drawing, plots and comparison ask for the same few, and aiming costs more than tracing: each is made once for a setup.
+ */
 export function pupilMapOf(setup: ExactSetup, line: number, fraction: number): PupilMap {
+  const known = made.get(setup) ?? new Map<number, PupilMap>();
+  made.set(setup, known);
+  const key = line * FIELDS_APART + fraction;
+  const map = known.get(key) ?? makeMap(setup, line, fraction);
+  known.set(key, map);
+  return map;
+}
+
+/** Shares of the field lie between −1 and 1, so that line and share make one number. */
+const FIELDS_APART = 4;
+
+function makeMap(setup: ExactSetup, line: number, fraction: number): PupilMap {
   const sight = sightOf(setup, line);
   const chief = aimChief(sight, setup, line, fraction);
   const source = sourceOf(setup, line, fraction);

@@ -43,6 +43,8 @@ async function bundled() {
     build: {
       write: false,
       target: 'es2023',
+      // Constants stay constants, as in the build of the app.
+      rolldownOptions: { output: { topLevelVar: false } },
       lib: {
         entry: fileURLToPath(new URL('inPage.ts', import.meta.url)),
         formats: ['iife'],

@@ -22,7 +22,8 @@ export async function loadTs(path) {
         ssr: resolve(path),
         target: 'node20',
         minify: false,
-        rolldownOptions: { output: { entryFileNames: 'module.mjs' } },
+        // Constants stay constants, as in the build of the app.
+        rolldownOptions: { output: { entryFileNames: 'module.mjs', topLevelVar: false } },
       },
       ssr: { noExternal: true },
     });
