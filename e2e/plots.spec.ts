@@ -3,6 +3,7 @@ import type { Page } from '@playwright/test';
 import type { App } from './support/app.ts';
 import { expect, test } from './support/app.ts';
 import { linesIn, recorded } from './support/board.ts';
+import { withoutPickers } from './support/files.ts';
 import { glassPairText } from './support/glassSketch.ts';
 import { drawn } from './support/hand.ts';
 
@@ -10,9 +11,7 @@ test.use({ permissions: ['clipboard-read', 'clipboard-write'] });
 
 /** Opens two glass lenses at two positions as a file. */
 async function openGlass(app: App, page: Page): Promise<void> {
-  await page.addInitScript(() => {
-    Reflect.deleteProperty(window, 'showOpenFilePicker');
-  });
+  await withoutPickers(page);
   await app.open();
   const shelf = await app.openShelf();
   const [chooser] = await Promise.all([

@@ -6,10 +6,11 @@ import { settingAt } from '../../engine/sketch/values.ts';
 import { trainOf } from '../../engine/train/train.ts';
 import { analyseAll } from './analyseAll.ts';
 import { bareRays, traceBareRays } from './bareRays.ts';
-import { type BenchRow, rowsJson, rowsTable } from './bench.ts';
+import { rowsJson, rowsTable } from './bench.ts';
 import { benchSketch } from './benchSketch.ts';
 import { liveFrames, liveUpdate } from './liveUpdate.ts';
 import { ratioOf } from './measure.ts';
+import type { BenchRow } from './row.ts';
 
 describe('the bench', () => {
   it('measures on a sound sketch of the size asked for, the same at every call', () => {

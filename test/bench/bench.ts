@@ -7,20 +7,9 @@ import { benchSketch } from './benchSketch.ts';
 import { kernelRows } from './kernelRows.ts';
 import { liveUpdate } from './liveUpdate.ts';
 import { liveZoom, UPDATE_RAYS, zoomRays } from './liveZoom.ts';
-import { measure, ratioOf, sunk, type Timing } from './measure.ts';
+import { measure, sunk } from './measure.ts';
+import { type BenchRow, timeRow } from './row.ts';
 import { zoomSketch } from './zoomSketch.ts';
-
-/** One line of the result. */
-export interface BenchRow {
-  readonly name: string;
-  readonly min: number;
-  readonly median: number;
-  readonly unit: 'µs' | 'M/s';
-  /** How many times as long as what it is compared with, in the same run; 1 for the yardsticks themselves. */
-  readonly ratio: number;
-  /** What the ratio compares with. */
-  readonly against: string;
-}
 
 const ELEMENTS = 12;
 const POSITIONS = 6;
@@ -54,8 +43,8 @@ function analysisRows(): BenchRow[] {
   const { bare, whole } = measure({ bare: () => traceBareRays(rays), whole: analyseAll(sketch) });
   const size = `${ELEMENTS} elements, ${POSITIONS} positions`;
   return [
-    row(`bare arithmetic: ${REFERENCE_RAYS} rays, ${size}`, bare, bare, 'itself'),
-    row(`first-order analysis: ${size}`, whole, bare, 'bare arithmetic'),
+    timeRow(`bare arithmetic: ${REFERENCE_RAYS} rays, ${size}`, bare, bare, 'itself'),
+    timeRow(`first-order analysis: ${size}`, whole, bare, 'bare arithmetic'),
   ];
 }
 
@@ -70,8 +59,13 @@ function liveRows(measureText: MeasureText): BenchRow[] {
   });
   const size = `${ELEMENTS} elements, ${POSITIONS} positions`;
   return [
-    row(`bare arithmetic: ${rays.raysPerTrain} rays, ${ELEMENTS} elements, 1 position`, bare, bare, 'itself'),
-    row(`live update without painting: ${size}`, whole, bare, 'bare arithmetic'),
+    timeRow(
+      `bare arithmetic: ${rays.raysPerTrain} rays, ${ELEMENTS} elements, 1 position`,
+      bare,
+      bare,
+      'itself',
+    ),
+    timeRow(`live update without painting: ${size}`, whole, bare, 'bare arithmetic'),
   ];
 }
 
@@ -82,8 +76,8 @@ function zoomRows(measureText: MeasureText): BenchRow[] {
   const { through, toStop } = UPDATE_RAYS;
   const size = '14 elements, 28 surfaces, 5 fields, 3 lines';
   return [
-    row(`batch kernel: ${through} rays, 28 surfaces, and ${toStop} up to the stop`, bare, bare, 'itself'),
-    row(`live update with all plots: ${size}`, whole, bare, `batch kernel; at most ${MOST_OVER_RAYS}`),
+    timeRow(`batch kernel: ${through} rays, 28 surfaces, and ${toStop} up to the stop`, bare, bare, 'itself'),
+    timeRow(`live update with all plots: ${size}`, whole, bare, `batch kernel; at most ${MOST_OVER_RAYS}`),
   ];
 }
 
@@ -103,19 +97,10 @@ function doublings(name: string, taskOf: (elements: number) => () => number): Be
     if (timing === undefined) return [];
     const sized = `${name}: ${elements} elements`;
     return half === undefined
-      ? [row(sized, timing, timing, 'itself')]
-      : [row(sized, timing, half, `${elements / 2} elements; at most ${MOST_PER_DOUBLING}`)];
+      ? [timeRow(sized, timing, timing, 'itself')]
+      : [timeRow(sized, timing, half, `${elements / 2} elements; at most ${MOST_PER_DOUBLING}`)];
   });
 }
-
-const row = (name: string, timing: Timing, yardstick: Timing, against: string): BenchRow => ({
-  name,
-  min: 1000 * timing.minMs,
-  median: 1000 * timing.medianMs,
-  unit: 'µs',
-  ratio: ratioOf(timing, yardstick),
-  against,
-});
 
 /** The rows as JSON: a list of `{ name, median, unit, ratio }`. */
 export const rowsJson = (rows: readonly BenchRow[]): string =>

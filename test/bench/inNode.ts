@@ -1,6 +1,7 @@
 import { roughMeasure } from '../../app/board/measure.ts';
-import { type BenchRow, runBench } from './bench.ts';
+import { runBench } from './bench.ts';
 import { nativeRows } from './kernelNative.ts';
+import type { BenchRow } from './row.ts';
 
 export { rowsJson, rowsTable } from './bench.ts';
 

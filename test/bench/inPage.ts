@@ -1,5 +1,6 @@
 import { canvasMeasure } from '../../app/board/measure.ts';
-import { type BenchRow, runBench } from './bench.ts';
+import { runBench } from './bench.ts';
+import type { BenchRow } from './row.ts';
 
 /** Every row, measured in the page that this runs in, labels by its canvas. */
 export function benchInPage(): readonly BenchRow[] {

@@ -2,11 +2,11 @@ import { spawnSync } from 'node:child_process';
 import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import type { BenchRow } from './bench.ts';
 import source from './c_kernel.c?raw';
 import { batchTask } from './kernel.ts';
 import { RAYS, SURFACES } from './kernelPrescription.ts';
 import prescription from './prescription.txt?raw';
+import type { BenchRow } from './row.ts';
 
 const COMPILERS = ['gcc', 'clang', 'cc'];
 const FLAGS = ['-O3', '-march=native', '-fno-math-errno', '-fno-trapping-math'];

@@ -1,7 +1,7 @@
-import type { BenchRow } from './bench.ts';
 import { batchTask, plainTask } from './kernel.ts';
 import { RAYS, SURFACES } from './kernelPrescription.ts';
-import { measure, ratioOf, type Timing } from './measure.ts';
+import { measure, type Timing } from './measure.ts';
+import { type BenchRow, timeRow } from './row.ts';
 
 /** What the kernel has to gain over an object for each surface. */
 const LEAST_GAIN = 12;
@@ -24,15 +24,6 @@ export function kernelRows(): BenchRow[] {
     timeRow(`exact rays, an object a surface: ${few}`, plain, block, `batch kernel; at least ${LEAST_GAIN}`),
   ];
 }
-
-const timeRow = (name: string, timing: Timing, yardstick: Timing, against: string): BenchRow => ({
-  name,
-  min: 1000 * timing.minMs,
-  median: 1000 * timing.medianMs,
-  unit: 'µs',
-  ratio: ratioOf(timing, yardstick),
-  against,
-});
 
 /** Rays times surfaces in a second. */
 function rateRow({ samplesMs, medianMs }: Timing): BenchRow {

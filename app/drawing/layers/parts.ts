@@ -56,7 +56,7 @@ function drawRoom(pen: Pen, { part, frontMm }: ScenePart, view: Viewport, top: n
   }
 }
 
-/** A plate chosen or pointed at is outlined as strongly as any part. */
+/** A plate chosen or pointed at is outlined as strongly as other parts. */
 function drawPlate(pen: Pen, drawn: ScenePart, view: Viewport, style: MarkStyle): void {
   if (style === 'part') return;
   const outline = plateOutline(drawn, view);

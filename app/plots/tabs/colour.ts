@@ -1,10 +1,10 @@
 import type { Sketch, TrainAt } from '../../../engine/index.ts';
 import { axialColour, lateralColour, longitudinal, sentenceOf, trainOf } from '../../../engine/index.ts';
+import { focusAxis, lineCurve, OVER_FIELD } from '../curves.ts';
 import { curveStyle, emptyPlot, type Plot, type PlotCurve } from '../plot.ts';
 import { evenAxis, reachOf } from '../scale.ts';
 import type { Source } from '../source.ts';
-import { lengthScale, lineDash, lineName, lineWord, lostNote, scaled } from '../words.ts';
-import { OVER_FIELD } from './field.ts';
+import { lengthScale, lostNote } from '../words.ts';
 
 const MICRO = 1000;
 /** The zone of the stop whose rays tell the exact focus of a wavelength: half of its light is within. */
@@ -24,27 +24,13 @@ function longitudinalPlot(source: Source): Plot {
   const found = longitudinal(source.axis());
   if (!found.ok) return emptyPlot(key, title, sentenceOf(found.why));
   const length = lengthScale(source.unit, 3);
-  const curves = found.value.map(
-    ({ line, at, value }): PlotCurve => ({
-      name: lineName(source.setup, line),
-      word: lineWord(source.setup, line),
-      style: curveStyle('axial', lineDash(source.setup, line)),
-      x: at,
-      y: scaled(value, length.perMm),
-    }),
-  );
+  const curves = found.value.map((curve) => lineCurve(source.setup, 'axial', curve, length.perMm));
   return {
     kind: 'curves',
     key,
     title,
     x: { label: 'share of the stop', unit: '', digits: 2, from: 0, to: 1 },
-    y: evenAxis(
-      'focus behind the image plane',
-      length.unit,
-      length.digits,
-      reachOf(curves),
-      0.01 * length.perMm,
-    ),
+    y: focusAxis(length, curves),
     curves,
     notes: lostNote(Math.max(...found.value.map(({ lost }) => lost))),
   };
@@ -84,13 +70,7 @@ function axialPlot(source: Source): Plot {
       from: trains[0]?.wavelengthNm ?? 0,
       to: trains.at(-1)?.wavelengthNm ?? 1,
     },
-    y: evenAxis(
-      'focus behind the image plane',
-      length.unit,
-      length.digits,
-      reachOf(curves),
-      0.01 * length.perMm,
-    ),
+    y: focusAxis(length, curves),
     curves,
     notes: [],
   };
@@ -121,15 +101,7 @@ function lateralPlot(source: Source): Plot {
   const [main, ...others] = source.sweeps();
   const found = main && lateralColour(main, others);
   if (!found?.ok) return emptyPlot(key, title, sentenceOf(found ? found.why : 'ray lost'));
-  const curves = found.value.map(
-    ({ line, at, value }): PlotCurve => ({
-      name: lineName(source.setup, line),
-      word: lineWord(source.setup, line),
-      style: curveStyle('ink', lineDash(source.setup, line)),
-      x: at,
-      y: scaled(value, MICRO),
-    }),
-  );
+  const curves = found.value.map((curve) => lineCurve(source.setup, 'ink', curve, MICRO));
   return {
     kind: 'curves',
     key,

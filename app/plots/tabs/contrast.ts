@@ -1,9 +1,9 @@
 import { contrastOf, diffractionLimit, sentenceOf, spotSize } from '../../../engine/index.ts';
 import type { CurveInk, CurveLine } from '../../board/styles.ts';
 import { formatNumber } from '../../ui/format.ts';
+import { OVER_FIELD } from '../curves.ts';
 import { curveStyle, emptyPlot, type Plot, type PlotCurve } from '../plot.ts';
 import type { Source } from '../source.ts';
-import { OVER_FIELD } from './field.ts';
 
 const PER_CENT = 100;
 /** An rms radius of so many periods spreads the traced rays too thin to tell a contrast near 0. */

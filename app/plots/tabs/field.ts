@@ -1,10 +1,10 @@
 import { distortion, fieldCurves, illumination, sentenceOf } from '../../../engine/index.ts';
-import { type Axis, curveStyle, emptyPlot, type Plot } from '../plot.ts';
+import { focusAxis, OVER_FIELD } from '../curves.ts';
+import { curveStyle, emptyPlot, type Plot } from '../plot.ts';
 import { evenAxis, reachOf } from '../scale.ts';
 import type { Source } from '../source.ts';
 import { lengthScale, lostNote, scaled } from '../words.ts';
 
-export const OVER_FIELD: Axis = { label: 'share of the field', unit: '', digits: 2, from: 0, to: 1 };
 const PER_CENT = 100;
 
 /** Field curves, distortion and relative illumination over the field, in the main line. */
@@ -42,13 +42,7 @@ function curvesPlot(source: Source): Plot {
     key,
     title,
     x: OVER_FIELD,
-    y: evenAxis(
-      'focus behind the image plane',
-      length.unit,
-      length.digits,
-      reachOf(curves),
-      0.01 * length.perMm,
-    ),
+    y: focusAxis(length, curves),
     curves,
     notes: lostNote(Math.max(tangential.lost, sagittal.lost)),
   };

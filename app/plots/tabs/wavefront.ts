@@ -1,10 +1,10 @@
 import type { WavefrontFans } from '../../../engine/index.ts';
 import { sentenceOf, wavefrontFans } from '../../../engine/index.ts';
+import { overStop, type Values } from '../curves.ts';
 import { emptyPlot, type Plot } from '../plot.ts';
 import { alike } from '../scale.ts';
 import { drawnFractions, type Source } from '../source.ts';
 import { fieldInk, fieldName } from '../words.ts';
-import { overStop, type Values } from './fans.ts';
 
 const WAVES: Values = { label: 'wavefront', unit: 'waves', digits: 3, factor: 1, least: 0.01 };
 
