@@ -72,6 +72,12 @@ describe('a drawn plot', () => {
       expect(text).toContain(part);
   });
 
+  it('numbers both ends of the stop also where six plots stand beside each other', () => {
+    const pen = recorderPen();
+    drawPlot(pen, curve(10), { widthPx: 157, heightPx: 182 }, how);
+    for (const tick of ['"−1"', '"0"', '"1"']) expect(pen.toText()).toContain(tick);
+  });
+
   it('shows what is read in few words, with a ring on each curve', () => {
     const text = drawn(curve(10), { cursor: 1 });
     expect(text).toContain('"at 1.00"');
