@@ -90,14 +90,14 @@ function heights({ train }: Analysis, ray: RayOutcome, planeMm: number | null): 
 const slopes = (ray: RayOutcome, count: number): (number | null)[] =>
   ray.ok ? [...ray.value.nu, null] : Array.from({ length: count + 2 }, () => null);
 
-/** A part with two surfaces names them front and rear, one with more counts them. */
+/** A part with two surfaces names them front and rear, one with more counts them, the number first: long names are cut. */
 function surfaceName(sketch: Sketch, { train }: Analysis, surface: number): string {
   const part = train.partOf[surface] ?? -1;
   const name = nameAt(sketch, part);
   const first = train.partOf.indexOf(part);
   const last = train.partOf.lastIndexOf(part);
   if (first === last) return name;
-  if (last - first > 1) return `${name}, surface ${surface - first + 1}`;
+  if (last - first > 1) return `surface ${surface - first + 1} of ${name}`;
   return surface === first ? `${name}, front` : `${name}, rear`;
 }
 

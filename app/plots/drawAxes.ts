@@ -58,7 +58,9 @@ export function drawUpright(pen: Pen, axis: Axis, area: Area): void {
 /** Short ticks with their numbers below the area, and the name of the axis. */
 export function drawLevel(pen: Pen, axis: Axis, area: Area): void {
   const x = pxScale(axis, area.left, area.right);
-  const { values, digits } = ticksOf(axis, area.right - area.left, 44);
+  const lengthPx = area.right - area.left;
+  // A narrow plot still has both ends and the middle.
+  const { values, digits } = ticksOf(axis, lengthPx, Math.max(30, Math.min(60, lengthPx / 2)));
   for (const value of values) {
     segment(pen, x(value), area.bottom, x(value), area.bottom + 4, 'leader');
     pen.text(x(value), area.bottom + 5, formatNumber(value, digits), 'label quiet', {

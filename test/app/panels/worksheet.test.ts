@@ -61,7 +61,7 @@ describe('the trace sheet', () => {
       surfaces: [newSurface(50), newSurface(-50), newSurface(null)],
       fillings: [1, 2].map((thicknessMm) => ({ thicknessMm, material: { material: 'f2' } })),
     };
-    expect(sheetOf({ ...empty(), parts: [cemented] }).columns[2]).toBe('glass 1, surface 2');
+    expect(sheetOf({ ...empty(), parts: [cemented] }).columns[2]).toBe('surface 2 of glass 1');
     expect(sheetOf(inspectionZoom(), MIDDLE).rows.map(({ label }) => label)).not.toContain('radius');
   });
 
